@@ -1,0 +1,62 @@
+import type { RailScan } from './railModel.ts';
+
+interface RailStripProps {
+  busName: string;
+  scan: RailScan | null;
+  summation: 'phasor' | 'alpha';
+  sequence: 'positive' | 'zero';
+  stale: boolean;
+  band?: unknown;
+  thinWords?: string;
+  zoomed: boolean;
+  onPickBus?(): void;
+  onZoom(factor: number): void;
+  onReset(): void;
+}
+
+/** The thin line above the rail: which busbar, which sequence and summation, what each curve is. */
+export function RailStrip(props: RailStripProps) {
+  const { busName, onPickBus } = props;
+  return (
+    <div className="rail-strip">
+      {onPickBus ? (
+        <button type="button" className="rail-bus" onClick={onPickBus}>
+          {busName} <span aria-hidden="true">▾</span>
+        </button>
+      ) : (
+        <strong className="rail-bus">{busName}</strong>
+      )}
+      <span className="rail-words">{stripWords(props)}</span>
+      {props.stale && (
+        <span className="rail-state" role="status">
+          recalculating: shown as before the last change
+        </span>
+      )}
+      <span className="rail-tools">
+        <button type="button" aria-label="Widen the axis about the handle" onClick={() => props.onZoom(0.6)}>
+          +
+        </button>
+        <button type="button" aria-label="Show more of the axis" onClick={() => props.onZoom(1 / 0.6)}>
+          −
+        </button>
+        <button type="button" disabled={!props.zoomed} onClick={props.onReset}>
+          whole axis
+        </button>
+      </span>
+    </div>
+  );
+}
+
+/** "impedance seen, positive sequence · phasor summation · thin: without correction". */
+export function stripWords(
+  props: Pick<RailStripProps, 'scan' | 'summation' | 'sequence' | 'band' | 'thinWords'>,
+): string {
+  const problem = props.scan?.with.error;
+  if (problem) return `no impedance to show: ${problem}`;
+  if (!props.scan) return 'no impedance to show yet';
+  const summation = props.summation === 'alpha' ? 'IEC 61000-3-6 summation' : 'phasor summation';
+  const parts = [`impedance seen, ${props.sequence} sequence`, summation];
+  if (props.band) parts.push('band: all cases and tolerances');
+  parts.push(`thin: ${props.thinWords ?? 'without correction'}`);
+  return parts.join(' · ');
+}
