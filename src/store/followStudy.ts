@@ -1,0 +1,152 @@
+import { casesOf } from '../study/index.ts';
+import type { Computation, Settled, StudyAt } from '../worker/index.ts';
+import type { WorkbenchStore } from './createWorkbench.ts';
+import type { Answer, Workbench } from './types.ts';
+
+export interface FollowOptions {
+  /** Calls back before the next paint; one probe a frame at most. */
+  frame: (work: () => void) => void;
+  /** Quiet time after a change before the other cases are judged. */
+  judgeAllAfterMs?: number;
+}
+
+/**
+ * Keeps the answers in step with the study: a layer around the store, which itself knows no computation.
+ *
+ *   study or case changed ──► solve ──► answer (numbers) ──► judge ──► answer (verdicts) ──► judge all cases
+ *   busbar changed ─────────► scan  ──► answer.scan
+ *   any of these, or order ─► probe, once a frame
+ *
+ * Newest wins throughout. An answer of an older revision is still shown while edits follow each other,
+ * marked stale by its revision, unless it speaks of another study or case. Returns what ends the following.
+ */
+export function followStudy(
+  store: WorkbenchStore,
+  computation: Computation,
+  options: FollowOptions,
+): () => void {
+  const { frame, judgeAllAfterMs = 200 } = options;
+  let solveRun = 0;
+  let probeDue = false;
+  let judgeAllTimer: ReturnType<typeof setTimeout> | undefined;
+
+  function fits(at: StudyAt, caseId: string): boolean {
+    const { openedRevision, answer, view } = store.getState();
+    const newest = answer?.caseId === caseId ? answer.revision : openedRevision;
+    return at.revision >= openedRevision && at.revision >= newest && view.caseId === caseId;
+  }
+
+  function setStatus(part: Partial<Workbench['status']>): void {
+    store.setState((state) => ({ status: { ...state.status, ...part } }));
+  }
+
+  /** The value of a request that was answered; a failed one is said in the status. */
+  function answered<T>(end: Settled<T>): T | null {
+    if (end.outcome === 'failed') setStatus({ workerMessage: end.message });
+    return end.outcome === 'done' ? end.value : null;
+  }
+
+  async function solve(at: StudyAt, { caseId, focusBus }: Workbench['view']): Promise<void> {
+    solveRun += 1;
+    const run = solveRun;
+    clearTimeout(judgeAllTimer);
+    if (!store.getState().status.solving) setStatus({ solving: true });
+    const numbers = answered(await computation.solve(at, caseId, focusBus === '' ? undefined : focusBus));
+    if (run === solveRun) setStatus({ solving: false });
+    if (!numbers || !fits(at, caseId)) return;
+    const { scan = null, ...rest } = numbers;
+    const verdicts = knownVerdicts(store.getState(), at.revision, caseId);
+    store.setState({ answer: { revision: at.revision, caseId, ...rest, scan, verdicts } });
+    if (run !== solveRun) return;
+    if (scan?.bus !== store.getState().view.focusBus) void rescan(at, store.getState().view);
+    if (!verdicts) await judge(at, caseId);
+    if (run === solveRun) judgeAllTimer = setTimeout(() => void judgeOthers(at), judgeAllAfterMs);
+  }
+
+  async function judge(at: StudyAt, caseId: string): Promise<void> {
+    const verdicts = answered(await computation.judge(at, caseId));
+    if (verdicts)
+      store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, { verdicts }) }));
+  }
+
+  async function judgeOthers(at: StudyAt): Promise<void> {
+    const { study, revision, answer, allVerdicts, beforePreview } = store.getState();
+    if (!study || revision !== at.revision || beforePreview) return;
+    const known = allVerdicts?.revision === revision ? allVerdicts.byCase : {};
+    const shown =
+      answer?.revision === revision && answer.verdicts ? { [answer.caseId]: answer.verdicts } : {};
+    const byCase = { ...known, ...shown };
+    const open = casesOf(study).filter(({ id }) => !byCase[id]);
+    store.setState({ allVerdicts: { revision, byCase, complete: open.length === 0 } });
+    const ids = open.map(({ id }) => id);
+    answered(
+      await computation.judgeAll(at, ids, (caseId, verdicts) =>
+        store.setState(({ allVerdicts: now }) => {
+          if (now?.revision !== revision) return {};
+          const more = { ...now.byCase, [caseId]: verdicts };
+          const complete = casesOf(study).every(({ id }) => more[id]);
+          return { allVerdicts: { revision, byCase: more, complete } };
+        }),
+      ),
+    );
+  }
+
+  async function rescan(at: StudyAt, { caseId, focusBus }: Workbench['view']): Promise<void> {
+    if (focusBus === '') return;
+    const scan = answered(await computation.scan(at, caseId, focusBus));
+    if (scan?.bus !== store.getState().view.focusBus) return;
+    store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, { scan }) }));
+  }
+
+  function probeSoon(): void {
+    if (probeDue) return;
+    probeDue = true;
+    frame(() => {
+      probeDue = false;
+      void probe();
+    });
+  }
+
+  async function probe(): Promise<void> {
+    const { study, revision, view } = store.getState();
+    if (!study || study.buses.length === 0) return;
+    const value = answered(await computation.probe({ revision, study }, view.caseId, view.order));
+    const now = store.getState();
+    if (!value || revision < now.openedRevision || now.view.caseId !== value.caseId) return;
+    store.setState({ probe: { ...value, revision } });
+  }
+
+  function follow(now: Workbench, before: Workbench): void {
+    const { study, revision, view } = now;
+    const moved = revision !== before.revision;
+    const caseChanged = view.caseId !== before.view.caseId;
+    const busChanged = view.focusBus !== before.view.focusBus;
+    if (!study) return;
+    const at = { revision, study };
+    if (moved || caseChanged) void solve(at, view);
+    else if (busChanged) void rescan(at, view);
+    if (moved || caseChanged || view.order !== before.view.order) probeSoon();
+  }
+
+  const { study, revision, view } = store.getState();
+  if (study) void solve({ revision, study }, view);
+  if (study) probeSoon();
+  const unsubscribe = store.subscribe(follow);
+  return () => {
+    unsubscribe();
+    clearTimeout(judgeAllTimer);
+  };
+}
+
+function amended(
+  answer: Answer | null,
+  revision: number,
+  caseId: string,
+  part: Partial<Answer>,
+): Answer | null {
+  return answer?.revision === revision && answer.caseId === caseId ? { ...answer, ...part } : answer;
+}
+
+function knownVerdicts({ allVerdicts }: Workbench, revision: number, caseId: string): Answer['verdicts'] {
+  return (allVerdicts?.revision === revision ? allVerdicts.byCase[caseId] : undefined) ?? null;
+}

@@ -1,0 +1,32 @@
+export { createWorkbench, type WorkbenchStore } from './createWorkbench.ts';
+export type { Files, OpenedFile } from './fileActions.ts';
+export { type FollowOptions, followStudy } from './followStudy.ts';
+export type { History, Revision } from './history.ts';
+export {
+  busById,
+  countVerdicts,
+  elementById,
+  freshAnswer,
+  freshVerdicts,
+  isStale,
+  isUnsaved,
+  redoWords,
+  undoWords,
+} from './selectors.ts';
+export { samePin } from './togglePinEdit.ts';
+export type {
+  AllVerdicts,
+  Answer,
+  Notice,
+  Place,
+  ProbeAnswer,
+  ReadingMode,
+  Status,
+  Theme,
+  View,
+  WaveOrders,
+  Workbench,
+  WorkbenchActions,
+  WorkbenchState,
+} from './types.ts';
+export { pageComputation, startWorkbench, useWorkbench, workbench } from './useWorkbench.ts';

@@ -1,0 +1,54 @@
+import type { Verdict, VerdictWord } from '../checks/index.ts';
+import type { Bus, StudyElement } from '../study/index.ts';
+import type { Answer, Workbench } from './types.ts';
+
+/** Words for "Undo …"; null where there is nothing to undo. */
+export function undoWords({ history }: Workbench): string | null {
+  return history.past.at(-1)?.words ?? null;
+}
+
+/** Words for "Redo …"; null where nothing was undone. */
+export function redoWords({ history }: Workbench): string | null {
+  return history.future.at(-1)?.words ?? null;
+}
+
+/** Whether the study differs from its file, or was never in one. */
+export function isUnsaved({ study, beforePreview, savedStudy }: Workbench): boolean {
+  return (beforePreview ?? study) !== savedStudy;
+}
+
+/** Whether what is shown was not computed from the study and case on screen. */
+export function isStale({ answer, revision, view }: Workbench): boolean {
+  return answer === null || answer.revision !== revision || answer.caseId !== view.caseId;
+}
+
+/** The answer, where it belongs to the study and case on screen. */
+export function freshAnswer(state: Workbench): Answer | null {
+  return isStale(state) ? null : state.answer;
+}
+
+/** Verdicts of the case on screen, where they belong to the study on screen. */
+export function freshVerdicts(state: Workbench): Verdict[] | null {
+  return freshAnswer(state)?.verdicts ?? null;
+}
+
+/** Selects the element of an id; its identity changes only when the element does. */
+export function elementById(id: string): (state: Workbench) => StudyElement | undefined {
+  return ({ study }) => study?.elements.find((element) => element.id === id);
+}
+
+/** Selects the busbar of an id. */
+export function busById(id: string): (state: Workbench) => Bus | undefined {
+  return ({ study }) => study?.buses.find((bus) => bus.id === id);
+}
+
+/** How many verdicts of the case on screen, or of all cases, end so; null while not all are known. */
+export function countVerdicts(word: VerdictWord, scope: 'case' | 'all'): (state: Workbench) => number | null {
+  const ends = ({ verdict }: Verdict): boolean => verdict === word;
+  return (state) => {
+    if (scope === 'case') return freshVerdicts(state)?.filter(ends).length ?? null;
+    const { allVerdicts, revision } = state;
+    if (allVerdicts?.revision !== revision || !allVerdicts.complete) return null;
+    return Object.values(allVerdicts.byCase).flat().filter(ends).length;
+  };
+}

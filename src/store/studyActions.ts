@@ -1,0 +1,88 @@
+import type { Edit, Study } from '../study/index.ts';
+import { fitView, openingView } from './fitView.ts';
+import { noHistory, record, stepBack, stepForward } from './history.ts';
+import { togglePinEdit } from './togglePinEdit.ts';
+import type { Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
+
+type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
+type Get = () => Workbench;
+type StudyActions = Pick<
+  WorkbenchActions,
+  'openStudy' | 'edit' | 'preview' | 'cancelPreview' | 'undo' | 'redo' | 'togglePin'
+>;
+
+/** What changes together whenever the study does: every door to the study goes through here. */
+function withStudy(state: WorkbenchState, study: Study): Partial<WorkbenchState> {
+  return { study, revision: state.revision + 1, view: fitView(state.view, study) };
+}
+
+function editOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
+  const before = state.beforePreview ?? state.study;
+  if (!before) return {};
+  const after = edit.apply(before);
+  const settled = { ...(after === state.study ? {} : withStudy(state, after)), beforePreview: null };
+  if (after === before) return settled;
+  return {
+    ...settled,
+    lastEdit: edit.words,
+    history: record(state.history, before, edit.label, edit.words),
+  };
+}
+
+function previewOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
+  const before = state.beforePreview ?? state.study;
+  if (!before) return {};
+  const shown = edit.apply(before);
+  if (shown === state.study) return {};
+  return { ...withStudy(state, shown), beforePreview: before };
+}
+
+function cancelled(state: WorkbenchState): Partial<WorkbenchState> {
+  const { beforePreview } = state;
+  if (!beforePreview) return {};
+  return { ...(beforePreview === state.study ? {} : withStudy(state, beforePreview)), beforePreview: null };
+}
+
+function stepped(state: WorkbenchState, step: typeof stepBack): Partial<WorkbenchState> {
+  const settled = { ...state, ...cancelled(state) };
+  const { study } = settled;
+  const moved = study && step(settled.history, study);
+  if (!moved) return cancelled(state);
+  return {
+    ...withStudy(settled, moved.study),
+    beforePreview: null,
+    history: moved.history,
+    lastEdit: moved.history.past.at(-1)?.words ?? null,
+  };
+}
+
+export function studyActions(set: Set, get: Get): StudyActions {
+  return {
+    openStudy: (study, fileName = null) =>
+      set((state) => ({
+        study,
+        revision: state.revision + 1,
+        openedRevision: state.revision + 1,
+        lastEdit: null,
+        history: noHistory,
+        beforePreview: null,
+        fileName,
+        fileHandle: null,
+        savedStudy: fileName === null ? null : study,
+        importWarnings: [],
+        view: openingView(study, state.view),
+        answer: null,
+        probe: null,
+        allVerdicts: null,
+      })),
+    edit: (edit) => set((state) => editOf(state, edit)),
+    preview: (edit) => set((state) => previewOf(state, edit)),
+    cancelPreview: () => set(cancelled),
+    undo: () => set((state) => stepped(state, stepBack)),
+    redo: () => set((state) => stepped(state, stepForward)),
+    togglePin: (pin) => {
+      const { study, edit } = get();
+      if (study) edit(togglePinEdit(study, pin));
+    },
+  };
+}

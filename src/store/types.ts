@@ -1,0 +1,130 @@
+/** State and actions of the workbench: the one source of truth of the page. */
+import type { Verdict } from '../checks/index.ts';
+import type { CaseSolution } from '../engine/index.ts';
+import type { Edit, Finding, Pin, Study } from '../study/index.ts';
+import type { Probe, ScanPair } from '../worker/index.ts';
+import type { History } from './history.ts';
+
+export type Place = 'site' | 'correction' | 'sheet';
+export type ReadingMode = 'fundamental' | 'rms' | 'order';
+export type Theme = 'system' | 'light' | 'dark';
+/** The fundamental alone, every order, or the orders up to a number. */
+export type WaveOrders = 'fundamental' | 'all' | number;
+
+/** How the study is looked at. Changes here never re-solve, except case and busbar. */
+export interface View {
+  place: Place;
+  caseId: string;
+  /** Busbar under the rail; '' while the study has none. */
+  focusBus: string;
+  /** h of the rail's handle, real-valued, > 0. */
+  order: number;
+  readingMode: ReadingMode;
+  /** "element:<id>" and "bus:<id>". */
+  selection: readonly string[];
+  /** The item whose data slip is open, as in `selection`. */
+  openSlip: string | null;
+  theme: Theme;
+  /** Fraction 0…1 of the period at which the phasors stand. */
+  timeCursor: number;
+  waveOrders: WaveOrders;
+}
+
+/** The latest numbers of one case. Stale when its revision or case is not the one on screen. */
+export interface Answer {
+  revision: number;
+  caseId: string;
+  solution: CaseSolution;
+  /** The same case, all banks and filters out of service. */
+  without: CaseSolution;
+  /** Of the busbar it names; null while the study has none or the focus has just moved. */
+  scan: ScanPair | null;
+  /** null until judged, which follows the numbers. */
+  verdicts: Verdict[] | null;
+}
+
+export interface ProbeAnswer extends Probe {
+  revision: number;
+}
+
+/** Verdicts by case id, as far as judged, all of one revision. */
+export interface AllVerdicts {
+  revision: number;
+  byCase: Readonly<Record<string, Verdict[]>>;
+  complete: boolean;
+}
+
+/** Something the user must read: a refused file, a failed autosave, a study open twice. */
+export interface Notice {
+  severity: 'error' | 'warning' | 'info';
+  /** One sentence. */
+  title: string;
+  findings: Finding[];
+}
+
+export interface Status {
+  solving: boolean;
+  /** What the computation has to say: it was restarted, or why it failed. */
+  workerMessage: string | null;
+}
+
+export interface WorkbenchState {
+  study: Study | null;
+  /** Rises by one with every change of the study, undo and redo included. */
+  revision: number;
+  /** The revision at which this study was opened; earlier answers speak of another one. */
+  openedRevision: number;
+  /** What the last change did, as "undo" names it; null on a fresh study. */
+  lastEdit: string | null;
+  history: History;
+  /** The study before the gesture under way; null when none is. */
+  beforePreview: Study | null;
+  fileName: string | null;
+  fileHandle: FileSystemFileHandle | null;
+  /** The study as last opened from or saved to a file; compare with `study` for unsaved changes. */
+  savedStudy: Study | null;
+  /** Warnings of the file the study came from. */
+  importWarnings: Finding[];
+  view: View;
+  answer: Answer | null;
+  probe: ProbeAnswer | null;
+  allVerdicts: AllVerdicts | null;
+  status: Status;
+  notice: Notice | null;
+}
+
+export interface WorkbenchActions {
+  /** Puts a valid study on the table; history starts anew. Without a name it counts as never saved. */
+  openStudy(study: Study, fileName?: string | null): void;
+  /** Reads a study's text. A broken one leaves the open study alone and says why in `notice`. */
+  openText(text: string, name: string, handle?: FileSystemFileHandle): boolean;
+  openFile(): Promise<void>;
+  saveFile(): Promise<void>;
+  saveFileAs(): Promise<void>;
+
+  edit(edit: Edit): void;
+  /** Shows an edit while a gesture lasts: always applied to the study before the gesture, no history. */
+  preview(edit: Edit): void;
+  /** Ends the gesture without a trace. `edit` ends it with one step of history. */
+  cancelPreview(): void;
+  undo(): void;
+  redo(): void;
+  /** Pins or unpins a quantity; an edit of the study's view. */
+  togglePin(pin: Pin): void;
+
+  setPlace(place: Place): void;
+  setCase(caseId: string): void;
+  setFocusBus(bus: string): void;
+  setOrder(order: number): void;
+  setReadingMode(mode: ReadingMode): void;
+  setTheme(theme: Theme): void;
+  setTimeCursor(fraction: number): void;
+  setWaveOrders(orders: WaveOrders): void;
+  select(items: readonly string[]): void;
+  openSlip(item: string): void;
+  closeSlip(): void;
+  setNotice(notice: Notice): void;
+  dismissNotice(): void;
+}
+
+export type Workbench = WorkbenchState & WorkbenchActions;

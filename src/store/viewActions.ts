@@ -1,0 +1,59 @@
+import { casesOf } from '../study/index.ts';
+import type { View, Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
+
+type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
+type ViewActions = Pick<
+  WorkbenchActions,
+  | 'setPlace'
+  | 'setCase'
+  | 'setFocusBus'
+  | 'setOrder'
+  | 'setReadingMode'
+  | 'setTheme'
+  | 'setTimeCursor'
+  | 'setWaveOrders'
+  | 'select'
+  | 'openSlip'
+  | 'closeSlip'
+  | 'setNotice'
+  | 'dismissNotice'
+>;
+
+function changed(state: Workbench, change: Partial<View>): Partial<WorkbenchState> {
+  const same = (Object.keys(change) as (keyof View)[]).every((key) => state.view[key] === change[key]);
+  return same ? {} : { view: { ...state.view, ...change } };
+}
+
+function caseChange(state: Workbench, caseId: string): Partial<WorkbenchState> {
+  const known = state.study && casesOf(state.study).some((operating) => operating.id === caseId);
+  if (!known) throw new RangeError(`no case "${caseId}" in the study`);
+  return changed(state, { caseId });
+}
+
+function focusChange(state: Workbench, focusBus: string): Partial<WorkbenchState> {
+  const known = state.study?.buses.some((bus) => bus.id === focusBus);
+  if (!known) throw new RangeError(`no busbar "${focusBus}" in the study`);
+  return changed(state, { focusBus });
+}
+
+export function viewActions(set: Set): ViewActions {
+  const change = (part: Partial<View>): void => set((state) => changed(state, part));
+  return {
+    setPlace: (place) => change({ place }),
+    setCase: (caseId) => set((state) => caseChange(state, caseId)),
+    setFocusBus: (bus) => set((state) => focusChange(state, bus)),
+    setOrder: (order) => {
+      if (!(order > 0 && Number.isFinite(order))) throw new RangeError(`order ${order}: must be above 0`);
+      change({ order });
+    },
+    setReadingMode: (readingMode) => change({ readingMode }),
+    setTheme: (theme) => change({ theme }),
+    setTimeCursor: (fraction) => change({ timeCursor: ((fraction % 1) + 1) % 1 }),
+    setWaveOrders: (waveOrders) => change({ waveOrders }),
+    select: (selection) => change({ selection }),
+    openSlip: (openSlip) => change({ openSlip }),
+    closeSlip: () => change({ openSlip: null }),
+    setNotice: (notice) => set(() => ({ notice })),
+    dismissNotice: () => set(() => ({ notice: null })),
+  };
+}

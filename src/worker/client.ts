@@ -1,0 +1,73 @@
+import type { Verdict } from '../checks/index.ts';
+import type { ResultsFile } from '../engine/index.ts';
+import { type ComputationOptions, Dispatcher, type Lane, type StudyAt } from './dispatcher.ts';
+import type { CaseNumbers, Probe, ScanPair, Settled } from './protocol.ts';
+
+/**
+ * The computation as the page sees it. Every promise settles: done, failed, cancelled or superseded; none
+ * rejects. Of several requests of one kind only the newest waits.
+ */
+export interface Computation {
+  /** Solves a small built-in study, in slices, until the code is compiled. */
+  warm(): Promise<void>;
+  solve(at: StudyAt, caseId: string, focusBus?: string): Promise<Settled<CaseNumbers>>;
+  scan(at: StudyAt, caseId: string, focusBus: string): Promise<Settled<ScanPair>>;
+  probe(at: StudyAt, caseId: string, order: number): Promise<Settled<Probe>>;
+  judge(at: StudyAt, caseId: string): Promise<Settled<Verdict[]>>;
+  /** Judges case by case, `onCase` after each; any other request goes first in between. */
+  judgeAll(
+    at: StudyAt,
+    caseIds: readonly string[],
+    onCase: (caseId: string, verdicts: Verdict[]) => void,
+  ): Promise<Settled<number>>;
+  results(at: StudyAt): Promise<Settled<ResultsFile>>;
+  /** Withdraws what was asked in a lane, or in all of them. */
+  cancel(lane?: Lane): void;
+  /** Ends the worker; whatever was asked is cancelled, and so is whatever will be. */
+  close(): void;
+}
+
+const maxWarmRounds = 60;
+
+export function createComputation(options: ComputationOptions): Computation {
+  const dispatcher = new Dispatcher(options);
+  let judgeAllRun = 0;
+
+  async function warm(): Promise<void> {
+    for (let round = 0; round < maxWarmRounds; round += 1) {
+      const slice = await dispatcher.ask('warm', { kind: 'warm' }, null);
+      if (slice.outcome !== 'done' || slice.value.hot) return;
+    }
+  }
+
+  async function judgeAll(
+    at: StudyAt,
+    caseIds: readonly string[],
+    onCase: (caseId: string, verdicts: Verdict[]) => void,
+  ): Promise<Settled<number>> {
+    judgeAllRun += 1;
+    const run = judgeAllRun;
+    for (const caseId of caseIds) {
+      const slice = await dispatcher.ask('judgeAll', { kind: 'judge', caseId }, at);
+      if (run !== judgeAllRun) return { outcome: 'superseded' };
+      if (slice.outcome !== 'done') return slice;
+      onCase(caseId, slice.value);
+    }
+    return { outcome: 'done', value: caseIds.length };
+  }
+
+  return {
+    warm,
+    solve: (at, caseId, focusBus) => {
+      const job = { kind: 'solve', caseId } as const;
+      return dispatcher.ask('solve', focusBus === undefined ? job : { ...job, focusBus }, at);
+    },
+    scan: (at, caseId, focusBus) => dispatcher.ask('scan', { kind: 'scan', caseId, focusBus }, at),
+    probe: (at, caseId, order) => dispatcher.ask('probe', { kind: 'probe', caseId, order }, at),
+    judge: (at, caseId) => dispatcher.ask('judge', { kind: 'judge', caseId }, at),
+    judgeAll,
+    results: (at) => dispatcher.ask('results', { kind: 'results' }, at),
+    cancel: (lane) => dispatcher.cancel(lane),
+    close: () => dispatcher.close(),
+  };
+}

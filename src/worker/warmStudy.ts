@@ -1,0 +1,62 @@
+import type { Study } from '../study/index.ts';
+
+/** A small invented site with the common kinds of part, unbalanced so that every path is taken. Solved only to warm up. */
+export const warmStudy: Study = {
+  format: 'varwright-study',
+  version: 1,
+  title: 'Warm-up',
+  frequencyHz: 50,
+  maxOrder: 50,
+  buses: [
+    { id: 'mv', nominalV: 20_000, pcc: true },
+    { id: 'lv', nominalV: 400 },
+    { id: 'sub', nominalV: 400 },
+  ],
+  elements: [
+    {
+      id: 'grid',
+      kind: 'supply',
+      bus: 'mv',
+      shortCircuitMVA: 250,
+      xOverR: 10,
+      background: [{ h: 5, percent: 1 }],
+    },
+    {
+      id: 't1',
+      kind: 'transformer',
+      from: 'mv',
+      to: 'lv',
+      ratedKVA: 1000,
+      hvV: 20_000,
+      lvV: 400,
+      ukPercent: 6,
+      loadLossKW: 10.5,
+      vectorGroup: 'Dyn11',
+    },
+    {
+      id: 'k1',
+      kind: 'cable',
+      from: 'lv',
+      to: 'sub',
+      lengthM: 80,
+      resistanceOhmPerKm: 0.13,
+      reactanceOhmPerKm: 0.08,
+      capacitanceNFPerKm: 400,
+    },
+    { id: 'm1', kind: 'motor', bus: 'lv', ratedKW: 55 },
+    { id: 'l1', kind: 'load', bus: 'sub', kW: 6, powerFactor: 0.95, connection: 'L1' },
+    { id: 'l2', kind: 'load', bus: 'sub', kW: 60, powerFactor: 0.9 },
+    { id: 'd1', kind: 'converter', bus: 'lv', kW: 120, powerFactor: 0.96, spectrum: 'six-pulse-ideal' },
+    { id: 'c1', kind: 'bank', bus: 'lv', ratedV: 440, steps: [{ kvar: 50 }, { kvar: 50, on: false }] },
+    {
+      id: 'f1',
+      kind: 'filter',
+      bus: 'sub',
+      type: 'single-tuned',
+      kvar: 40,
+      tunedOrder: 4.8,
+      qFactor: 30,
+      ratedV: 480,
+    },
+  ],
+};
