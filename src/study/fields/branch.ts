@@ -1,0 +1,4 @@
+import type { Field } from './Field.ts';
+import { freeRLC, seriesFields } from './partFields.ts';
+
+export const branchFields: readonly Field[] = [...seriesFields, ...freeRLC];

@@ -1,0 +1,44 @@
+import { busById, elementById } from './lookup.ts';
+import type { ElementKind, Study, StudyElement } from './types.ts';
+
+/** The trade word for a kind of part, lower case. */
+export const kindWords: Readonly<Record<ElementKind, string>> = {
+  supply: 'supply',
+  generator: 'generator',
+  transformer: 'transformer',
+  cable: 'cable',
+  reactor: 'reactor',
+  coupler: 'bus coupler',
+  branch: 'R-L-C, series',
+  load: 'load',
+  motor: 'motor',
+  converter: 'drive or converter',
+  bank: 'capacitor bank',
+  filter: 'filter',
+  shunt: 'R-L-C, to neutral',
+};
+
+/** Display name of a busbar, part, spectrum or case: its name, or its id where it has none. */
+export function nameOf(named: { id: string; name?: string }): string {
+  const name = named.name?.trim();
+  return name ? name : named.id;
+}
+
+/** Kind and name together: "capacitor bank C1". A name that already begins with the kind stands alone. */
+export function fullNameOf(element: StudyElement): string {
+  const name = nameOf(element);
+  const word = kindWords[element.kind];
+  return name.toLowerCase().includes(word.split(',')[0] ?? word) ? name : `${word} ${name}`;
+}
+
+/** Display name of a busbar id; the id itself where the study has no such busbar. */
+export function busName(study: Study, id: string): string {
+  const bus = busById(study, id);
+  return bus ? nameOf(bus) : id;
+}
+
+/** Display name of a part id; the id itself where the study has no such part. */
+export function elementName(study: Study, id: string): string {
+  const element = elementById(study, id);
+  return element ? nameOf(element) : id;
+}

@@ -1,0 +1,23 @@
+/** Every unit a field of the study may stand in. The empty unit is a plain number or ratio. */
+export type Unit =
+  | ''
+  | '%'
+  | '°'
+  | 'V'
+  | 'A'
+  | 'kA'
+  | 'kW'
+  | 'kVA'
+  | 'MVA'
+  | 'kvar'
+  | 'W/kvar'
+  | 'Ω'
+  | 'mΩ'
+  | 'Ω/km'
+  | 'mH'
+  | 'µF'
+  | 'nF/km'
+  | 'm'
+  | 's'
+  | 'h'
+  | 'Hz';
