@@ -158,6 +158,17 @@ export class BlockLdl implements BlockMatrix {
     return out;
   }
 
+  /** A[row, column] = A[column, row] := re + j·im, a pair in the pattern; rows and columns as in forEachEntry. */
+  setEntry(row: number, column: number, re: number, im: number): void {
+    const i = (row / 3) | 0;
+    const j = (column / 3) | 0;
+    const turned = i !== j && this.plan.isTransposed(i, j);
+    const e = turned ? (column % 3) * 3 + (row % 3) : (row % 3) * 3 + (column % 3);
+    const at = i === j ? this.diagonalOffset(i) + 2 * PACKED[e]! : this.offDiagonalOffset(i, j) + 2 * e;
+    this.values[at] = re;
+    this.values[at + 1] = im;
+  }
+
   /** Visits every entry as stamped, both triangles; rows and columns count 3·node + phase. */
   forEachEntry(visit: (row: number, column: number, re: number, im: number) => void): void {
     const { nodeCount, order, columnStart, rowPosition } = this.plan;

@@ -116,6 +116,17 @@ export class BlockLu implements BlockMatrix {
     luPivotBackward(this.values, d, x, offset);
   }
 
+  /** A[row, column] of a pair in the pattern := re + j·im; rows and columns as in forEachEntry. */
+  setEntry(row: number, column: number, re: number, im: number): void {
+    const i = (row / 3) | 0;
+    const j = (column / 3) | 0;
+    const turned = i !== j && this.plan.isTransposed(i, j);
+    const e = turned ? (column % 3) * 3 + (row % 3) : (row % 3) * 3 + (column % 3);
+    const block = i === j ? this.diagonalOffset(i) : this.offDiagonalOffset(i, j) + (turned ? 18 : 0);
+    this.values[block + 2 * e] = re;
+    this.values[block + 2 * e + 1] = im;
+  }
+
   /** Visits every entry as stamped; rows and columns count 3·node + phase. */
   forEachEntry(visit: (row: number, column: number, re: number, im: number) => void): void {
     const { nodeCount, order, columnStart, rowPosition } = this.plan;

@@ -81,6 +81,13 @@ export class ScalarLdl {
     return out;
   }
 
+  /** A[row, column] = A[column, row] := re + j·im, a pair in the pattern; rows and columns as in forEachEntry. */
+  setEntry(row: number, column: number, re: number, im: number): void {
+    const at = row === column ? this.diagonalOffset(row) : this.offDiagonalOffset(row, column);
+    this.values[at] = re;
+    this.values[at + 1] = im;
+  }
+
   /** Visits every entry as stamped, both triangles; rows and columns are nodes. */
   forEachEntry(visit: (row: number, column: number, re: number, im: number) => void): void {
     const { nodeCount, order, columnStart, rowPosition } = this.plan;
@@ -133,8 +140,8 @@ function scalarLdlFactor(
     }
     size *= scale; // |L|² = |W|²/|D|²
     finite += 0 * (scale + size);
-    if (size > worst) {
-      worst = size;
+    if ((size > worst || finite !== 0) && worst < Number.POSITIVE_INFINITY) {
+      worst = finite === 0 ? size : Number.POSITIVE_INFINITY;
       worstColumn = k;
     }
     for (let p = first, w = 0; p < end; p += 2, w += 2) {
@@ -148,7 +155,7 @@ function scalarLdlFactor(
     }
   }
   outcome.status = finite === 0 ? 'factored' : 'singular';
-  outcome.growth = finite === 0 ? Math.sqrt(worst) : Number.POSITIVE_INFINITY;
+  outcome.growth = Math.sqrt(worst);
   outcome.worstNode = plan.order[worstColumn] ?? 0;
 }
 

@@ -35,8 +35,8 @@ export function blockLdlFactor(
     for (let p = first, w = 0; p < end; p += 18, w += 18)
       size = Math.max(size, columnBlock(v, 12 * k, p, W, w));
     finite += 0 * size;
-    if (size > worst) {
-      worst = size;
+    if ((size > worst || finite !== 0) && worst < Number.POSITIVE_INFINITY) {
+      worst = finite === 0 ? size : Number.POSITIVE_INFINITY;
       worstColumn = k;
     }
     for (let b = first, w = 0; b < end; b += 18, w += 18) {
@@ -45,7 +45,7 @@ export function blockLdlFactor(
     }
   }
   outcome.status = finite === 0 ? 'factored' : 'singular';
-  outcome.growth = finite === 0 ? Math.sqrt(worst) : Number.POSITIVE_INFINITY;
+  outcome.growth = Math.sqrt(worst);
   outcome.worstNode = plan.order[worstColumn] ?? 0;
 }
 

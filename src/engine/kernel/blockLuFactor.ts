@@ -33,8 +33,8 @@ export function blockLuFactor(
       upperBlock(v, 18 * k, p + 18);
     }
     finite += 0 * size;
-    if (size > worst) {
-      worst = size;
+    if ((size > worst || finite !== 0) && worst < Number.POSITIVE_INFINITY) {
+      worst = finite === 0 ? size : Number.POSITIVE_INFINITY;
       worstColumn = k;
     }
     for (let b = first; b < end; b += 36) {
@@ -47,7 +47,7 @@ export function blockLuFactor(
     }
   }
   outcome.status = finite === 0 ? 'factored' : 'singular';
-  outcome.growth = finite === 0 ? Math.sqrt(worst) : Number.POSITIVE_INFINITY;
+  outcome.growth = Math.sqrt(worst);
   outcome.worstNode = plan.order[worstColumn] ?? 0;
 }
 
