@@ -72,20 +72,25 @@ export class GuardedSolver<M extends KernelMatrix> {
 
   /** x ← A⁻¹·x, refined once unless the factor is direct. */
   solve(x: Float64Array, count = 1): void {
-    if (!this.entries) return this.current.solve(x, count);
+    const { entries } = this;
     const length = x.length / count;
-    for (let c = 0; c < count; c++) this.refinedSolve(this.entries, x.subarray(c * length, (c + 1) * length));
+    if (!entries) this.current.solve(x, count);
+    else for (let c = 0; c < count; c++) this.refinedSolve(entries, x.subarray(c * length, (c + 1) * length));
   }
 
   /** x ← Z_kk·x at the last node of the matrix's plan, whatever order the factor in use has. */
   lastSolve(x: Float64Array, offset = 0): void {
-    if (!this.entries) return this.matrix.lastSolve(x, offset);
+    if (!this.entries) this.matrix.lastSolve(x, offset);
+    else this.refinedLastSolve(this.entries, x, offset);
+  }
+
+  private refinedLastSolve(entries: StampedEntries, x: Float64Array, offset: number): void {
     const { plan, blockSize } = this.matrix;
     const width = 2 * blockSize;
     const at = width * plan.order[plan.nodeCount - 1]!;
     const whole = new Float64Array(width * plan.nodeCount);
     whole.set(x.subarray(offset, offset + width), at);
-    this.refinedSolve(this.entries, whole);
+    this.refinedSolve(entries, whole);
     x.set(whole.subarray(at, at + width), offset);
   }
 
