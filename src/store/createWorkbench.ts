@@ -12,6 +12,7 @@ const emptyTable: WorkbenchState = {
   study: null,
   revision: 0,
   openedRevision: 0,
+  documentId: '',
   lastEdit: null,
   history: noHistory,
   beforePreview: null,

@@ -22,8 +22,6 @@ type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
 type Get = () => Workbench;
 type FileActions = Pick<WorkbenchActions, 'openText' | 'openFile' | 'saveFile' | 'saveFileAs'>;
 
-const byteOrderMark = /^\uFEFF/;
-
 function refusal(name: string, findings: Finding[]): Notice {
   const errors = findings.filter((finding) => finding.severity === 'error').length;
   const count = errors === 1 ? 'an error' : `${errors} errors`;
@@ -58,7 +56,7 @@ export function fileNameOf(study: Study): string {
 
 export function fileActions(set: Set, get: Get, files: Files): FileActions {
   function openText(text: string, name: string, handle?: FileSystemFileHandle): boolean {
-    const { study, findings } = readStudy(text.replace(byteOrderMark, ''));
+    const { study, findings } = readStudy(text);
     if (!study) {
       set(() => ({ notice: refusal(name, findings) }));
       return false;

@@ -1,5 +1,6 @@
 import type { Edit, Study } from '../study/index.ts';
 import { fitView, openingView } from './fitView.ts';
+import { freshId } from './freshId.ts';
 import { noHistory, record, stepBack, stepForward } from './history.ts';
 import { togglePinEdit } from './togglePinEdit.ts';
 import type { Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
@@ -63,6 +64,7 @@ export function studyActions(set: Set, get: Get): StudyActions {
         study,
         revision: state.revision + 1,
         openedRevision: state.revision + 1,
+        documentId: freshId(),
         lastEdit: null,
         history: noHistory,
         beforePreview: null,

@@ -74,6 +74,8 @@ export interface WorkbenchState {
   revision: number;
   /** The revision at which this study was opened; earlier answers speak of another one. */
   openedRevision: number;
+  /** Names this study among tabs and sessions; not part of the file. */
+  documentId: string;
   /** What the last change did, as "undo" names it; null on a fresh study. */
   lastEdit: string | null;
   history: History;

@@ -1,9 +1,15 @@
 import { useStore } from 'zustand';
 import { type Computation, createComputation, spawnWorker } from '../worker/index.ts';
+import { autosave } from './autosave.ts';
 import { browserFiles } from './browserFiles.ts';
 import { createWorkbench } from './createWorkbench.ts';
 import { followStudy } from './followStudy.ts';
+import { freshId } from './freshId.ts';
+import { restore } from './restore.ts';
+import { browserShelf } from './shelf.ts';
+import { tabSlot } from './tabSlot.ts';
 import type { Workbench } from './types.ts';
+import { watchTabs } from './watchTabs.ts';
 
 /** The page's one workbench. Outside components use `workbench.getState()`. */
 export const workbench = createWorkbench(browserFiles);
@@ -25,16 +31,36 @@ export function pageComputation(): Computation {
   return computation;
 }
 
-let started: Promise<void> | null = null;
+let started: Promise<{ restored: boolean }> | null = null;
 
-/** Brings the page's workbench to life; further calls change nothing. */
-export function startWorkbench(): Promise<void> {
-  started ??= start();
+/**
+ * Brings the page's workbench to life: computation (warmed while nothing is asked of it), what was kept of
+ * the last session, autosave, watch for other tabs. Further calls change nothing. Resolves when the study
+ * kept, if any, is on the table. `restore: false` begins with an empty one.
+ */
+export function startWorkbench(options: { restore?: boolean } = {}): Promise<{ restored: boolean }> {
+  started ??= start(options.restore ?? true);
   return started;
 }
 
-async function start(): Promise<void> {
+async function start(restoring: boolean): Promise<{ restored: boolean }> {
   const computing = pageComputation();
   followStudy(workbench, computing, { frame: (work) => requestAnimationFrame(work) });
   void computing.warm();
+  const { slot, takeFresh } = tabSlot();
+  const shelf = browserShelf();
+  const { restored } = restoring ? await restore(workbench, shelf, slot()) : { restored: false };
+  const { flush } = autosave(workbench, shelf, { slot });
+  addEventListener('pagehide', () => void flush());
+  document.addEventListener('visibilitychange', () => {
+    if (document.visibilityState === 'hidden') void flush();
+  });
+  if (typeof BroadcastChannel !== 'undefined') {
+    watchTabs(workbench, new BroadcastChannel('varwright'), {
+      tab: freshId(),
+      slot,
+      takeFreshSlot: takeFresh,
+    });
+  }
+  return { restored };
 }

@@ -1,5 +1,4 @@
 export { type Computation, createComputation } from './client.ts';
 export type { ComputationOptions, Lane, StudyAt, WorkerLike } from './dispatcher.ts';
 export type { CaseNumbers, Probe, ReplyMessage, RequestMessage, ScanPair, Settled } from './protocol.ts';
-export { createSession } from './session.ts';
 export { spawnWorker } from './spawnWorker.ts';

@@ -1,0 +1,20 @@
+import { judgeCase, toResultsCheck, type Verdict } from '../checks/index.ts';
+import { type ResultsFile, solveStudy } from '../engine/index.ts';
+import type { Study } from '../study/index.ts';
+
+export interface SolvedStudy {
+  results: ResultsFile;
+  /** By case id; a case without a solution has none. */
+  verdicts: Map<string, Verdict[]>;
+}
+
+/** The results file of a study, and the verdicts behind its checks in full. */
+export function solveAll(study: Study): SolvedStudy {
+  const verdicts = new Map<string, Verdict[]>();
+  const results = solveStudy(study, (solution) => {
+    const judged = judgeCase(study, solution);
+    verdicts.set(solution.caseId, judged);
+    return judged.map(toResultsCheck);
+  });
+  return { results, verdicts };
+}
