@@ -1,4 +1,21 @@
+export { canonicalJson, canonicalValue } from './canonicalJson.ts';
 export { applySet, casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
+export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
+export { addPin, type End, moveEnd, removePin, reorderAlong } from './edits/arrange.ts';
+export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
+export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } from './edits/copyParts.ts';
+export { makeEdit, type Patch, sameData } from './edits/edit.ts';
+export { originOf, originPath, originsOf, setOrigin } from './edits/origins.ts';
+export { doomedWith, removeBus, removeParts } from './edits/removeParts.ts';
+export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
+export {
+  resetInCase,
+  type UpdateOptions,
+  updateBus,
+  updateElement,
+  updateGroup,
+  updateStudy,
+} from './edits/updates.ts';
 export type {
   BooleanField,
   BusRefField,
@@ -15,6 +32,7 @@ export type {
   TextField,
 } from './fields/Field.ts';
 export { elementKinds, type FieldOwner, fieldOf, fieldsOf, seriesKinds } from './fields/fieldsOf.ts';
+export { fingerprint } from './fingerprint.ts';
 export {
   busById,
   busesOf,
@@ -27,6 +45,8 @@ export {
 } from './lookup.ts';
 export { currentVersion } from './migrate.ts';
 export { busName, elementName, fullNameOf, kindWords, nameOf } from './names.ts';
+export { type PartPlace, typicalValues } from './newPart.ts';
+export { newStudy } from './newStudy.ts';
 export {
   type BuiltInSpectrum,
   builtInSpectra,
@@ -35,9 +55,19 @@ export {
 } from './spectra/builtIn.ts';
 export { isHarmonicRows, spectrumById, spectrumOf } from './spectra/spectrumOf.ts';
 export type * from './types.ts';
+export {
+  editText,
+  formatNumber,
+  formatQuantity,
+  minusSign,
+  type NumberStyle,
+  thinSpace,
+} from './units/formatQuantity.ts';
+export { type ParsedQuantity, parseQuantity } from './units/parseQuantity.ts';
 export type { Unit } from './units/unit.ts';
 export { allowedOf } from './validate/allowed.ts';
 export { checkStudy, type ReadOutcome } from './validate/checkStudy.ts';
 export { readStudy } from './validate/readStudy.ts';
 export { parseVectorGroup, type VectorGroup } from './vectorGroup.ts';
 export { defaultOf, type Resolved, type ResolvedElement, withDefaults } from './withDefaults.ts';
+export { writeStudy } from './writeStudy.ts';

@@ -1,0 +1,64 @@
+import { casesOf } from '../cases.ts';
+import type { Edit, Study, StudyCase } from '../types.ts';
+import { counterOf, freshId, makeEdit, mapById, type Patch, patched, withField } from './edit.ts';
+
+export interface AddCaseEdit extends Edit {
+  caseId: string;
+}
+
+/** The written list of cases: a study without one gets its base case first. */
+function writtenCases(study: Study): StudyCase[] {
+  return study.cases && study.cases.length > 0 ? study.cases : [{ id: 'base', name: 'Base', changes: [] }];
+}
+
+/** Adds an operating state without changes. */
+export function addCase(study: Study, values: Partial<Omit<StudyCase, 'id' | 'changes'>> = {}): AddCaseEdit {
+  return insertCase(study, { ...values, changes: [] }, 'case.add', 'add');
+}
+
+/** Adds a copy of a case, with its changes. Throws RangeError for a case the study does not have. */
+export function duplicateCase(study: Study, id: string): AddCaseEdit {
+  const original = casesOf(study).find((item) => item.id === id);
+  if (!original)
+    throw new RangeError(
+      `no case "${id}"; the study has ${casesOf(study)
+        .map((item) => item.id)
+        .join(', ')}`,
+    );
+  const { id: _id, ...rest } = writtenCases(study).find((item) => item.id === id) ?? original;
+  return insertCase(study, { ...rest, name: `${original.name}, copy` }, 'case.duplicate', 'duplicate');
+}
+
+function insertCase(study: Study, values: Omit<StudyCase, 'id'>, label: string, verb: string): AddCaseEdit {
+  const id = freshId(writtenCases(study), 'case');
+  const added: StudyCase = { name: `Case ${counterOf(id)}`, ...values, id };
+  const edit = makeEdit(label, `${verb} case ${added.name ?? id}`, (current) => {
+    const cases = writtenCases(current);
+    return cases.some((item) => item.id === id) ? current : { ...current, cases: [...cases, added] };
+  });
+  return { ...edit, caseId: id };
+}
+
+/** Sets a case's name, role or hours; undefined or null removes one. */
+export function updateCase(study: Study, id: string, patch: Patch): Edit {
+  const name = casesOf(study).find((item) => item.id === id)?.name ?? id;
+  const words = 'name' in patch ? `rename case ${name}` : `change case ${name}`;
+  return makeEdit('case.set', words, (current) => {
+    const before = writtenCases(current);
+    const cases = mapById(before, id, (item) => patched(item, patch, ['id', 'changes']));
+    return cases === before ? current : { ...current, cases };
+  });
+}
+
+/** Removes a case. The last one cannot go: a study always has a base. */
+export function removeCase(study: Study, id: string): Edit {
+  const name = casesOf(study).find((item) => item.id === id)?.name ?? id;
+  return makeEdit('case.remove', `remove case ${name}`, (current) => {
+    const cases = current.cases?.filter((item) => item.id !== id) ?? [];
+    if (!current.cases || cases.length === current.cases.length || cases.length === 0) return current;
+    const next = { ...current, cases };
+    if (current.view?.caseId !== id) return next;
+    const { caseId: _caseId, ...view } = current.view;
+    return withField(next, 'view', view);
+  });
+}

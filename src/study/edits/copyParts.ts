@@ -1,0 +1,133 @@
+import { elementById, isSeries } from '../lookup.ts';
+import { fullNameOf, nameOf } from '../names.ts';
+import type { CaseChange, DataOrigin, Edit, Spectrum, Study, StudyElement } from '../types.ts';
+import { freshId, makeEdit } from './edit.ts';
+import { originPath, originsOf, putOrigins } from './origins.ts';
+
+export interface CopyEdit extends Edit {
+  /** Ids of the new parts, in the order of the originals. */
+  elementIds: string[];
+}
+
+interface Twin {
+  original: StudyElement;
+  copy: StudyElement;
+}
+
+/** Duplicates parts beside themselves: hanging parts at their busbar, series parts in parallel. Cases and origins follow. */
+export function duplicateParts(study: Study, ids: readonly string[]): CopyEdit {
+  const originals = ids.flatMap((id) => elementById(study, id) ?? []);
+  const twins = twinsOf(study, originals);
+  const first = originals[0];
+  const words =
+    originals.length === 1 && first
+      ? `duplicate ${fullNameOf(first)}`
+      : `duplicate ${originals.length} parts`;
+  const edit = makeEdit('parts.duplicate', words, (current) => {
+    if (twins.length === 0) return current;
+    const next: Study = { ...current, elements: [...current.elements, ...twins.map((twin) => twin.copy)] };
+    if (current.cases) {
+      next.cases = current.cases.map((item) => ({ ...item, changes: withTwinChanges(item.changes, twins) }));
+    }
+    return putOrigins(next, copiedOrigins(current, twins));
+  });
+  return { ...edit, elementIds: twins.map((twin) => twin.copy.id) };
+}
+
+function twinsOf(study: Study, originals: readonly StudyElement[]): Twin[] {
+  const taken = [...study.elements];
+  return originals.map((original) => {
+    const copy = { ...original, id: freshId(taken, original.kind), name: freshName(taken, nameOf(original)) };
+    taken.push(copy);
+    return { original, copy };
+  });
+}
+
+/** "Bank 1" becomes "Bank 2", or the next number nobody has. */
+function freshName(taken: readonly StudyElement[], name: string): string {
+  const names = new Set(taken.map(nameOf));
+  const match = /^(.*?)(\d+)$/.exec(name);
+  const stem = match?.[1] ?? `${name} `;
+  let counter = match ? Number(match[2]) : 1;
+  do counter += 1;
+  while (names.has(`${stem}${counter}`));
+  return `${stem}${counter}`;
+}
+
+function withTwinChanges(changes: CaseChange[], twins: readonly Twin[]): CaseChange[] {
+  const added = twins.flatMap(({ original, copy }) =>
+    changes
+      .filter((change) => change.element === original.id)
+      .map((change) => ({ ...change, element: copy.id })),
+  );
+  return added.length === 0 ? changes : [...changes, ...added];
+}
+
+function copiedOrigins(study: Study, twins: readonly Twin[]): Record<string, DataOrigin> {
+  return Object.fromEntries(
+    twins.flatMap(({ original, copy }) =>
+      Object.entries(originsOf(study, 'elements', original.id)).map(([field, origin]) => [
+        originPath('elements', copy.id, field),
+        origin,
+      ]),
+    ),
+  );
+}
+
+/** Hanging parts taken out of a study, with the spectra and origins they need in another one. */
+export interface PartsClip {
+  format: 'varwright-parts';
+  elements: StudyElement[];
+  spectra: Spectrum[];
+  origins: Record<string, Record<string, DataOrigin>>;
+}
+
+/** Copies hanging parts for another study or busbar; series parts need two busbars and stay out. */
+export function clipParts(study: Study, ids: readonly string[]): PartsClip {
+  const elements = ids.flatMap((id) => elementById(study, id) ?? []).filter((element) => !isSeries(element));
+  const used = new Set(
+    elements.flatMap((element) =>
+      element.kind === 'converter' && typeof element.spectrum === 'string' ? [element.spectrum] : [],
+    ),
+  );
+  return {
+    format: 'varwright-parts',
+    elements,
+    spectra: (study.spectra ?? []).filter((spectrum) => used.has(spectrum.id)),
+    origins: Object.fromEntries(
+      elements.map((element) => [element.id, originsOf(study, 'elements', element.id)]),
+    ),
+  };
+}
+
+/** Hangs copied parts at a busbar under fresh ids. A spectrum this study lacks, or has otherwise, comes as rows. */
+export function pasteParts(study: Study, clip: PartsClip, busId: string): CopyEdit {
+  const twins = twinsOf(study, clip.elements).map(({ original, copy }) => {
+    const named = study.elements.some((element) => nameOf(element) === nameOf(original))
+      ? copy
+      : { ...copy, name: nameOf(original) };
+    return { original, copy: withOwnRows({ ...named, bus: busId } as StudyElement, study, clip) };
+  });
+  const words = `paste ${twins.length === 1 && twins[0] ? fullNameOf(twins[0].copy) : `${twins.length} parts`}`;
+  const edit = makeEdit('parts.paste', words, (current) => {
+    if (twins.length === 0) return current;
+    const origins = twins.flatMap(({ original, copy }) =>
+      Object.entries(clip.origins[original.id] ?? {}).map(
+        ([field, origin]) => [originPath('elements', copy.id, field), origin] as const,
+      ),
+    );
+    return putOrigins(
+      { ...current, elements: [...current.elements, ...twins.map((twin) => twin.copy)] },
+      Object.fromEntries(origins),
+    );
+  });
+  return { ...edit, elementIds: twins.map((twin) => twin.copy.id) };
+}
+
+function withOwnRows(element: StudyElement, study: Study, clip: PartsClip): StudyElement {
+  if (element.kind !== 'converter' || typeof element.spectrum !== 'string') return element;
+  const carried = clip.spectra.find((spectrum) => spectrum.id === element.spectrum);
+  const here = study.spectra?.find((spectrum) => spectrum.id === element.spectrum);
+  const same = carried && here && JSON.stringify(carried.orders) === JSON.stringify(here.orders);
+  return carried && !same ? { ...element, spectrum: carried.orders } : element;
+}
