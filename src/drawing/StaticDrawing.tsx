@@ -1,0 +1,72 @@
+import { useId, useMemo } from 'react';
+import type { Verdict } from '../checks/index.ts';
+import type { CaseSolution } from '../engine/index.ts';
+import { type Study, studyInCase } from '../study/index.ts';
+import { BusGlyph } from './glyphs/BusGlyph.tsx';
+import { Hatch } from './glyphs/Hatch.tsx';
+import { type Palette, printPalette } from './glyphs/Palette.ts';
+import { PartGlyph } from './glyphs/PartGlyph.tsx';
+import { type Layout, layoutStudy } from './layout/index.ts';
+import { figuresOf } from './readings/figures.ts';
+import type { ReadingMode } from './readings/ReadingMode.ts';
+
+export interface StaticDrawingProps {
+  study: Study;
+  caseId: string;
+  layout?: Layout;
+  solution: CaseSolution | null;
+  verdicts?: readonly Verdict[];
+  readingMode?: ReadingMode;
+  /** The order of the readings in the order mode. */
+  order?: number;
+  palette?: Palette;
+  fontFamily?: string;
+  /** Accessible name. */
+  title?: string;
+}
+
+/**
+ * The single-line diagram as one still SVG with its colours as plain attributes, for the results sheet and
+ * for copies: every state is told by shape, dash or word as well.
+ */
+export function StaticDrawing(props: StaticDrawingProps) {
+  const { study, caseId, solution, palette = printPalette, fontFamily, verdicts = NO_VERDICTS } = props;
+  const inCase = useMemo(() => studyInCase(study, caseId), [study, caseId]);
+  const layout = useMemo(() => props.layout ?? layoutStudy(study), [props.layout, study]);
+  const figures = figuresOf(inCase, solution, verdicts, props.readingMode ?? 'fundamental', props.order ?? 1);
+  const hatchId = `hatch${useId().replaceAll(':', '')}`;
+  return (
+    <svg
+      xmlns="http://www.w3.org/2000/svg"
+      viewBox={`0 0 ${layout.width} ${layout.height}`}
+      width={layout.width}
+      height={layout.height}
+      fontFamily={fontFamily}
+      role="img"
+      aria-label={props.title ?? `Single-line diagram of ${study.title}`}
+    >
+      <Hatch id={hatchId} ink={palette.ink} />
+      {layout.parts.map((place) => {
+        const figure = figures.parts.get(place.id);
+        if (!figure) return null;
+        return (
+          <g key={place.id} transform={`translate(${place.x} ${place.y})`}>
+            <PartGlyph place={place} figure={figure} study={inCase} palette={palette} />
+          </g>
+        );
+      })}
+      {layout.buses.map((place) => {
+        const bus = inCase.buses.find((b) => b.id === place.id);
+        const figure = figures.buses.get(place.id);
+        if (!bus || !figure) return null;
+        return (
+          <g key={place.id} transform={`translate(${place.x1} ${place.y})`}>
+            <BusGlyph place={place} bus={bus} figure={figure} palette={palette} hatchId={hatchId} />
+          </g>
+        );
+      })}
+    </svg>
+  );
+}
+
+const NO_VERDICTS: readonly Verdict[] = [];

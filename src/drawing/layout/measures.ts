@@ -1,0 +1,45 @@
+/** The measures of the drawing at 100 %, in px. Storeys, slots and labels are built from these alone. */
+
+export const FONT_PX = 12;
+export const LINE_PX = 15;
+
+/** Busbar to the top of a hanging symbol. */
+export const LEAD = 38;
+/** Depth of a storey that holds hanging parts: lead, symbol, four lines of text. */
+export const LEAF_ZONE = 158;
+/** Depth of a storey that holds only parts leading further down. */
+export const TRUNK_ZONE = 116;
+/** Depth of a storey with nothing below its busbars. */
+export const BARE_ZONE = 30;
+/** A tie between two busbars end to end, its text below it. */
+export const TIE_ZONE = 96;
+/** Room above the top busbars for supplies and generators. */
+export const SOURCE_ZONE = 116;
+/** Room above a busbar for its name and volts, or its dial. */
+export const BUS_LABEL_BAND = 38;
+export const BUS_LABEL_HEIGHT = 18;
+export const LANE_PITCH = 12;
+
+/** Centre of a hanging symbol below its busbar. */
+export const SYMBOL_DEPTH = LEAD + 24;
+/** Centre of a supply's or generator's symbol above its busbar. */
+export const SOURCE_HEIGHT = 72;
+/** Top of a hanging part's text below its busbar. */
+export const LEAF_TEXT_DEPTH = 94;
+
+/** Width kept for the live reading under a hanging part and beside a part that leads on. */
+export const LEAF_READING = 154;
+export const SIDE_READING = 176;
+/** Width kept for the live volts beside a busbar's name. */
+export const BUS_READING = 74;
+
+export const SLOT_GAP = 10;
+export const BUS_GAP = 44;
+export const ISLAND_GAP = 72;
+export const BAR_INSET = 14;
+export const SIDE_TEXT_OFFSET = 28;
+export const ARRIVAL_PITCH = 18;
+export const DIAL_RADIUS = 16;
+/** Room right of a busbar for its dial and the letters of its notes. */
+export const DIAL_ROOM = 64;
+export const MARGIN = 28;

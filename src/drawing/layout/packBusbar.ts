@@ -1,0 +1,136 @@
+import type { SeriesElement, ShuntElement, Study } from '../../study/index.ts';
+import type { Arrangement, Slot } from './alongBusbar.ts';
+import { addBlock, type Block, emptyBlock, type GapRule, shiftBeside } from './block.ts';
+import { busLabelWidth, leafLabelWidth, sideLabel } from './labels.ts';
+import {
+  ARRIVAL_PITCH,
+  BAR_INSET,
+  BUS_GAP,
+  DIAL_RADIUS,
+  DIAL_ROOM,
+  LEAF_READING,
+  SIDE_TEXT_OFFSET,
+  SLOT_GAP,
+} from './measures.ts';
+import type { Storeys } from './storeys.ts';
+
+const SYMBOL_HALF = 20;
+const LABEL_TO_LEAD = 18;
+/** How far right of its earliest place a feed may move to stand straight above a part. */
+const STRAIGHTEN = 110;
+
+export interface Packing {
+  study: Study;
+  storeys: Storeys;
+  arrangement: Arrangement;
+}
+
+interface PackedBusbar {
+  block: Block;
+  /** Where the first part from above meets the bar, and how far the text of the last one reaches. */
+  leadX: number;
+  leadRight: number;
+}
+
+/**
+ * Packs a busbar, the parts feeding it from above, what hangs from it and all it leads to. Everything is
+ * anchored at the left end of the bar: what is added at the right end moves only what stands further right.
+ */
+export function packBusbar(
+  packing: Packing,
+  bus: number,
+  fedBy: (SeriesElement | ShuntElement)[],
+): PackedBusbar {
+  const { arrangement, study } = packing;
+  const label = busLabelWidth(study.buses[bus] ?? { id: '', nominalV: 0 });
+  const { block, slotXs } = packSlots(packing, bus, label + LABEL_TO_LEAD);
+  const leadX = straightened(slotXs, label + LABEL_TO_LEAD);
+
+  let [topEnd, leadRight] = [leadX, leadX];
+  for (const part of fedBy) {
+    const x = part === fedBy[0] ? leadX : leadRight + SYMBOL_HALF + SLOT_GAP;
+    block.symbols.push({ part, x, hang: 'from' in part ? 'leads-on' : 'above' });
+    topEnd = x + ARRIVAL_PITCH;
+    leadRight = x + SIDE_TEXT_OFFSET + sideLabel(part, study).width;
+  }
+  for (const part of arrangement.fromAbove[bus] ?? []) {
+    block.arrivals.push({ part, bus, x: topEnd, from: 'above' });
+    topEnd += ARRIVAL_PITCH;
+  }
+  closeBar(packing, block, bus, topEnd, fedBy.some((part) => !('from' in part)) ? leadRight : 0);
+  for (const right of arrangement.beside[bus] ?? []) {
+    const next = packBusbar(packing, right, arrangement.feeds[right] ?? []).block;
+    addBlock(block, next, shiftBeside(block, next, gapRule(packing)));
+  }
+  return { block, leadX, leadRight };
+}
+
+/** Ends the bar right of everything on it and reserves the room of the dial. */
+function closeBar(packing: Packing, block: Block, bus: number, topEnd: number, feedRight: number): void {
+  const tiedRight = packing.arrangement.ties.some((tie) => tie.left === bus);
+  const dialAbove = tiedRight ? 2 * DIAL_RADIUS + 8 : 0;
+  const x2 = Math.max(block.rows[0]?.right ?? 0, topEnd + dialAbove) + BAR_INSET;
+  const right = Math.max(x2 + (tiedRight ? 0 : DIAL_ROOM), feedRight);
+  block.bars.push({ bus, x1: 0, x2 });
+  block.rows[0] = { left: 0, right, leftBus: bus, rightBus: bus };
+}
+
+/** Slots from left to right; a lone part leading on stands under the busbar's own feed. */
+function packSlots(packing: Packing, bus: number, firstLead: number): { block: Block; slotXs: number[] } {
+  const slots = packing.arrangement.slots[bus] ?? [];
+  const block = emptyBlock();
+  let left = BAR_INSET;
+  for (const part of packing.arrangement.fromBelow[bus] ?? []) {
+    block.arrivals.push({ part, bus, x: left, from: 'below' });
+    left += ARRIVAL_PITCH;
+  }
+  block.rows[0] = { left: 0, right: left - SLOT_GAP, leftBus: -1, rightBus: -1 };
+  const slotXs: number[] = [];
+  for (const slot of slots) {
+    const next = packSlot(packing, bus, slot);
+    const nearest = shiftBeside(block, next, gapRule(packing));
+    const x = slots.length === 1 && slot.kind !== 'leaf' ? Math.max(nearest, firstLead) : nearest;
+    addBlock(block, next, x);
+    slotXs.push(x);
+  }
+  return { block, slotXs };
+}
+
+/** The feed stands straight above the next slot to its right when that is near. */
+function straightened(slotXs: number[], earliest: number): number {
+  const near = slotXs.filter((x) => x >= earliest && x <= earliest + STRAIGHTEN);
+  return near.length > 0 ? Math.min(...near) : earliest;
+}
+
+/** A slot with its (first) symbol at x = 0. */
+function packSlot(packing: Packing, bus: number, slot: Slot): Block {
+  const { study, storeys } = packing;
+  const block = emptyBlock();
+  if (slot.kind === 'leaf') {
+    const half = leafLabelWidth(slot.part, study) / 2;
+    block.rows.push({ left: -half, right: half, leftBus: -1, rightBus: -1 });
+    block.symbols.push({ part: slot.part, x: 0, hang: 'below' });
+  } else if (slot.kind === 'column') {
+    const right = SIDE_TEXT_OFFSET + sideLabel(slot.part, study).width;
+    block.rows.push({ left: -SYMBOL_HALF, right, leftBus: -1, rightBus: -1 });
+    block.symbols.push({ part: slot.part, x: 0, hang: 'leads-on' });
+    const between = (storeys.storey[slot.to] ?? 0) - (storeys.storey[bus] ?? 0) - 1;
+    for (let row = 0; row < between; row++)
+      block.rows.push({ left: -8, right: 8, leftBus: -1, rightBus: -1 });
+  } else {
+    const child = packBusbar(packing, slot.below, slot.parts);
+    const right = child.leadRight - child.leadX;
+    block.rows.push({ left: -SYMBOL_HALF, right, leftBus: -1, rightBus: -1 });
+    addBlock(block, child.block, -child.leadX, 1);
+  }
+  return block;
+}
+
+/** Slots stand close, busbars apart, and busbars tied end to end leave room for the tie and its text. */
+export function gapRule({ arrangement, study }: Packing): GapRule {
+  return (left, right) => {
+    if (left < 0 && right < 0) return SLOT_GAP;
+    const tie = arrangement.ties.find((t) => t.left === left && t.right === right);
+    return tie ? Math.max(LEAF_READING, leafLabelWidth(tie.part, study)) + 2 * SLOT_GAP : BUS_GAP;
+  };
+}

@@ -1,0 +1,71 @@
+import type { ElementKind } from '../../study/index.ts';
+
+/** All places are px at 100 %, x to the right, y downwards, origin at the drawing's top left corner. */
+export interface Point {
+  x: number;
+  y: number;
+}
+
+export interface Box {
+  x: number;
+  y: number;
+  width: number;
+  height: number;
+}
+
+export interface BusPlace {
+  id: string;
+  /** Left and right end of the bar. */
+  x1: number;
+  x2: number;
+  y: number;
+  /** Name, nominal voltage and live volts stand here, left-aligned, on one line. */
+  label: Box;
+  /** Centre of the three-phasor dial. */
+  dial: Point;
+  /** 0 is the topmost. */
+  storey: number;
+  /** 0, 1, … from left to right; busbars of one island are joined by series parts. */
+  island: number;
+}
+
+/** One end of a part: the busbar it touches and the conductor from busbar to symbol. */
+export interface PartEnd {
+  bus: string;
+  /** From the touching point on the bar to the symbol's terminal. */
+  path: Point[];
+}
+
+export type Hang = 'below' | 'above' | 'leads-on' | 'across';
+
+export interface PartPlace {
+  id: string;
+  kind: ElementKind;
+  /** Symbol centre. */
+  x: number;
+  y: number;
+  /**
+   * below: hangs from its busbar. above: feeds its busbar from above. leads-on: joins an upper to a lower
+   * busbar. across: ties two busbars of one storey end to end (the symbol lies on its side).
+   */
+  hang: Hang;
+  /** The busbar it hangs from: the upper one, or the left one of a tie. */
+  bus: string;
+  /** Where the part touches that busbar. */
+  top: Point;
+  /** Where it touches its second busbar. */
+  foot?: Point & { bus: string };
+  ends: PartEnd[];
+  /** Name, nameplate and readings; `align` says where the lines start. */
+  label: Box;
+  align: 'middle' | 'start';
+  /** Name and nameplate share the first line. */
+  oneLine: boolean;
+}
+
+export interface Layout {
+  width: number;
+  height: number;
+  buses: BusPlace[];
+  parts: PartPlace[];
+}
