@@ -1,7 +1,9 @@
+export { type Autosave, type AutosaveOptions, autosave } from './autosave.ts';
 export { createWorkbench, type WorkbenchStore } from './createWorkbench.ts';
 export type { Files, OpenedFile } from './fileActions.ts';
 export { type FollowOptions, followStudy } from './followStudy.ts';
 export type { History, Revision } from './history.ts';
+export { restore } from './restore.ts';
 export {
   busById,
   countVerdicts,
@@ -13,6 +15,7 @@ export {
   redoWords,
   undoWords,
 } from './selectors.ts';
+export type { KeptStudy, KeptView, Shelf } from './shelf.ts';
 export { samePin } from './togglePinEdit.ts';
 export type {
   AllVerdicts,
@@ -30,3 +33,4 @@ export type {
   WorkbenchState,
 } from './types.ts';
 export { pageComputation, startWorkbench, useWorkbench, workbench } from './useWorkbench.ts';
+export { type TabChannel, type TabMessage, type TabOptions, watchTabs } from './watchTabs.ts';
