@@ -92,19 +92,18 @@ function namesOf(cut: Cut): Map<number, string> {
   ]);
 }
 
-type WidthRun = [first: number, widths: number[]];
-
-function runsOf(widths: Map<number, number>): WidthRun[] {
-  const runs: WidthRun[] = [];
+/** Runs of consecutive code points: first code point → its width and those after it. */
+function runsOf(widths: Map<number, number>): Record<string, string> {
+  const runs: [first: number, widths: number[]][] = [];
   for (const [code, width] of [...widths].sort(([a], [b]) => a - b)) {
     const last = runs.at(-1);
     if (last && last[0] + last[1].length === code) last[1].push(width);
     else runs.push([code, [width]]);
   }
-  return runs;
+  return Object.fromEntries(runs.map(([first, run]) => [String(first), run.join(' ')]));
 }
 
-async function makeCut(cut: Cut): Promise<[string, WidthRun[]]> {
+async function makeCut(cut: Cut): Promise<[string, Record<string, string>]> {
   const text = String.fromCodePoint(...cut.codes);
   const source = await readFile(cut.source);
   const names = namesOf(cut);
@@ -128,7 +127,7 @@ async function makeCut(cut: Cut): Promise<[string, WidthRun[]]> {
 
 await mkdir(target, { recursive: true });
 const metrics = Object.fromEntries(await Promise.all(CUTS.map(makeCut)));
-await writeFile(join(here, 'metrics.json'), `${JSON.stringify(metrics)}\n`);
+await writeFile(join(here, 'metrics.json'), `${JSON.stringify(metrics, null, 2)}\n`);
 for (const [from, file] of [
   [join(packageFolder('source-sans'), 'LICENSE.md'), 'varwright-sans-licence.md'],
   [join(packageFolder('dejavu-fonts-ttf'), 'LICENSE'), 'varwright-marks-licence.txt'],

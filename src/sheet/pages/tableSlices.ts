@@ -1,0 +1,132 @@
+import type { Cell, Row, TableBlock } from '../document/model.ts';
+import { SIGN_OF } from '../document/signs.ts';
+import type { Ink, PageMark } from './marks.ts';
+import { textWidth } from './measure.ts';
+import { LEADING, TYPE } from './paper.ts';
+import type { Slice } from './slice.ts';
+import { halves, isNumeric, MARK_WIDTH, type PlacedColumn, placeColumns } from './tableColumns.ts';
+import { baseline, paragraphSlices, textMark } from './textSlices.ts';
+import { wrap } from './wrap.ts';
+
+const SIZE = TYPE.table;
+const LINE = SIZE * LEADING;
+const PADDING = 1.9;
+
+function rule(y: number, width: number, stroke: number, ink: Ink): PageMark {
+  return { kind: 'line', x1: 0, y1: y, x2: width, y2: y, width: stroke, ink };
+}
+
+/** Column heads with their units under them, repeated wherever the table goes on. */
+function headSlice(columns: PlacedColumn[], width: number): Slice {
+  const heads = columns.map(({ column, width: room }) => [
+    ...wrap(column.head, room, SIZE),
+    ...(column.unit === undefined ? [] : [column.unit]),
+  ]);
+  const lines = Math.max(1, ...heads.map((head) => head.length));
+  const marks: PageMark[] = columns.flatMap((placed, k) => {
+    const head = heads[k] ?? [];
+    return head.map((line, index) => {
+      const right = placed.column.align !== 'left';
+      const x = right ? placed.x + placed.width - textWidth(line, SIZE) : placed.x;
+      const y = (lines - head.length + index) * LINE + baseline(SIZE);
+      return textMark(line, { size: SIZE, ink: 'quiet', x }, y);
+    });
+  });
+  const height = lines * LINE + PADDING + 1;
+  return { height, marks: [...marks, rule(height - 0.6, width, 0.9, 'ink')], glued: true };
+}
+
+interface CellLines {
+  marks: PageMark[];
+  lines: number;
+}
+
+/** A wrapped cell: its text, then what follows it in lighter ink, on the same line where there is room. */
+function leftCell(cell: Cell, placed: PlacedColumn): CellLines {
+  const weight = cell.strong ? 'semibold' : 'regular';
+  const x = placed.x + (cell.mark ? MARK_WIDTH : 0);
+  const room = placed.width - (cell.mark ? MARK_WIDTH : 0) + 0.01;
+  const lines = wrap(cell.text, room, SIZE, weight);
+  const marks: PageMark[] = lines.map((line, index) =>
+    textMark(line, { size: SIZE, weight, x }, PADDING + index * LINE + baseline(SIZE)),
+  );
+  if (cell.quiet === undefined) return { marks, lines: lines.length };
+  const last = lines.at(-1) ?? '';
+  const after = textWidth(`${last} `, SIZE, weight);
+  if (after + textWidth(cell.quiet, SIZE) <= room) {
+    const y = PADDING + (lines.length - 1) * LINE + baseline(SIZE);
+    marks.push(textMark(cell.quiet, { size: SIZE, ink: 'quiet', x: x + after }, y));
+    return { marks, lines: lines.length };
+  }
+  const under = wrap(cell.quiet, room, SIZE);
+  under.forEach((line, index) => {
+    const y = PADDING + (lines.length + index) * LINE + baseline(SIZE);
+    marks.push(textMark(line, { size: SIZE, ink: 'quiet', x }, y));
+  });
+  return { marks, lines: lines.length + under.length };
+}
+
+function numberCell(cell: Cell, placed: PlacedColumn): CellLines {
+  const weight = cell.strong ? 'semibold' : 'regular';
+  const right = placed.x + placed.width;
+  const [whole] = halves(cell.text);
+  const x =
+    placed.column.align === 'decimal' && isNumeric(cell.text)
+      ? right - placed.fraction - textWidth(whole, SIZE, weight)
+      : right - textWidth(cell.text, SIZE, weight);
+  return {
+    marks: [textMark(cell.text, { size: SIZE, weight, x }, PADDING + baseline(SIZE))],
+    lines: 1,
+  };
+}
+
+function signMarks(cell: Cell, placed: PlacedColumn): PageMark[] {
+  if (!cell.mark) return [];
+  const ink: Ink = cell.mark === 'unknown' ? 'quiet' : cell.mark;
+  return [
+    textMark(
+      SIGN_OF[cell.mark],
+      { size: SIZE, weight: 'semibold', ink, x: placed.x },
+      PADDING + baseline(SIZE),
+    ),
+  ];
+}
+
+function rowSlice(row: Row, columns: PlacedColumn[], width: number, repeat: Slice): Slice {
+  if (row.kind === 'group') {
+    const aside = row.aside === undefined ? [] : [asideMark(row.text, row.aside)];
+    const height = LINE + 2 * PADDING + 3;
+    const y = 3 + PADDING + baseline(SIZE);
+    const marks = [textMark(row.text, { size: SIZE, weight: 'semibold' }, y), ...aside];
+    return { height, marks: [...marks, rule(height, width, 0.4, 'hairline')], glued: true, repeat };
+  }
+  const cells = columns.map((placed, k) => {
+    const cell = row.cells[k] ?? { text: '' };
+    const set = placed.column.align === 'left' ? leftCell(cell, placed) : numberCell(cell, placed);
+    return { ...set, marks: [...signMarks(cell, placed), ...set.marks] };
+  });
+  const height = Math.max(1, ...cells.map((cell) => cell.lines)) * LINE + 2 * PADDING;
+  const marks = cells
+    .flatMap((cell) => cell.marks)
+    .filter((mark) => mark.kind !== 'text' || mark.text !== '');
+  return { height, marks: [...marks, rule(height, width, 0.4, 'hairline')], glued: false, repeat };
+}
+
+function asideMark(text: string, aside: string): PageMark {
+  const x = textWidth(text, SIZE, 'semibold') + 8;
+  return textMark(aside, { size: SIZE, ink: 'quiet', x }, 3 + PADDING + baseline(SIZE));
+}
+
+/** A table cut into rows: never a head without two rows, a group's name without a row, a last row alone. */
+export function tableSlices(table: TableBlock, width: number): Slice[] {
+  const columns = placeColumns(table, width);
+  const head = headSlice(columns, width);
+  const rows = table.rows.map((row) => rowSlice(row, columns, width, head));
+  rows.forEach((slice, index) => {
+    if (rows.length > 1 && (index === 0 || index === rows.length - 2)) slice.glued = true;
+  });
+  const last = rows.at(-1);
+  const notes = table.notes.flatMap((note) => paragraphSlices(note, width, true));
+  if (last) last.glued = notes.length > 0;
+  return [{ ...head, gap: 5 }, ...rows, ...notes];
+}

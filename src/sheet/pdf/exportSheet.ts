@@ -1,0 +1,111 @@
+import type { jsPDF } from 'jspdf';
+import type { ReactElement } from 'react';
+import { svg2pdf } from 'svg2pdf.js';
+import { figuresOf } from '../document/figuresOf.ts';
+import type { Figure, SheetDocument } from '../document/index.ts';
+import { layoutPages } from '../pages/layoutPages.ts';
+import type { FigureMark, SheetPage } from '../pages/marks.ts';
+import { drawMark } from './drawMark.ts';
+import { addFonts, type FontFiles, loadFontFiles } from './fontFiles.ts';
+import { mountFigure } from './mountFigure.ts';
+import { newPdf } from './newPdf.ts';
+import { type Slicing, slicing } from './slicing.ts';
+import { markRuns } from './svgForPdf.ts';
+
+/** The drawing of a figure in the given size in points; null where there is nothing to draw. */
+export type FigureComposer = (figure: Figure, width: number, height: number) => ReactElement | null;
+
+export interface ExportProgress {
+  /** Pages and figures finished. */
+  done: number;
+  total: number;
+  /** e.g. "page 3 of 9". */
+  what: string;
+}
+
+export interface ExportOptions {
+  onProgress?: (progress: ExportProgress) => void;
+  signal?: AbortSignal;
+  /** Already loaded fonts; absent: fetched from the programme's own files. */
+  fonts?: FontFiles;
+}
+
+async function drawFigure(
+  pdf: jsPDF,
+  mark: FigureMark,
+  element: ReactElement,
+  tasks: Slicing,
+): Promise<void> {
+  await tasks.turn();
+  const figure = mountFigure(element, mark.width, mark.height);
+  try {
+    markRuns(figure.svg);
+    await tasks.turn();
+    await svg2pdf(figure.svg, pdf, { x: mark.x, y: mark.y, width: mark.width, height: mark.height });
+  } finally {
+    figure.remove();
+  }
+  await tasks.turn();
+}
+
+async function drawPage(
+  pdf: jsPDF,
+  page: SheetPage,
+  draw: (mark: FigureMark) => Promise<void>,
+  tasks: Slicing,
+): Promise<void> {
+  for (const mark of page.marks) {
+    if (mark.kind === 'figure') await draw(mark);
+    else drawMark(pdf, mark);
+    await tasks.pause();
+  }
+}
+
+/** Fonts must be ready in the page too, as figures are measured there. */
+async function pageFonts(): Promise<void> {
+  await Promise.all(
+    ['400 10px "Varwright Sans"', '600 10px "Varwright Sans"', '10px "Varwright Marks"'].map((font) =>
+      document.fonts.load(font, 'Aφ∠'),
+    ),
+  );
+}
+
+/**
+ * Writes the sheet as a PDF: vectors, selectable text, embedded fonts. The same document and figures give
+ * the same bytes. Works in short tasks on the main thread; an aborted signal rejects with its reason.
+ */
+export async function exportSheet(
+  document: SheetDocument,
+  compose: FigureComposer,
+  options: ExportOptions = {},
+): Promise<Blob> {
+  const { signal, onProgress } = options;
+  signal?.throwIfAborted();
+  const tasks = slicing(signal);
+  const [fonts] = await Promise.all([options.fonts ?? loadFontFiles(), pageFonts()]);
+  await tasks.turn();
+  const pages = layoutPages(document);
+  const figures = figuresOf(document);
+  await tasks.turn();
+  const pdf = newPdf(document, pages);
+  addFonts(pdf, fonts);
+  const count = pages.pages.length;
+  const total = count + figures.size;
+  let done = 0;
+  const draw = async (mark: FigureMark): Promise<void> => {
+    const block = figures.get(mark.id);
+    const element = block && compose(block, mark.width, mark.height);
+    if (element) await drawFigure(pdf, mark, element, tasks);
+    done += 1;
+    onProgress?.({ done, total, what: `figures and pages, ${done} of ${total}` });
+  };
+  for (const page of pages.pages) {
+    if (page.number > 1) pdf.addPage([pages.width, pages.height]);
+    for (const section of page.sections) pdf.outline.add(null, section.title, { pageNumber: page.number });
+    await drawPage(pdf, page, draw, tasks);
+    done += 1;
+    onProgress?.({ done, total, what: `page ${page.number} of ${count}` });
+    await tasks.turn();
+  }
+  return pdf.output('blob');
+}

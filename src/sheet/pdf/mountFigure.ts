@@ -1,0 +1,29 @@
+import type { ReactElement } from 'react';
+import { flushSync } from 'react-dom';
+import { createRoot } from 'react-dom/client';
+
+/** A drawing standing off-screen in the page, so that it can be measured. */
+export interface MountedFigure {
+  svg: SVGSVGElement;
+  remove(): void;
+}
+
+/** Renders a figure off-screen. Throws RangeError where it renders no drawing. */
+export function mountFigure(element: ReactElement, width: number, height: number): MountedFigure {
+  const host = document.createElement('div');
+  host.setAttribute('aria-hidden', 'true');
+  host.style.cssText = `position:absolute;left:-10000px;top:0;width:${width}px;height:${height}px;overflow:hidden;contain:strict;color-scheme:light`;
+  document.body.append(host);
+  const root = createRoot(host);
+  flushSync(() => root.render(element));
+  const svg = host.querySelector('svg');
+  const remove = (): void => {
+    root.unmount();
+    host.remove();
+  };
+  if (!svg) {
+    remove();
+    throw new RangeError('a figure of the sheet rendered no drawing');
+  }
+  return { svg, remove };
+}
