@@ -1,6 +1,37 @@
+export type { NoteState } from './notes/NoteFrame.tsx';
+export { NotesColumn, type NotesColumnProps } from './notes/NotesColumn.tsx';
+export { type NoteSubject, noteLetters, pinKey, pinSubject, subjectKey } from './notes/noteLetters.ts';
+export { readingText, verdictText } from './notes/noteText.ts';
+export type { Reading } from './notes/Reading.ts';
+export { ReadingNote, type ReadingNoteProps } from './notes/ReadingNote.tsx';
+export { type ReadingNumber, readingNumbers } from './notes/readingNumbers.ts';
+export { VerdictMark } from './notes/VerdictMark.tsx';
+export { VerdictNote, type VerdictNoteProps } from './notes/VerdictNote.tsx';
+export { byMargin, verdictCounts } from './notes/verdictOrder.ts';
+export { marginWords, sourceWords, VERDICT_MARKS, VERDICT_WORDS } from './notes/verdictWords.ts';
+export type { LitPhasor } from './phasor/PhasorDrawing.tsx';
+export { PhasorFigure, type PhasorFigureProps } from './phasor/PhasorFigure.tsx';
+export { PhasorView, type PhasorViewProps } from './phasor/PhasorView.tsx';
+export { phaseAngle, phaseAngleWords } from './phasor/phaseAngle.ts';
+export { PHASE_DASHES } from './phasor/phasorGeometry.ts';
+export {
+  type Phasor,
+  type PhasorSpectrum,
+  phasorSpectrum,
+  phasorsAt,
+  reversedSpectrum,
+  type ThreePhasors,
+} from './phasor/phasorSpectrum.ts';
 export { FrequencyRail, type FrequencyRailProps } from './rail/FrequencyRail.tsx';
 export type { Injection } from './rail/injections.ts';
 export type { OrderDomain } from './rail/orderAxis.ts';
 export { RailFigure, type RailFigureProps } from './rail/RailFigure.tsx';
 export type { PeakVerdict, RailBand, RailScan } from './rail/railModel.ts';
 export type { Probe } from './rail/railWords.ts';
+export { SpectrumFigure, type SpectrumFigureProps } from './spectrum/SpectrumFigure.tsx';
+export { SpectrumView, type SpectrumViewProps } from './spectrum/SpectrumView.tsx';
+export { type OrderLimit, type SpectrumBar, spectrumBars } from './spectrum/spectrumBars.ts';
+export { WaveformFigure, type WaveformFigureProps } from './waveform/WaveformFigure.tsx';
+export { WaveformView, type WaveformViewProps } from './waveform/WaveformView.tsx';
+export { crestFactor, type WaveContent, waveform } from './waveform/waveform.ts';
+export type { WavePhases, WaveSettings } from './waveform/waveModel.ts';

@@ -2,8 +2,7 @@ import type { FigureStyle } from '../figure/figureInk.ts';
 import { phaseAngle } from './phaseAngle.ts';
 import { angleArc, arrowHead, PHASE_DASHES, phasorScale, phasorTip } from './phasorGeometry.ts';
 import { magnitude, type Phasor, type ThreePhasors } from './phasorSpectrum.ts';
-
-export type PhaseNames = readonly [string, string, string];
+import type { PhaseNames } from './phasorWords.ts';
 
 /** A phasor that is lit: the same phase of the same quantity lights elsewhere too. */
 export interface LitPhasor {
@@ -60,13 +59,7 @@ function PhasorGroup(props: GroupProps) {
   return (
     <g>
       {phasors.map((phasor, phase) => (
-        <PhasorArrow
-          key={props.names[phase]}
-          {...props}
-          phase={phase}
-          phasor={phasor}
-          scale={scale}
-        />
+        <PhasorArrow key={props.names[phase]} {...props} phase={phase} phasor={phasor} scale={scale} />
       ))}
     </g>
   );

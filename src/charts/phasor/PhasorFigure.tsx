@@ -1,8 +1,8 @@
 import { printStyle } from '../figure/figureInk.ts';
-import { PhasorDrawing, type PhaseNames } from './PhasorDrawing.tsx';
-import { PHASE_NAMES } from './PhasorView.tsx';
+import { PhasorDrawing } from './PhasorDrawing.tsx';
 import { phaseAngle, phaseAngleWords } from './phaseAngle.ts';
 import type { ThreePhasors } from './phasorSpectrum.ts';
+import { PHASE_NAMES, type PhaseNames } from './phasorWords.ts';
 
 export interface PhasorFigureProps {
   width: number;

@@ -1,8 +1,9 @@
 import { SCREEN_STYLE } from '../figure/figureInk.ts';
 import { ampereParts, fixedNumber, joinParts, voltParts } from '../figure/quantityParts.ts';
-import { type LitPhasor, PhasorDrawing, type PhaseNames } from './PhasorDrawing.tsx';
+import { type LitPhasor, PhasorDrawing } from './PhasorDrawing.tsx';
 import { phaseAngle, phaseAngleWords } from './phaseAngle.ts';
 import { angleDeg, magnitude, type ThreePhasors } from './phasorSpectrum.ts';
+import { PHASE_NAMES, type PhaseNames, phasorSummary } from './phasorWords.ts';
 
 export interface PhasorViewProps {
   /** rms phase-to-neutral volts; null where there are none. */
@@ -23,14 +24,17 @@ export interface PhasorViewProps {
   onLit?(lit: LitPhasor | null): void;
 }
 
-export const PHASE_NAMES: PhaseNames = ['L1', 'L2', 'L3'];
 const RADIUS = { small: 56, lens: 132 };
 
 /** Three-phase voltage and current phasors of one order, with φ drawn and given in words. */
 export function PhasorView(props: PhasorViewProps) {
   const { voltage, current, order, size, timeTurn = 0, names = PHASE_NAMES } = props;
   if (props.magnitudesOnly) {
-    return <p className="chart-hint">No phasors: under the IEC 61000-3-6 summation only magnitudes exist at h {order}.</p>;
+    return (
+      <p className="chart-hint">
+        No phasors: under the IEC 61000-3-6 summation only magnitudes exist at h {order}.
+      </p>
+    );
   }
   const radius = RADIUS[size];
   const half = radius + 20;
@@ -72,24 +76,11 @@ export function PhasorView(props: PhasorViewProps) {
   );
 }
 
-/** All phasors in words: "fundamental: L1 230 V at 0°, 18.5 A at −34°; …". */
-export function phasorSummary(
-  voltage: ThreePhasors | null,
-  current: ThreePhasors | null,
-  order: number,
-  names: PhaseNames = PHASE_NAMES,
-): string {
-  const phases = names.map((name, k) => {
-    const parts = [
-      voltage?.[k] && `${joinParts(voltParts(magnitude(voltage[k])))} at ${fixedNumber(angleDeg(voltage[k]), 0)}°`,
-      current?.[k] && `${joinParts(ampereParts(magnitude(current[k])))} at ${fixedNumber(angleDeg(current[k]), 0)}°`,
-    ];
-    return `${name} ${parts.filter(Boolean).join(', ')}`;
-  });
-  return `Phasors, ${order === 1 ? 'fundamental' : `order ${order}`}: ${phases.join('; ')}`;
-}
-
-function PhasorTable(props: { voltage: ThreePhasors | null; current: ThreePhasors | null; names: PhaseNames }) {
+function PhasorTable(props: {
+  voltage: ThreePhasors | null;
+  current: ThreePhasors | null;
+  names: PhaseNames;
+}) {
   const { voltage, current, names } = props;
   return (
     <table className="phasor-table">

@@ -15,7 +15,11 @@ export interface Point {
  * Units of figure per volt (or ampere): the longest voltage nearly reaches the circle, the longest current
  * stays visibly shorter, so that the two never hide each other at unity power factor. null when all are zero.
  */
-export function phasorScale(phasors: ThreePhasors | null, radius: number, quantity: 'voltage' | 'current'): number | null {
+export function phasorScale(
+  phasors: ThreePhasors | null,
+  radius: number,
+  quantity: 'voltage' | 'current',
+): number | null {
   const largest = phasors ? Math.max(...phasors.map(magnitude)) : 0;
   if (!(largest > 0)) return null;
   return (radius * (quantity === 'voltage' ? VOLTAGE_REACH : CURRENT_REACH)) / largest;

@@ -1,3 +1,4 @@
+import { formatNumber } from '../../study/index.ts';
 import type { OrderAxis } from './orderAxis.ts';
 
 /** A mark on the order axis; labels are absent where they would crowd a more telling one. */
@@ -95,5 +96,5 @@ function orderLabel(order: number): string {
 
 function hzLabel(hz: number): string {
   const rounded = Math.round(hz * 10) / 10;
-  return rounded >= 10_000 ? String(Math.round(rounded)) : String(rounded);
+  return formatNumber(rounded, { digits: 5 });
 }

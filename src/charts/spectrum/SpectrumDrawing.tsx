@@ -15,7 +15,14 @@ export const SpectrumBars = memo(function SpectrumBars({ model, quantity, style 
     <g fontSize={smallSize} fill={ink.ink2}>
       {model.valueTicks.map((tick) => (
         <g key={tick.label}>
-          <line x1={model.left} x2={model.right} y1={tick.y} y2={tick.y} stroke={ink.hairline} strokeWidth={0.75} />
+          <line
+            x1={model.left}
+            x2={model.right}
+            y1={tick.y}
+            y2={tick.y}
+            stroke={ink.hairline}
+            strokeWidth={0.75}
+          />
           <text x={model.left - 5} y={tick.y + smallSize * 0.35} textAnchor="end">
             {tick.label}
           </text>
@@ -24,9 +31,22 @@ export const SpectrumBars = memo(function SpectrumBars({ model, quantity, style 
       {model.bars.map((bar) => (
         <Bar key={bar.h} bar={bar} model={model} quantity={quantity} style={style} />
       ))}
-      <line x1={model.left} x2={model.right} y1={model.bottom} y2={model.bottom} stroke={ink.ink2} strokeWidth={1} />
+      <line
+        x1={model.left}
+        x2={model.right}
+        y1={model.bottom}
+        y2={model.bottom}
+        stroke={ink.ink2}
+        strokeWidth={1}
+      />
       {model.orderLabels.map((label) => (
-        <text key={label.h} x={label.x} y={model.bottom + smallSize * 1.35} textAnchor="middle" fill={ink.ink}>
+        <text
+          key={label.h}
+          x={label.x}
+          y={model.bottom + smallSize * 1.35}
+          textAnchor="middle"
+          fill={ink.ink}
+        >
           {label.h}
         </text>
       ))}
@@ -44,7 +64,13 @@ function Bar(props: SpectrumBarsProps & { bar: PlacedBar }) {
     <g>
       {!style.print && <title>{barWords(bar)}</title>}
       {height > 0.2 && (
-        <rect x={bar.x - model.barWidth / 2} y={bar.top} width={model.barWidth} height={height} fill={colour} />
+        <rect
+          x={bar.x - model.barWidth / 2}
+          y={bar.top}
+          width={model.barWidth}
+          height={height}
+          fill={colour}
+        />
       )}
       {bar.limitY !== null && (
         <line
@@ -57,7 +83,12 @@ function Bar(props: SpectrumBarsProps & { bar: PlacedBar }) {
         />
       )}
       {bar.words && (
-        <text x={bar.words.x} y={bar.words.y} fill={bar.fails ? ink.fail : ink.ink} fontWeight={bar.fails ? 600 : 400}>
+        <text
+          x={bar.words.x}
+          y={bar.words.y}
+          fill={bar.fails ? ink.fail : ink.ink}
+          fontWeight={bar.fails ? 600 : 400}
+        >
           {bar.words.text}
         </text>
       )}

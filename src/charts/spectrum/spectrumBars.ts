@@ -65,6 +65,8 @@ const TELLING_SHARE = 0.04;
  */
 export function lastShownOrder(bars: readonly SpectrumBar[], maxOrder: number): number {
   const largest = Math.max(0, ...bars.map((bar) => bar.percent));
-  const telling = bars.filter((bar) => bar.fails || bar.percent > largest * TELLING_SHARE).map((bar) => bar.h);
+  const telling = bars
+    .filter((bar) => bar.fails || bar.percent > largest * TELLING_SHARE)
+    .map((bar) => bar.h);
   return Math.min(maxOrder, Math.max(25, ...telling));
 }

@@ -46,8 +46,12 @@ export function spectrumModel(bars: readonly SpectrumBar[], place: SpectrumPlace
   const bottom = height - smallSize * 1.9;
   const slot = (right - left) / Math.max(1, lastOrder - 1);
   const largest = Math.max(0.1, ...shown.map((bar) => Math.max(bar.percent, bar.limit ?? 0)));
-  const y = scaleLinear().domain([0, largest]).range([bottom, top + smallSize * 0.6]).nice(4);
-  const orderX = (order: number) => (order < 1.5 || order > lastOrder + 0.5 ? null : left + (order - 1.5) * slot);
+  const y = scaleLinear()
+    .domain([0, largest])
+    .range([bottom, top + smallSize * 0.6])
+    .nice(4);
+  const orderX = (order: number) =>
+    order < 1.5 || order > lastOrder + 0.5 ? null : left + (order - 1.5) * slot;
   const placed = shown.map((bar) => ({
     ...bar,
     x: left + (bar.h - 1.5) * slot,

@@ -1,8 +1,8 @@
 import { memo } from 'react';
 import type { FigureStyle } from '../figure/figureInk.ts';
 import { ampereParts, joinParts, voltParts } from '../figure/quantityParts.ts';
-import { PHASE_DASHES } from '../phasor/phasorGeometry.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
+import { PHASE_DASHES } from '../phasor/phasorGeometry.ts';
 import { degreeTicks, millisecondTicks, type TimeTick } from './timeTicks.ts';
 import type { WaveLayout, WaveModel } from './waveModel.ts';
 
@@ -18,7 +18,14 @@ export const WaveCurves = memo(function WaveCurves({ model, layout, style, lit }
   const middle = (layout.top + layout.bottom) / 2;
   return (
     <g fill="none" strokeLinejoin="round">
-      <line x1={layout.left} x2={layout.right} y1={middle} y2={middle} stroke={style.ink.hairline} strokeWidth={1} />
+      <line
+        x1={layout.left}
+        x2={layout.right}
+        y1={middle}
+        y2={middle}
+        stroke={style.ink.hairline}
+        strokeWidth={1}
+      />
       {model.curves.map((curve) => {
         const isLit = lit !== null && lit.phase === curve.phase && lit.quantity === curve.quantity;
         const dash = PHASE_DASHES[curve.phase];
@@ -54,8 +61,20 @@ export const WaveAxes = memo(function WaveAxes(props: WaveAxesProps) {
   const most = Math.max(2, Math.floor((layout.right - layout.left) / (smallSize * 3.6)));
   return (
     <g fontSize={smallSize} fill={ink.ink2}>
-      <line x1={layout.left} x2={layout.right} y1={layout.bottom} y2={layout.bottom} stroke={ink.ink2} strokeWidth={1} />
-      <TickRow {...props} ticks={millisecondTicks(frequencyHz, periods, most)} baseline={layout.bottom + smallSize * 1.4} mark />
+      <line
+        x1={layout.left}
+        x2={layout.right}
+        y1={layout.bottom}
+        y2={layout.bottom}
+        stroke={ink.ink2}
+        strokeWidth={1}
+      />
+      <TickRow
+        {...props}
+        ticks={millisecondTicks(frequencyHz, periods, most)}
+        baseline={layout.bottom + smallSize * 1.4}
+        mark
+      />
       <TickRow {...props} ticks={degreeTicks(periods, most)} baseline={layout.bottom + smallSize * 2.55} />
       <text x={layout.left - 10} y={layout.bottom + smallSize * 1.4} textAnchor="end">
         ms
@@ -84,7 +103,14 @@ function TickRow(props: WaveAxesProps & { ticks: TimeTick[]; baseline: number; m
         return (
           <g key={tick.label}>
             {mark && (
-              <line x1={x} x2={x} y1={layout.bottom} y2={layout.bottom + 4} stroke={style.ink.ink2} strokeWidth={1} />
+              <line
+                x1={x}
+                x2={x}
+                y1={layout.bottom}
+                y2={layout.bottom + 4}
+                stroke={style.ink.ink2}
+                strokeWidth={1}
+              />
             )}
             <text x={x} y={baseline} textAnchor="middle">
               {tick.label}

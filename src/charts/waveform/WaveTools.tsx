@@ -13,7 +13,10 @@ export function WaveTools({ settings, maxOrder, onSettings }: WaveToolsProps) {
   const { content } = settings;
   const kind = typeof content === 'string' ? content : 'upTo';
   const setKind = (next: string) =>
-    onSettings({ ...settings, content: next === 'upTo' ? { upTo: Math.min(25, maxOrder) } : next === 'all' ? 'all' : 'fundamental' });
+    onSettings({
+      ...settings,
+      content: next === 'upTo' ? { upTo: Math.min(25, maxOrder) } : next === 'all' ? 'all' : 'fundamental',
+    });
   return (
     <div className="chart-tools">
       <label>

@@ -48,7 +48,12 @@ export function waveModel(inputs: WaveInputs, layout: WaveLayout): WaveModel {
   const highest = highestOrder(inputs.settings.content, inputs.maxOrder);
   const voltage = drawnQuantity(inputs, 'voltage', highest, layout);
   const current = drawnQuantity(inputs, 'current', highest, layout);
-  return { curves: [...voltage.curves, ...current.curves], peakV: voltage.peak, peakA: current.peak, highest };
+  return {
+    curves: [...voltage.curves, ...current.curves],
+    peakV: voltage.peak,
+    peakA: current.peak,
+    highest,
+  };
 }
 
 function drawnQuantity(
@@ -61,7 +66,10 @@ function drawnQuantity(
   if (!spectrum) return { curves: [], peak: 0 };
   const { periods, phases } = inputs.settings;
   const samples = samplesPerPeriod(highest);
-  const waves = PHASE_LISTS[phases].map((phase) => ({ phase, values: waveform(spectrum, phase, highest, samples) }));
+  const waves = PHASE_LISTS[phases].map((phase) => ({
+    phase,
+    values: waveform(spectrum, phase, highest, samples),
+  }));
   const peak = Math.max(...waves.map((wave) => peakValue(wave.values)));
   if (!(peak > 0)) return { curves: [], peak: 0 };
   const curves = waves.map(({ phase, values }) => ({

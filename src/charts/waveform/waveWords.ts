@@ -28,7 +28,11 @@ export function waveDoubt(
 }
 
 /** "fundamental alone", "orders 1 to 25", "all orders to 50". */
-export function contentWords(settings: Pick<WaveSettings, 'content'>, highest: number, maxOrder: number): string {
+export function contentWords(
+  settings: Pick<WaveSettings, 'content'>,
+  highest: number,
+  maxOrder: number,
+): string {
   if (settings.content === 'fundamental') return 'fundamental alone';
   return highest === maxOrder ? `all orders to ${maxOrder}` : `orders 1 to ${highest}`;
 }

@@ -20,7 +20,12 @@ export function samplesPerPeriod(highest: number): number {
  * n = 0…samples (both ends, so that periods join). rms phasors in, instantaneous values out. Throws
  * RangeError below two samples an order, where the sum would alias.
  */
-export function waveform(spectrum: PhasorSpectrum, phase: number, highest: number, samples: number): Float64Array {
+export function waveform(
+  spectrum: PhasorSpectrum,
+  phase: number,
+  highest: number,
+  samples: number,
+): Float64Array {
   if (samples < 2 * highest) {
     throw new RangeError(`${samples} samples for order ${highest}: allowed is at least ${2 * highest}`);
   }
@@ -45,7 +50,12 @@ export function waveform(spectrum: PhasorSpectrum, phase: number, highest: numbe
 }
 
 /** The instantaneous value at a share 0…1 of the period, exact. */
-export function instantaneous(spectrum: PhasorSpectrum, phase: number, highest: number, turn: number): number {
+export function instantaneous(
+  spectrum: PhasorSpectrum,
+  phase: number,
+  highest: number,
+  turn: number,
+): number {
   let sum = 0;
   for (let h = 1; h <= highest; h++) {
     const angle = 2 * Math.PI * h * turn;

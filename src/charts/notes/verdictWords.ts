@@ -1,0 +1,63 @@
+import type { Provenance, Source, Verdict, VerdictWord } from '../../checks/types.ts';
+import { ABSENT, plainNumber } from '../figure/quantityParts.ts';
+
+export const VERDICT_MARKS: Record<VerdictWord, string> = { pass: '✓', watch: '!', fail: '✕', unknown: '?' };
+
+export const VERDICT_WORDS: Record<VerdictWord, string> = {
+  pass: 'passes',
+  watch: 'watch',
+  fail: 'fails',
+  unknown: 'no verdict',
+};
+
+export const PROVENANCE_WORDS: Record<Provenance, string> = {
+  published: 'read in the source',
+  'second-hand': 'second-hand: read in a text quoting it',
+  memory: 'from memory: check against the edition in force',
+  practice: 'common practice, no published source',
+};
+
+/** "1.72", "19.4 %", "—". */
+export function verdictValue(value: number | null, unit: string): string {
+  if (value === null) return ABSENT;
+  const number = plainNumber(value, 3);
+  return unit === '' ? number : `${number} ${unit}`;
+}
+
+/** A limit as its document prints it: no digits added. */
+export function limitValue(limit: number | null, unit: string): string {
+  if (limit === null) return 'none';
+  const number = plainNumber(limit, 3).replace(/(\.\d*?[1-9])0+$|\.0+$/, '$1');
+  return unit === '' ? number : `${number} ${unit}`;
+}
+
+/** "Bank C1 · current 1.72, limit 1.3". */
+export function verdictHeadline(verdict: Verdict, subjectName: string): string {
+  const subject = `${subjectName} · ${verdict.title}`;
+  if (verdict.value === null) return subject;
+  const limit = verdict.limit === null ? '' : `, limit ${limitValue(verdict.limit, verdict.unit)}`;
+  return `${subject} ${verdictValue(verdict.value, verdict.unit)}${limit}`;
+}
+
+/** "+0.23", "−3.62", "not known". */
+export function marginWords(margin: number | null): string {
+  if (margin === null) return 'not known';
+  const number = plainNumber(margin, margin !== 0 && Math.abs(margin) < 1 ? 2 : 3);
+  return margin > 0 ? `+${number}` : number;
+}
+
+/** "IEC 60831-1:2014, clause 21 (second-hand: read in a text quoting it)". */
+export function sourceWords(source: Source): string {
+  if (source.provenance === 'practice' && source.document.toLowerCase() === 'common practice')
+    return 'common practice';
+  const document = source.edition ? `${source.document}:${source.edition}` : source.document;
+  const clause = source.clause ? `, ${source.clause}` : '';
+  return `${document}${clause} (${PROVENANCE_WORDS[source.provenance]})`;
+}
+
+/** "Without the correction: 3.1 %, passes." */
+export function withoutCorrectionWords(verdict: Verdict): string | null {
+  const without = verdict.withoutCorrection;
+  if (!without) return null;
+  return `Without the correction: ${verdictValue(without.value, verdict.unit)}, ${VERDICT_WORDS[without.verdict]}.`;
+}
