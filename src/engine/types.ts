@@ -43,6 +43,8 @@ export interface CaseSolution {
   error?: string;
   /** Bus ids in study order. */
   buses: string[];
+  /** Line-to-line nominal volts of the buses; the measure for "no fundamental to speak of". */
+  nominalV?: Float64Array;
   terminals: Terminal[];
   /** Ids of buses without a path to a source; their voltages are zero. */
   deenergised: string[];
@@ -77,6 +79,14 @@ export interface ImpedanceScan {
   resonances: Resonance[];
   /** Why it is empty (no source, or no zero-sequence path). */
   error?: string;
+}
+
+/**
+ * Positive-sequence driving-point impedances of all buses at one order, ohm, in study order. A bus without
+ * a path to a source has `present` 0 and no meaning in re and im.
+ */
+export interface DrivingPoints extends ComplexArray {
+  present: Uint8Array;
 }
 
 /** Readings of one bus: rms over all orders per phase, volts and per cent. */

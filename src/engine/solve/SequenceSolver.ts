@@ -1,8 +1,13 @@
-import { PivotedLu, ScalarLdl } from '../kernel/index.ts';
+import { GuardedSolver, ScalarLdl } from '../kernel/index.ts';
 import type { Network, Role } from '../network/Network.ts';
 import { addPhases, toSequences } from './fortescue.ts';
 import { NodeAdmittances } from './NodeAdmittances.ts';
-import { type OrderSolver, type SequenceNumber, SingularNetworkError, trustedGrowth } from './OrderSolver.ts';
+import {
+  type FactorMethod,
+  type OrderSolver,
+  type SequenceNumber,
+  SingularNetworkError,
+} from './OrderSolver.ts';
 import { planFor } from './planFor.ts';
 
 /**
@@ -12,8 +17,10 @@ import { planFor } from './planFor.ts';
  * sequence h mod 3 alone.
  */
 export class SequenceSolver implements OrderSolver {
-  readonly admittances: NodeAdmittances;
-  readonly matrix: ScalarLdl;
+  method: FactorMethod = 'direct';
+  private readonly admittances: NodeAdmittances;
+  private readonly matrix: ScalarLdl;
+  private readonly guard: GuardedSolver<ScalarLdl>;
   private readonly network: Network;
   private readonly diagonalOffset: Int32Array;
   private readonly seriesOffset: Int32Array;
@@ -22,13 +29,13 @@ export class SequenceSolver implements OrderSolver {
   private readonly x: Float64Array;
   private readonly six = new Float64Array(6);
   private sequence: SequenceNumber = 1;
-  private pivoted: PivotedLu | null = null;
 
   constructor(network: Network, lastNode?: number) {
     if (!network.balanced) throw new RangeError('a sequence solver needs a balanced network');
     this.network = network;
     this.admittances = new NodeAdmittances(network);
     this.matrix = new ScalarLdl(planFor(network, lastNode));
+    this.guard = new GuardedSolver(this.matrix, (plan) => new ScalarLdl(plan));
     const nodes = Int32Array.from({ length: network.nodeCount }, (_, node) => node);
     this.diagonalOffset = nodes.map((node) => this.matrix.diagonalOffset(node));
     this.seriesOffset = Int32Array.from(this.admittances.series, ({ from, to }) =>
@@ -39,20 +46,13 @@ export class SequenceSolver implements OrderSolver {
     this.x = new Float64Array(2 * network.nodeCount);
   }
 
-  prepare(h: number, role: Role): void {
-    this.prepareSequence(h, role, role === 'fundamental' ? 1 : ((h % 3) as SequenceNumber));
-  }
-
-  /** As prepare, for any real h in the named sequence. */
-  prepareSequence(h: number, role: Role, sequence: SequenceNumber): void {
+  prepare(h: number, role: Role, sequence: SequenceNumber = sequenceOf(h)): void {
     this.sequence = sequence;
-    this.pivoted = null;
-    this.stamp(h, role);
-    const { status, growth } = this.matrix.factor();
-    if (status === 'factored' && growth < trustedGrowth) return;
-    this.stamp(h, role);
-    this.pivoted = new PivotedLu(this.network.nodeCount, this.matrix, this.matrix.plan.order);
-    if (this.pivoted.status === 'singular') throw new SingularNetworkError(h);
+    this.admittances.evaluate(h, role);
+    this.stamp();
+    const { status, method } = this.guard.factor(() => this.stamp());
+    this.method = method;
+    if (status !== 'factored') throw new SingularNetworkError(h);
   }
 
   solve(x: Float64Array): void {
@@ -81,26 +81,15 @@ export class SequenceSolver implements OrderSolver {
 
   /** Amperes into volts of the prepared sequence, two numbers a node, in the nodes' shifted frames. */
   solveSequence(x: Float64Array): void {
-    if (this.pivoted) this.pivoted.solve(x);
-    else this.matrix.solve(x);
+    this.guard.solve(x);
   }
 
-  /** Driving-point impedance of the plan's last node into `out` (re, im), ohms. */
-  lastImpedance(out: Float64Array): void {
-    if (!this.pivoted) {
-      this.matrix.lastInverseDiagonal(out);
-      return;
-    }
-    const last = this.matrix.plan.order[this.network.nodeCount - 1]!;
-    this.x.fill(0);
-    this.x[2 * last] = 1;
-    this.pivoted.solve(this.x);
-    out[0] = this.x[2 * last]!;
-    out[1] = this.x[2 * last + 1]!;
+  /** Volts at the plan's last node for amperes injected there, one complex in `x`, in place. */
+  solveLast(x: Float64Array): void {
+    this.guard.lastSolve(x);
   }
 
-  private stamp(h: number, role: Role): void {
-    this.admittances.evaluate(h, role);
+  private stamp(): void {
     const { values: v } = this.matrix;
     const { diagonal, series } = this.admittances;
     const { values } = this.network;
@@ -118,4 +107,10 @@ export class SequenceSolver implements OrderSolver {
       v[offset + 1] = v[offset + 1]! + values[at + 1]!;
     }
   }
+}
+
+/** The sequence a balanced, time-shifted set of order h forms: 1 positive, 2 negative, 0 zero. */
+function sequenceOf(h: number): SequenceNumber {
+  if (!Number.isInteger(h)) throw new RangeError(`order ${h} is no integer: name its sequence`);
+  return (h % 3) as SequenceNumber;
 }

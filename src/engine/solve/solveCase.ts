@@ -4,10 +4,9 @@ import type { Network } from '../network/Network.ts';
 import type { CaseSolution } from '../types.ts';
 import { activeSources, groupCurrents, sourceGroups, summationExponent } from './harmonicSources.ts';
 import { type OrderSolver, SingularNetworkError } from './OrderSolver.ts';
-import { PhaseSolver } from './PhaseSolver.ts';
-import { SequenceSolver } from './SequenceSolver.ts';
 import { SolutionWriter } from './SolutionWriter.ts';
 import { type Fundamental, solveFundamental } from './solveFundamental.ts';
+import { solverFor } from './solverFor.ts';
 import { injectionsOf } from './sourceCurrents.ts';
 import { TerminalCurrents } from './terminalCurrents.ts';
 
@@ -25,24 +24,11 @@ export function solveCase(study: Study, caseId: string, options: SolveOptions = 
   const network = compileNetwork(study, caseId, options);
   if (network.error) return failed(network, network.error, 0);
   try {
-    return solve(network, solverFor(network, options.coordinates ?? 'auto'));
+    return solve(network, solverFor(network, options.coordinates));
   } catch (error) {
     if (error instanceof SingularNetworkError) return failed(network, error.message, 0);
     throw error;
   }
-}
-
-const solvers = new WeakMap<Network, Partial<Record<'phase' | 'sequence', OrderSolver>>>();
-
-function solverFor(network: Network, coordinates: 'auto' | 'phase'): OrderSolver {
-  const kept = solvers.get(network) ?? {};
-  solvers.set(network, kept);
-  if (coordinates === 'auto' && network.balanced) {
-    kept.sequence ??= new SequenceSolver(network);
-    return kept.sequence;
-  }
-  kept.phase ??= new PhaseSolver(network);
-  return kept.phase;
 }
 
 function solve(network: Network, solver: OrderSolver): CaseSolution {
@@ -54,9 +40,11 @@ function solve(network: Network, solver: OrderSolver): CaseSolution {
   currents.compute('fundamental', fundamental.v, fundamental.own, i);
   writer.add(1, fundamental.v, i, 1);
   writer.end(1, 1, 1, false, false);
-  solveOrders(network, solver, fundamental, currents, writer);
+  const rescued = solveOrders(network, solver, fundamental, currents, writer);
+  const head = header(network, fundamental.iterations);
   return {
-    ...header(network, fundamental.iterations),
+    ...head,
+    warnings: [...head.warnings, ...rescued.map(rescueWarning)],
     converged: true,
     ...writer.result(),
   };
@@ -68,7 +56,8 @@ function solveOrders(
   fundamental: Fundamental,
   currents: TerminalCurrents,
   writer: SolutionWriter,
-): void {
+): number[] {
+  const rescued: number[] = [];
   const alpha = network.summation === 'alpha';
   const v = new Float64Array(6 * network.nodeCount);
   const own = new Float64Array(6 * network.shunts.length);
@@ -77,6 +66,7 @@ function solveOrders(
     const active = activeSources(network, h, fundamental.own);
     if (active.length === 0) continue;
     solver.prepare(h, 'harmonic');
+    if (solver.method === 'pivoted') rescued.push(h);
     const groups = sourceGroups(active, alpha);
     const anglesUnknown = !alpha && groups.length > 1;
     const exponent = alpha ? summationExponent(h) : 1;
@@ -89,6 +79,11 @@ function solveOrders(
     }
     writer.end(h, groups.length, exponent, alpha, anglesUnknown);
   }
+  return rescued;
+}
+
+function rescueWarning(h: number): string {
+  return `at order ${h} the network's admittances nearly cancel (a resonance almost without losses); digits are lost there`;
 }
 
 function header(
@@ -102,9 +97,10 @@ function header(
     summation: network.summation,
     iterations,
     buses: network.buses.map((bus) => bus.id),
-    terminals: network.terminals,
+    nominalV: Float64Array.from(network.buses, (bus) => bus.nominalV),
+    terminals: network.terminals.map((terminal) => ({ ...terminal })),
     deenergised: network.buses.filter((_, bus) => network.nodeOfBus[bus] === -1).map((bus) => bus.id),
-    warnings: network.warnings,
+    warnings: [...network.warnings],
   };
 }
 
