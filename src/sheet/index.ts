@@ -1,3 +1,10 @@
 export * from './document/index.ts';
+export {
+  type ExportOptions,
+  type ExportProgress,
+  exportStudySheet,
+  sheetFileName,
+} from './exportStudySheet.ts';
 export { layoutPages } from './pages/layoutPages.ts';
 export type { PageMark, SheetPage, SheetPages } from './pages/marks.ts';
+export { SheetPlace, type SheetPlaceProps } from './SheetPlace.tsx';

@@ -2,7 +2,9 @@ import type { jsPDF } from 'jspdf';
 import type { ReactElement } from 'react';
 import { svg2pdf } from 'svg2pdf.js';
 import { figuresOf } from '../document/figuresOf.ts';
-import type { Figure, SheetDocument } from '../document/index.ts';
+import type { SheetDocument } from '../document/index.ts';
+import type { ExportOptions } from '../exportStudySheet.ts';
+import type { FigureComposer } from '../FigureComposer.ts';
 import { layoutPages } from '../pages/layoutPages.ts';
 import type { FigureMark, SheetPage } from '../pages/marks.ts';
 import { drawMark } from './drawMark.ts';
@@ -12,20 +14,7 @@ import { newPdf } from './newPdf.ts';
 import { type Slicing, slicing } from './slicing.ts';
 import { markRuns } from './svgForPdf.ts';
 
-/** The drawing of a figure in the given size in points; null where there is nothing to draw. */
-export type FigureComposer = (figure: Figure, width: number, height: number) => ReactElement | null;
-
-export interface ExportProgress {
-  /** Pages and figures finished. */
-  done: number;
-  total: number;
-  /** e.g. "page 3 of 9". */
-  what: string;
-}
-
-export interface ExportOptions {
-  onProgress?: (progress: ExportProgress) => void;
-  signal?: AbortSignal;
+interface WriterOptions extends ExportOptions {
   /** Already loaded fonts; absent: fetched from the programme's own files. */
   fonts?: FontFiles;
 }
@@ -77,7 +66,7 @@ async function pageFonts(): Promise<void> {
 export async function exportSheet(
   document: SheetDocument,
   compose: FigureComposer,
-  options: ExportOptions = {},
+  options: WriterOptions = {},
 ): Promise<Blob> {
   const { signal, onProgress } = options;
   signal?.throwIfAborted();
