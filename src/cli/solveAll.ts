@@ -1,6 +1,6 @@
 import { judgeCase, toResultsCheck, type Verdict } from '../checks/index.ts';
-import { type ResultsFile, solveStudy } from '../engine/index.ts';
-import type { Study } from '../study/index.ts';
+import { type ResultsFile, solveCase, solveStudy } from '../engine/index.ts';
+import { casesOf, type Study } from '../study/index.ts';
 
 export interface SolvedStudy {
   results: ResultsFile;
@@ -11,8 +11,9 @@ export interface SolvedStudy {
 /** The results file of a study, and the verdicts behind its checks in full. */
 export function solveAll(study: Study): SolvedStudy {
   const verdicts = new Map<string, Verdict[]>();
+  const otherCases = casesOf(study).map(({ id }) => solveCase(study, id));
   const results = solveStudy(study, (solution) => {
-    const judged = judgeCase(study, solution);
+    const judged = judgeCase(study, solution, { otherCases });
     verdicts.set(solution.caseId, judged);
     return judged.map(toResultsCheck);
   });

@@ -1,7 +1,7 @@
 import type { Verdict } from '../checks/index.ts';
 import type { ResultsFile } from '../engine/index.ts';
 import { type ComputationOptions, Dispatcher, type Lane, type StudyAt } from './dispatcher.ts';
-import type { CaseNumbers, Probe, ScanPair, Settled } from './protocol.ts';
+import type { CaseDossier, CaseNumbers, Probe, ScanPair, Settled } from './protocol.ts';
 
 /**
  * The computation as the page sees it. Every promise settles: done, failed, cancelled or superseded; none
@@ -19,8 +19,15 @@ export interface Computation {
     at: StudyAt,
     caseIds: readonly string[],
     onCase: (caseId: string, verdicts: Verdict[]) => void,
-  ): Promise<Settled<number>>;
+  ): Promise<Settled<Verdict[][]>>;
   results(at: StudyAt): Promise<Settled<ResultsFile>>;
+  /** What a printed study needs, case by case, with the impedance curves of the busbars named. */
+  dossiers(
+    at: StudyAt,
+    caseIds: readonly string[],
+    buses: readonly string[],
+    onCase: (dossier: CaseDossier, done: number) => void,
+  ): Promise<Settled<CaseDossier[]>>;
   /** Withdraws what was asked in a lane, or in all of them. */
   cancel(lane?: Lane): void;
   /** Ends the worker; whatever was asked is cancelled, and so is whatever will be. */
@@ -31,7 +38,7 @@ const maxWarmRounds = 60;
 
 export function createComputation(options: ComputationOptions): Computation {
   const dispatcher = new Dispatcher(options);
-  let judgeAllRun = 0;
+  const newestRound = new Map<Lane, object>();
 
   async function warm(): Promise<void> {
     for (let round = 0; round < maxWarmRounds; round += 1) {
@@ -40,20 +47,24 @@ export function createComputation(options: ComputationOptions): Computation {
     }
   }
 
-  async function judgeAll(
-    at: StudyAt,
+  /** One request per case, in a lane of its own; a newer round in that lane ends this one. */
+  async function round<T>(
+    lane: Lane,
     caseIds: readonly string[],
-    onCase: (caseId: string, verdicts: Verdict[]) => void,
-  ): Promise<Settled<number>> {
-    judgeAllRun += 1;
-    const run = judgeAllRun;
+    askCase: (caseId: string) => Promise<Settled<T>>,
+    onCase: (caseId: string, value: T, done: number) => void,
+  ): Promise<Settled<T[]>> {
+    const own = {};
+    newestRound.set(lane, own);
+    const values: T[] = [];
     for (const caseId of caseIds) {
-      const slice = await dispatcher.ask('judgeAll', { kind: 'judge', caseId }, at);
-      if (run !== judgeAllRun) return { outcome: 'superseded' };
+      const slice = await askCase(caseId);
+      if (newestRound.get(lane) !== own) return { outcome: 'superseded' };
       if (slice.outcome !== 'done') return slice;
-      onCase(caseId, slice.value);
+      values.push(slice.value);
+      onCase(caseId, slice.value, values.length);
     }
-    return { outcome: 'done', value: caseIds.length };
+    return { outcome: 'done', value: values };
   }
 
   return {
@@ -65,7 +76,20 @@ export function createComputation(options: ComputationOptions): Computation {
     scan: (at, caseId, focusBus) => dispatcher.ask('scan', { kind: 'scan', caseId, focusBus }, at),
     probe: (at, caseId, order) => dispatcher.ask('probe', { kind: 'probe', caseId, order }, at),
     judge: (at, caseId) => dispatcher.ask('judge', { kind: 'judge', caseId }, at),
-    judgeAll,
+    judgeAll: (at, caseIds, onCase) =>
+      round(
+        'judgeAll',
+        caseIds,
+        (caseId) => dispatcher.ask('judgeAll', { kind: 'judge', caseId }, at),
+        onCase,
+      ),
+    dossiers: (at, caseIds, buses, onCase) =>
+      round(
+        'dossiers',
+        caseIds,
+        (caseId) => dispatcher.ask('dossiers', { kind: 'dossier', caseId, buses }, at),
+        (_, dossier, done) => onCase(dossier, done),
+      ),
     results: (at) => dispatcher.ask('results', { kind: 'results' }, at),
     cancel: (lane) => dispatcher.cancel(lane),
     close: () => dispatcher.close(),

@@ -1,4 +1,4 @@
-import { judgeCase, toResultsCheck, type Verdict } from '../checks/index.ts';
+import { type JudgeOptions, judgeCase, toResultsCheck, type Verdict } from '../checks/index.ts';
 import {
   type CaseSolution,
   correctionParts,
@@ -47,8 +47,9 @@ export function probeOrder(study: Study, caseId: string, order: number): Probe {
   };
 }
 
-export function judgeNumbers(study: Study, solution: CaseSolution): Verdict[] {
-  return judgeCase(study, solution);
+/** All verdicts of a solved case; solutions already at hand spare solving them again. */
+export function judgeNumbers(study: Study, solution: CaseSolution, atHand: JudgeOptions = {}): Verdict[] {
+  return judgeCase(study, solution, atHand);
 }
 
 /** The whole results file, checks included. */

@@ -1,4 +1,12 @@
 export { type Computation, createComputation } from './client.ts';
 export type { ComputationOptions, Lane, StudyAt, WorkerLike } from './dispatcher.ts';
-export type { CaseNumbers, Probe, ReplyMessage, RequestMessage, ScanPair, Settled } from './protocol.ts';
+export type {
+  CaseDossier,
+  CaseNumbers,
+  Probe,
+  ReplyMessage,
+  RequestMessage,
+  ScanPair,
+  Settled,
+} from './protocol.ts';
 export { spawnWorker } from './spawnWorker.ts';

@@ -7,7 +7,7 @@
  * The study travels only with the first message of a revision; the worker keeps it until the next one.
  */
 import type { Verdict } from '../checks/index.ts';
-import type { CaseSolution, ComplexArray, ImpedanceScan, ResultsFile } from '../engine/index.ts';
+import type { CaseSolution, DrivingPoints, ImpedanceScan, ResultsFile } from '../engine/index.ts';
 import type { Study } from '../study/index.ts';
 
 /** Positive-sequence driving-point impedance of one busbar with and without the correction, on one axis. */
@@ -34,8 +34,18 @@ export interface Probe {
   order: number;
   /** Bus ids, the index of both arrays. */
   buses: string[];
-  with: ComplexArray;
-  without: ComplexArray;
+  with: DrivingPoints;
+  without: DrivingPoints;
+}
+
+/** Everything a printed case needs. */
+export interface CaseDossier {
+  caseId: string;
+  solution: CaseSolution;
+  without: CaseSolution;
+  /** In the order the busbars were asked for. */
+  scans: ScanPair[];
+  verdicts: Verdict[];
 }
 
 export type Job =
@@ -44,6 +54,7 @@ export type Job =
   | { kind: 'scan'; caseId: string; focusBus: string }
   | { kind: 'probe'; caseId: string; order: number }
   | { kind: 'judge'; caseId: string }
+  | { kind: 'dossier'; caseId: string; buses: readonly string[] }
   | { kind: 'results' };
 
 export type JobKind = Job['kind'];
@@ -56,6 +67,7 @@ export interface Replies {
   scan: ScanPair;
   probe: Probe;
   judge: Verdict[];
+  dossier: CaseDossier;
   results: ResultsFile;
 }
 

@@ -1,8 +1,15 @@
-import type { CaseSolution } from '../engine/index.ts';
-import { solveCase } from '../engine/index.ts';
-import type { Study } from '../study/index.ts';
+import { type CaseSolution, solveCase } from '../engine/index.ts';
+import { casesOf, type Study } from '../study/index.ts';
 import { judgeNumbers, probeOrder, resultsOf, scanPair, solveNumbers } from './compute.ts';
-import type { Job, JobKind, Replies, ReplyMessage, RequestMessage } from './protocol.ts';
+import type {
+  CaseDossier,
+  CaseNumbers,
+  Job,
+  JobKind,
+  Replies,
+  ReplyMessage,
+  RequestMessage,
+} from './protocol.ts';
 import { createWarmUp } from './warmUp.ts';
 
 /** What the worker remembers between messages, and what it answers to each. */
@@ -11,47 +18,45 @@ export interface Session {
   handle(message: RequestMessage): ReplyMessage;
 }
 
+/** The study of one revision with the solutions of its cases, each solved once. */
+interface Held {
+  revision: number;
+  study: Study;
+  solutions: Map<string, CaseSolution>;
+  without: Map<string, CaseSolution>;
+}
+
 export function createSession(): Session {
-  let held: { revision: number; study: Study } | null = null;
-  /** The case solved last, copied before its arrays leave: its verdicts are usually asked for next. */
-  let solved: { revision: number; solution: CaseSolution } | null = null;
+  let held: Held | null = null;
   const warmUp = createWarmUp();
 
-  function studyAt(revision: number): Study {
-    if (held?.revision !== revision) {
-      throw new RangeError(`revision ${revision} is not at hand; held is ${held?.revision ?? 'none'}`);
-    }
-    return held.study;
-  }
-
-  function solutionOf(study: Study, revision: number, caseId: string): CaseSolution {
-    if (solved?.revision === revision && solved.solution.caseId === caseId) return solved.solution;
-    return solveCase(study, caseId);
+  function heldAt(revision: number): Held {
+    if (held?.revision === revision) return held;
+    throw new RangeError(`revision ${revision} is not at hand; held is ${held?.revision ?? 'none'}`);
   }
 
   function answer(job: Job, revision: number): Replies[JobKind] {
     if (job.kind === 'warm') return warmUp();
-    const study = studyAt(revision);
+    const now = heldAt(revision);
     switch (job.kind) {
-      case 'solve': {
-        const numbers = solveNumbers(study, job.caseId, job.focusBus);
-        solved = { revision, solution: structuredClone(numbers.solution) };
-        return numbers;
-      }
+      case 'solve':
+        return solveAndKeep(now, job.caseId, job.focusBus);
       case 'scan':
-        return scanPair(study, job.caseId, job.focusBus);
+        return scanPair(now.study, job.caseId, job.focusBus);
       case 'probe':
-        return probeOrder(study, job.caseId, job.order);
+        return probeOrder(now.study, job.caseId, job.order);
       case 'judge':
-        return judgeNumbers(study, solutionOf(study, revision, job.caseId));
+        return judgeKept(now, job.caseId);
+      case 'dossier':
+        return dossierOf(now, job.caseId, job.buses);
       case 'results':
-        return resultsOf(study);
+        return resultsOf(now.study);
     }
   }
 
   return {
     handle({ id, revision, study, job }) {
-      if (study) held = { revision, study };
+      if (study) held = { revision, study, solutions: new Map(), without: new Map() };
       try {
         return { id, reply: answer(job, revision) };
       } catch (error) {
@@ -59,4 +64,33 @@ export function createSession(): Session {
       }
     },
   };
+}
+
+/** The numbers are copied before their arrays leave: the verdicts are usually asked for next. */
+function solveAndKeep(held: Held, caseId: string, focusBus?: string): CaseNumbers {
+  const numbers = solveNumbers(held.study, caseId, focusBus);
+  held.solutions.set(caseId, structuredClone(numbers.solution));
+  held.without.set(caseId, structuredClone(numbers.without));
+  return numbers;
+}
+
+function keptSolution({ study, solutions }: Held, caseId: string): CaseSolution {
+  const known = solutions.get(caseId) ?? solveCase(study, caseId);
+  solutions.set(caseId, known);
+  return known;
+}
+
+function judgeKept(held: Held, caseId: string) {
+  const otherCases = casesOf(held.study).map(({ id }) => keptSolution(held, id));
+  const withoutCorrection = held.without.get(caseId);
+  return judgeNumbers(held.study, keptSolution(held, caseId), {
+    otherCases,
+    ...(withoutCorrection ? { withoutCorrection } : {}),
+  });
+}
+
+function dossierOf(held: Held, caseId: string, buses: readonly string[]): CaseDossier {
+  const { solution, without } = solveAndKeep(held, caseId);
+  const scans = buses.map((bus) => scanPair(held.study, caseId, bus));
+  return { caseId, solution, without, scans, verdicts: judgeKept(held, caseId) };
 }

@@ -13,6 +13,7 @@ interface Asked {
 
 const none = new Float64Array(0);
 const arrays = { re: none, im: none };
+const points = { ...arrays, present: new Uint8Array(0) };
 
 function solution(caseId: string): CaseSolution {
   return {
@@ -94,13 +95,17 @@ export class ScriptedComputation implements Computation {
     this.ask<Probe>({ kind: 'probe', at, caseId, order });
   judge = (at: StudyAt, caseId: string) => this.ask<Verdict[]>({ kind: 'judge', at, caseId });
   results = () => Promise.resolve({ outcome: 'cancelled' } as const);
+  dossiers = () => Promise.resolve({ outcome: 'cancelled' } as const);
   cancel = (): void => {};
   close = (): void => {};
 
   judgeAll: Computation['judgeAll'] = async (at, caseIds, onCase) => {
     this.allRounds.push({ at, caseIds });
-    for (const caseId of caseIds) onCase(caseId, [verdictOf(caseId, 'fail')]);
-    return { outcome: 'done', value: caseIds.length };
+    const value = caseIds.map((caseId) => [verdictOf(caseId, 'fail')]);
+    caseIds.forEach((caseId, i) => {
+      onCase(caseId, value[i] ?? []);
+    });
+    return { outcome: 'done', value };
   };
 
   /** The newest request of a kind that is still open. */
@@ -121,7 +126,7 @@ export class ScriptedComputation implements Computation {
     const values = {
       solve: { solution: solution(caseId), without: solution(caseId), ...scan },
       scan: scanPair(focusBus ?? ''),
-      probe: { caseId, order, buses: [], with: arrays, without: arrays },
+      probe: { caseId, order, buses: [], with: points, without: points },
       judge: [verdictOf(caseId, 'pass')],
     };
     asked.settle({ outcome: 'done', value: values[kind] as never });

@@ -12,12 +12,13 @@ const study: Study = {
   elements: [],
 };
 const at = (revision: number): StudyAt => ({ revision, study });
+const noPoints = { re: new Float64Array(0), im: new Float64Array(0), present: new Uint8Array(0) };
 const probe = (order: number) => ({
   caseId: 'base',
   order,
   buses: [],
-  with: { re: new Float64Array(0), im: new Float64Array(0) },
-  without: { re: new Float64Array(0), im: new Float64Array(0) },
+  with: noPoints,
+  without: noPoints,
 });
 
 function setUp(timeLimitMs?: number) {
@@ -125,7 +126,7 @@ describe('the computation client', () => {
     await vi.waitFor(() => expect(worker().last.job).toEqual({ kind: 'judge', caseId: 'night' }));
     expect(judged).toEqual(['day']);
     worker().reply([]);
-    expect(await asked).toEqual({ outcome: 'done', value: 2 });
+    expect(await asked).toEqual({ outcome: 'done', value: [[], []] });
     expect(judged).toEqual(['day', 'night']);
   });
 
@@ -137,7 +138,7 @@ describe('the computation client', () => {
     worker().reply([]);
     expect(await older).toEqual({ outcome: 'superseded' });
     worker().reply([]);
-    expect(await newer).toEqual({ outcome: 'done', value: 1 });
+    expect(await newer).toEqual({ outcome: 'done', value: [[]] });
     expect(judged).toEqual(['newer']);
   });
 
