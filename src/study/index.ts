@@ -47,6 +47,7 @@ export { currentVersion } from './migrate.ts';
 export { busName, elementName, fullNameOf, kindWords, nameOf } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
+export { siteFindings } from './siteFindings.ts';
 export {
   type BuiltInSpectrum,
   builtInSpectra,

@@ -1,6 +1,6 @@
 import { seriesKinds } from '../fields/fieldsOf.ts';
 import { busById } from '../lookup.ts';
-import { busName, kindWords } from '../names.ts';
+import { busName, fullNameOf, kindWords } from '../names.ts';
 import { type PartPlace, placeKeys, typicalValues } from '../newPart.ts';
 import type { Bus, DataOrigin, Edit, ElementKind, Study, StudyElement } from '../types.ts';
 import { formatQuantity } from '../units/formatQuantity.ts';
@@ -23,7 +23,7 @@ export function addBus(study: Study, values: Partial<Omit<Bus, 'id'>> = {}): Add
   const id = freshId(study.buses, 'bus');
   const nominalV =
     values.nominalV ?? study.buses.at(-1)?.nominalV ?? (study.frequencyHz === 60 ? 12470 : 20000);
-  const bus: Bus = { name: `Busbar ${counterOf(id)}`, ...values, id, nominalV };
+  const bus: Bus = { id, name: `Busbar ${counterOf(id)}`, nominalV, ...values };
   const edit = makeEdit('bus.add', `add ${bus.name ?? id}`, (current) =>
     busById(current, id) ? current : { ...current, buses: [...current.buses, bus] },
   );
@@ -86,7 +86,7 @@ export function addPart(study: Study, options: AddPartOptions): AddPartEdit {
     ...values,
   } as unknown as StudyElement;
   const origins = typicalOrigins(id, typical, new Set(given.map(([key]) => key)));
-  const words = `add ${kindWords[options.kind]} ${element.name ?? id} at ${busName(study, upper.id)}`;
+  const words = `add ${fullNameOf(element)} at ${busName(study, upper.id)}`;
   const edit = makeEdit(`${options.kind}.add`, words, (current) => {
     if (current.elements.some((item) => item.id === id)) return current;
     const buses = brought && !busById(current, brought.id) ? [...current.buses, brought] : current.buses;

@@ -31,7 +31,7 @@ export function duplicateCase(study: Study, id: string): AddCaseEdit {
 
 function insertCase(study: Study, values: Omit<StudyCase, 'id'>, label: string, verb: string): AddCaseEdit {
   const id = freshId(writtenCases(study), 'case');
-  const added: StudyCase = { name: `Case ${counterOf(id)}`, ...values, id };
+  const added: StudyCase = { id, name: `Case ${counterOf(id)}`, ...values };
   const edit = makeEdit(label, `${verb} case ${added.name ?? id}`, (current) => {
     const cases = writtenCases(current);
     return cases.some((item) => item.id === id) ? current : { ...current, cases: [...cases, added] };

@@ -11,7 +11,7 @@ export interface AddSpectrumEdit extends Edit {
 /** Adds a spectrum of the study's own, empty or with rows; a copy of a built-in one can be edited. */
 export function addSpectrum(study: Study, values: Partial<Omit<Spectrum, 'id'>> = {}): AddSpectrumEdit {
   const id = freshId(study.spectra ?? [], 'spectrum');
-  const spectrum: Spectrum = { name: `Spectrum ${counterOf(id)}`, orders: [], ...values, id };
+  const spectrum: Spectrum = { id, name: `Spectrum ${counterOf(id)}`, orders: [], ...values };
   const edit = makeEdit('spectrum.add', `add spectrum ${nameOf(spectrum)}`, (current) => {
     const spectra = current.spectra ?? [];
     return spectra.some((item) => item.id === id) ? current : { ...current, spectra: [...spectra, spectrum] };

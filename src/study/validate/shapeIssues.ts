@@ -1,18 +1,13 @@
 import { type FieldOwner, fieldsOf } from '../fields/fieldsOf.ts';
 import { recordSchema, refusals, valueAt } from './fieldSchema.ts';
 import { errorIssue, type Issue, isRecord } from './issue.ts';
-
-function codeOf(value: unknown): string {
-  if (value === undefined) return 'missing';
-  if (typeof value === 'number') return Number.isFinite(value) ? 'range' : 'non-finite';
-  return typeof value === 'string' ? 'choice' : 'type';
-}
+import { refusalCode } from './refusalCode.ts';
 
 /** What the catalogue refuses in a record, field by field, and a missing or empty id where it needs one. */
 export function shapeIssues(owner: FieldOwner, record: unknown, needsId: boolean): Issue[] {
   const issues = refusals(recordSchema(owner), record).map(({ path, message }) => {
     const value = valueAt(record, path);
-    return errorIssue(codeOf(value), path, value, message);
+    return errorIssue(refusalCode(owner, path, value), path, value, message);
   });
   if (needsId && isRecord(record) && (typeof record.id !== 'string' || record.id === '')) {
     const code = record.id === undefined ? 'missing' : 'type';

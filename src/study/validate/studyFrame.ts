@@ -5,6 +5,7 @@ import { listed } from './elementIssues.ts';
 import { recordSchema, refusals, valueAt } from './fieldSchema.ts';
 import { errorIssue, findingOf, type Issue, isRecord, valueText } from './issue.ts';
 import { wordsFor } from './recordWords.ts';
+import { refusalCode } from './refusalCode.ts';
 import { rowIssues } from './rowIssues.ts';
 import { shapeIssues } from './shapeIssues.ts';
 
@@ -117,14 +118,7 @@ export function scanFindings(scans: readonly unknown[], busIds: ReadonlySet<stri
 export function frameFindings(study: Record<string, unknown>): Finding[] {
   const own = refusals(recordSchema('study'), study).map(({ path, message }) => {
     const value = valueAt(study, path);
-    const code =
-      value === undefined
-        ? 'missing'
-        : typeof value === 'number'
-          ? Number.isFinite(value)
-            ? 'range'
-            : 'non-finite'
-          : 'type';
+    const code = refusalCode('study', path, value);
     return findingOf(errorIssue(code, path, value, message), '', []);
   });
   return [
