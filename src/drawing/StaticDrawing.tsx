@@ -51,17 +51,16 @@ export function StaticDrawing(props: StaticDrawingProps) {
         if (!figure) return null;
         return (
           <g key={place.id} transform={`translate(${place.x} ${place.y})`}>
-            <PartGlyph place={place} figure={figure} study={inCase} palette={palette} />
+            <PartGlyph place={place} figure={figure} palette={palette} />
           </g>
         );
       })}
       {layout.buses.map((place) => {
-        const bus = inCase.buses.find((b) => b.id === place.id);
         const figure = figures.buses.get(place.id);
-        if (!bus || !figure) return null;
+        if (!figure) return null;
         return (
           <g key={place.id} transform={`translate(${place.x1} ${place.y})`}>
-            <BusGlyph place={place} bus={bus} figure={figure} palette={palette} hatchId={hatchId} />
+            <BusGlyph place={place} figure={figure} palette={palette} hatchId={hatchId} />
           </g>
         );
       })}

@@ -1,5 +1,4 @@
-import { type Bus, nameOf } from '../../study/index.ts';
-import { type BusPlace, measures, nominalVoltage, textWidth } from '../layout/index.ts';
+import { type BusPlace, measures } from '../layout/index.ts';
 import type { BusFigure } from '../readings/figures.ts';
 import type { Palette } from './Palette.ts';
 import { PhasorDial } from './PhasorDial.tsx';
@@ -7,12 +6,9 @@ import { VerdictMark } from './VerdictMark.tsx';
 
 export interface BusGlyphProps {
   place: BusPlace;
-  bus: Bus;
   figure: BusFigure;
   palette: Palette;
   letters?: string;
-  /** Text right of the volts, e.g. the impedance at the handle. */
-  extra?: string;
   /** Id of the hatch pattern for a busbar without voltage. */
   hatchId: string;
 }
@@ -20,7 +16,7 @@ export interface BusGlyphProps {
 const BAR = 4;
 
 /** A busbar around its left end: bar, name, nominal and live volts, dial, mark and letters. */
-export function BusGlyph({ place, bus, figure, palette, letters = '', hatchId }: BusGlyphProps) {
+export function BusGlyph({ place, figure, palette, letters = '', hatchId }: BusGlyphProps) {
   const width = place.x2 - place.x1;
   const base = place.label.y - place.y + 13;
   const ink = figure.mark === 'fail' ? palette.fail : palette.ink;
@@ -40,10 +36,10 @@ export function BusGlyph({ place, bus, figure, palette, letters = '', hatchId }:
       />
       <text y={base}>
         <tspan fontWeight={600} fill={palette.ink}>
-          {nameOf(bus)}
+          {figure.name}
         </tspan>
         <tspan className="plate" dx={8} fill={palette.ink2}>
-          {nominalVoltage(bus.nominalV)}
+          {figure.plate}
         </tspan>
         <tspan className="reading" dx={8} fill={ink} fontStyle={figure.deenergised ? 'italic' : undefined}>
           {figure.text}
@@ -64,9 +60,4 @@ export function BusGlyph({ place, bus, figure, palette, letters = '', hatchId }:
       )}
     </g>
   );
-}
-
-/** Width a busbar's line needs, for hit areas. */
-export function busTextWidth(bus: Bus): number {
-  return textWidth(nameOf(bus), undefined, true);
 }

@@ -1,6 +1,4 @@
-import { nameOf, type Study } from '../../study/index.ts';
-import type { PartPlace, Point } from '../layout/index.ts';
-import { measures, nameplate, textWidth } from '../layout/index.ts';
+import { measures, type PartPlace, type Point, textWidth } from '../layout/index.ts';
 import type { PartFigure } from '../readings/figures.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
 import type { Palette } from './Palette.ts';
@@ -10,7 +8,6 @@ import { VerdictMark } from './VerdictMark.tsx';
 export interface PartGlyphProps {
   place: PartPlace;
   figure: PartFigure;
-  study: Study;
   palette: Palette;
   /** Letters of the notes that speak of the part. */
   letters?: string;
@@ -34,7 +31,7 @@ function inkOf(figure: PartFigure, palette: Palette): string {
 }
 
 /** A part around its symbol's centre: conductors, symbol, name, nameplate, readings, mark and letters. */
-export function PartGlyph({ place, figure, study, palette, letters }: PartGlyphProps) {
+export function PartGlyph({ place, figure, palette, letters }: PartGlyphProps) {
   const { element } = figure;
   const ink = inkOf(figure, palette);
   return (
@@ -51,16 +48,15 @@ export function PartGlyph({ place, figure, study, palette, letters }: PartGlyphP
           strokeLinejoin="round"
         />
       ))}
-      <SymbolGlyph shape={symbolShape(element)} ink={ink} dashed={figure.off} turn={turnOf(place)} />
-      <PartText place={place} figure={figure} study={study} palette={palette} />
+      <SymbolGlyph shape={symbolShape(element)} ink={ink} faint={figure.off} turn={turnOf(place)} />
+      <PartText place={place} figure={figure} palette={palette} />
       <MarkAndLetters place={place} figure={figure} palette={palette} letters={letters ?? ''} />
     </g>
   );
 }
 
-function PartText({ place, figure, study, palette }: Omit<PartGlyphProps, 'letters'>) {
-  const name = nameOf(figure.element);
-  const plate = nameplate(figure.element, study);
+function PartText({ place, figure, palette }: Omit<PartGlyphProps, 'letters'>) {
+  const { name, plate } = figure;
   const middle = place.align === 'middle';
   const x = (middle ? place.label.x + place.label.width / 2 : place.label.x) - place.x;
   const top = place.label.y - place.y + 11;

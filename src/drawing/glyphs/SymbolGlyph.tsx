@@ -4,21 +4,21 @@ export interface SymbolGlyphProps {
   shape: SymbolShape;
   ink: string;
   /** Out of service. */
-  dashed?: boolean;
+  faint?: boolean;
   /** Degrees, clockwise. */
   turn?: number;
   strokePx?: number;
 }
 
 /** A part's symbol around (0, 0), from the plain list of its shapes. */
-export function SymbolGlyph({ shape, ink, dashed = false, turn = 0, strokePx = 1.5 }: SymbolGlyphProps) {
+export function SymbolGlyph({ shape, ink, faint = false, turn = 0, strokePx = 1.5 }: SymbolGlyphProps) {
   return (
     <g
       transform={turn === 0 ? undefined : `rotate(${turn})`}
       fill="none"
       stroke={ink}
       strokeWidth={strokePx}
-      strokeDasharray={dashed ? '3 2.5' : undefined}
+      strokeOpacity={faint ? 0.55 : undefined}
       strokeLinejoin="round"
     >
       {shape.primitives.map((primitive, at) => {

@@ -31,7 +31,7 @@ export const LEAF_TEXT_DEPTH = 94;
 export const LEAF_READING = 154;
 export const SIDE_READING = 176;
 /** Width kept for the live volts beside a busbar's name. */
-export const BUS_READING = 74;
+export const BUS_READING = 128;
 
 export const SLOT_GAP = 10;
 export const BUS_GAP = 44;

@@ -71,7 +71,7 @@ export function nameplate(part: StudyElement, study: Study): string {
     case 'shunt':
       return freeRlc(part);
     case 'load':
-      return `${phases(part)}${n(part.kW)} kW · ${n(part.powerFactor)}${part.powerFactor === 1 ? '' : part.leading ? ' leading' : ' lagging'}`;
+      return `${phases(part)}${n(part.kW)} kW · ${part.powerFactor === 1 ? 'cos φ 1' : `${n(part.powerFactor)} ${part.leading ? 'leading' : 'lagging'}`}`;
     case 'motor': {
       const count = part.count ?? 1;
       return `${count > 1 ? `${n(count)} × ` : ''}${n(part.ratedKW)} kW · ${n(part.loadPercent ?? 75)} % load`;

@@ -1,6 +1,6 @@
 import type { CaseSolution } from '../../engine/index.ts';
 import type { Bus } from '../../study/index.ts';
-import { livePercent, liveVolts } from './liveNumber.ts';
+import { liveOhm, livePercent, liveVolts } from './liveNumber.ts';
 import { type ReadingMode, readOrder, subscript } from './ReadingMode.ts';
 import { busOf, isDeenergised, lineVoltageAt, phasorsAt, voltageRms, voltageShare } from './solutionView.ts';
 
@@ -14,6 +14,20 @@ export interface BusReading {
   phasors: [number, number][] | null;
 }
 
+/** Driving-point impedance at the rail's handle, ohm per phase, bus by bus. */
+export interface ImpedanceProbe {
+  order: number;
+  buses: readonly string[];
+  with: { re: ArrayLike<number>; im: ArrayLike<number> };
+}
+
+function impedanceAt(bus: string, probe: ImpedanceProbe | null): string {
+  const at = probe?.buses.indexOf(bus) ?? -1;
+  const re = probe?.with.re[at];
+  const im = probe?.with.im[at];
+  return re === undefined || im === undefined || !Number.isFinite(re + im) ? '' : liveOhm(Math.hypot(re, im));
+}
+
 const NONE: BusReading = { text: '', more: '', deenergised: false, phasors: null };
 
 export function busReading(
@@ -21,6 +35,7 @@ export function busReading(
   solution: CaseSolution | null,
   mode: ReadingMode,
   handle: number,
+  probe: ImpedanceProbe | null = null,
 ): BusReading {
   if (!solution?.converged) return NONE;
   const at = busOf(solution, bus.id);
@@ -36,8 +51,13 @@ export function busReading(
   if (h > 1) {
     const share = voltageShare(solution, at, h);
     const text = share === null ? liveVolts(lineVoltageAt(solution, at, h)) : livePercent(share);
-    return { text: `U${subscript(h)} ${text}`, more: thd, deenergised: false, phasors: scaled };
+    const ohm = impedanceAt(bus.id, probe);
+    const order = `U${subscript(h)} ${text}`;
+    return { text: ohm ? `${order} · ${ohm}` : order, more: thd, deenergised: false, phasors: scaled };
   }
-  const volts = mode === 'rms' ? rms.rms : lineVoltageAt(solution, at, 1);
-  return { text: liveVolts(volts), more: thd, deenergised: false, phasors: scaled };
+  if (mode === 'rms') {
+    const text = [liveVolts(rms.rms), thd.replace('(U)', '')].filter(Boolean).join(' · ');
+    return { text, more: '', deenergised: false, phasors: scaled };
+  }
+  return { text: liveVolts(lineVoltageAt(solution, at, 1)), more: thd, deenergised: false, phasors: scaled };
 }

@@ -1,7 +1,8 @@
 import type { Verdict, VerdictWord } from '../../checks/index.ts';
 import type { CaseSolution } from '../../engine/index.ts';
-import { busesOf, type Study, type StudyElement, withDefaults } from '../../study/index.ts';
-import { type BusReading, busReading } from './busReading.ts';
+import { busesOf, nameOf, type Study, type StudyElement, withDefaults } from '../../study/index.ts';
+import { nameplate, nominalVoltage } from '../layout/index.ts';
+import { type BusReading, busReading, type ImpedanceProbe } from './busReading.ts';
 import { lineWidth } from './lineWidth.ts';
 import { partReading } from './partReading.ts';
 import type { ReadingMode } from './ReadingMode.ts';
@@ -11,6 +12,8 @@ import { worstVerdicts } from './worstVerdict.ts';
 /** Everything about a part that the drawing shows and the layout does not decide. */
 export interface PartFigure {
   element: StudyElement;
+  name: string;
+  plate: string;
   lines: string[];
   /** Conductor width by busbar id, px. */
   widths: Record<string, number>;
@@ -22,6 +25,8 @@ export interface PartFigure {
 }
 
 export interface BusFigure extends BusReading {
+  name: string;
+  plate: string;
   mark: VerdictWord | undefined;
 }
 
@@ -44,6 +49,7 @@ export function figuresOf(
   verdicts: readonly Verdict[],
   mode: ReadingMode,
   handle: number,
+  probe: ImpedanceProbe | null = null,
 ): Figures {
   const worst = worstVerdicts(verdicts);
   const readings = study.elements.map((part) => partReading(part, solution, mode, handle));
@@ -54,6 +60,8 @@ export function figuresOf(
     const ends = busesOf(part);
     parts.set(part.id, {
       element: symbolData(part, study),
+      name: nameOf(part),
+      plate: nameplate(part, study),
       lines: reading.lines,
       widths: Object.fromEntries(
         busesOf(part).map((bus) => [bus, lineWidth(reading.amperes[bus] ?? null, largest)]),
@@ -65,7 +73,12 @@ export function figuresOf(
   });
   const buses = new Map<string, BusFigure>();
   for (const bus of study.buses) {
-    buses.set(bus.id, { ...busReading(bus, solution, mode, handle), mark: worst.get(`bus:${bus.id}`) });
+    buses.set(bus.id, {
+      name: nameOf(bus),
+      plate: nominalVoltage(bus.nominalV),
+      ...busReading(bus, solution, mode, handle, probe),
+      mark: worst.get(`bus:${bus.id}`),
+    });
   }
   return { parts, buses };
 }

@@ -1,24 +1,36 @@
-import { tradeNumber } from '../layout/index.ts';
+import { formatNumber, formatQuantity } from '../../study/index.ts';
 
-/** A live number to three digits, whole above 100, its decimals kept so that it does not jump in width. */
-export function liveNumber(value: number): string {
+/** Decimals that keep three digits, so that a live number does not jump in width. */
+function decimalsOf(value: number): number {
   const size = Math.abs(value);
-  if (!Number.isFinite(value)) return '–';
-  if (size >= 99.95) return tradeNumber(Math.round(value), 6);
-  const decimals = size >= 9.995 ? 1 : 2;
-  return value.toFixed(decimals).replace('-', '−');
+  if (size >= 99.95) return 0;
+  return size >= 9.995 ? 1 : 2;
+}
+
+export function liveNumber(value: number): string {
+  return Number.isFinite(value) ? formatNumber(value, { decimals: decimalsOf(value) }) : '–';
+}
+
+export function liveQuantity(value: number, unit: string): string {
+  return Number.isFinite(value) ? formatQuantity(value, unit, { decimals: decimalsOf(value) }) : '–';
 }
 
 /** kW, kvar or kVA, in the mega unit from ten thousand. */
 export function livePower(kilo: number, unit: 'W' | 'var' | 'VA'): string {
-  return Math.abs(kilo) >= 10_000 ? `${liveNumber(kilo / 1000)} M${unit}` : `${liveNumber(kilo)} k${unit}`;
+  return Math.abs(kilo) >= 10_000 ? liveQuantity(kilo / 1000, `M${unit}`) : liveQuantity(kilo, `k${unit}`);
 }
 
 export function liveVolts(volts: number): string {
-  if (volts >= 1000) return `${(volts / 1000).toFixed(volts >= 99_950 ? 1 : 2)} kV`;
-  return `${volts >= 9.995 ? volts.toFixed(1) : volts.toFixed(2)} V`;
+  if (!Number.isFinite(volts)) return '–';
+  if (volts >= 1000) return formatQuantity(volts / 1000, 'kV', { decimals: volts >= 99_950 ? 1 : 2 });
+  return formatQuantity(volts, 'V', { decimals: volts >= 9.995 ? 1 : 2 });
 }
 
 export function livePercent(perUnit: number): string {
-  return `${liveNumber(perUnit * 100)} %`;
+  return liveQuantity(perUnit * 100, '%');
+}
+
+export function liveOhm(ohm: number): string {
+  if (!Number.isFinite(ohm)) return '–';
+  return ohm < 1 ? liveQuantity(ohm * 1000, 'mΩ') : liveQuantity(ohm, 'Ω');
 }

@@ -1,6 +1,6 @@
 import type { CaseSolution } from '../../engine/index.ts';
 import { type Bank, busesOf, type StudyElement } from '../../study/index.ts';
-import { liveNumber, livePercent, livePower } from './liveNumber.ts';
+import { livePercent, livePower, liveQuantity } from './liveNumber.ts';
 import { type ReadingMode, readOrder, subscript } from './ReadingMode.ts';
 import { currentAt, currentRms, powerInto, terminalOf } from './solutionView.ts';
 
@@ -31,19 +31,19 @@ function bankAmpere(bank: Bank): number {
 
 function withLoading(part: StudyElement, ampere: number): string {
   const rated = ratedAmpere(part);
-  const amperes = `${liveNumber(ampere)} A`;
-  return rated ? `${liveNumber((ampere / rated) * 100)} % · ${amperes}` : amperes;
+  const amperes = liveQuantity(ampere, 'A');
+  return rated ? `${livePercent(ampere / rated)} · ${amperes}` : amperes;
 }
 
 function fundamentalLines(solution: CaseSolution, part: StudyElement, terminal: number): string[] {
   const into = powerInto(solution, terminal);
   const ampere = currentAt(solution, terminal, 1);
-  // Power is told in its usual direction: out of a source, up out of nothing else; a transformer is read
-  // at its lower side, where the current INTO it is minus the one it delivers.
+  // Power is told as delivered where the part delivers: by a source, and by a transformer at its lower side.
   const turned = part.kind === 'supply' || part.kind === 'generator' || part.kind === 'transformer';
   const [kW, kvar] = turned ? [-into.kW, -into.kvar] : [into.kW, into.kvar];
   const kVA = Math.hypot(kW, kvar);
-  const reactive = `${livePower(Math.abs(kvar), 'var')} ${kvar >= 0 ? 'lagging' : 'leading'}`;
+  const direction = Math.abs(kvar) < 5e-4 * kVA ? '' : kvar > 0 ? ' lagging' : ' leading';
+  const reactive = `${livePower(Math.abs(kvar), 'var')}${direction}`;
   const pf =
     kVA > 1e-6
       ? ` · cos φ ${(Math.abs(kW) / kVA).toFixed(kVA > 0 && Math.abs(kW) / kVA > 0.995 ? 3 : 2)}`
@@ -62,7 +62,7 @@ function orderLines(solution: CaseSolution, terminal: number, h: number): string
   const ampere = currentAt(solution, terminal, h);
   const fundamental = currentAt(solution, terminal, 1);
   const share = h > 1 && fundamental > 1e-6 ? ` · ${livePercent(ampere / fundamental)}` : '';
-  return [`I${subscript(h)} ${liveNumber(ampere)} A${share}`];
+  return [`I${subscript(h)} ${liveQuantity(ampere, 'A')}${share}`];
 }
 
 /** The current at each end in the chosen reading. */

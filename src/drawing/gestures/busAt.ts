@@ -1,0 +1,35 @@
+import type { BusPlace, Layout, Point } from '../layout/index.ts';
+
+const ABOVE = 44;
+const BELOW = 150;
+const BESIDE = 28;
+
+/**
+ * The busbar a part dropped at a point would hang from: the nearest bar above the point, as far down as its
+ * parts hang, or just below it. undefined where the paper is free.
+ */
+export function busAt(layout: Layout, point: Point): BusPlace | undefined {
+  let nearest: BusPlace | undefined;
+  let least = Number.POSITIVE_INFINITY;
+  for (const bar of layout.buses) {
+    if (point.x < bar.x1 - BESIDE || point.x > bar.x2 + BESIDE) continue;
+    const below = point.y - bar.y;
+    if (below > BELOW || below < -ABOVE) continue;
+    const distance = below >= 0 ? below : -below * 1.5;
+    if (distance < least) {
+      least = distance;
+      nearest = bar;
+    }
+  }
+  return nearest;
+}
+
+/** Parts touching a busbar, left to right as drawn. */
+export function partsAlong(layout: Layout, bus: string): { id: string; x: number }[] {
+  const touching = layout.parts.flatMap((part) => {
+    const end = part.ends.find((e) => e.bus === bus);
+    const x = end?.path[0]?.x;
+    return x === undefined || part.hang === 'above' || part.hang === 'across' ? [] : [{ id: part.id, x }];
+  });
+  return touching.sort((a, b) => a.x - b.x);
+}
