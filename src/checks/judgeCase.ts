@@ -1,0 +1,150 @@
+import { type CaseSolution, scanImpedance, solveCase } from '../engine/index.ts';
+import type { Study, StudyCase } from '../study/index.ts';
+import { casesOf, isOn, studyInCase } from '../study/index.ts';
+import { amplification } from './amplification.ts';
+import { bankDuty } from './bankDuty.ts';
+import { busOrder } from './busOrder.ts';
+import { busThd } from './busThd.ts';
+import { busVoltage } from './busVoltage.ts';
+import { type CheckContext, defaultPresence, type PresenceThresholds } from './CheckContext.ts';
+import { cableLoad } from './cableLoad.ts';
+import { filterDuty } from './filterDuty.ts';
+import { inflowAt } from './inflow.ts';
+import { pccBusesOf } from './pcc.ts';
+import { pccCurrent } from './pccCurrent.ts';
+import { resonanceDistance } from './resonanceDistance.ts';
+import { SolvedCase } from './SolvedCase.ts';
+import { sortByMargin } from './summarise.ts';
+import { targetPF } from './targetPF.ts';
+import { transformerLoad } from './transformerLoad.ts';
+import type { Verdict } from './types.ts';
+import { unbalance } from './unbalance.ts';
+
+/** A family of checks: every verdict it has to give in one case. */
+export type Check = (context: CheckContext) => Verdict[];
+
+/** Checks that read the solution alone. */
+const direct: readonly Check[] = [
+  targetPF,
+  busVoltage,
+  unbalance,
+  busThd,
+  busOrder,
+  pccCurrent,
+  bankDuty,
+  filterDuty,
+  transformerLoad,
+  cableLoad,
+];
+
+/** Screening rules, which scan the network again and again: the slower half. */
+const scanning: readonly Check[] = [amplification, resonanceDistance];
+
+export interface JudgeOptions {
+  /** The same case with every bank and filter out, where the caller has solved it already. */
+  withoutCorrection?: CaseSolution;
+  /** Solutions of other cases already at hand: they tell the largest case's power. */
+  otherCases?: readonly CaseSolution[];
+  /** False leaves the scanning screens (amplification, resonance-distance) out, for a first fast answer. */
+  screening?: boolean;
+  presence?: PresenceThresholds;
+}
+
+/**
+ * All verdicts of one solved case, sorted: fails, watch, unknown, pass, each by margin, ties by key.
+ * Solves the case without the correction and scans impedances as needed. A case without a solution
+ * gives no verdicts (study format §8). Pure: the same study and solution give the same list.
+ */
+export function judgeCase(study: Study, solution: CaseSolution, options: JudgeOptions = {}): Verdict[] {
+  if (!solution.converged) return [];
+  const context = contextOf(study, solution, options);
+  const checks = options.screening === false ? direct : [...direct, ...scanning];
+  return sortByMargin(checks.flatMap((check) => check(context)));
+}
+
+/** All verdicts of all cases, sorted as one list; cases are solved unless their solutions are given. */
+export function judgeStudy(
+  study: Study,
+  options: { solutions?: readonly CaseSolution[]; screening?: boolean; presence?: PresenceThresholds } = {},
+): Verdict[] {
+  const given = new Map((options.solutions ?? []).map((solution) => [solution.caseId, solution]));
+  const solutions = casesOf(study).map(({ id }) => given.get(id) ?? solveCase(study, id));
+  const { screening, presence } = options;
+  const shared = {
+    ...(screening === undefined ? {} : { screening }),
+    ...(presence === undefined ? {} : { presence }),
+  };
+  return sortByMargin(
+    solutions.flatMap((solution) => judgeCase(study, solution, { ...shared, otherCases: solutions })),
+  );
+}
+
+function correctionIds(study: Study): Set<string> {
+  return new Set(
+    study.elements
+      .filter((part) => (part.kind === 'bank' || part.kind === 'filter') && isOn(part))
+      .map((part) => part.id),
+  );
+}
+
+function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): CheckContext {
+  const caseId = solution.caseId;
+  const study = studyInCase(base, caseId);
+  const found = casesOf(base).find(({ id }) => id === caseId);
+  const correction = correctionIds(study);
+  const solved = new SolvedCase(solution);
+  let without: SolvedCase | null | undefined = correction.size === 0 ? null : undefined;
+  const solveWithout = (ids: ReadonlySet<string>): CaseSolution => solveCase(base, caseId, { without: ids });
+  return {
+    study,
+    base,
+    caseId,
+    role: found?.role ?? 'load',
+    hoursPerDay: found?.hoursPerDay ?? 24,
+    solved,
+    pccBuses: pccBusesOf(study),
+    correction,
+    presence: options.presence ?? defaultPresence,
+    without() {
+      if (without === undefined) {
+        const bare = options.withoutCorrection ?? solveWithout(correction);
+        without = bare.converged ? new SolvedCase(bare) : null;
+      }
+      return without;
+    },
+    solveWithout,
+    scan(span, ids = new Set(), steps = new Map()) {
+      const asked = steps.size === 0 ? base : withSteps(base, caseId, steps);
+      return scanImpedance(asked, caseId, span, { without: ids });
+    },
+    largestKW: (bus) => largestKW(base, solution, bus, options.otherCases),
+  };
+}
+
+/** The study with some banks' steps replaced, in one case, by a single step of the kvar given. */
+export function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
+  const changes = [...steps].map(([element, kvar]) => ({ element, set: { steps: [{ kvar }] } }));
+  const cases: StudyCase[] = casesOf(study).map((item) =>
+    item.id === caseId ? { ...item, changes: [...item.changes, ...changes] } : item,
+  );
+  return { ...study, cases };
+}
+
+/** Over every case of the study, kW into the site at the PCC; null for a study with one case. */
+function largestKW(
+  study: Study,
+  solution: CaseSolution,
+  bus: string,
+  given: readonly CaseSolution[] = [],
+): number | null {
+  const cases = casesOf(study);
+  if (cases.length < 2) return null;
+  const known = new Map([...given, solution].map((item) => [item.caseId, item]));
+  const powers = cases.flatMap(({ id }) => {
+    const solved = known.get(id) ?? solveCase(study, id);
+    if (!solved.converged) return [];
+    const inflow = inflowAt(studyInCase(study, id), new SolvedCase(solved), bus);
+    return inflow ? [inflow.kW] : [];
+  });
+  return powers.length > 0 ? Math.max(...powers) : null;
+}

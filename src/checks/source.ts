@@ -1,0 +1,19 @@
+import type { Provenance, Source } from './types.ts';
+
+const words: Record<Provenance, string> = {
+  published: 'read in the source',
+  'second-hand': 'second-hand',
+  memory: 'from memory, check before use',
+  practice: 'common practice',
+};
+
+/** A rule of the trade without a document of its own. */
+export const commonPractice: Source = { document: 'common practice', provenance: 'practice' };
+
+/** "IEC 60831-1:2014, maximum permissible current (from memory, check before use)". */
+export function sourceText(source: Source): string {
+  if (source.provenance === 'practice' && source.document === 'common practice') return source.document;
+  const edition = source.edition ? `:${source.edition}` : '';
+  const clause = source.clause ? `, ${source.clause}` : '';
+  return `${source.document}${edition}${clause} (${words[source.provenance]})`;
+}

@@ -1,0 +1,139 @@
+import type { Transformer } from '../study/index.ts';
+import { isOn, nameOf } from '../study/index.ts';
+import type { CheckContext } from './CheckContext.ts';
+import { angleRemark } from './distortion.ts';
+import { figure } from './figure.ts';
+import { SolvedCase } from './SolvedCase.ts';
+import { type HarmonicLoss, harmonicLoss, permissibleLoad } from './transformerHeating.ts';
+import type { Source, Verdict, Working } from './types.ts';
+import { judged, type Row, unknown } from './verdict.ts';
+
+const source: Source = {
+  document: 'IEEE C57.110',
+  clause: 'harmonic loss factor, permissible load',
+  provenance: 'second-hand',
+};
+
+/** F_HL below this derates by less than 0.1 % even at P_EC-R = 0.15: the share is then not needed. */
+const NEGLIGIBLE_LOSS_FACTOR = 1.01;
+
+/**
+ * Transformer loading with harmonic derating (transformer-load): (I_rms/I_N)/√((1+P_EC)/(1+F_HL·P_EC)) ≤ 1,
+ * on the side and phase that is loaded most. Without P_EC-R an overload on rms alone still fails; otherwise
+ * there is no verdict.
+ */
+export function transformerLoad(context: CheckContext): Verdict[] {
+  return context.study.elements.flatMap((part) =>
+    part.kind === 'transformer' && isOn(part) ? [atTransformer(context, part)] : [],
+  );
+}
+
+interface Side {
+  words: string;
+  phase: number;
+  ratedA: number;
+  terminal: number;
+  loss: HarmonicLoss;
+}
+
+function sideOf(
+  solved: SolvedCase,
+  part: Transformer,
+  bus: string,
+  ratedV: number,
+  words: string,
+): Side | null {
+  const terminal = solved.terminal(part.id, bus);
+  if (terminal === undefined) return null;
+  const ratedA = (part.ratedKVA * 1000) / (Math.sqrt(3) * ratedV);
+  const phase = SolvedCase.worstPhase((k) => solved.rmsAmperes(terminal, k));
+  const amperes = Float64Array.from({ length: solved.maxOrder }, (_, i) =>
+    solved.amperes(terminal, i + 1, phase),
+  );
+  const loss = harmonicLoss(amperes, ratedA);
+  return loss ? { words, phase, ratedA, terminal, loss } : null;
+}
+
+function heaviestSide(solved: SolvedCase, part: Transformer): Side | null {
+  const sides = [
+    sideOf(solved, part, part.to, part.lvV, 'LV side'),
+    sideOf(solved, part, part.from, part.hvV, 'HV side'),
+  ].filter((side) => side !== null);
+  return sides.sort((a, b) => b.loss.rmsA / b.ratedA - a.loss.rmsA / a.ratedA)[0] ?? null;
+}
+
+function atTransformer(context: CheckContext, part: Transformer): Verdict {
+  const side = heaviestSide(context.solved, part);
+  const row: Row = {
+    check: 'transformer-load',
+    title: 'transformer loading',
+    subject: { kind: 'element', id: part.id },
+    caseId: context.caseId,
+    unit: 'p.u.',
+    source,
+    working: [],
+  };
+  if (!side || !context.solved.energised(part.to))
+    return unknown(row, `${nameOf(part)} carries no current in this case`);
+  const { loss, ratedA } = side;
+  const load = loss.rmsA / ratedA;
+  const base: Row = { ...row, working: loadWorking(side), remarks: remarksOf(context, side) };
+  const mend =
+    'Move load to another transformer, choose a larger or K-rated one, or filter the orders that heat it.';
+  const share = part.eddyLossShare;
+  if (share !== undefined || loss.lossFactor < NEGLIGIBLE_LOSS_FACTOR) {
+    const eddy = share ?? 0;
+    const permissible = permissibleLoad(loss.lossFactor, eddy);
+    const value = load / permissible;
+    return judged({
+      ...base,
+      value,
+      limit: 1,
+      mend,
+      working: [...base.working, derating(loss, eddy, permissible, load)],
+    });
+  }
+  const missing = `enter the winding eddy-current loss P_EC-R of ${nameOf(part)}: with F_HL = ${figure(loss.lossFactor)} the rating must be derated`;
+  if (load > 1) {
+    return judged({
+      ...base,
+      value: load,
+      limit: 1,
+      mend,
+      remarks: [...(base.remarks ?? []), `Overloaded already without derating; ${missing}.`],
+    });
+  }
+  return unknown(base, missing, load, 1);
+}
+
+function loadWorking({ words, phase, ratedA, loss }: Side): Working[] {
+  return [
+    {
+      equation: 'I_rms / I_N',
+      numbers: `${words}, L${phase + 1}: ${figure(loss.rmsA)} A / ${figure(ratedA)} A = ${figure(loss.rmsA / ratedA)}`,
+    },
+    { equation: 'F_HL = Σ (I_h/I)² · h² / Σ (I_h/I)²', numbers: `${figure(loss.lossFactor)}` },
+    { equation: 'K = Σ h² · (I_h/I_R)²', numbers: `${figure(loss.kFactor)}` },
+  ];
+}
+
+function derating(loss: HarmonicLoss, eddy: number, permissible: number, load: number): Working {
+  return {
+    equation: '(I_rms/I_N) / √((1 + P_EC) / (1 + F_HL · P_EC))',
+    numbers: `${figure(load)} / √(${figure(1 + eddy)} / ${figure(1 + loss.lossFactor * eddy)}) = ${figure(load)} / ${figure(permissible)} = ${figure(load / permissible)}`,
+  };
+}
+
+function remarksOf(context: CheckContext, side: Side): string[] {
+  const orders: number[] = [];
+  for (let h = 2; h <= context.solved.maxOrder; h++) {
+    if (
+      context.solved.anglesUnknown(h) &&
+      context.solved.amperes(side.terminal, h, side.phase) > 1e-3 * side.ratedA
+    ) {
+      orders.push(h);
+    }
+  }
+  const sentence = angleRemark(context.solved, orders);
+  return sentence === '' ? [] : [sentence];
+}

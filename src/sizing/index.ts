@@ -1,0 +1,2 @@
+export { type KvarAtBus, kvarAtBus } from './kvarAtBus.ts';
+export { type KvarInput, type KvarResult, kvarForTarget, tanPhi } from './kvarForTarget.ts';
