@@ -24,11 +24,12 @@ export function nameOf(named: { id: string; name?: string }): string {
   return name ? name : named.id;
 }
 
-/** Kind and name together: "capacitor bank C1". A name that already begins with the kind stands alone. */
+/** Kind and name together: "transformer T1". A name that holds a word of the kind stands alone: "Bank 1". */
 export function fullNameOf(element: StudyElement): string {
   const name = nameOf(element);
   const word = kindWords[element.kind];
-  return name.toLowerCase().includes(word.split(',')[0] ?? word) ? name : `${word} ${name}`;
+  const telling = word.split(/[ ,]+/).filter((part) => part.length > 2);
+  return telling.some((part) => name.toLowerCase().includes(part.toLowerCase())) ? name : `${word} ${name}`;
 }
 
 /** Display name of a busbar id; the id itself where the study has no such busbar. */

@@ -29,9 +29,9 @@ class Refusal extends Error {}
  */
 export function parseQuantity(text: string, unit: Unit): ParsedQuantity {
   const typed = tidy(text);
-  const plain = readNumber(typed, 0);
-  if (plain && plain.end === typed.length)
-    return { ok: true, value: plain.value, said: formatQuantity(plain.value, unit, { digits: 6 }) };
+  const plain = plainNumber(typed);
+  if (plain !== undefined)
+    return { ok: true, value: plain, said: formatQuantity(plain, unit, { digits: 6 }) };
   if (typed === '') return { ok: false, error: `Give a number${unit ? ` in ${unit}` : ''}.` };
   try {
     const reader = new Reader(typed, unit);
@@ -44,6 +44,14 @@ export function parseQuantity(text: string, unit: Unit): ParsedQuantity {
     if (!(refusal instanceof Refusal)) throw refusal;
     return { ok: false, error: refusal.message };
   }
+}
+
+/** A number alone, kept to its last digit. */
+function plainNumber(typed: string): number | undefined {
+  const sign = typed.startsWith('-') ? 1 : 0;
+  const number = readNumber(typed, sign);
+  if (!number || number.end !== typed.length) return undefined;
+  return sign ? -number.value : number.value;
 }
 
 /** Conversions multiply by powers of ten; a digit beyond the fifteenth is rounding, not data. */
