@@ -1,7 +1,7 @@
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
 export { applySet, casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
-export { addPin, type End, moveEnd, removePin, reorderAlong } from './edits/arrange.ts';
+export { addPin, type End, moveEnd, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
 export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } from './edits/copyParts.ts';
 export { makeEdit, type Patch, sameData } from './edits/edit.ts';

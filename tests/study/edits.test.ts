@@ -109,7 +109,7 @@ describe('Changing a part', () => {
     const edit = updateElement(detuned, 'bank', { detuningPercent: 5.67 });
     expect(edit).toMatchObject({
       label: 'bank.setDetuningPercent',
-      words: 'set the detuning p of bank','capacitor bank bank', 'capacitor bank bank'),
+      words: 'set the detuning p of bank',
     });
     expect(elementById(edit.apply(detuned), 'bank')).toMatchObject({ detuningPercent: 5.67 });
     expect(

@@ -78,3 +78,11 @@ export function removePin(study: Study, pin: Pin): Edit {
     return kept.length === pins.length ? current : { ...current, view: { ...current.view, pins: kept } };
   });
 }
+
+/** Sets the whole list of pins, in reading order. */
+export function setPins(_study: Study, pins: readonly Pin[]): Edit {
+  return makeEdit('pin.order', 'reorder the pins', (current) => {
+    if (sameData(current.view?.pins ?? [], pins)) return current;
+    return { ...current, view: { ...current.view, pins: [...pins] } };
+  });
+}
