@@ -17,7 +17,8 @@ export const helpText = `Solves a study and prints a summary.
   --help           show this text
 
 Exit status: 0 solved; 1 a case did not converge (with --strict also: a verdict fails or is unknown);
-2 bad input or options: every finding is on the error output and no file is written.
+2 bad input or options: every finding is on the error output and no file is written; 3 the programme
+itself failed.
 
 The answers rest on the data of the study. Local codes and a licensed engineer decide.
 `;

@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { access, constants, realpath, rename, rm, stat, writeFile } from 'node:fs/promises';
 import { basename, dirname, join, resolve } from 'node:path';
+import { FileError } from './FileError.ts';
 
 /** Why a results file cannot be written there, as far as can be told before there is one; null where it can. */
 export async function outputProblem(out: string, input: string): Promise<string | null> {
@@ -29,6 +30,6 @@ export async function writeAtomically(path: string, text: string): Promise<void>
     await rename(part, path);
   } catch (error) {
     await rm(part, { force: true });
-    throw new Error(`${path} cannot be written: ${error instanceof Error ? error.message : String(error)}`);
+    throw new FileError(`${path} cannot be written`, error);
   }
 }

@@ -1,5 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import type { Finding, Study } from '../study/index.ts';
+import { FileError } from './FileError.ts';
 import { findingLines } from './findingLines.ts';
 import { helpText, type Options, readOptions } from './options.ts';
 import { outputProblem, writeAtomically } from './outputFile.ts';
@@ -12,6 +13,7 @@ export interface Output {
 const solved = 0;
 const notGood = 1;
 const badInput = 2;
+const programmeFault = 3;
 
 /** The whole command: what to exit with. Engine and checks are loaded once there is something to solve. */
 export async function run(args: readonly string[], output: Output): Promise<number> {
@@ -24,7 +26,10 @@ export async function run(args: readonly string[], output: Output): Promise<numb
   try {
     return await solve(options, output);
   } catch (error) {
-    return refuse(output, error instanceof Error ? error.message : String(error));
+    if (error instanceof FileError) return refuse(output, error.message);
+    const fault = error instanceof Error ? (error.stack ?? error.message) : String(error);
+    output.err(`varwright: the programme itself failed; nothing can be said of the study.\n${fault}\n`);
+    return programmeFault;
   }
 }
 
@@ -48,7 +53,7 @@ async function textOf(file: string): Promise<string> {
   try {
     return await readFile(file, 'utf8');
   } catch (error) {
-    throw new Error(`${file} cannot be read: ${error instanceof Error ? error.message : String(error)}`);
+    throw new FileError(`${file} cannot be read`, error);
   }
 }
 

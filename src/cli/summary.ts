@@ -23,7 +23,7 @@ const terminalColumns: Column[] = [
   { head: 'cos φ', align: 'right' },
   { head: 'PF', align: 'right' },
   { head: 'A', align: 'right' },
-  { head: 'N A', align: 'right' },
+  { head: 'neutral A', align: 'right' },
   { head: 'THD I %', align: 'right' },
 ];
 
@@ -37,8 +37,8 @@ const resonanceColumns: Column[] = [
 
 const verdictColumns: Column[] = [
   { head: '', align: 'left' },
-  { head: 'Check', align: 'left', most: 28 },
-  { head: 'of', align: 'left', most: 22 },
+  { head: 'Check', align: 'left', most: 36 },
+  { head: 'of', align: 'left', most: 18 },
   { head: 'value', align: 'right' },
   { head: 'limit', align: 'right' },
   { head: 'unit', align: 'left', most: 8 },
@@ -165,23 +165,33 @@ function verdictLines(study: Study, verdicts: readonly Verdict[]): string[] {
   const head = `  Verdicts: ${fail} fail, ${watch} watch, ${unknown} unknown, ${pass} pass`;
   const open = sortByMargin(verdicts).filter(({ verdict }) => verdict !== 'pass');
   if (open.length === 0) return ['', head];
-  return [
-    '',
-    head,
-    ...tableLines(
-      verdictColumns,
-      open.map((verdict) => verdictRow(study, verdict)),
-    ),
-  ];
+  const table = tableLines(
+    verdictColumns,
+    open.map((verdict) => verdictRow(study, verdict)),
+  );
+  return ['', head, ...table, ...missingLines(study, open)];
+}
+
+/** What each verdict that is unknown lacks. */
+function missingLines(study: Study, verdicts: readonly Verdict[]): string[] {
+  return verdicts
+    .filter(({ verdict }) => verdict === 'unknown')
+    .flatMap((verdict) => {
+      const text = `? ${verdict.title}, ${subjectName(study, verdict)}: ${verdict.mend ?? verdict.remarks[0] ?? ''}`;
+      return wrapped(text, lineWidth, '  ', '    ');
+    });
+}
+
+function subjectName(study: Study, { subject }: Verdict): string {
+  return subject.kind === 'bus' ? busName(study, subject.id) : elementName(study, subject.id);
 }
 
 function verdictRow(study: Study, verdict: Verdict): string[] {
-  const { subject, title, value, limit, unit, margin } = verdict;
-  const name = subject.kind === 'bus' ? busName(study, subject.id) : elementName(study, subject.id);
+  const { title, value, limit, unit, margin } = verdict;
   return [
     marks[verdict.verdict],
     title,
-    name,
+    subjectName(study, verdict),
     significant(value, 4),
     significant(limit, 4),
     unit,

@@ -103,7 +103,7 @@ describe('the summary', () => {
     expect(stdout).toMatch(/Case .*\(plain\): converged/);
     expect(stdout).toMatch(/Verdicts: \d+ fail, \d+ watch, \d+ unknown, \d+ pass/);
     expect(stdout).toMatch(/Busbar +Un V +U12 V +U23 V +U31 V +U\/Un % +THD U %/);
-    expect(stdout).toMatch(/Part +at busbar +kW +kvar +cos φ +PF +A +N A +THD I %/);
+    expect(stdout).toMatch(/Part +at busbar +kW +kvar +cos φ +PF +A +neutral A +THD I %/);
   });
 
   it('never shows a number that could not be computed', () => {
