@@ -1,4 +1,4 @@
-import { formatNumber, thinSpace } from '../../study/index.ts';
+import { formatNumber } from '../../study/index.ts';
 
 /** A number ready to print and its unit, apart, because the unit is set in lighter ink. */
 export interface QuantityParts {
@@ -51,7 +51,10 @@ function tinyIsZero(value: number): number {
   return Math.abs(value) < 1e-4 ? 0 : value;
 }
 
-/** Number, thin space, unit. */
+/** Between number and unit: a thin space is lost at 11 px. */
+const UNIT_SPACE = '\u00a0';
+
+/** Number, no-break space, unit. */
 export function joinParts(parts: QuantityParts): string {
-  return parts.unit === '' ? parts.number : `${parts.number}${thinSpace}${parts.unit}`;
+  return parts.unit === '' ? parts.number : `${parts.number}${UNIT_SPACE}${parts.unit}`;
 }

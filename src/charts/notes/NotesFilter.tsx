@@ -1,6 +1,6 @@
 import type { VerdictWord } from '../../checks/types.ts';
+import { VerdictMark } from './VerdictMark.tsx';
 import type { VerdictGrouping } from './verdictOrder.ts';
-import { VERDICT_MARKS } from './verdictWords.ts';
 
 interface NotesFilterProps {
   counts: Record<VerdictWord, number>;
@@ -33,10 +33,13 @@ export function NotesFilter({ counts, shown, grouping, onShown, onGrouping }: No
             key={word}
             type="button"
             className={`word-${word}`}
+            title={`${shown.has(word) ? 'Hide' : 'Show'}: ${label}`}
             aria-pressed={shown.has(word)}
             onClick={() => toggle(word)}
           >
-            <span aria-hidden="true">{VERDICT_MARKS[word]}</span> {counts[word]} {label}
+            <VerdictMark verdict={word} size={14} hidden />
+            {counts[word]}
+            <span className="visually-hidden"> {label}</span>
           </button>
         ))}
       </fieldset>

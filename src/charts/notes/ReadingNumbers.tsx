@@ -1,9 +1,22 @@
 import type { ReadingNumber } from './readingNumbers.ts';
 
-/** Labelled numbers of a reading; units in lighter ink, the formula as a tooltip. */
+const ROWS = [1, 2, 3] as const;
+
+/** Labelled numbers of a reading, line by line; units in lighter ink, the formula as a tooltip. */
 export function ReadingNumbers({ numbers }: { numbers: readonly ReadingNumber[] }) {
   return (
-    <dl className="reading-numbers">
+    <div className="reading-numbers">
+      {ROWS.map((row) => {
+        const members = numbers.filter((one) => one.row === row);
+        return members.length > 0 && <NumberRow key={row} numbers={members} />;
+      })}
+    </div>
+  );
+}
+
+function NumberRow({ numbers }: { numbers: readonly ReadingNumber[] }) {
+  return (
+    <dl>
       {numbers.map((one) => (
         <div key={one.label} title={one.formula}>
           <dt>{one.label}</dt>

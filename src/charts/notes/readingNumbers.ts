@@ -16,6 +16,8 @@ export interface ReadingNumber {
   parts: QuantityParts;
   words?: string;
   formula: string;
+  /** Which line of the note it stands in. */
+  row: 1 | 2 | 3;
 }
 
 const ABSENT_PARTS: QuantityParts = { number: ABSENT, unit: '' };
@@ -32,12 +34,14 @@ function voltageNumbers(reading: Reading): ReadingNumber[] {
   return [
     {
       label: 'U',
+      row: 1,
       parts: rangeParts(bus.rmsLL, voltParts),
       words: 'line to line',
       formula: 'U = √(Σ U_h²), rms of all orders, line to line',
     },
     {
       label: 'U phase',
+      row: 1,
       parts: rangeParts(bus.rmsV, voltParts),
       formula: 'rms of all orders, phase to neutral',
     },
@@ -51,23 +55,24 @@ function currentNumbers(reading: Reading): ReadingNumber[] {
   if (!terminal) return [];
   const numbers: ReadingNumber[] = [
     ...powerFactors(reading),
+    thdNumber(terminal.thdPercent, 'I'),
     {
       label: 'I',
+      row: 2,
       parts: rangeParts(terminal.rmsA, ampereParts),
       formula: 'I = √(Σ I_h²), rms of all orders',
     },
-    thdNumber(terminal.thdPercent, 'I'),
     crestNumber(reading, reading.current),
-    ...powers(reading),
   ];
   if (terminal.neutralRmsA > 1e-4 * Math.max(...terminal.rmsA)) {
     numbers.push({
       label: 'I neutral',
+      row: 2,
       parts: ampereParts(terminal.neutralRmsA),
       formula: 'rms of I_L1 + I_L2 + I_L3 over all orders',
     });
   }
-  return numbers;
+  return [...numbers, ...powers(reading)];
 }
 
 function powerFactors(reading: Reading): ReadingNumber[] {
@@ -78,6 +83,7 @@ function powerFactors(reading: Reading): ReadingNumber[] {
   return [
     {
       label: 'cos φ',
+      row: 1,
       parts:
         displacementPF === null
           ? ABSENT_PARTS
@@ -87,6 +93,7 @@ function powerFactors(reading: Reading): ReadingNumber[] {
     },
     {
       label: 'PF',
+      row: 1,
       parts: truePF === null ? ABSENT_PARTS : { number: fixedNumber(Math.abs(truePF), 3), unit: '' },
       formula: 'true power factor P/Sₑ, all orders (IEEE 1459)',
     },
@@ -101,18 +108,21 @@ function powers(reading: Reading): ReadingNumber[] {
   return [
     {
       label: 'P',
+      row: 3,
       parts: power(kW, 'W'),
       ...(kW < -1e-9 ? { words: 'feeding in' } : {}),
       formula: 'P = Σ Re(V·I*), fundamental, three phases',
     },
     {
       label: 'Q',
+      row: 3,
       parts: power(Math.abs(kvar), 'var'),
       words: reactiveWords(kvar),
       formula: 'Q = Σ Im(V·I*), fundamental; inductive is lagging',
     },
     {
       label: 'S',
+      row: 3,
       parts: power(terminal.kVA, 'VA'),
       formula: 'Sₑ = 3·Vₑ·Iₑ, effective apparent power (IEEE 1459)',
     },
@@ -162,6 +172,7 @@ function thdNumber(thdPercent: readonly (number | null)[], letter: 'U' | 'I'): R
   const worst = worstThd(thdPercent);
   return {
     label: `THD(${letter})`,
+    row: letter === 'U' ? 2 : 1,
     parts: worst === null ? ABSENT_PARTS : { number: fixedNumber(worst, 1), unit: '%' },
     formula: `√(Σ_{h≥2} ${letter}_h²)/${letter}₁, worst phase`,
   };
@@ -170,13 +181,14 @@ function thdNumber(thdPercent: readonly (number | null)[], letter: 'U' | 'I'): R
 function crestNumber(reading: Reading, spectrum: PhasorSpectrum | null): ReadingNumber {
   const formula = 'crest factor: peak/rms of the waveform, √2 for a sine';
   if (reading.summation === 'alpha')
-    return { label: 'crest', parts: ABSENT_PARTS, words: 'no angles', formula };
+    return { label: 'crest', row: 2, parts: ABSENT_PARTS, words: 'no angles', formula };
   const crests = spectrum ? [0, 1, 2].map((k) => crestFactor(spectrum, k, reading.maxOrder)) : [];
   const known = crests.filter((one) => one !== null);
-  if (known.length === 0) return { label: 'crest', parts: ABSENT_PARTS, formula };
+  if (known.length === 0) return { label: 'crest', row: 2, parts: ABSENT_PARTS, formula };
   const doubtful = reading.anglesUnknown.some(Boolean);
   return {
     label: 'crest',
+    row: 2,
     parts: { number: fixedNumber(Math.max(...known), 2), unit: '' },
     ...(doubtful ? { words: 'unknown angles as 0' } : {}),
     formula,

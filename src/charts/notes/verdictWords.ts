@@ -17,21 +17,26 @@ export const PROVENANCE_WORDS: Record<Provenance, string> = {
   practice: 'common practice, no published source',
 };
 
+/** Three significant digits; zeros at the end are dropped, from a ratio only beyond its second decimal. */
+function threeDigits(value: number, unit: string): string {
+  const [whole = '', fraction = ''] = plainNumber(value, 3).split('.');
+  const kept = fraction.replace(/0+$/, '');
+  const shown = unit === '' ? kept.padEnd(Math.min(2, fraction.length), '0') : kept;
+  return shown === '' ? whole : `${whole}.${shown}`;
+}
+
 /** "1.72", "19.4 %", "—". */
 export function verdictValue(value: number | null, unit: string): string {
   if (value === null) return ABSENT;
-  const number = plainNumber(value, 3);
-  return unit === '' ? number : `${number} ${unit}`;
+  return unit === '' ? threeDigits(value, unit) : `${threeDigits(value, unit)} ${unit}`;
 }
 
-/** A limit as its document prints it: no digits added. */
+/** The limit alike; "none" where there is none. */
 export function limitValue(limit: number | null, unit: string): string {
-  if (limit === null) return 'none';
-  const number = plainNumber(limit, 3).replace(/(\.\d*?[1-9])0+$|\.0+$/, '$1');
-  return unit === '' ? number : `${number} ${unit}`;
+  return limit === null ? 'none' : verdictValue(limit, unit);
 }
 
-/** "Bank C1 · current 1.72, limit 1.3". */
+/** "Bank C1 · current 1.72, limit 1.30". */
 export function verdictHeadline(verdict: Verdict, subjectName: string): string {
   const subject = `${subjectName} · ${verdict.title}`;
   if (verdict.value === null) return subject;

@@ -1,6 +1,13 @@
 import type { FigureStyle } from '../figure/figureInk.ts';
 import { phaseAngle } from './phaseAngle.ts';
-import { angleArc, arrowHead, PHASE_DASHES, phasorScale, phasorTip } from './phasorGeometry.ts';
+import {
+  angleArc,
+  arrowHead,
+  openArrowHead,
+  PHASE_DASHES,
+  phasorScale,
+  phasorTip,
+} from './phasorGeometry.ts';
 import { magnitude, type Phasor, type ThreePhasors } from './phasorSpectrum.ts';
 import type { PhaseNames } from './phasorWords.ts';
 
@@ -75,7 +82,7 @@ function PhasorArrow(props: GroupProps & { phase: number; phasor: Phasor; scale:
   const isLit = lit !== null && lit.phase === phase && lit.quantity === quantity;
   const width = (quantity === 'voltage' ? 1.5 : style.print ? 0.9 : 1.5) * (isLit ? 1.9 : 1);
   const dash = PHASE_DASHES[phase];
-  const neck = 1 - Math.min(1, (head * 0.8) / length);
+  const neck = quantity === 'voltage' ? 1 - Math.min(1, (head * 0.8) / length) : 1;
   return (
     <g
       opacity={lit !== null && !isLit ? 0.45 : 1}
@@ -90,7 +97,17 @@ function PhasorArrow(props: GroupProps & { phase: number; phasor: Phasor; scale:
         strokeWidth={width}
         {...(dash ? { strokeDasharray: dash } : {})}
       />
-      <path d={arrowHead(tip, head)} fill={colour} />
+      {quantity === 'voltage' ? (
+        <path d={arrowHead(tip, head)} fill={colour} />
+      ) : (
+        <path
+          d={openArrowHead(tip, head)}
+          fill="none"
+          stroke={colour}
+          strokeWidth={width}
+          strokeLinejoin="round"
+        />
+      )}
       {onLit && <line x2={tip.x} y2={tip.y} stroke="transparent" strokeWidth={9} />}
     </g>
   );

@@ -24,7 +24,7 @@ export interface PhasorViewProps {
   onLit?(lit: LitPhasor | null): void;
 }
 
-const RADIUS = { small: 56, lens: 132 };
+const RADIUS = { small: 54, lens: 132 };
 
 /** Three-phase voltage and current phasors of one order, with φ drawn and given in words. */
 export function PhasorView(props: PhasorViewProps) {
@@ -37,7 +37,7 @@ export function PhasorView(props: PhasorViewProps) {
     );
   }
   const radius = RADIUS[size];
-  const half = radius + 20;
+  const half = radius + (size === 'lens' ? 20 : 15);
   const angle = phaseAngle(voltage, current);
   const words = angle ? phaseAngleWords(angle, size === 'lens' ? 1 : 0) : null;
   return (

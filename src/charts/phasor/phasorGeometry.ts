@@ -46,6 +46,20 @@ export function arrowHead(tip: Point, size: number): string {
   return `M${p(tip.x)},${p(tip.y)}L${p(bx - uy * half)},${p(by + ux * half)}L${p(bx + uy * half)},${p(by - ux * half)}Z`;
 }
 
+/** An open head for currents, so that they are told from voltages without colour. */
+export function openArrowHead(tip: Point, size: number): string {
+  const length = Math.hypot(tip.x, tip.y);
+  if (length < 0.5) return '';
+  const head = Math.min(size, length);
+  const ux = tip.x / length;
+  const uy = tip.y / length;
+  const p = (value: number) => value.toFixed(2);
+  const half = head * 0.42;
+  const bx = tip.x - ux * head;
+  const by = tip.y - uy * head;
+  return `M${p(bx - uy * half)},${p(by + ux * half)}L${p(tip.x)},${p(tip.y)}L${p(bx + uy * half)},${p(by - ux * half)}`;
+}
+
 /** Arc from one phasor's direction to another's, the short way, at a radius. */
 export function angleArc(from: Phasor, to: Phasor, radius: number, turn: number): string {
   const start = phasorTip(from, radius / magnitude(from), turn);

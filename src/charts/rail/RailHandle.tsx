@@ -25,7 +25,7 @@ export function RailHandle({ model, style, order, frequencyHz, probe }: RailHand
   const size = { width: textWidth(words, style.textSize) + 14, height: style.textSize * 1.9 };
   const flags = model.peaks.map((peak) => peak.box).filter((box): box is Box => box !== null);
   const bounds = { ...layout.words, width: layout.width - layout.words.x - 2 };
-  const box = handleLabelBox({ x, y }, size, bounds, flags);
+  const box = handleLabelBox({ x, y }, size, bounds, flags, model.curveHeights);
   return (
     <g pointerEvents="none">
       <line x1={x} x2={x} y1={0} y2={layout.axisY + 5} stroke={style.ink.accent} strokeWidth={1.5} />

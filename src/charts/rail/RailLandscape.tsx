@@ -177,7 +177,11 @@ function PeakFlag(props: { placed: PlacedPeak; style: FigureStyle; frequencyHz: 
       {box && (
         <>
           <line {...leader(placed)} stroke={colour} strokeWidth={style.print ? 0.6 : 1} />
-          {!style.print && <rect {...box} rx={3} className="rail-flag-ground" />}
+          {style.print ? (
+            <rect {...box} fill={style.ink.sheet} fillOpacity={0.85} />
+          ) : (
+            <rect {...box} rx={3} className="rail-flag-ground" />
+          )}
           <text x={box.x + 4} y={box.y + box.height * 0.76} fill={colour} fontWeight={600}>
             {placed.words}
           </text>

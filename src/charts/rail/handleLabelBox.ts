@@ -1,23 +1,27 @@
 import { type Box, sharedArea } from '../figure/box.ts';
+import { type CurveHeight, curveCrossings } from '../figure/curveCrossings.ts';
 
 const GAP = 14;
+const CURVE_COST = 2;
 
 /**
- * Where the words of the handle stand: beside it, wholly inside `bounds`, clear of the peaks' flags where
- * that can be had. Right of the handle is preferred, so that the words stay put while the handle moves.
+ * Where the words of the handle stand: beside it, wholly inside `bounds`, clear of the peaks' flags and
+ * the curves where that can be had. Right of the handle is preferred, so that the words stay put while the handle moves.
  */
 export function handleLabelBox(
   handle: { x: number; y: number },
   size: { width: number; height: number },
   bounds: Box,
   flags: readonly Box[],
+  curves: readonly CurveHeight[],
 ): Box {
   let best: { box: Box; cost: number } | null = null;
   for (const [preference, wanted] of wishes(handle, size).entries()) {
     const box = pushedInside(wanted, bounds);
     const covered = flags.reduce((sum, flag) => sum + sharedArea(box, flag), 0);
     const overHandle = sharedArea(box, { x: handle.x - 9, y: handle.y - 9, width: 18, height: 18 });
-    const cost = covered + overHandle * 4 + preference;
+    const crossings = curveCrossings(box, curves);
+    const cost = covered + overHandle * 4 + crossings * CURVE_COST + preference;
     if (!best || cost < best.cost) best = { box, cost };
   }
   return best?.box ?? { x: bounds.x, y: bounds.y, ...size };

@@ -1,4 +1,5 @@
-import { type Box, boxesMeet, boxInside } from '../figure/box.ts';
+import { type Box, boxesMeet, boxInside, sharedArea } from '../figure/box.ts';
+import { type CurveHeight, curveCrossings } from '../figure/curveCrossings.ts';
 
 /** A peak's place on the figure and the size of the words it wants to carry. */
 export interface FlagRequest {
@@ -10,27 +11,31 @@ export interface FlagRequest {
   weight: number;
 }
 
+/** What flags have to fit into and keep clear of. */
+export interface FlagRoom {
+  bounds: Box;
+  curves: readonly CurveHeight[];
+  /** Bars of the injected orders: better left free. */
+  bars: readonly Box[];
+}
+
 const SIDE_GAP = 16;
 const RISES = [-6, -20, 8, -34, 22, -48, 36, 50, 64];
-const CURVE_PENALTY = 60;
-const PROBES = 7;
+const CURVE_PENALTY = 25;
+const BAR_PENALTY = 0.5;
 
 /**
- * Boxes for the words of peaks: inside `bounds`, apart from one another and, where it can be had, off the
- * curves. The weightiest is placed first; one that finds no room gets null and is drawn as a mark alone.
- * `curves` give a curve's y at an x, or null.
+ * Boxes for the words of peaks: inside the bounds, apart from one another and, where it can be had, off the
+ * curves and bars. The weightiest is placed first; one that finds no room gets null and is drawn as a mark
+ * alone.
  */
-export function placeFlags(
-  requests: readonly FlagRequest[],
-  bounds: Box,
-  curves: readonly ((x: number) => number | null)[],
-): (Box | null)[] {
+export function placeFlags(requests: readonly FlagRequest[], room: FlagRoom): (Box | null)[] {
   const placed: Box[] = [];
   const result: (Box | null)[] = requests.map(() => null);
   const inTurn = requests.map((request, index) => ({ request, index }));
   inTurn.sort((a, b) => b.request.weight - a.request.weight || a.index - b.index);
   for (const { request, index } of inTurn) {
-    const box = bestBox(request, bounds, placed, curves);
+    const box = bestBox(request, room, placed);
     if (!box) continue;
     placed.push(box);
     result[index] = box;
@@ -38,16 +43,11 @@ export function placeFlags(
   return result;
 }
 
-function bestBox(
-  request: FlagRequest,
-  bounds: Box,
-  placed: readonly Box[],
-  curves: readonly ((x: number) => number | null)[],
-): Box | null {
+function bestBox(request: FlagRequest, room: FlagRoom, placed: readonly Box[]): Box | null {
   let best: { box: Box; cost: number } | null = null;
   for (const box of candidates(request)) {
-    if (!boxInside(box, bounds) || placed.some((other) => boxesMeet(box, other, 6))) continue;
-    const cost = curveCost(box, curves) + distance(box, request);
+    if (!boxInside(box, room.bounds) || placed.some((other) => boxesMeet(box, other, 6))) continue;
+    const cost = coveredCost(box, room) + distance(box, request);
     if (!best || cost < best.cost) best = { box, cost };
   }
   return best?.box ?? null;
@@ -61,15 +61,9 @@ function candidates({ x, y, width, height }: FlagRequest): Box[] {
   ]).filter((box) => !(y > box.y - 3 && y < box.y + height + 3 && x > box.x - 3 && x < box.x + width + 3));
 }
 
-function curveCost(box: Box, curves: readonly ((x: number) => number | null)[]): number {
-  let hits = 0;
-  for (const curve of curves) {
-    for (let i = 0; i <= PROBES; i++) {
-      const y = curve(box.x + (box.width * i) / PROBES);
-      if (y !== null && y > box.y - 2 && y < box.y + box.height + 2) hits++;
-    }
-  }
-  return hits * CURVE_PENALTY;
+function coveredCost(box: Box, room: FlagRoom): number {
+  const bars = room.bars.reduce((sum, bar) => sum + sharedArea(box, bar), 0);
+  return curveCrossings(box, room.curves) * CURVE_PENALTY + bars * BAR_PENALTY;
 }
 
 function distance(box: Box, request: FlagRequest): number {

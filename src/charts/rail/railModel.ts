@@ -2,6 +2,7 @@ import { area, line } from 'd3';
 import type { VerdictWord } from '../../checks/types.ts';
 import type { ImpedanceScan } from '../../engine/types.ts';
 import type { Box } from '../figure/box.ts';
+import type { CurveHeight } from '../figure/curveCrossings.ts';
 import { textWidth } from '../figure/textWidth.ts';
 import { type CurvePoint, type ImpedanceCurve, impedanceCurve, ohmAt, ohmExtent } from './impedanceCurve.ts';
 import { type InjectedOrder, type Injection, injectedOrders, injectionHeights } from './injections.ts';
@@ -61,6 +62,8 @@ export interface RailModel {
   allPeaks: RailPeak[];
   peaks: PlacedPeak[];
   injected: PlacedInjection[];
+  /** Heights of the drawn curves, for words that keep clear of them. */
+  curveHeights: readonly CurveHeight[];
 }
 
 export interface RailInputs {
@@ -95,6 +98,10 @@ export function railModel(
   const extent = ohmExtent(drawn, 0.5, Number.POSITIVE_INFINITY);
   const ohm = extent ? ohmAxis(extent, layout.curveTop, layout.curveBottom) : null;
   const heights = { axis, ohm };
+  const curveHeights = ohm ? drawn.map((curve) => curveHeight(curve, axis, ohm)) : [];
+  const injected = placedInjections(inputs.injected, axis, layout);
+  const bars = injected.map(({ x, height }) => ({ x: x - 4, y: layout.axisY - height, width: 8, height }));
+  const room = { axis, layout, curves: curveHeights, bars, textSize: sizes.textSize };
   const allPeaks = scan ? railPeaks(scan.with, scan.without, frequencyHz) : [];
   return {
     layout,
@@ -106,8 +113,16 @@ export function railModel(
     withoutPath: curvePath(withoutCurve, heights),
     bandPath: inputs.band && ohm ? bandPath(inputs.band, frequencyHz, axis, ohm) : null,
     allPeaks,
-    peaks: ohm ? placedPeaks(allPeaks, inputs, { axis, ohm, layout, drawn, textSize: sizes.textSize }) : [],
-    injected: placedInjections(inputs.injected, axis, layout),
+    peaks: ohm ? placedPeaks(allPeaks, inputs, { ...room, ohm }) : [],
+    injected,
+    curveHeights,
+  };
+}
+
+function curveHeight(curve: ImpedanceCurve, axis: OrderAxis, ohm: OhmAxis): CurveHeight {
+  return (x) => {
+    const value = ohmAt(curve, axis.order(x));
+    return value === null ? null : ohm.y(value);
   };
 }
 
@@ -146,7 +161,8 @@ interface PeakRoom {
   axis: OrderAxis;
   ohm: OhmAxis;
   layout: RailLayout;
-  drawn: readonly ImpedanceCurve[];
+  curves: readonly CurveHeight[];
+  bars: readonly Box[];
   textSize: number;
 }
 
@@ -163,11 +179,7 @@ function placedPeaks(allPeaks: readonly RailPeak[], inputs: RailInputs, room: Pe
     height: room.textSize * 1.35,
     weight: peakWeight(peak),
   }));
-  const curves = room.drawn.map((curve) => (x: number) => {
-    const value = ohmAt(curve, axis.order(x));
-    return value === null ? null : ohm.y(value);
-  });
-  const boxes = placeFlags(requests, layout.words, curves);
+  const boxes = placeFlags(requests, { bounds: layout.words, curves: room.curves, bars: room.bars });
   return peaks.map((placed, i) => ({
     ...placed,
     box: boxes[i] ?? null,

@@ -92,16 +92,19 @@ function Bar(props: SpectrumBarsProps & { bar: PlacedBar }) {
           {bar.words.text}
         </text>
       )}
-      {bar.fails && !bar.words && (
-        <path
-          d={`M${bar.x - 3},${bar.top - 9}l6,6m0,-6l-6,6`}
-          stroke={ink.fail}
-          strokeWidth={1.5}
-          fill="none"
-        />
+      {bar.fails && (
+        <path d={failMark(bar, style.smallSize)} stroke={ink.fail} strokeWidth={1.5} fill="none" />
       )}
     </g>
   );
+}
+
+/** ✕ left of the words of a failing bar, or over the bar itself; drawn, because not every font has the sign. */
+function failMark(bar: PlacedBar, smallSize: number): string {
+  const size = smallSize * 0.6;
+  const x = bar.words ? bar.words.x - smallSize * 0.9 : bar.x - size / 2;
+  const y = bar.words ? bar.words.y - size : bar.top - size - 3;
+  return `M${x},${y}l${size},${size}m0,${-size}l${-size},${size}`;
 }
 
 /** "h 7: 19.4 %, limit 5 %, above it". */

@@ -67,8 +67,8 @@ export function SpectrumView(props: SpectrumViewProps) {
       <ThdLine {...props} />
       <div ref={host} className="spectrum-plot" {...slider} style={{ height }}>
         <svg width={width} height={height} aria-hidden="true">
+          <OrderMark x={model.orderX(order)} slot={model.slot} bottom={model.bottom} top={model.top} />
           <SpectrumBars model={model} quantity={quantity} style={SCREEN_STYLE} />
-          <OrderMark x={model.orderX(order)} bottom={model.bottom} top={model.top} />
         </svg>
       </div>
       {props.anglesUnknown && (
@@ -78,12 +78,22 @@ export function SpectrumView(props: SpectrumViewProps) {
   );
 }
 
-function OrderMark({ x, bottom, top }: { x: number | null; bottom: number; top: number }) {
+/** A light column behind the order under the rail and a caret under it. */
+function OrderMark(props: { x: number | null; slot: number; bottom: number; top: number }) {
+  const { x, slot, bottom, top } = props;
   if (x === null) return null;
   const { ink } = SCREEN_STYLE;
+  const half = Math.max(5, slot / 2);
   return (
     <g>
-      <line x1={x} x2={x} y1={top - 6} y2={bottom} stroke={ink.accent} strokeWidth={1} strokeOpacity={0.55} />
+      <rect
+        x={x - half}
+        y={top - 4}
+        width={half * 2}
+        height={bottom - top + 4}
+        fill={ink.accent}
+        fillOpacity={0.14}
+      />
       <path d={`M${x - 4},${bottom + 6}h8l-4,-5Z`} fill={ink.accent} />
     </g>
   );
@@ -100,12 +110,13 @@ function ThdLine(props: SpectrumViewProps) {
   );
 }
 
-/** "✕ THD 20.2 % · limit 8 %", "THD 3.1 % · limit 8 %", "THD not known". */
+/** "THD 20.2 % · above the limit 8 %", "THD 3.1 % · limit 8 %", "THD not known". */
 export function thdWords(thdPercent: number | null, limit: number | undefined): string {
   if (thdPercent === null) return 'THD not known: no fundamental';
   const value = `THD ${fixedNumber(thdPercent, 1)} %`;
   if (limit === undefined) return value;
-  return `${thdPercent > limit ? '✕ ' : ''}${value} · limit ${fixedNumber(limit, limit % 1 === 0 ? 0 : 1)} %`;
+  const verb = thdPercent > limit ? 'above the limit' : 'limit';
+  return `${value} · ${verb} ${fixedNumber(limit, limit % 1 === 0 ? 0 : 1)} %`;
 }
 
 function spectrumSummary(props: SpectrumViewProps): string {

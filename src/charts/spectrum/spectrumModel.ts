@@ -34,7 +34,8 @@ export interface SpectrumPlace {
   lastOrder: number;
 }
 
-const TELLING = [5, 7, 11, 13, 3, 17, 19, 25, 23, 9, 35, 37, 49, 47, 29, 31, 41, 43, 15, 21, 2];
+const TELLING = [5, 7, 11, 13, 3, 17, 19, 25, 23, 9, 35, 37, 49, 47, 29, 31, 41, 43, 15, 21];
+const EVERY_ORDER_SLOT = 15;
 
 /** Bars, limits, labels and value words placed in figure units. */
 export function spectrumModel(bars: readonly SpectrumBar[], place: SpectrumPlace): SpectrumModel {
@@ -79,7 +80,8 @@ function percentLabel(value: number): string {
 
 function orderLabels(bars: readonly PlacedBar[], smallSize: number): { h: number; x: number }[] {
   const kept: { h: number; x: number; half: number }[] = [];
-  const inTurn = [...TELLING, ...bars.map((bar) => bar.h)];
+  const slot = bars.length > 1 ? (bars[1]?.x ?? 0) - (bars[0]?.x ?? 0) : 0;
+  const inTurn = slot >= EVERY_ORDER_SLOT ? [...TELLING, ...bars.map((bar) => bar.h)] : TELLING;
   for (const h of inTurn) {
     const bar = bars.find((one) => one.h === h);
     if (!bar || kept.some((one) => one.h === h)) continue;
@@ -100,20 +102,21 @@ function withWords(bars: readonly PlacedBar[], place: SpectrumPlace, left: numbe
     .slice(0, WORDED_BARS);
   const words = new Map<number, PlacedBar['words']>();
   for (const bar of inTurn) {
-    const text = `${bar.fails ? '✕ ' : ''}${plainNumber(bar.percent, bar.percent < 1 ? 2 : 3)} %`;
-    const size = { width: textWidth(text, place.smallSize), height: place.smallSize * 1.2 };
+    const text = `${plainNumber(bar.percent, bar.percent < 1 ? 2 : 3)} %`;
+    const mark = bar.fails ? place.smallSize : 0;
+    const size = { width: textWidth(text, place.smallSize) + mark, height: place.smallSize * 1.2 };
     const x = Math.max(left, Math.min(place.width - size.width - 1, bar.x - size.width / 2));
     const box = { x, y: bar.top - size.height - 2, ...size };
     const hidden = bars.some((other) => other.h !== bar.h && coversBar(box, other));
     if (box.y < 0 || hidden || taken.some((one) => boxesMeet(one, box, 3))) continue;
     taken.push(box);
-    words.set(bar.h, { text, x, y: bar.top - 4 });
+    words.set(bar.h, { text, x: x + mark, y: bar.top - 4 });
   }
   return bars.map((bar) => ({ ...bar, words: words.get(bar.h) ?? null }));
 }
 
 function coversBar(box: Box, bar: PlacedBar): boolean {
-  const inside = bar.x > box.x - 3 && bar.x < box.x + box.width + 3;
-  const limitHit = bar.limitY !== null && bar.limitY > box.y - 1 && bar.limitY < box.y + box.height;
-  return inside && (bar.top < box.y + box.height || limitHit);
+  const near = (reach: number) => bar.x > box.x - reach && bar.x < box.x + box.width + reach;
+  const limitHit = bar.limitY !== null && bar.limitY > box.y - 2 && bar.limitY < box.y + box.height + 2;
+  return (near(3) && bar.top < box.y + box.height) || (near(9) && limitHit);
 }

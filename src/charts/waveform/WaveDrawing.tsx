@@ -30,7 +30,7 @@ export const WaveCurves = memo(function WaveCurves({ model, layout, style, lit }
         const isLit = lit !== null && lit.phase === curve.phase && lit.quantity === curve.quantity;
         const dash = PHASE_DASHES[curve.phase];
         const voltageColour = style.ink.phases[curve.phase] ?? style.ink.voltage;
-        const width = style.print && curve.quantity === 'current' ? 0.8 : 1.5;
+        const width = lineWidth(curve.quantity, style);
         return (
           <path
             key={`${curve.quantity}${curve.phase}`}
@@ -45,6 +45,12 @@ export const WaveCurves = memo(function WaveCurves({ model, layout, style, lit }
     </g>
   );
 });
+
+/** Voltage in the stronger line, so that the two are told apart without colour. */
+function lineWidth(quantity: 'voltage' | 'current', style: FigureStyle): number {
+  if (style.print) return quantity === 'voltage' ? 1.5 : 0.8;
+  return quantity === 'voltage' ? 2 : 1.25;
+}
 
 interface WaveAxesProps {
   model: WaveModel;
@@ -80,18 +86,47 @@ export const WaveAxes = memo(function WaveAxes(props: WaveAxesProps) {
         ms
       </text>
       {model.peakV > 0 && (
-        <text x={layout.left} y={layout.top - smallSize * 0.5}>
-          u ±{joinParts(voltParts(model.peakV, 3))}
-        </text>
+        <ScaleWords
+          {...props}
+          quantity="voltage"
+          x={layout.left}
+          words={`u ±${joinParts(voltParts(model.peakV, 3))}`}
+        />
       )}
       {model.peakA > 0 && (
-        <text x={layout.right} y={layout.top - smallSize * 0.5} textAnchor="end" fill={ink.current}>
-          i ±{joinParts(ampereParts(model.peakA))}
-        </text>
+        <ScaleWords
+          {...props}
+          quantity="current"
+          x={(layout.left + layout.right) / 2}
+          words={`i ±${joinParts(ampereParts(model.peakA))}`}
+        />
       )}
     </g>
   );
 });
+
+/** A sample of the line and the peak its scale stands for. */
+function ScaleWords(props: WaveAxesProps & { quantity: 'voltage' | 'current'; x: number; words: string }) {
+  const { layout, style, quantity, x, words } = props;
+  const y = layout.top - style.smallSize * 0.5;
+  const colour = quantity === 'voltage' ? style.ink.voltage : style.ink.current;
+  const sample = style.smallSize * 1.6;
+  return (
+    <>
+      <line
+        x1={x}
+        x2={x + sample}
+        y1={y - style.smallSize * 0.35}
+        y2={y - style.smallSize * 0.35}
+        stroke={colour}
+        strokeWidth={lineWidth(quantity, style)}
+      />
+      <text x={x + sample + 5} y={y} fill={colour}>
+        {words}
+      </text>
+    </>
+  );
+}
 
 function TickRow(props: WaveAxesProps & { ticks: TimeTick[]; baseline: number; mark?: boolean }) {
   const { layout, style, ticks, baseline, mark } = props;

@@ -1,6 +1,7 @@
 import { type KeyboardEvent, type PointerEvent, useMemo, useRef } from 'react';
 import { SCREEN_STYLE } from '../figure/figureInk.ts';
 import { ampereParts, fixedNumber, joinParts, voltParts } from '../figure/quantityParts.ts';
+import { useMeasuredWidth } from '../figure/useMeasuredWidth.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
 import { WaveAxes, WaveCurves } from './WaveDrawing.tsx';
@@ -19,6 +20,7 @@ export interface WaveformViewProps {
   anglesUnknown: boolean;
   settings: WaveSettings;
   size: 'small' | 'lens';
+  /** Default: the width of its place. */
   width?: number;
   height?: number;
   /** The shared time cursor, 0…1 of a fundamental period. */
@@ -29,12 +31,13 @@ export interface WaveformViewProps {
   onSettings?(settings: WaveSettings): void;
 }
 
-const SIZES = { small: { width: 168, height: 124 }, lens: { width: 520, height: 260 } };
+const SIZES = { small: { width: 168, height: 124 }, lens: { width: 520, height: 330 } };
 
 /** v(t) and i(t) over one or two periods, with the time cursor that turns the phasors. */
 export function WaveformView(props: WaveformViewProps) {
   const { voltage, current, settings, size, maxOrder, frequencyHz, timeTurn } = props;
-  const width = props.width ?? SIZES[size].width;
+  const [host, measured] = useMeasuredWidth<HTMLElement>(SIZES[size].width);
+  const width = props.width ?? measured;
   const height = props.height ?? SIZES[size].height;
   const layout = useMemo(() => waveLayout(width, height, size === 'lens'), [width, height, size]);
   const doubt = waveDoubt(props.summation, props.anglesUnknown, settings);
@@ -44,7 +47,7 @@ export function WaveformView(props: WaveformViewProps) {
   );
   const cursor = useTimeCursor(props, layout);
   return (
-    <figure className={`wave wave-${size}`}>
+    <figure ref={host} className={`wave wave-${size}`}>
       {size === 'lens' && props.onSettings && (
         <WaveTools settings={settings} maxOrder={maxOrder} onSettings={props.onSettings} />
       )}
