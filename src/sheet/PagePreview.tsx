@@ -1,7 +1,8 @@
 import { memo } from 'react';
 import type { Figure } from './document/index.ts';
 import type { FigureComposer } from './FigureComposer.ts';
-import { type FigureMark, INKS, type PageMark, type SheetPage } from './pages/marks.ts';
+import { type FigureMark, INKS, type PageMark, type SheetPage, type TextMark } from './pages/marks.ts';
+import { faceRuns } from './pages/measure.ts';
 
 const FAMILY = '"Varwright Sans", "Varwright Marks", sans-serif';
 const TEXT_STYLE = { fontKerning: 'none', whiteSpace: 'pre' } as const;
@@ -35,6 +36,39 @@ function placeOf(mark: PageMark): string {
   return mark.kind === 'line' ? `line ${mark.x1} ${mark.y1}` : `${mark.kind} ${mark.x} ${mark.y}`;
 }
 
+/** Runs stand where the page layout put them, as in the PDF: subscripts and marks have runs of their own. */
+function TextRuns({ mark }: { mark: TextMark }) {
+  const runs = faceRuns(mark.text, mark.size, mark.weight);
+  const [only] = runs;
+  const style = {
+    fontWeight: mark.weight === 'semibold' ? 600 : 400,
+    fill: INKS[mark.ink],
+    style: TEXT_STYLE,
+  };
+  if (runs.length === 1 && only) {
+    return (
+      <text x={mark.x} y={mark.y} fontSize={mark.size} {...style}>
+        {only.text}
+      </text>
+    );
+  }
+  let x = mark.x;
+  const placed = runs.map((run) => {
+    const span = { ...run, x };
+    x += run.width;
+    return span;
+  });
+  return (
+    <text {...style}>
+      {placed.map((run) => (
+        <tspan key={run.x} x={run.x} y={mark.y + run.drop} fontSize={run.size}>
+          {run.text}
+        </tspan>
+      ))}
+    </text>
+  );
+}
+
 function Mark({ mark, ...rest }: { mark: PageMark } & Pick<PageProps, 'figures' | 'compose'>) {
   switch (mark.kind) {
     case 'figure':
@@ -63,18 +97,7 @@ function Mark({ mark, ...rest }: { mark: PageMark } & Pick<PageProps, 'figures' 
         />
       );
     case 'text':
-      return (
-        <text
-          x={mark.x}
-          y={mark.y}
-          fontSize={mark.size}
-          fontWeight={mark.weight === 'semibold' ? 600 : 400}
-          fill={INKS[mark.ink]}
-          style={TEXT_STYLE}
-        >
-          {mark.text}
-        </text>
-      );
+      return <TextRuns mark={mark} />;
   }
 }
 

@@ -1,4 +1,4 @@
-import { type Bank, busName, type Filter, fullNameOf, isOn, type Study } from '../../study/index.ts';
+import { type Bank, busName, type Filter, isOn, nameOf, type Study } from '../../study/index.ts';
 import { entered } from './formatNumber.ts';
 
 /** A bank or filter as one line names it. */
@@ -25,7 +25,9 @@ export const ratedKvar = (part: Bank | Filter): number =>
 
 function summaryOf(study: Study, part: Bank | Filter): string {
   const kvar = ratedKvar(part);
-  const where = `${fullNameOf(part)}, ${entered(kvar)} kvar at ${busName(study, part.bus)}`;
+  const name = nameOf(part);
+  const named = name.toLowerCase().includes(part.kind) ? name : `${part.kind} ${name}`;
+  const where = `${named}, ${entered(kvar)} kvar at ${busName(study, part.bus)}`;
   const out = isOn(part) ? '' : ' (out of service in the base study)';
   if (part.kind === 'filter')
     return `${where}, ${part.type}, tuned to order ${entered(part.tunedOrder)}${out}`;

@@ -32,7 +32,9 @@ function steps(rows: readonly unknown[]): string {
 }
 
 function pair(field: Field, value: readonly unknown[]): string {
-  const [first, second] = value.map((item) => (typeof item === 'number' ? entered(item) : '–'));
+  const [first, second] = value.map((item) =>
+    typeof item === 'number' ? entered(Number(item.toPrecision(4))) : '–',
+  );
   if (field.type === 'tolerance') return `${first} … +${second} %`;
   return `${first}, ${second}`;
 }

@@ -16,9 +16,15 @@ export function fixed(value: number, decimals: number): string {
   return `${value < 0 && Number(digits) !== 0 ? MINUS : ''}${grouped(digits)}`;
 }
 
-/** A number with so many significant digits, never in powers of ten. Throws RangeError unless finite. */
+/** Below this a result in trade units is the rounding noise of the solution. */
+const NOISE = 1e-7;
+
+/**
+ * A number with so many significant digits, never in powers of ten; rounding noise prints as 0.
+ * Throws RangeError unless finite.
+ */
 export function significant(value: number, digits = 3): string {
-  if (value === 0) return '0';
+  if (Math.abs(value) < NOISE) return '0';
   const exponent = Math.floor(Math.log10(Number(Math.abs(value).toPrecision(digits))));
   return fixed(value, Math.min(9, Math.max(0, digits - 1 - exponent)));
 }

@@ -58,6 +58,8 @@ export interface FigureBlock extends Figure {
   aspect: number;
   /** Drawn no wider than this, in points; absent: over the whole width. */
   widest?: number;
+  /** May be drawn smaller by this factor where more then fits on the first page. */
+  tightest?: number;
 }
 
 /** Figures side by side; their shares of the width sum to 1. */
@@ -71,6 +73,8 @@ export interface FigureRowBlock {
 /** A label in front and the words that belong to it, e.g. an equation and its source. */
 export interface TermsBlock {
   kind: 'terms';
+  /** Belongs to the block after it and stays on its page. */
+  leadsOn?: boolean;
   terms: { label: string; text: string }[];
 }
 

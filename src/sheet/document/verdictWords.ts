@@ -1,15 +1,18 @@
 import type { Verdict } from '../../checks/index.ts';
 import { signed, significant } from './formatNumber.ts';
 
-/** A value with its unit, or the word for none. */
+/** A value with its unit on one line, or the word for none. */
 export function withUnit(value: number | null, unit: string, none = 'not computed'): string {
   if (value === null || !Number.isFinite(value)) return none;
   const text = significant(value, 3);
-  return unit === '' || unit === '1' ? text : `${text} ${unit}`;
+  return unit === '' || unit === '1' ? text : `${text}\u00a0${unit}`;
 }
 
-export function marginText(verdict: Verdict): string {
-  return verdict.margin === null || !Number.isFinite(verdict.margin) ? '' : signed(verdict.margin, 2);
+/** A margin with two decimals, with more where a limit is missed by less. */
+export function marginText({ margin }: Verdict): string {
+  if (margin === null || !Number.isFinite(margin)) return '';
+  const hidden = margin < 0 && Math.abs(margin) < 0.005;
+  return hidden ? `−${significant(Math.abs(margin), 1)}` : signed(margin, 2);
 }
 
 /** Whether the verdict may decide: judged and no screening rule. */

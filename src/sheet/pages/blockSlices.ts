@@ -9,9 +9,17 @@ import { wrap } from './wrap.ts';
 
 const FIGURE_GAP = 14;
 
-function figureSlice(block: FigureBlock, width: number, tallest: number): Slice {
-  const wanted = Math.min(width, block.widest ?? width);
-  const height = Math.min(wanted * block.aspect, tallest);
+/** What blocks are set into: the width, the greatest height of a figure, and whether figures are drawn tight. */
+export interface Room {
+  width: number;
+  tallest: number;
+  tight: boolean;
+}
+
+function figureSlice(block: FigureBlock, room: Room): Slice {
+  const scale = room.tight ? (block.tightest ?? 1) : 1;
+  const wanted = Math.min(room.width, block.widest ?? room.width) * scale;
+  const height = Math.min(wanted * block.aspect, room.tallest);
   const set = height / block.aspect;
   return {
     height,
@@ -84,8 +92,9 @@ function signOffSlice(fields: SignOffField[], width: number): Slice {
   return { height: fields.length * row, marks, glued: false, gap: 8 };
 }
 
-/** A block of the document cut into pieces that pages are filled with; no figure is higher than `tallest`. */
-export function blockSlices(block: Block, width: number, tallest: number): Slice[] {
+/** A block of the document cut into pieces that pages are filled with. */
+export function blockSlices(block: Block, room: Room): Slice[] {
+  const { width } = room;
   switch (block.kind) {
     case 'heading':
       return headingSlices(block.text, block.aside, width, false);
@@ -94,11 +103,11 @@ export function blockSlices(block: Block, width: number, tallest: number): Slice
     case 'list':
       return listSlices(block.items, width);
     case 'terms':
-      return termsSlices(block.terms, width);
+      return termsSlices(block, width);
     case 'table':
       return tableSlices(block, width);
     case 'figure':
-      return [figureSlice(block, width, tallest)];
+      return [figureSlice(block, room)];
     case 'figureRow':
       return [figureRowSlice(block, width)];
     case 'caution':

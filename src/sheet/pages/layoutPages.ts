@@ -1,5 +1,5 @@
 import type { SheetDocument } from '../document/model.ts';
-import { blockSlices } from './blockSlices.ts';
+import { blockSlices, type Room } from './blockSlices.ts';
 import { type SheetPage, type SheetPages, shifted } from './marks.ts';
 import { frontFoot, frontHead, slimHead, slimHeadHeight } from './pageFrame.ts';
 import { type PlacedSlice, paginate } from './paginate.ts';
@@ -7,14 +7,17 @@ import { contentWidth, type Paper, paperOf } from './paper.ts';
 import type { Slice } from './slice.ts';
 import { headingSlices } from './textSlices.ts';
 
-function documentSlices(document: SheetDocument, width: number, tallest: number): Slice[] {
+function documentSlices(document: SheetDocument, room: Room): Slice[] {
   return document.sections.flatMap((section) => {
-    const [head, ...under] = headingSlices(section.title, section.aside, width, true);
-    const blocks = section.blocks.flatMap((block) => blockSlices(block, width, tallest));
+    const [head, ...under] = headingSlices(section.title, section.aside, room.width, true);
+    const blocks = section.blocks.flatMap((block) => blockSlices(block, room));
     if (!head) return blocks;
     return [{ ...head, section: { id: section.id, title: section.title } }, ...under, ...blocks];
   });
 }
+
+const sectionsOnFirst = (pages: PlacedSlice[][]): number =>
+  pages[0]?.filter(({ slice }) => slice.section !== undefined).length ?? 0;
 
 function pageOf(placed: PlacedSlice[], number: number, head: Slice, paper: Paper): SheetPage {
   const { left, top } = paper.margin;
@@ -38,9 +41,13 @@ export function layoutPages(document: SheetDocument): SheetPages {
   const foot = frontFoot(document, paper, '1 of 1');
   const whole = paper.height - paper.margin.top - paper.margin.bottom;
   const tallest = whole - slimHeadHeight - 60;
-  const placed = paginate(documentSlices(document, width, tallest), (page) =>
-    page === 0 ? whole - front.height - 10 - foot.height - 10 : whole - slimHeadHeight,
-  );
+  const fill = (tight: boolean): PlacedSlice[][] =>
+    paginate(documentSlices(document, { width, tallest, tight }), (page) =>
+      page === 0 ? whole - front.height - foot.height - 20 : whole - slimHeadHeight,
+    );
+  const loose = fill(false);
+  const tight = fill(true);
+  const placed = sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
   const count = placed.length;
   const pages = placed.map((slices, index) => {
     const page = `page ${index + 1} of ${count}`;

@@ -26,28 +26,56 @@ const WIDTHS: Record<Face, Map<number, number>> = {
   'varwright-marks': widthsOf('varwright-marks'),
 };
 
+/** Subscripts are not set smaller than this many points. */
+const SMALLEST = 7;
+
 /** Printed for a character none of the fonts has. */
 const STAND_IN = '□';
 
-/** Part of a line that one font draws. */
+/** Part of a line that one font draws in one size. */
 export interface FaceRun {
   face: Face;
   text: string;
   width: number;
+  size: number;
+  /** How far its baseline lies below the line's, in points: a subscript's. */
+  drop: number;
+}
+
+/** A symbol of one letter with its subscript as the trade types it: I_rms, u_k, U_C,h, P_EC-R. */
+const SUBSCRIPT = /(?<![\p{L}\p{N}_])(\p{L}\p{M}?″?)_([\p{L}\p{N}]+(?:,[\p{L}\p{N}]+)*(?:-R)?)/gu;
+const SUBSCRIPT_SIZE = 0.8;
+const SUBSCRIPT_DROP = 0.2;
+
+/** Splits text into what stands on the line and what is set as a subscript. */
+function scripts(text: string): { text: string; lowered: boolean }[] {
+  const parts: { text: string; lowered: boolean }[] = [];
+  let from = 0;
+  for (const match of text.matchAll(SUBSCRIPT)) {
+    const [, symbol = '', subscript = ''] = match;
+    parts.push({ text: text.slice(from, match.index + symbol.length), lowered: false });
+    parts.push({ text: subscript, lowered: true });
+    from = match.index + match[0].length;
+  }
+  return [...parts, { text: text.slice(from), lowered: false }].filter((part) => part.text !== '');
 }
 
 /** Splits a line into runs by the font that has each character; widths in points. */
 export function faceRuns(text: string, size: number, weight: Weight): FaceRun[] {
   const runs: FaceRun[] = [];
-  for (const character of text.normalize('NFC')) {
-    const [face, printed, width] = glyphOf(character, FACE_OF[weight]);
-    const last = runs.at(-1);
-    const points = (width * size) / 1000;
-    if (last?.face === face) {
-      last.text += printed;
-      last.width += points;
-    } else {
-      runs.push({ face, text: printed, width: points });
+  for (const part of scripts(text.normalize('NFC'))) {
+    const set = part.lowered ? Math.max(SMALLEST, size * SUBSCRIPT_SIZE) : size;
+    const drop = part.lowered ? size * SUBSCRIPT_DROP : 0;
+    for (const character of part.text) {
+      const [face, printed, width] = glyphOf(character, FACE_OF[weight]);
+      const last = runs.at(-1);
+      const points = (width * set) / 1000;
+      if (last?.face === face && last.drop === drop) {
+        last.text += printed;
+        last.width += points;
+      } else {
+        runs.push({ face, text: printed, width: points, size: set, drop });
+      }
     }
   }
   return runs;

@@ -24,6 +24,8 @@ interface Need {
 }
 
 const SIZE = TYPE.table;
+/** A head up to this width is not broken where there is room. */
+const HEAD_ROOM = 58;
 
 /** Both halves of a number; text without digits counts as whole. */
 export function halves(text: string): [whole: string, fraction: string] {
@@ -47,7 +49,8 @@ function longestWord(text: string): number {
 
 function needOf(column: Column, cells: Cell[]): Need {
   const head = Math.max(longestWord(column.head), textWidth(column.unit ?? '', SIZE));
-  const natural = Math.max(head, ...cells.map(cellWidth));
+  const easyHead = Math.max(head, Math.min(HEAD_ROOM, textWidth(column.head, SIZE)));
+  const natural = Math.max(easyHead, ...cells.map((cell) => cellWidth(cell)));
   if (column.align === 'left') {
     const marked = cells.some((cell) => cell.mark) ? MARK_WIDTH : 0;
     const words = Math.max(0, ...cells.map((cell) => longestWord(`${cell.text} ${cell.quiet ?? ''}`)));
@@ -58,18 +61,29 @@ function needOf(column: Column, cells: Cell[]): Need {
   const whole = Math.max(0, ...parts.map(([left = 0]) => left));
   const fraction = Math.max(0, ...parts.map(([, right = 0]) => right));
   const marked = cells.some((cell) => cell.mark) ? MARK_WIDTH : 0;
-  const least = Math.max(natural, whole + fraction + marked);
-  return { least, natural: least, whole, fraction };
+  const figures = Math.max(...cells.map((cell) => cellWidth(cell)), whole + fraction + marked);
+  return { least: Math.max(head, figures), natural: Math.max(easyHead, figures), whole, fraction };
 }
 
-/** Shares out the width: what each needs, then up to the natural width, then by `grow` (evenly without one). */
+/**
+ * Shares out the width: to each what it needs, then more to all alike until each has its natural width, so
+ * that short columns stop wrapping before long ones; what is left by `grow`, evenly without one.
+ */
 function shareOut(columns: Column[], needs: Need[], available: number): number[] {
   const least = needs.reduce((sum, need) => sum + need.least, 0);
   if (least > available) return squeezed(columns, needs, least - available);
-  const wish = needs.reduce((sum, need) => sum + need.natural - need.least, 0);
-  const granted = wish === 0 ? 0 : Math.min(1, (available - least) / wish);
-  const widths = needs.map((need) => need.least + granted * (need.natural - need.least));
-  const rest = available - widths.reduce((sum, width) => sum + width, 0);
+  const widths = needs.map((need) => need.least);
+  let rest = available - least;
+  for (;;) {
+    const wanting = needs.flatMap((need, k) => {
+      const lack = need.natural - (widths[k] ?? 0);
+      return lack > 0.01 ? [{ k, lack }] : [];
+    });
+    if (wanting.length === 0 || rest <= 0.01) break;
+    const more = Math.min(rest / wanting.length, ...wanting.map(({ lack }) => lack));
+    for (const { k } of wanting) widths[k] = (widths[k] ?? 0) + more;
+    rest -= more * wanting.length;
+  }
   const grow = columns.map((column) => column.grow ?? 0);
   const total = grow.reduce((sum, share) => sum + share, 0);
   return widths.map(

@@ -1,6 +1,6 @@
 import type { Cell, Row, TableBlock } from '../document/model.ts';
 import { SIGN_OF } from '../document/signs.ts';
-import type { Ink, PageMark } from './marks.ts';
+import type { Ink, PageMark, Weight } from './marks.ts';
 import { textWidth } from './measure.ts';
 import { LEADING, TYPE } from './paper.ts';
 import type { Slice } from './slice.ts';
@@ -41,29 +41,38 @@ interface CellLines {
   lines: number;
 }
 
+function signMark(cell: Cell, x: number): PageMark[] {
+  if (!cell.mark) return [];
+  const ink: Ink = cell.mark === 'unknown' ? 'quiet' : cell.mark;
+  const style = { size: SIZE, weight: 'semibold', ink, x } as const;
+  return [textMark(SIGN_OF[cell.mark], style, PADDING + baseline(SIZE))];
+}
+
+/** Lines one under the other, the first of them on line `first` of the row. */
+function linesAt(
+  lines: string[],
+  first: number,
+  style: { weight?: Weight; ink?: Ink; x: number },
+): PageMark[] {
+  return lines.map((line, index) =>
+    textMark(line, { size: SIZE, ...style }, PADDING + (first + index) * LINE + baseline(SIZE)),
+  );
+}
+
 /** A wrapped cell: its text, then what follows it in lighter ink, on the same line where there is room. */
 function leftCell(cell: Cell, placed: PlacedColumn): CellLines {
   const weight = cell.strong ? 'semibold' : 'regular';
   const x = placed.x + (cell.mark ? MARK_WIDTH : 0);
   const room = placed.width - (cell.mark ? MARK_WIDTH : 0) + 0.01;
-  const lines = wrap(cell.text, room, SIZE, weight);
-  const marks: PageMark[] = lines.map((line, index) =>
-    textMark(line, { size: SIZE, weight, x }, PADDING + index * LINE + baseline(SIZE)),
-  );
-  if (cell.quiet === undefined) return { marks, lines: lines.length };
-  const last = lines.at(-1) ?? '';
-  const after = textWidth(`${last} `, SIZE, weight);
-  if (after + textWidth(cell.quiet, SIZE) <= room) {
-    const y = PADDING + (lines.length - 1) * LINE + baseline(SIZE);
-    marks.push(textMark(cell.quiet, { size: SIZE, ink: 'quiet', x: x + after }, y));
-    return { marks, lines: lines.length };
-  }
-  const under = wrap(cell.quiet, room, SIZE);
-  under.forEach((line, index) => {
-    const y = PADDING + (lines.length + index) * LINE + baseline(SIZE);
-    marks.push(textMark(line, { size: SIZE, ink: 'quiet', x }, y));
-  });
-  return { marks, lines: lines.length + under.length };
+  const lines = cell.text === '' ? [] : wrap(cell.text, room, SIZE, weight);
+  const marks = [...signMark(cell, placed.x), ...linesAt(lines, 0, { weight, x })];
+  if (cell.quiet === undefined || cell.quiet === '') return { marks, lines: lines.length };
+  const after = textWidth(`${lines.at(-1) ?? ''} `, SIZE, weight);
+  const beside = lines.length > 0 && after + textWidth(cell.quiet, SIZE) <= room;
+  const quiet = beside ? [cell.quiet] : wrap(cell.quiet, room, SIZE);
+  const first = beside ? lines.length - 1 : lines.length;
+  marks.push(...linesAt(quiet, first, { ink: 'quiet', x: beside ? x + after : x }));
+  return { marks, lines: first + quiet.length };
 }
 
 function numberCell(cell: Cell, placed: PlacedColumn): CellLines {
@@ -74,22 +83,7 @@ function numberCell(cell: Cell, placed: PlacedColumn): CellLines {
     placed.column.align === 'decimal' && isNumeric(cell.text)
       ? right - placed.fraction - textWidth(whole, SIZE, weight)
       : right - textWidth(cell.text, SIZE, weight);
-  return {
-    marks: [textMark(cell.text, { size: SIZE, weight, x }, PADDING + baseline(SIZE))],
-    lines: 1,
-  };
-}
-
-function signMarks(cell: Cell, placed: PlacedColumn): PageMark[] {
-  if (!cell.mark) return [];
-  const ink: Ink = cell.mark === 'unknown' ? 'quiet' : cell.mark;
-  return [
-    textMark(
-      SIGN_OF[cell.mark],
-      { size: SIZE, weight: 'semibold', ink, x: placed.x },
-      PADDING + baseline(SIZE),
-    ),
-  ];
+  return { marks: [...signMark(cell, x - MARK_WIDTH), ...linesAt([cell.text], 0, { weight, x })], lines: 1 };
 }
 
 function rowSlice(row: Row, columns: PlacedColumn[], width: number, repeat: Slice): Slice {
@@ -102,8 +96,7 @@ function rowSlice(row: Row, columns: PlacedColumn[], width: number, repeat: Slic
   }
   const cells = columns.map((placed, k) => {
     const cell = row.cells[k] ?? { text: '' };
-    const set = placed.column.align === 'left' ? leftCell(cell, placed) : numberCell(cell, placed);
-    return { ...set, marks: [...signMarks(cell, placed), ...set.marks] };
+    return placed.column.align === 'left' ? leftCell(cell, placed) : numberCell(cell, placed);
   });
   const height = Math.max(1, ...cells.map((cell) => cell.lines)) * LINE + 2 * PADDING;
   const marks = cells

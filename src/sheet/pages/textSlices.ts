@@ -1,3 +1,4 @@
+import type { TermsBlock } from '../document/model.ts';
 import type { Ink, TextMark, Weight } from './marks.ts';
 import { textWidth } from './measure.ts';
 import { LEADING, TYPE } from './paper.ts';
@@ -60,7 +61,7 @@ export function listSlices(items: string[], width: number): Slice[] {
 }
 
 /** Labels in lighter ink in a column of their own, the words beside them. */
-export function termsSlices(terms: { label: string; text: string }[], width: number): Slice[] {
+export function termsSlices({ terms, leadsOn = false }: TermsBlock, width: number): Slice[] {
   const size = TYPE.table;
   const indent = Math.min(width * 0.3, 10 + Math.max(0, ...terms.map(({ label }) => textWidth(label, size))));
   return terms.flatMap(({ label, text }) => {
@@ -69,9 +70,8 @@ export function termsSlices(terms: { label: string; text: string }[], width: num
     const labels = wrap(label, indent - 8, size);
     return slices.map((slice, index) => {
       const name = labels[index];
-      return name === undefined
-        ? slice
-        : { ...slice, marks: [textMark(name, { size, ink: 'quiet' }), ...slice.marks] };
+      const label = name === undefined ? [] : [textMark(name, { size, ink: 'quiet' })];
+      return { ...slice, glued: leadsOn || slice.glued, marks: [...label, ...slice.marks] };
     });
   });
 }

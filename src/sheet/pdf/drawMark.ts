@@ -8,9 +8,9 @@ function drawText(pdf: jsPDF, mark: TextMark): void {
   for (const run of faceRuns(mark.text, mark.size, mark.weight)) {
     const { family, style, weight } = PDF_FONT[run.face];
     pdf.setFont(family, style, weight);
-    pdf.setFontSize(mark.size);
+    pdf.setFontSize(run.size);
     pdf.setTextColor(INKS[mark.ink]);
-    pdf.text(run.text, x, mark.y);
+    pdf.text(run.text, x, mark.y + run.drop);
     x += run.width;
   }
 }

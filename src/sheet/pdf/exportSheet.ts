@@ -7,6 +7,7 @@ import type { ExportOptions } from '../exportStudySheet.ts';
 import type { FigureComposer } from '../FigureComposer.ts';
 import { layoutPages } from '../pages/layoutPages.ts';
 import type { FigureMark, SheetPage } from '../pages/marks.ts';
+import { deflatePdf } from './deflatePdf.ts';
 import { drawMark } from './drawMark.ts';
 import { addFonts, type FontFiles, loadFontFiles } from './fontFiles.ts';
 import { mountFigure } from './mountFigure.ts';
@@ -96,5 +97,8 @@ export async function exportSheet(
     onProgress?.({ done, total, what: `page ${page.number} of ${count}` });
     await tasks.turn();
   }
-  return pdf.output('blob');
+  const plain = new Uint8Array(pdf.output('arraybuffer'));
+  await tasks.turn();
+  const parts = await deflatePdf(plain, () => tasks.pause());
+  return new Blob(parts, { type: 'application/pdf' });
 }

@@ -57,7 +57,7 @@ function dataOf(study: Study, owner: Owner): Datum[] {
     if (value === undefined) return [];
     if (given === undefined && (field.key === 'on' || field.type === 'rows')) return [];
     const recorded = originOf(study, owner.paths, field.key);
-    const origin = given === undefined ? 'assumed (default)' : (recorded ?? 'entered, origin not stated');
+    const origin = given === undefined ? 'default, assumed' : (recorded ?? 'not stated');
     return [{ label: field.label, value, origin: recorded && given === undefined ? recorded : origin }];
   });
 }
@@ -92,12 +92,12 @@ function generalRows(study: Study): Row[] {
     {
       label: 'orders solved',
       value: `1 to ${study.maxOrder ?? 50}`,
-      origin: study.maxOrder === undefined ? 'assumed (default)' : 'entered',
+      origin: study.maxOrder === undefined ? 'default, assumed' : 'entered',
     },
     {
       label: 'summation of harmonics',
       value: study.summation === 'alpha' ? 'IEC 61000-3-6 law' : 'phasors, all sources together',
-      origin: study.summation === undefined ? 'assumed (default)' : 'entered',
+      origin: study.summation === undefined ? 'default, assumed' : 'entered',
     },
   ];
   return [{ kind: 'group', text: 'System and criteria' }, ...rowsOf([...system, ...criteria])];
@@ -111,7 +111,7 @@ function busRows(study: Study): Row[] {
     return {
       label: nameOf(bus),
       value: `${fieldValue(study, nominalField(), bus.nominalV) ?? ''}${pcc}${withstand}`,
-      origin: originOf(study, paths, 'nominalV') ?? 'entered, origin not stated',
+      origin: originOf(study, paths, 'nominalV') ?? 'not stated',
     };
   });
   return [{ kind: 'group', text: 'Busbars', aside: 'nominal voltage line to line' }, ...rowsOf(data)];
@@ -143,7 +143,7 @@ export function dataSection(view: SheetView): Section {
   const blocks: Block[] = [
     {
       kind: 'paragraph',
-      text: 'Values of the base study; what a case changes stands under “Operating cases”. Where no value was entered the default was used and is an assumption, to be checked against the nameplate.',
+      text: 'Values of the base study; what a case changes stands under “Operating cases”. “Default, assumed”: no value was entered, and the default stands in for it until checked against the nameplate. “Not stated”: entered without an origin.',
     },
     { kind: 'table', columns: columns(), rows, notes: [] },
   ];

@@ -7,6 +7,8 @@ import { byMargin, counted, decides, marginText, withUnit } from '../verdictWord
 
 /** Points for one unit of the drawing at most: letters of 12 units become 9 points. */
 const LARGEST_SCALE = 0.75;
+/** Letters of 12 units stay above 7.5 points. */
+const TIGHTEST = 0.85;
 
 const shownWords = (view: SheetView): string =>
   view.shownIsBusiest ? `${view.shown.name}, the busiest case` : view.shown.name;
@@ -29,6 +31,7 @@ export function drawingSection(view: SheetView): Section {
         request: { kind: 'drawing', caseId: view.shown.id },
         label: `Single-line diagram, ${view.shown.name}`,
         aspect: size ? size.height / size.width : 0.5,
+        tightest: TIGHTEST,
         ...(size ? { widest: size.width * LARGEST_SCALE } : {}),
       },
     ],
@@ -40,13 +43,13 @@ export function frontImpedanceSection(view: SheetView): Section | undefined {
   const scan = view.shown.computed?.scans.find(({ withCorrection }) => withCorrection.error === undefined);
   if (!scan) return undefined;
   const { bus, sequence } = scan.withCorrection;
-  const compared = scan.without ? '; thin: every bank and filter out of service' : '';
+  const compared = scan.without ? '; dashed: every bank and filter out of service' : '';
   const figure: FigureBlock = {
     kind: 'figure',
     id: 'front-impedance',
     request: { kind: 'impedance', caseId: view.shown.id, bus, sequence },
     label: `Impedance at ${busName(view.study, bus)}, ${view.shown.name}`,
-    aspect: 0.26,
+    aspect: 0.21,
   };
   return {
     id: 'front-impedance',

@@ -103,7 +103,7 @@ export function impedanceSection(view: SheetView): Section {
   return {
     id: 'impedance',
     title: 'Impedance and resonances',
-    aside: 'thick: as studied; thin: every bank and filter out of service',
+    aside: 'full line: as studied; dashed: every bank and filter out of service',
     blocks: [
       ...curves.flatMap((curve, index) => figureBlocks(view, curve, index)),
       {

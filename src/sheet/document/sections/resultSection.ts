@@ -33,9 +33,9 @@ function correctionLine(view: SheetView): string {
   const power = most && solution ? sitePower(most.studyHere, solution) : undefined;
   const without = most ? solvedWithout(most) : undefined;
   const bare = most && without ? sitePower(most.studyHere, without) : undefined;
-  const where = most ? `in the busiest case, ${most.name}` : '';
+  const where = most ? `In the busiest case, ${most.name}` : '';
   if (parts.length === 0) {
-    const now = power ? `: ${cosPhiInWords(power)} ${where}` : '';
+    const now = power ? `. ${where}: ${cosPhiInWords(power)}` : '';
     return sentence(`the study holds no bank or filter; the site is shown as it stands${now}`);
   }
   const what =
@@ -46,8 +46,8 @@ function correctionLine(view: SheetView): string {
           4,
         )} kvar in all`;
   if (!power) return sentence(`${what}; the power factor was not computed: no case with a source was solved`);
-  const compared = bare ? `, ${cosPhiInWords(bare)} without` : '';
-  return sentence(`${what}: ${cosPhiInWords(power)}${compared}, ${where}`);
+  const compared = bare ? ` with the correction, ${cosPhiInWords(bare)} without` : '';
+  return sentence(`${what}. ${where}: ${cosPhiInWords(power)}${compared}`);
 }
 
 function place(view: SheetView, verdict: Verdict): string {
@@ -88,27 +88,51 @@ function bindingLine(view: SheetView): string {
   return sentence(`the smallest margin among the limits kept is ${marginText(first)}: ${place(view, first)}`);
 }
 
+/** Cases whose power factor misses its target with every bank and filter out of service. */
+function powerFactorsMissed(view: SheetView): string[] {
+  return view.cases.flatMap((item) => {
+    const judged = view.verdicts.find(
+      ({ check, caseId, limit }) =>
+        check === 'target-pf' && caseId === item.id && limit !== null && limit <= 1,
+    );
+    const without = solvedWithout(item);
+    const power = without ? sitePower(item.studyHere, without) : undefined;
+    const limit = judged?.unit === '' ? judged.limit : null;
+    if (limit === null || power?.cosPhi === undefined) return [];
+    if (power.kvar <= 0 || power.cosPhi >= limit) return [];
+    return [`${cosPhiInWords(power)} against ${withUnit(limit, '')} (${item.name})`];
+  });
+}
+
+function limitsMissed(view: SheetView, compared: readonly Verdict[]): string[] {
+  const missed = new Map<string, string>();
+  for (const verdict of compared) {
+    if (verdict.withoutCorrection?.verdict !== 'fail') continue;
+    const label = `${verdict.title} at ${subjectName(view.study, verdict)}`;
+    if (missed.has(label)) continue;
+    const value = withUnit(verdict.withoutCorrection.value, verdict.unit);
+    missed.set(label, `${label}, ${value} (${caseName(view, verdict.caseId)})`);
+  }
+  return [...missed.values()];
+}
+
 /** What fails with every bank and filter out of service. */
 function withoutLine(view: SheetView): string {
-  const parts = correctionOf(view.study);
-  if (parts.length === 0) return 'With no correction in the study there is nothing to compare it with.';
+  if (correctionOf(view.study).length === 0) {
+    return 'With no correction in the study there is nothing to compare it with.';
+  }
   const compared = view.verdicts.filter(({ withoutCorrection }) => withoutCorrection !== undefined);
-  if (compared.length === 0) return 'The site without the correction has not been judged.';
-  const failing = compared.filter(({ withoutCorrection }) => withoutCorrection?.verdict === 'fail');
-  if (failing.length === 0) {
+  const powerFactors = powerFactorsMissed(view);
+  if (compared.length === 0 && powerFactors.length === 0) {
+    return 'The site without the correction has not been judged.';
+  }
+  const missed = [...powerFactors, ...limitsMissed(view, compared)];
+  if (missed.length === 0) {
     return `Without the correction none of the ${counted(compared.length, 'verdict')} compared fails.`;
   }
-  const seen = new Set<string>();
-  const named = failing.flatMap((verdict) => {
-    const label = `${verdict.title} at ${subjectName(view.study, verdict)}`;
-    if (seen.has(label)) return [];
-    seen.add(label);
-    const value = withUnit(verdict.withoutCorrection?.value ?? null, verdict.unit);
-    return [`${label} (${value}, ${caseName(view, verdict.caseId)})`];
-  });
-  const more = named.length - 2;
+  const more = missed.length - 3;
   return sentence(
-    `without the correction ${named.length === 1 ? 'fails' : 'fail'}: ${named.slice(0, 2).join('; ')}${more > 0 ? `; and ${more} more` : ''}`,
+    `without the correction ${missed.length === 1 ? 'this fails' : 'these fail'}: ${missed.slice(0, 3).join('; ')}${more > 0 ? `; and ${more} more` : ''}`,
   );
 }
 

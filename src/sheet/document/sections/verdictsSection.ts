@@ -1,11 +1,10 @@
 import type { Verdict } from '../../../checks/index.ts';
 import { cells } from '../cells.ts';
 import { byCheck, checkWords } from '../checkWords.ts';
-import { significant } from '../formatNumber.ts';
 import type { Block, Row, Section } from '../model.ts';
 import { provenanceNote, sourceWithMark } from '../provenance.ts';
 import { caseName, type SheetView, subjectName } from '../SheetView.ts';
-import { byMargin, marginText } from '../verdictWords.ts';
+import { byMargin, marginText, withUnit } from '../verdictWords.ts';
 
 /** The value all items share; undefined where they differ. */
 function shared<T>(items: readonly T[]): T | undefined {
@@ -17,36 +16,33 @@ function stepsOf(verdict: Verdict): Verdict['working'] {
   return verdict.check === 'bus-order' ? verdict.working.slice(0, 1) : verdict.working;
 }
 
-function workingText(verdict: Verdict, equationSaid: boolean, sourceSaid: boolean): string {
+function workingText(verdict: Verdict, equationSaid: boolean): string {
   const steps = stepsOf(verdict).map(({ equation, numbers }, index) =>
     equationSaid && index === 0 ? numbers : `${equation}: ${numbers}`,
   );
-  const source = sourceSaid ? [] : [sourceWithMark(verdict.source)];
-  return [...steps, ...source].filter((text) => text !== '').join('; ');
+  return steps.filter((text) => text !== '').join('; ');
 }
 
-function remarkText(verdict: Verdict): string {
+const closed = (text: string): string => (/[.!?)]$/.test(text) ? text : `${text}.`);
+
+/** What a verdict remarks besides what all verdicts of its list say. */
+function remarksOf(verdict: Verdict): string[] {
   const mend = verdict.mend !== undefined && !verdict.remarks.includes(verdict.mend) ? [verdict.mend] : [];
   const screening = verdict.screening ? ['Screening rule: it never fails and never decides.'] : [];
-  const bare = verdict.withoutCorrection;
-  const value =
-    bare?.value === null || bare === undefined ? '' : ` (${significant(bare.value, 3)} ${verdict.unit})`;
-  const without = bare ? [`Without the correction: ${bare.verdict}${value.replace(' )', ')')}.`] : [];
-  return [...without, ...verdict.remarks, ...screening, ...mend]
-    .map((text) => (/[.!?)]$/.test(text) ? text : `${text}.`))
-    .join(' ');
+  return [...verdict.remarks, ...screening, ...mend].map(closed);
 }
 
-function rowOf(view: SheetView, verdict: Verdict, unitSaid: boolean, working: string): Row {
-  const number = (value: number | null): string => {
-    if (value === null || !Number.isFinite(value)) return 'none';
-    return unitSaid || verdict.unit === ''
-      ? significant(value, 3)
-      : `${significant(value, 3)} ${verdict.unit}`;
-  };
+function withoutText({ withoutCorrection, unit }: Verdict): string[] {
+  if (!withoutCorrection) return [];
+  const { value, verdict } = withoutCorrection;
+  return [`Without the correction: ${verdict}${value === null ? '' : `, ${withUnit(value, unit)}`}.`];
+}
+
+function rowOf(view: SheetView, verdict: Verdict, unitSaid: boolean, working: string, said: string[]): Row {
+  const number = (value: number | null): string => withUnit(value, unitSaid ? '' : verdict.unit, 'none');
   const order =
     verdict.order !== undefined && Number.isInteger(verdict.order) ? `, order ${verdict.order}` : '';
-  const remarks = remarkText(verdict);
+  const remarks = [...withoutText(verdict), ...remarksOf(verdict).filter((text) => !said.includes(text))];
   return cells(
     { text: verdict.verdict, mark: verdict.verdict },
     `${subjectName(view.study, verdict)}${order}`,
@@ -54,22 +50,43 @@ function rowOf(view: SheetView, verdict: Verdict, unitSaid: boolean, working: st
     number(verdict.value),
     number(verdict.limit),
     { text: marginText(verdict) || 'none', strong: true },
-    remarks === '' ? { text: working } : { text: working, quiet: remarks },
+    { text: working, quiet: remarks.join(' ') },
   );
+}
+
+/** Remarks that every one of several verdicts makes. */
+function commonRemarks(verdicts: readonly Verdict[]): string[] {
+  const [first, ...rest] = verdicts.map(remarksOf);
+  if (!first || rest.length === 0) return [];
+  return first.filter((text) => rest.every((remarks) => remarks.includes(text)));
+}
+
+/** Verdicts under the source they were judged by, in the order of their smallest margin. */
+function bySource(sorted: readonly Verdict[]): [source: string, verdicts: Verdict[]][] {
+  const groups = new Map<string, Verdict[]>();
+  for (const verdict of sorted) {
+    const source = sourceWithMark(verdict.source);
+    groups.set(source, [...(groups.get(source) ?? []), verdict]);
+  }
+  return [...groups];
 }
 
 function checkBlocks(view: SheetView, check: string, verdicts: readonly Verdict[]): Block[] {
   const sorted = [...verdicts].sort(byMargin);
   const equation = shared(sorted.map((verdict) => stepsOf(verdict)[0]?.equation ?? ''));
-  const source = shared(sorted.map(({ source: item }) => sourceWithMark(item)));
   const unit = shared(sorted.map((verdict) => verdict.unit));
+  const sources = bySource(sorted);
+  const said = commonRemarks(sorted);
   const terms = [
     ...(equation ? [{ label: 'equation', text: equation }] : []),
-    ...(source ? [{ label: 'source', text: source }] : []),
+    ...(sources.length === 1 && sources[0] ? [{ label: 'source', text: sources[0][0] }] : []),
+    ...said.map((text) => ({ label: 'remark', text })),
   ];
   const unitHead = unit === undefined || unit === '' ? {} : { unit };
+  const rowFor = (verdict: Verdict): Row =>
+    rowOf(view, verdict, unit !== undefined, workingText(verdict, Boolean(equation)), said);
   const blocks: Block[] = [{ kind: 'heading', text: checkWords(check, sorted) }];
-  if (terms.length > 0) blocks.push({ kind: 'terms', terms });
+  if (terms.length > 0) blocks.push({ kind: 'terms', terms, leadsOn: true });
   blocks.push({
     kind: 'table',
     columns: [
@@ -81,9 +98,10 @@ function checkBlocks(view: SheetView, check: string, verdicts: readonly Verdict[
       { head: 'margin', align: 'decimal' },
       { head: 'numbers put in, and remarks', align: 'left', grow: 1 },
     ],
-    rows: sorted.map((verdict) =>
-      rowOf(view, verdict, unit !== undefined, workingText(verdict, Boolean(equation), source !== undefined)),
-    ),
+    rows: sources.flatMap(([source, list]): Row[] => [
+      ...(sources.length === 1 ? [] : [{ kind: 'group' as const, text: source }]),
+      ...list.map(rowFor),
+    ]),
     notes: [],
   });
   return blocks;
