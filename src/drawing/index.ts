@@ -1,7 +1,15 @@
+export { Drawing, type DrawingProps } from './Drawing.tsx';
+export { type TrayKind, trayNames } from './gestures/TrayKind.ts';
 export { type Palette, printPalette, screenPalette } from './glyphs/Palette.ts';
+export { SymbolGlyph, type SymbolGlyphProps } from './glyphs/SymbolGlyph.tsx';
+export { removeSelection } from './keyboard/useDrawingKeys.ts';
 export * from './layout/index.ts';
+export { Outline, type OutlineProps } from './outline/Outline.tsx';
+export type { ImpedanceProbe } from './readings/busReading.ts';
 export { type BusFigure, type Figures, figuresOf, type PartFigure } from './readings/figures.ts';
 export type { ReadingMode } from './readings/ReadingMode.ts';
 export { StaticDrawing, type StaticDrawingProps } from './StaticDrawing.tsx';
+export { busSubject, partSubject, readSubject, type Subject, selectedIds } from './subject.ts';
 export type { Primitive, SymbolShape } from './symbols/primitives.ts';
 export { symbolPaths, symbolShape } from './symbols/symbolShape.ts';
+export { Tray, type TrayProps } from './tray/Tray.tsx';

@@ -1,0 +1,66 @@
+import { memo } from 'react';
+import type { Layout } from '../layout/index.ts';
+import type { Figures } from '../readings/figures.ts';
+import { busSubject, partSubject, type Subject } from '../subject.ts';
+import { BusView } from './BusView.tsx';
+import { PartView } from './PartView.tsx';
+
+export interface DrawingContentsProps {
+  layout: Layout;
+  figures: Figures;
+  letters: ReadonlyMap<Subject, string>;
+  selection: readonly Subject[];
+  /** The subject holding the tab stop. */
+  current: Subject | undefined;
+  /** Lit by a hovered note. */
+  lit: Subject | null;
+  held: string | undefined;
+  targetBus: string | undefined;
+  focusBus: string;
+  hatchId: string;
+}
+
+/** Parts first, busbars over their conductors. */
+export const DrawingContents = memo(function DrawingContents(props: DrawingContentsProps) {
+  const { layout, figures, letters, selection, current, lit, hatchId } = props;
+  const selected = new Set(selection);
+  return (
+    <>
+      {layout.parts.map((place) => {
+        const figure = figures.parts.get(place.id);
+        const subject = partSubject(place.id);
+        return figure ? (
+          <PartView
+            key={place.id}
+            place={place}
+            figure={figure}
+            letters={letters.get(subject) ?? ''}
+            selected={selected.has(subject)}
+            current={current === subject}
+            lit={lit === subject}
+            held={props.held === place.id}
+            hatchId={hatchId}
+          />
+        ) : null;
+      })}
+      {layout.buses.map((place) => {
+        const figure = figures.buses.get(place.id);
+        const subject = busSubject(place.id);
+        return figure ? (
+          <BusView
+            key={place.id}
+            place={place}
+            figure={figure}
+            letters={letters.get(subject) ?? ''}
+            selected={selected.has(subject)}
+            current={current === subject}
+            lit={lit === subject}
+            target={props.targetBus === place.id}
+            focus={props.focusBus === place.id}
+            hatchId={hatchId}
+          />
+        ) : null;
+      })}
+    </>
+  );
+});

@@ -1,0 +1,134 @@
+import { memo } from 'react';
+import { trayNames } from '../gestures/TrayKind.ts';
+import { screenPalette } from '../glyphs/Palette.ts';
+import { PartGlyph } from '../glyphs/PartGlyph.tsx';
+import { measures, type PartPlace, textWidth } from '../layout/index.ts';
+import type { PartFigure } from '../readings/figures.ts';
+import { verdictWords } from '../readings/worstVerdict.ts';
+import { partSubject } from '../subject.ts';
+import { symbolShape } from '../symbols/symbolShape.ts';
+import { asButton } from './asButton.ts';
+
+export interface PartViewProps {
+  place: PartPlace;
+  figure: PartFigure;
+  letters: string;
+  selected: boolean;
+  /** Holds the drawing's one tab stop. */
+  current: boolean;
+  /** Spoken of by a note under the pointer. */
+  lit: boolean;
+  /** In the hand. */
+  held: boolean;
+  hatchId: string;
+}
+
+function sameFigure(a: PartFigure, b: PartFigure): boolean {
+  return (
+    a.element === b.element &&
+    a.name === b.name &&
+    a.plate === b.plate &&
+    a.mark === b.mark &&
+    a.off === b.off &&
+    a.dead === b.dead &&
+    a.lines.length === b.lines.length &&
+    a.lines.every((line, at) => line === b.lines[at]) &&
+    Object.entries(a.widths).every(([bus, width]) => b.widths[bus] === width)
+  );
+}
+
+function sameProps(a: PartViewProps, b: PartViewProps): boolean {
+  return (
+    a.place === b.place &&
+    a.letters === b.letters &&
+    a.selected === b.selected &&
+    a.current === b.current &&
+    a.lit === b.lit &&
+    a.held === b.held &&
+    sameFigure(a.figure, b.figure)
+  );
+}
+
+/** Symbol box and text box of a part, around its symbol's centre. */
+export function partBoxes(place: PartPlace, figure: PartFigure) {
+  const shape = symbolShape(figure.element);
+  const [w, h] = place.hang === 'across' ? [shape.reach * 2, shape.width] : [shape.width, shape.reach * 2];
+  const symbol = { x: -w / 2 - 5, y: -h / 2 - 5, width: w + 10, height: h + 10 };
+  const text = { ...place.label, x: place.label.x - place.x, y: place.label.y - place.y };
+  return { symbol, text };
+}
+
+function spoken(figure: PartFigure, letters: string): string {
+  const { element, name, plate, lines, mark } = figure;
+  const verdict = mark ? verdictWords[mark] : '';
+  const notes = letters ? `notes ${letters}` : '';
+  return [trayNames[element.kind], name, plate, ...lines, verdict, notes].filter(Boolean).join(', ');
+}
+
+/** One part on the drawing, with its hit areas, selection frame and foot handles. */
+export const PartView = memo(function PartView(props: PartViewProps) {
+  const { place, figure, letters, selected, current, lit, held, hatchId } = props;
+  const { symbol, text } = partBoxes(place, figure);
+  const classes = ['part', selected && 'selected', lit && 'lit', held && 'held'].filter(Boolean).join(' ');
+  return (
+    <g
+      className={classes}
+      data-subject={partSubject(place.id)}
+      {...asButton(selected)}
+      aria-label={spoken(figure, letters)}
+      tabIndex={current ? 0 : -1}
+      style={{ transform: `translate(${place.x}px, ${place.y}px)` }}
+    >
+      <rect className="hit" {...symbol} />
+      <rect className="hit" {...text} />
+      {place.ends.map((end) => (
+        <polyline
+          key={end.bus}
+          className="hit-line"
+          points={end.path.map((p) => `${p.x - place.x},${p.y - place.y}`).join(' ')}
+        />
+      ))}
+      <rect className="frame" {...symbol} rx={3} />
+      <ReadingHatch place={place} figure={figure} hatchId={hatchId} />
+      <PartGlyph place={place} figure={figure} palette={screenPalette} letters={letters} />
+      {selected && place.foot && <Handles place={place} />}
+    </g>
+  );
+}, sameProps);
+
+/** Shown while the readings are older than the drawing. */
+function ReadingHatch({ place, figure, hatchId }: Pick<PartViewProps, 'place' | 'figure' | 'hatchId'>) {
+  if (figure.lines.length === 0 || figure.off) return null;
+  const width = Math.max(...figure.lines.map((line) => textWidth(line)));
+  const middle = place.align === 'middle';
+  const x = (middle ? place.label.x + (place.label.width - width) / 2 : place.label.x) - place.x;
+  const y = place.label.y - place.y + (place.oneLine ? 1 : 2) * measures.LINE_PX;
+  return (
+    <rect
+      className="reading-hatch"
+      x={x}
+      y={y}
+      width={width}
+      height={figure.lines.length * measures.LINE_PX}
+      fill={`url(#${hatchId})`}
+    />
+  );
+}
+
+/** The two ends of a selected series part, to be dragged to other busbars. */
+function Handles({ place }: { place: PartPlace }) {
+  return place.ends.map((end) => {
+    const touch = end.path[0];
+    if (!touch) return null;
+    return (
+      <circle
+        key={end.bus}
+        className="handle"
+        data-end={end.bus}
+        cx={touch.x - place.x}
+        cy={touch.y - place.y}
+        r={6}
+      />
+    );
+  });
+}
