@@ -1,39 +1,24 @@
 import type { Bus } from '../study/index.ts';
-import { busById } from '../study/index.ts';
 import { informsOnly, informsRemark, namedSource, noLimitWords } from './busThd.ts';
 import type { CheckContext } from './CheckContext.ts';
-import { angleRemark, orderPercent } from './distortion.ts';
+import { angleRemarks, type BusSpectrum, busSpectrum, orderPercent } from './distortion.ts';
 import { figure, ordinal } from './figure.ts';
 import { voltageSetFor } from './limits/choice.ts';
+import { limitsByOrder, type OrderLimit } from './limits/limitsByOrder.ts';
 import { margin, verdictWord, WATCH_MARGIN } from './margin.ts';
-import { type OrderRow, orderRows } from './orderTable.ts';
-import type { Source, Verdict, Working } from './types.ts';
+import type { Verdict, Working } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
+
+/** Orders at this share of their limit or more are listed in the working. */
+const LISTED_SHARE = 0.1;
 
 /**
  * Single harmonic voltages (bus-order): per busbar the order nearest to its limit, and every further order
- * that fails or is worth watching. The working lists all orders present.
+ * that fails or is worth watching. The working lists the orders at a tenth of their limit or more; all
+ * orders stand in orderTable.
  */
 export function busOrder(context: CheckContext): Verdict[] {
   return context.study.buses.flatMap((bus) => atBus(context, bus));
-}
-
-interface JudgedOrder {
-  h: number;
-  percent: number;
-  limit: number;
-  source: Source;
-  margin: number;
-}
-
-function judgeable(rows: readonly OrderRow[]): JudgedOrder[] {
-  return rows
-    .flatMap(({ h, percent, limit, source }) =>
-      percent === null || limit === null || source === null
-        ? []
-        : [{ h, percent, limit, source, margin: margin(percent, limit) }],
-    )
-    .sort((a, b) => a.margin - b.margin || a.h - b.h);
 }
 
 function atBus(context: CheckContext, bus: Bus): Verdict[] {
@@ -48,93 +33,112 @@ function atBus(context: CheckContext, bus: Bus): Verdict[] {
     source: namedSource(choice),
     working: [],
   };
-  if (!context.solved.energised(bus.id))
+  const spectrum = busSpectrum(context.solved, bus);
+  if (!spectrum || !context.solved.energised(bus.id)) {
     return [unknown(row, 'the busbar has no path to a source in this case')];
-  const rows = orderRows(context.study, context.solved, bus.id, isPcc);
-  const orders = judgeable(rows);
-  const worst = orders[0];
-  if (!worst) return [unknown(row, noLimitWords(choice, bus))];
-  const screening = informsOnly(choice, isPcc);
-  const shown = orders.filter((order, index) => index === 0 || order.margin < WATCH_MARGIN);
-  const table = allOrders(orders);
-  const silent = silentWords(rows);
-  return shown.map((order) => {
-    const remarks = [
-      angleRemark(context.solved, context.solved.anglesUnknown(order.h) ? [order.h] : []),
-      screening ? informsRemark : '',
-      silent,
-    ];
-    return judged({
-      ...row,
-      ...beforeCorrection(context, bus, order, screening),
-      title: `${ordinal(order.h)} harmonic voltage`,
-      order: order.h,
-      source: order.source,
-      value: order.percent,
-      limit: order.limit,
-      screening,
-      working: [inNumbers(context, bus, order), table],
-      remarks: remarks.filter((sentence) => sentence !== ''),
-      mend: mendWords(context, bus, order),
-    });
+  }
+  const limits = 'set' in choice ? limitsByOrder(choice.set, bus.nominalV) : [];
+  const shown = nearestToLimit(spectrum, limits);
+  if (shown.length === 0) return [unknown(row, noLimitWords(choice, bus))];
+  row.screening = informsOnly(choice, isPcc);
+  const table = listing(spectrum, limits);
+  const silent = silentWords(spectrum, limits);
+  return shown.map((limit) => atOrder(context, bus, row, spectrum, limit, table, silent));
+}
+
+/** The limit with the smallest margin first, then those below the watch margin in order of margin. */
+function nearestToLimit(spectrum: BusSpectrum, limits: readonly (OrderLimit | null)[]): OrderLimit[] {
+  const near: { limit: OrderLimit; margin: number }[] = [];
+  let worst: { limit: OrderLimit; margin: number } | null = null;
+  for (let h = 2; h <= spectrum.percent.length; h++) {
+    const limit = limits[h - 2];
+    if (!limit) continue;
+    const found = margin(spectrum.percent[h - 1] ?? 0, limit.value);
+    if (found < WATCH_MARGIN) near.push({ limit, margin: found });
+    if (!worst || found < worst.margin) worst = { limit, margin: found };
+  }
+  if (near.length === 0) return worst ? [worst.limit] : [];
+  return near.sort((a, b) => a.margin - b.margin).map(({ limit }) => limit);
+}
+
+function atOrder(
+  context: CheckContext,
+  bus: Bus,
+  row: Row,
+  spectrum: BusSpectrum,
+  limit: OrderLimit,
+  table: Working,
+  silent: readonly string[],
+): Verdict {
+  const { h } = limit;
+  const percent = spectrum.percent[h - 1] ?? 0;
+  const before = beforePercent(context, bus, h);
+  const remarks = angleRemarks(context.solved, context.solved.anglesUnknown(h) ? [h] : []);
+  if (row.screening) remarks.push(informsRemark);
+  remarks.push(...silent);
+  return judged({
+    ...row,
+    title: `${ordinal(h)} harmonic voltage`,
+    order: h,
+    source: limit.source,
+    value: percent,
+    limit: limit.value,
+    working: [inNumbers(context, bus, h, spectrum.phase[h - 1] ?? 0, percent), table],
+    remarks,
+    mend: () => mendWords(h, percent, before),
+    ...(before === null
+      ? {}
+      : {
+          withoutCorrection: {
+            value: before,
+            verdict: verdictWord(margin(before, limit.value), row.screening),
+          },
+        }),
   });
 }
 
-function inNumbers(context: CheckContext, bus: Bus, order: JudgedOrder): Working {
-  const phase = orderPercent(context.solved, bus, order.h)?.phase ?? 0;
+function beforePercent(context: CheckContext, bus: Bus, h: number): number | null {
+  const without = context.without();
+  return without?.energised(bus.id) ? orderPercent(without, bus, h) : null;
+}
+
+function inNumbers(context: CheckContext, bus: Bus, h: number, phase: number, percent: number): Working {
   const index = context.solved.bus(bus.id);
-  const volts = context.solved.volts(index, order.h, phase);
+  const volts = context.solved.volts(index, h, phase);
   const fundamental = context.solved.volts(index, 1, phase);
   return {
-    equation: `U_${order.h} / U_1, worst phase`,
-    numbers: `L${phase + 1}: ${figure(volts)} V / ${figure(fundamental)} V = ${figure(order.percent)} %`,
+    equation: `U_${h} / U_1, worst phase`,
+    numbers: `L${phase + 1}: ${figure(volts)} V / ${figure(fundamental)} V = ${figure(percent)} %`,
   };
 }
 
-function allOrders(orders: readonly JudgedOrder[]): Working {
-  const present = orders.filter((order) => order.percent >= 0.005).sort((a, b) => a.h - b.h);
-  const numbers = present.map(
-    ({ h, percent, limit }) => `${h}: ${figure(percent, 3)} of ${figure(limit, 3)} %`,
-  );
+function listing(spectrum: BusSpectrum, limits: readonly (OrderLimit | null)[]): Working {
+  const items: string[] = [];
+  for (let h = 2; h <= spectrum.percent.length; h++) {
+    const percent = spectrum.percent[h - 1] ?? 0;
+    const limit = limits[h - 2];
+    if (limit && percent >= LISTED_SHARE * limit.value)
+      items.push(`${h}: ${figure(percent, 3)} of ${limit.text} %`);
+  }
   return {
-    equation: 'h: U_h of its limit',
-    numbers: numbers.length > 0 ? numbers.join('; ') : 'no harmonic voltage',
+    equation: 'h: U_h of its limit, a tenth and more',
+    numbers: items.length > 0 ? items.join('; ') : 'no order reaches a tenth of its limit',
   };
 }
 
 /** Orders with voltage but no limit in the set are named, not passed over. */
-function silentWords(rows: readonly OrderRow[]): string {
-  const orders = rows
-    .filter(({ percent, limit }) => limit === null && (percent ?? 0) >= 0.1)
-    .map(({ h }) => h);
-  return orders.length === 0
-    ? ''
-    : `The set states no limit for ${orders.join(', ')}; these orders carry 0.1 % or more.`;
-}
-
-function mendWords(context: CheckContext, bus: Bus, order: JudgedOrder): string {
-  const without = context.without();
-  const before = without ? orderPercent(without, bus, order.h)?.percent : undefined;
-  if (before !== undefined && before < order.percent) {
-    return `The correction raises it from ${figure(before, 3)} %: detune the bank so that its series resonance lies below the ${ordinal(order.h)}, or move the steps away from the resonance.`;
+function silentWords(spectrum: BusSpectrum, limits: readonly (OrderLimit | null)[]): string[] {
+  const orders: number[] = [];
+  for (let h = 2; h <= spectrum.percent.length; h++) {
+    if (!limits[h - 2] && (spectrum.percent[h - 1] ?? 0) >= 0.1) orders.push(h);
   }
-  return `Fit a filter tuned just below the ${ordinal(order.h)}, or lower the emission with chokes or a higher pulse number.`;
+  if (orders.length === 0) return [];
+  return [`The set states no limit for ${orders.join(', ')}; there U_h is 0.1 % or more.`];
 }
 
-function beforeCorrection(
-  context: CheckContext,
-  bus: Bus,
-  order: JudgedOrder,
-  screening: boolean,
-): Pick<Row, 'withoutCorrection'> {
-  const without = context.without();
-  const known = busById(context.study, bus.id);
-  const before = without?.energised(bus.id) && known ? orderPercent(without, known, order.h) : null;
-  if (!before) return {};
-  return {
-    withoutCorrection: {
-      value: before.percent,
-      verdict: verdictWord(margin(before.percent, order.limit), screening),
-    },
-  };
+function mendWords(h: number, percent: number, before: number | null): string {
+  if (before !== null && before < percent) {
+    return `The correction raises it from ${figure(before, 3)} %: detune the bank so that its series resonance lies below the ${ordinal(h)}, or move the steps away from the resonance.`;
+  }
+  return `Fit a filter tuned just below the ${ordinal(h)}, or lower the emission with chokes or a higher pulse number.`;
 }

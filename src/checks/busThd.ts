@@ -1,6 +1,6 @@
 import type { Bus } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
-import { angleRemark, thdPercent, unknownAngleOrders } from './distortion.ts';
+import { angleRemarks, thdPercent, unknownAngleOrders } from './distortion.ts';
 import { figure } from './figure.ts';
 import { type Choice, voltageSetFor } from './limits/choice.ts';
 import { thdLimit } from './limits/voltageLimit.ts';
@@ -62,10 +62,10 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
       },
     ],
     remarks: [
-      angleRemark(context.solved, unknownAngleOrders(context.solved, bus)),
-      screening ? informsRemark : '',
-    ].filter((sentence) => sentence !== ''),
-    mend: mendWords(context, bus, thd.percent),
+      ...angleRemarks(context.solved, unknownAngleOrders(context.solved, bus)),
+      ...(screening ? [informsRemark] : []),
+    ],
+    mend: () => mendWords(context, bus, thd.percent),
   });
 }
 

@@ -1,7 +1,7 @@
 import type { Study } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { type CapacitorDuty, capacitorDuty } from './capacitorDuty.ts';
-import { angleRemark } from './distortion.ts';
+import { angleRemarks } from './distortion.ts';
 import { figure } from './figure.ts';
 import { highestSupply } from './highestSupply.ts';
 import {
@@ -63,8 +63,8 @@ function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): P
     return capacitorDuty(scaled, units.xcOhm, units.ratedV);
   });
   const ratedA = duties[0]?.ratedA ?? 0;
-  const angles = angleRemark(context.solved, unknownOrders(context, units, ratedA));
-  const remarks = [angles, set.capacitor?.remark ?? ''].filter((sentence) => sentence !== '');
+  const remarks = angleRemarks(context.solved, unknownOrders(context, units, ratedA));
+  if (set.capacitor?.remark) remarks.push(set.capacitor.remark);
   return {
     set,
     duties,

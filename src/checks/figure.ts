@@ -1,15 +1,20 @@
 /**
- * A number as the working shows it: four significant digits (or as asked), no exponent, trailing
- * zeros kept off, the minus sign U+2212. RangeError for a number that is not finite.
+ * A number as the working shows it: four significant digits (or as asked), whole numbers kept whole, no
+ * exponent, no trailing zeros, the minus sign U+2212. RangeError for a number that is not finite.
  */
 export function figure(value: number, digits = 4): string {
   if (!Number.isFinite(value)) throw new RangeError(`${value} cannot be shown: a finite number is needed`);
-  if (value === 0) return '0';
-  const magnitude = Math.floor(Math.log10(Math.abs(value)));
-  const decimals = Math.max(0, Math.min(12, digits - 1 - magnitude));
-  const text = Math.abs(value).toFixed(decimals);
-  const short = text.includes('.') ? text.replace(/\.?0+$/, '') : text;
-  return value < 0 && Number(short) !== 0 ? `−${short}` : short;
+  const size = Math.abs(value);
+  const text = size >= 10 ** (digits - 1) ? String(Math.round(size)) : fraction(size, digits);
+  return value < 0 && text !== '0' ? `−${text}` : text;
+}
+
+function fraction(size: number, digits: number): string {
+  if (size === 0) return '0';
+  // Number → String is the shortest form and has no exponent from 1e-6 upwards.
+  if (size >= 1e-6) return String(Number(size.toPrecision(digits)));
+  const text = size.toFixed(12).replace(/0+$/, '');
+  return text === '0.' ? '0' : text;
 }
 
 /** "2nd", "3rd", "5th", "21st", "11th". */

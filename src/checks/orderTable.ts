@@ -1,9 +1,9 @@
 import type { CaseSolution } from '../engine/index.ts';
 import type { Study } from '../study/index.ts';
 import { busById } from '../study/index.ts';
-import { orderPercent } from './distortion.ts';
+import { busSpectrum } from './distortion.ts';
 import { voltageSetFor } from './limits/choice.ts';
-import { voltageLimit } from './limits/voltageLimit.ts';
+import { limitsByOrder } from './limits/limitsByOrder.ts';
 import { pccBusesOf } from './pcc.ts';
 import { SolvedCase } from './SolvedCase.ts';
 import type { Source } from './types.ts';
@@ -20,29 +20,21 @@ export interface OrderRow {
 
 /**
  * U_h in per cent of U_1 for every order 2…maxOrder at a busbar, worst phase, in the magnitudes the checks
- * judge, beside the limit of the set that judges this busbar. Empty for a case without a solution.
+ * judge, beside the limit of the set that judges this busbar. Empty for a case without a solution;
+ * RangeError for a busbar the study does not have.
  */
 export function orderTable(study: Study, solution: CaseSolution, busId: string): OrderRow[] {
   const bus = busById(study, busId);
   if (!bus) throw new RangeError(`the study has no busbar "${busId}"`);
   if (!solution.converged) return [];
-  return orderRows(study, new SolvedCase(solution), busId, pccBusesOf(study).has(busId));
-}
-
-/** orderTable for a case already prepared. */
-export function orderRows(study: Study, solved: SolvedCase, busId: string, isPcc: boolean): OrderRow[] {
-  const bus = busById(study, busId);
-  if (!bus) throw new RangeError(`the study has no busbar "${busId}"`);
-  const choice = voltageSetFor(study, isPcc);
-  const rows: OrderRow[] = [];
-  for (let h = 2; h <= solved.maxOrder; h++) {
-    const limit = 'set' in choice ? voltageLimit(choice.set, h, bus.nominalV) : null;
-    rows.push({
-      h,
-      percent: orderPercent(solved, bus, h)?.percent ?? null,
-      limit: limit?.value ?? null,
-      source: limit?.source ?? null,
-    });
-  }
-  return rows;
+  const solved = new SolvedCase(solution);
+  const choice = voltageSetFor(study, pccBusesOf(study).has(busId));
+  const limits = 'set' in choice ? limitsByOrder(choice.set, bus.nominalV) : [];
+  const spectrum = busSpectrum(solved, bus);
+  return Array.from({ length: Math.max(0, solved.maxOrder - 1) }, (_, index) => ({
+    h: index + 2,
+    percent: spectrum?.percent[index + 1] ?? null,
+    limit: limits[index]?.value ?? null,
+    source: limits[index]?.source ?? null,
+  }));
 }

@@ -46,12 +46,17 @@ export function parallelPeaks(
     const here = square[i] ?? 0;
     const right = square[i + 1] ?? 0;
     if (!(here < left && here <= right)) continue;
-    const step = (network.order[i + 1] ?? 0) - (network.order[i] ?? 0);
-    const curvature = left - 2 * here + right;
-    const shift = curvature > 0 ? (0.5 * (left - right)) / curvature : 0;
-    peaks.push((network.order[i] ?? 0) + shift * step);
+    const [a, b, c] = [network.order[i - 1] ?? 0, network.order[i] ?? 0, network.order[i + 1] ?? 0];
+    peaks.push(parabolaVertex(a, b, c, left, here, right));
   }
   return peaks;
+}
+
+/** Abscissa of the extremum of the parabola through three points, spacing free; b where they lie on a line. */
+function parabolaVertex(a: number, b: number, c: number, ya: number, yb: number, yc: number): number {
+  const left = (b - a) * (yb - yc);
+  const right = (b - c) * (yb - ya);
+  return left === right ? b : b - ((b - a) * left - (b - c) * right) / (2 * (left - right));
 }
 
 /** The peak and present order that lie closest, by |h_r − h|/h; null where either list is empty. */

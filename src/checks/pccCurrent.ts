@@ -2,7 +2,7 @@ import type { Bus } from '../study/index.ts';
 import { busById } from '../study/index.ts';
 import { namedSource } from './busThd.ts';
 import type { CheckContext } from './CheckContext.ts';
-import { angleRemark } from './distortion.ts';
+import { angleRemarks } from './distortion.ts';
 import { figure, ordinal } from './figure.ts';
 import { inflowAt } from './inflow.ts';
 import { currentSetFor } from './limits/choice.ts';
@@ -86,7 +86,7 @@ function tdd(
   const unknownOrders = amperes.flatMap((ampere, index) =>
     index > 0 && ampere > 1e-3 * demandA && context.solved.anglesUnknown(index + 1) ? [index + 1] : [],
   );
-  const angles = angleRemark(context.solved, unknownOrders);
+  const angles = angleRemarks(context.solved, unknownOrders);
   return judged({
     ...row,
     value,
@@ -99,7 +99,7 @@ function tdd(
         numbers: `${figure(harmonicA)} A / ${figure(demandA)} A = ${figure(value)} %`,
       },
     ],
-    remarks: [...(row.remarks ?? []), ...(angles === '' ? [] : [angles])],
+    remarks: [...(row.remarks ?? []), ...angles],
     mend: 'Filter the lowest large order, or lower the emission with chokes or a higher pulse number.',
   });
 }
@@ -125,7 +125,7 @@ function orders(
   return found
     .filter((order, index) => index === 0 || order.margin < WATCH_MARGIN)
     .map(({ h, percent, limit }) => {
-      const angles = angleRemark(context.solved, context.solved.anglesUnknown(h) ? [h] : []);
+      const angles = angleRemarks(context.solved, context.solved.anglesUnknown(h) ? [h] : []);
       return judged({
         ...row,
         check: 'pcc-order',
@@ -141,7 +141,7 @@ function orders(
             numbers: `${figure((percent * demandA) / 100)} A / ${figure(demandA)} A = ${figure(percent)} %`,
           },
         ],
-        remarks: [...(row.remarks ?? []), ...(angles === '' ? [] : [angles])],
+        remarks: [...(row.remarks ?? []), ...angles],
         mend: `Fit a filter tuned just below the ${ordinal(h)}, or lower the emission with chokes or a higher pulse number.`,
       });
     });

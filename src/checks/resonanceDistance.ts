@@ -12,8 +12,8 @@ import type { Verdict, Working } from './types.ts';
 import { judged, keptQuietly, type Row, unknown } from './verdict.ts';
 
 const LIMIT = 0.15;
-/** Grid of the search in orders; peaks are then refined, the worst one by the engine. */
-const GRID = 0.1;
+/** Ratio of neighbouring orders in the search, fine against the 15 % asked; peaks are then refined. */
+const GRID_RATIO = 1.02;
 const COMBINATION_CAP = 256;
 
 /**
@@ -126,8 +126,9 @@ function networkWithout(
   toOrder: number,
 ): OrderCurve | null {
   const fn = context.study.frequencyHz;
-  const points = Math.ceil((toOrder - 1) / GRID) + 1;
-  const span = { bus: bank.bus, sequence: content, fromHz: fn, toHz: fn * (1 + (points - 1) * GRID), points };
+  const points = Math.ceil(Math.log(toOrder) / Math.log(GRID_RATIO)) + 1;
+  const frequencyHz = Float64Array.from({ length: points }, (_, k) => fn * GRID_RATIO ** k);
+  const span = { bus: bank.bus, sequence: content, frequencyHz };
   const scan = context.scan(span, new Set([bank.id, ...setting.out]), setting.kvar);
   return scan.error === undefined ? admittanceOf(scan.frequencyHz, scan.re, scan.im, fn) : null;
 }
@@ -138,9 +139,9 @@ function refined(context: CheckContext, bank: Bank, meeting: Meeting): Meeting {
   const span = {
     bus: bank.bus,
     sequence: meeting.content,
-    fromHz: fn * Math.max(0.5, meeting.peak - 3 * GRID),
-    toHz: fn * (meeting.peak + 3 * GRID),
-    points: 25,
+    fromHz: (fn * meeting.peak) / GRID_RATIO ** 2,
+    toHz: fn * meeting.peak * GRID_RATIO ** 2,
+    points: 17,
   };
   const steps = new Map(meeting.others.kvar).set(bank.id, meeting.kvar);
   const scan = context.scan(span, meeting.others.out, steps);

@@ -1,7 +1,7 @@
 import type { Transformer } from '../study/index.ts';
 import { isOn, nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
-import { angleRemark } from './distortion.ts';
+import { angleRemarks } from './distortion.ts';
 import { figure } from './figure.ts';
 import { SolvedCase } from './SolvedCase.ts';
 import { type HarmonicLoss, harmonicLoss, permissibleLoad } from './transformerHeating.ts';
@@ -134,6 +134,5 @@ function remarksOf(context: CheckContext, side: Side): string[] {
       orders.push(h);
     }
   }
-  const sentence = angleRemark(context.solved, orders);
-  return sentence === '' ? [] : [sentence];
+  return angleRemarks(context.solved, orders);
 }

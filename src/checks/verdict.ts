@@ -1,7 +1,7 @@
 import type { ResultsCheck } from '../engine/types.ts';
 import { margin, type Sense, verdictWord } from './margin.ts';
 import { sourceText } from './source.ts';
-import type { Source, Verdict, Working } from './types.ts';
+import type { Source, Verdict, VerdictWord, Working } from './types.ts';
 
 /** What every verdict names, judged or not. */
 export interface Row {
@@ -25,47 +25,56 @@ export interface JudgedRow extends Row {
   limit: number;
   reference?: number;
   sense?: Sense;
-  /** What would mend it; kept off a pass. */
-  mend?: string;
+  /** What would mend it; asked for only when it is no pass. */
+  mend?: string | (() => string);
 }
 
-function keyOf(row: Row): string {
-  const parts = [row.check, row.subject.id];
-  if (row.part !== undefined) parts.push(row.part);
-  else if (row.order !== undefined && Number.isInteger(row.order)) parts.push(String(row.order));
-  return parts.join('|');
+function keyOf({ check, subject, part, order }: Row): string {
+  if (part !== undefined) return `${check}|${subject.id}|${part}`;
+  return order !== undefined && Number.isInteger(order)
+    ? `${check}|${subject.id}|${order}`
+    : `${check}|${subject.id}`;
 }
 
-function common(row: Row): Omit<Verdict, 'value' | 'limit' | 'margin' | 'verdict'> {
-  return {
+interface Outcome {
+  value: number | null;
+  limit: number | null;
+  margin: number | null;
+  verdict: VerdictWord;
+  remarks: string[];
+  mend?: string | undefined;
+}
+
+function build(row: Row, outcome: Outcome): Verdict {
+  const verdict: Verdict = {
     key: keyOf(row),
     check: row.check,
     title: row.title,
     subject: row.subject,
     caseId: row.caseId,
+    value: outcome.value,
+    limit: outcome.limit,
     unit: row.unit,
+    margin: outcome.margin,
+    verdict: outcome.verdict,
     screening: row.screening ?? false,
     working: row.working,
     source: row.source,
-    remarks: row.remarks ?? [],
-    ...(row.order === undefined ? {} : { order: row.order }),
-    ...(row.withoutCorrection === undefined ? {} : { withoutCorrection: row.withoutCorrection }),
+    remarks: outcome.remarks,
   };
+  if (row.order !== undefined) verdict.order = row.order;
+  if (row.withoutCorrection !== undefined) verdict.withoutCorrection = row.withoutCorrection;
+  if (outcome.mend !== undefined) verdict.mend = outcome.mend;
+  return verdict;
 }
 
 /** A verdict from a value and its limit. */
 export function judged(row: JudgedRow): Verdict {
-  const screening = row.screening ?? false;
-  const marginValue = margin(row.value, row.limit, row.reference, row.sense);
-  const verdict = verdictWord(marginValue, screening);
-  return {
-    ...common(row),
-    value: row.value,
-    limit: row.limit,
-    margin: marginValue,
-    verdict,
-    ...(verdict === 'pass' || row.mend === undefined ? {} : { mend: row.mend }),
-  };
+  const { value, limit } = row;
+  const marginValue = margin(value, limit, row.reference, row.sense);
+  const verdict = verdictWord(marginValue, row.screening);
+  const mend = verdict === 'pass' ? undefined : typeof row.mend === 'function' ? row.mend() : row.mend;
+  return build(row, { value, limit, margin: marginValue, verdict, remarks: row.remarks ?? [], mend });
 }
 
 /** No verdict: `missing` says in a sentence which data would allow one. A known value is still shown. */
@@ -75,14 +84,8 @@ export function unknown(
   value: number | null = null,
   limit: number | null = null,
 ): Verdict {
-  return {
-    ...common({ ...row, remarks: [missing, ...(row.remarks ?? [])] }),
-    value,
-    limit,
-    margin: null,
-    verdict: 'unknown',
-    mend: missing,
-  };
+  const remarks = [missing, ...(row.remarks ?? [])];
+  return build(row, { value, limit, margin: null, verdict: 'unknown', remarks, mend: missing });
 }
 
 /** Kept without a margin to form: nothing is there for the limit to act on; `why` says so. */
@@ -92,13 +95,7 @@ export function keptQuietly(
   value: number | null = null,
   limit: number | null = null,
 ): Verdict {
-  return {
-    ...common({ ...row, remarks: [why, ...(row.remarks ?? [])] }),
-    value,
-    limit,
-    margin: null,
-    verdict: 'pass',
-  };
+  return build(row, { value, limit, margin: null, verdict: 'pass', remarks: [why, ...(row.remarks ?? [])] });
 }
 
 /** A verdict as the results file writes it (study format §8). */
