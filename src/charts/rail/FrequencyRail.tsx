@@ -125,6 +125,7 @@ export function FrequencyRail(props: FrequencyRailProps) {
               order={order}
               frequencyHz={frequencyHz}
               probe={probe}
+              exact={props.probe !== null}
             />
           </svg>
         </div>

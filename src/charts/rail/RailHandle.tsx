@@ -12,16 +12,18 @@ interface RailHandleProps {
   order: number;
   frequencyHz: number;
   probe: Probe | null;
+  /** The probe was solved at this order, not read off the scan. */
+  exact: boolean;
 }
 
 /** The handle on the curve with its line through the axis and its words beside it. */
-export function RailHandle({ model, style, order, frequencyHz, probe }: RailHandleProps) {
+export function RailHandle({ model, style, order, frequencyHz, probe, exact }: RailHandleProps) {
   const { layout, axis, ohm, withCurve } = model;
   if (order < axis.domain.low || order > axis.domain.high) return null;
   const x = axis.x(order);
   const onCurve = withCurve ? ohmAt(withCurve, order) : null;
   const y = ohm && onCurve !== null ? ohm.y(onCurve) : (layout.curveTop + layout.axisY) / 2;
-  const words = handleWords(order, frequencyHz, probe);
+  const words = handleWords(order, frequencyHz, probe, exact);
   const size = { width: textWidth(words, style.textSize) + 14, height: style.textSize * 1.9 };
   const flags = model.peaks.map((peak) => peak.box).filter((box): box is Box => box !== null);
   const bounds = { ...layout.words, width: layout.width - layout.words.x - 2 };

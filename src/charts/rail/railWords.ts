@@ -8,11 +8,12 @@ export interface Probe {
   im: number;
 }
 
-/** "h 7.000 · 350 Hz · 625 mΩ ∠ 27°". */
-export function handleWords(order: number, frequencyHz: number, probe: Probe | null): string {
+/** "h 7.000 · 350 Hz · 625 mΩ ∠ 27°"; a value read off the scan instead of solved is marked ≈. */
+export function handleWords(order: number, frequencyHz: number, probe: Probe | null, exact = true): string {
   const place = `h ${fixedNumber(order, 3)} · ${hertz(order * frequencyHz)}`;
   if (!probe) return `${place} · impedance not known`;
-  return `${place} · ${joinParts(ohmParts(Math.hypot(probe.re, probe.im)))} ∠ ${angle(probe)}°`;
+  const size = joinParts(ohmParts(Math.hypot(probe.re, probe.im)));
+  return `${place} · ${exact ? '' : '≈ '}${size} ∠ ${angle(probe)}°`;
 }
 
 /** The same for a screen reader, in whole words. */
