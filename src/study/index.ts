@@ -5,6 +5,7 @@ export { addPin, type End, moveEnd, removePin, reorderAlong, setPins } from './e
 export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
 export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } from './edits/copyParts.ts';
 export { makeEdit, type Patch, sameData } from './edits/edit.ts';
+export { errorsAfter, joinEdits } from './edits/errorsAfter.ts';
 export { originOf, originPath, originsOf, setOrigin } from './edits/origins.ts';
 export { doomedWith, removeBus, removeParts } from './edits/removeParts.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';

@@ -48,8 +48,17 @@ const longestValue = 80;
 export function valueText(value: unknown): string {
   if (value === undefined) return 'absent';
   if (typeof value === 'number') return String(value);
-  const json = JSON.stringify(value) ?? typeof value;
+  const json = jsonText(value);
   return json.length > longestValue ? `${json.slice(0, longestValue - 1)}…` : json;
+}
+
+/** Data nested thousands deep overflow the stack of any writer; they are named, not shown. */
+function jsonText(value: unknown): string {
+  try {
+    return JSON.stringify(value) ?? typeof value;
+  } catch {
+    return 'data that cannot be written';
+  }
 }
 
 /** Places an issue in the study: `where` names the record in words, `at` is its path. */

@@ -1,0 +1,43 @@
+import type { ReactNode } from 'react';
+import type { DataOrigin, Field, Finding } from '../../study/index.ts';
+import { OriginMark } from './OriginMark.tsx';
+
+export interface FieldRowProps {
+  id: string;
+  field: Field;
+  unit: string;
+  /** Wide controls stand below their label. */
+  wide: boolean;
+  findings: readonly Finding[];
+  origin?: DataOrigin | undefined;
+  /** Absent where an origin makes no sense. */
+  onOrigin?: ((origin: DataOrigin | null) => void) | undefined;
+  /** What the case or the base study says otherwise. */
+  remark?: ReactNode;
+  children: ReactNode;
+}
+
+/** One line of the nameplate: label, value, unit, origin mark; findings and remarks below. */
+export function FieldRow(props: FieldRowProps) {
+  const { id, field, unit, wide, findings, origin, onOrigin, remark, children } = props;
+  const title = field.typical ? `${field.help}\nTypical: ${field.typical}` : field.help;
+  return (
+    <div className={wide ? 'slip-row slip-row-wide' : 'slip-row'}>
+      <label htmlFor={id} title={title}>
+        {field.label}
+      </label>
+      <div className="slip-value">{children}</div>
+      <span className="slip-unit">{unit}</span>
+      {onOrigin ? <OriginMark label={field.label} origin={origin} onChange={onOrigin} /> : <span />}
+      <span id={`${id}-help`} className="slip-hidden">
+        {title}
+      </span>
+      {remark && <div className="slip-remark">{remark}</div>}
+      {findings.map((finding) => (
+        <p key={finding.code + finding.path} className="slip-finding" data-severity={finding.severity}>
+          <span aria-hidden="true">{finding.severity === 'error' ? '✕' : '!'}</span> {finding.message}
+        </p>
+      ))}
+    </div>
+  );
+}

@@ -1,0 +1,121 @@
+import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
+import { allowedOf, editText, formatNumber, type NumberField, parseQuantity } from '../../study/index.ts';
+import { isInside, stepValue } from './stepValue.ts';
+
+export interface QuantityInputProps {
+  id: string;
+  field: NumberField;
+  value: number | undefined;
+  /** Shown as placeholder and taken as the start of the arrow keys where the value is absent. */
+  fallback?: number | undefined;
+  /** Accessible name where no visible label points here. */
+  label?: string;
+  describedBy?: string;
+  onFocus?(): void;
+  /** Takes the value, or undefined to fall back; returns why it cannot, as a sentence. */
+  onCommit(value: number | undefined): string | null;
+}
+
+/** Arrow presses in a row make one edit: it is made when they pause this long. */
+const arrowPauseMs = 300;
+
+/**
+ * A number with its unit as text: read on Enter and on leaving, put back by Escape, stepped by the arrows.
+ * What was understood stands below while it differs from what was typed; an error stays until it is mended.
+ */
+export function QuantityInput(props: QuantityInputProps) {
+  const { id, field, value, fallback, label, describedBy } = props;
+  const [draft, setDraft] = useState<string | null>(null);
+  const [error, setError] = useState<string | null>(null);
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
+  const standing = value === undefined ? '' : editText(value);
+  const text = draft ?? standing;
+  const said = draft !== null && error === null ? sayConversion(draft, field) : null;
+  useEffect(() => () => clearTimeout(timer.current), []);
+
+  const commit = (typed: string) => {
+    clearTimeout(timer.current);
+    const outcome = typed.trim() === standing ? null : read(typed, field, props.onCommit);
+    setError(outcome);
+    if (outcome === null) setDraft(null);
+  };
+  const stepBy = (direction: 1 | -1, coarse: boolean) => {
+    const typed = parseQuantity(text, field.unit);
+    const from = typed.ok ? typed.value : (value ?? fallback ?? 0);
+    const next = editText(stepValue(from, direction, field, coarse));
+    setDraft(next);
+    setError(null);
+    clearTimeout(timer.current);
+    timer.current = setTimeout(() => commit(next), arrowPauseMs);
+  };
+  const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
+    if (event.key === 'Enter') commit(text);
+    else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
+      event.preventDefault();
+      stepBy(event.key === 'ArrowUp' ? 1 : -1, event.shiftKey);
+    } else if (event.key === 'Escape' && (draft !== null || error !== null)) {
+      event.preventDefault();
+      clearTimeout(timer.current);
+      setDraft(null);
+      setError(null);
+    }
+  };
+  const notes = [error !== null ? `${id}-error` : null, said !== null ? `${id}-said` : null, describedBy];
+  return (
+    <>
+      <input
+        id={id}
+        className="slip-quantity"
+        type="text"
+        autoComplete="off"
+        spellCheck={false}
+        aria-label={label}
+        aria-invalid={error !== null}
+        aria-describedby={notes.filter(Boolean).join(' ') || undefined}
+        placeholder={fallback === undefined ? undefined : formatNumber(fallback)}
+        value={text}
+        onChange={(event) => {
+          setDraft(event.target.value);
+          setError(null);
+        }}
+        onFocus={(event) => {
+          event.target.select();
+          props.onFocus?.();
+        }}
+        onBlur={() => draft !== null && commit(text)}
+        onKeyDown={onKeyDown}
+      />
+      {said !== null && (
+        <span id={`${id}-said`} className="slip-said" role="status">
+          {said}
+        </span>
+      )}
+      {error !== null && (
+        <span id={`${id}-error`} className="slip-error" role="alert">
+          {error}
+        </span>
+      )}
+    </>
+  );
+}
+
+function read(
+  typed: string,
+  field: NumberField,
+  onCommit: (value: number | undefined) => string | null,
+): string | null {
+  if (typed.trim() === '') {
+    return field.required ? `A value is needed: ${allowedOf(field)}.` : onCommit(undefined);
+  }
+  const parsed = parseQuantity(typed, field.unit);
+  if (!parsed.ok) return parsed.error;
+  if (field.type === 'integer' && !Number.isInteger(parsed.value)) return `Allowed is ${allowedOf(field)}.`;
+  if (!isInside(parsed.value, field))
+    return `${formatNumber(parsed.value)} is out of range; allowed is ${allowedOf(field)}.`;
+  return onCommit(parsed.value);
+}
+
+function sayConversion(draft: string, field: NumberField): string | null {
+  const parsed = parseQuantity(draft, field.unit);
+  return parsed.ok && parsed.said.includes(' = ') ? parsed.said : null;
+}

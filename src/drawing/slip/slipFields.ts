@@ -1,0 +1,49 @@
+import type { Field, FieldType } from '../../study/index.ts';
+
+/** Fields with a place of their own at the head of the slip. */
+const headKeys: ReadonlySet<string> = new Set(['name', 'on']);
+
+/** Data a reviewer asks the origin of; names, places and choices have none. */
+const withOrigin: ReadonlySet<FieldType> = new Set([
+  'number',
+  'integer',
+  'vectorGroup',
+  'spectrum',
+  'rows',
+  'steps',
+  'skin',
+  'tolerance',
+]);
+
+export interface SlipSections {
+  main: Field[];
+  /** Under "more". */
+  rare: Field[];
+  groups: Extract<Field, { type: 'group' }>[];
+}
+
+/** The fields of a record as the slip lays them out, its busbars last; opaque data belongs to other places of the screen. */
+export function slipSections(fields: readonly Field[]): SlipSections {
+  const shown = fields.filter((field) => !headKeys.has(field.key) && field.type !== 'opaque');
+  const plain = shown.filter((field) => !field.rare && field.type !== 'group');
+  return {
+    main: [
+      ...plain.filter((field) => field.type !== 'busRef'),
+      ...plain.filter((field) => field.type === 'busRef'),
+    ],
+    rare: shown.filter((field) => field.rare && field.type !== 'group'),
+    groups: shown.filter((field): field is Extract<Field, { type: 'group' }> => field.type === 'group'),
+  };
+}
+
+export function takesOrigin(field: Field): boolean {
+  return withOrigin.has(field.type);
+}
+
+/** A value in short words, for "base: 140 kW": a list is counted, not written out. */
+export function shortValue(value: unknown, unit: string): string {
+  if (value === undefined || value === null) return 'not given';
+  if (typeof value === 'boolean') return value ? 'yes' : 'no';
+  if (Array.isArray(value)) return `${value.length} ${value.length === 1 ? 'row' : 'rows'}`;
+  return unit === '' || typeof value !== 'number' ? String(value) : `${value} ${unit}`;
+}
