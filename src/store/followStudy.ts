@@ -1,6 +1,8 @@
+import type { Verdict } from '../checks/index.ts';
 import { casesOf } from '../study/index.ts';
-import type { Computation, Settled, StudyAt } from '../worker/index.ts';
+import type { CaseNumbers, Computation, Settled, StudyAt } from '../worker/index.ts';
 import type { WorkbenchStore } from './createWorkbench.ts';
+import { isScreened } from './selectors.ts';
 import type { Answer, Workbench } from './types.ts';
 
 export interface FollowOptions {
@@ -13,8 +15,9 @@ export interface FollowOptions {
 /**
  * Keeps the answers in step with the study: a layer around the store, which itself knows no computation.
  *
- *   study or case changed ──► solve ──► answer (numbers) ──► judge ──► answer (verdicts) ──► judge all cases
- *   busbar changed ─────────► scan  ──► answer.scan
+ *   study or case changed ──► solve ──► answer ─┬─► scan  ──► answer.scan
+ *                                               └─► judge ──► screening rows ──► judge all cases
+ *   busbar changed ─────────► scan ───► answer.scan
  *   any of these, or order ─► probe, once a frame
  *
  * Newest wins throughout. An answer of an older revision is still shown while edits follow each other,
@@ -46,27 +49,26 @@ export function followStudy(
     return end.outcome === 'done' ? end.value : null;
   }
 
-  async function solve(at: StudyAt, { caseId, focusBus }: Workbench['view']): Promise<void> {
+  async function solve(at: StudyAt, caseId: string): Promise<void> {
     solveRun += 1;
     const run = solveRun;
     clearTimeout(judgeAllTimer);
     if (!store.getState().status.solving) setStatus({ solving: true });
-    const numbers = answered(await computation.solve(at, caseId, focusBus === '' ? undefined : focusBus));
+    const numbers = answered(await computation.solve(at, caseId));
     if (run === solveRun) setStatus({ solving: false });
     if (!numbers || !fits(at, caseId)) return;
-    const { scan = null, ...rest } = numbers;
-    const verdicts = knownVerdicts(store.getState(), at.revision, caseId);
-    store.setState({ answer: { revision: at.revision, caseId, ...rest, scan, verdicts } });
+    store.setState((state) => ({ answer: answerOf(state, at, caseId, numbers) }));
     if (run !== solveRun) return;
-    if (scan?.bus !== store.getState().view.focusBus) void rescan(at, store.getState().view);
-    if (!verdicts) await judge(at, caseId);
+    void rescan(at, store.getState().view);
+    if (!isScreened(store.getState())) await judge(at, caseId);
     if (run === solveRun) judgeAllTimer = setTimeout(() => void judgeOthers(at), judgeAllAfterMs);
   }
 
   async function judge(at: StudyAt, caseId: string): Promise<void> {
     const verdicts = answered(await computation.judge(at, caseId));
-    if (verdicts)
-      store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, { verdicts }) }));
+    if (!verdicts) return;
+    const part = { verdicts, screening: screeningOf(verdicts, at.revision) };
+    store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, part) }));
   }
 
   async function judgeOthers(at: StudyAt): Promise<void> {
@@ -93,8 +95,9 @@ export function followStudy(
 
   async function rescan(at: StudyAt, { caseId, focusBus }: Workbench['view']): Promise<void> {
     if (focusBus === '') return;
-    const scan = answered(await computation.scan(at, caseId, focusBus));
-    if (scan?.bus !== store.getState().view.focusBus) return;
+    const pair = answered(await computation.scan(at, caseId, focusBus));
+    if (!pair || pair.bus !== store.getState().view.focusBus) return;
+    const scan = { ...pair, revision: at.revision };
     store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, { scan }) }));
   }
 
@@ -123,19 +126,40 @@ export function followStudy(
     const busChanged = view.focusBus !== before.view.focusBus;
     if (!study) return;
     const at = { revision, study };
-    if (moved || caseChanged) void solve(at, view);
+    if (moved || caseChanged) void solve(at, view.caseId);
     else if (busChanged) void rescan(at, view);
     if (moved || caseChanged || view.order !== before.view.order) probeSoon();
   }
 
   const { study, revision, view } = store.getState();
-  if (study) void solve({ revision, study }, view);
+  if (study) void solve({ revision, study }, view.caseId);
   if (study) probeSoon();
   const unsubscribe = store.subscribe(follow);
   return () => {
     unsubscribe();
     clearTimeout(judgeAllTimer);
   };
+}
+
+/** The new answer; curves and screening rows of the same case stay until newer ones arrive. */
+function answerOf(state: Workbench, at: StudyAt, caseId: string, numbers: CaseNumbers): Answer {
+  const { answer, allVerdicts } = state;
+  const { revision } = at;
+  const before = answer?.caseId === caseId ? answer : null;
+  const known = allVerdicts?.revision === revision ? allVerdicts.byCase[caseId] : undefined;
+  return {
+    revision,
+    caseId,
+    solution: numbers.solution,
+    without: numbers.without,
+    verdicts: known ?? numbers.verdicts,
+    screening: known ? screeningOf(known, revision) : (before?.screening ?? null),
+    scan: before?.scan ?? null,
+  };
+}
+
+function screeningOf(verdicts: Verdict[], revision: number): Answer['screening'] {
+  return { revision, verdicts: verdicts.filter(({ screening }) => screening) };
 }
 
 function amended(
@@ -145,8 +169,4 @@ function amended(
   part: Partial<Answer>,
 ): Answer | null {
   return answer?.revision === revision && answer.caseId === caseId ? { ...answer, ...part } : answer;
-}
-
-function knownVerdicts({ allVerdicts }: Workbench, revision: number, caseId: string): Answer['verdicts'] {
-  return (allVerdicts?.revision === revision ? allVerdicts.byCase[caseId] : undefined) ?? null;
 }

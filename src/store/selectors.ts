@@ -32,6 +32,18 @@ export function freshVerdicts(state: Workbench): Verdict[] | null {
   return freshAnswer(state)?.verdicts ?? null;
 }
 
+/** Whether the screening rows are among the verdicts of the study and case on screen. */
+export function isScreened(state: Workbench): boolean {
+  const answer = freshAnswer(state);
+  return answer !== null && answer.screening?.revision === answer.revision;
+}
+
+/** Whether the rail's curves belong to the study, case and busbar on screen. */
+export function isScanStale(state: Workbench): boolean {
+  const scan = freshAnswer(state)?.scan;
+  return !scan || scan.revision !== state.revision || scan.bus !== state.view.focusBus;
+}
+
 /** Selects the element of an id; its identity changes only when the element does. */
 export function elementById(id: string): (state: Workbench) => StudyElement | undefined {
   return ({ study }) => study?.elements.find((element) => element.id === id);

@@ -37,10 +37,16 @@ export interface Answer {
   solution: CaseSolution;
   /** The same case, all banks and filters out of service. */
   without: CaseSolution;
-  /** Of the busbar it names; null while the study has none or the focus has just moved. */
-  scan: ScanPair | null;
-  /** null until judged, which follows the numbers. */
-  verdicts: Verdict[] | null;
+  /** Of this revision. The screening rows are among them once `screening` is of this revision too. */
+  verdicts: Verdict[];
+  /** The screening rows of this case last known; of an older revision for a moment after each edit. */
+  screening: { revision: number; verdicts: Verdict[] } | null;
+  /** The rail's curves of this case last known, of the busbar they name; older for a moment likewise. */
+  scan: ScanAnswer | null;
+}
+
+export interface ScanAnswer extends ScanPair {
+  revision: number;
 }
 
 export interface ProbeAnswer extends Probe {

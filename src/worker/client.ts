@@ -5,14 +5,17 @@ import type { CaseDossier, CaseNumbers, Probe, ScanPair, Settled } from './proto
 
 /**
  * The computation as the page sees it. Every promise settles: done, failed, cancelled or superseded; none
- * rejects. Of several requests of one kind only the newest waits.
+ * rejects. Of several requests of one kind only the newest waits. Two workers: one answers what must keep
+ * pace with the hand (probe, solve, scan), the other what may take its time (verdicts with their screening
+ * rows, all cases, results, dossiers), so that the second never holds up the first.
  */
 export interface Computation {
   /** Solves a small built-in study, in slices, until the code is compiled. */
   warm(): Promise<void>;
-  solve(at: StudyAt, caseId: string, focusBus?: string): Promise<Settled<CaseNumbers>>;
+  solve(at: StudyAt, caseId: string): Promise<Settled<CaseNumbers>>;
   scan(at: StudyAt, caseId: string, focusBus: string): Promise<Settled<ScanPair>>;
   probe(at: StudyAt, caseId: string, order: number): Promise<Settled<Probe>>;
+  /** Every verdict of a case, screening rows included. */
   judge(at: StudyAt, caseId: string): Promise<Settled<Verdict[]>>;
   /** Judges case by case, `onCase` after each; any other request goes first in between. */
   judgeAll(
@@ -37,13 +40,16 @@ export interface Computation {
 const maxWarmRounds = 60;
 
 export function createComputation(options: ComputationOptions): Computation {
-  const dispatcher = new Dispatcher(options);
+  const live = new Dispatcher(options);
+  const patient = new Dispatcher(options);
   const newestRound = new Map<Lane, object>();
 
   async function warm(): Promise<void> {
-    for (let round = 0; round < maxWarmRounds; round += 1) {
-      const slice = await dispatcher.ask('warm', { kind: 'warm' }, null);
-      if (slice.outcome !== 'done' || slice.value.hot) return;
+    for (const dispatcher of [live, patient]) {
+      for (let round = 0; round < maxWarmRounds; round += 1) {
+        const slice = await dispatcher.ask('warm', { kind: 'warm' }, null);
+        if (slice.outcome !== 'done' || slice.value.hot) break;
+      }
     }
   }
 
@@ -69,29 +75,25 @@ export function createComputation(options: ComputationOptions): Computation {
 
   return {
     warm,
-    solve: (at, caseId, focusBus) => {
-      const job = { kind: 'solve', caseId } as const;
-      return dispatcher.ask('solve', focusBus === undefined ? job : { ...job, focusBus }, at);
-    },
-    scan: (at, caseId, focusBus) => dispatcher.ask('scan', { kind: 'scan', caseId, focusBus }, at),
-    probe: (at, caseId, order) => dispatcher.ask('probe', { kind: 'probe', caseId, order }, at),
-    judge: (at, caseId) => dispatcher.ask('judge', { kind: 'judge', caseId }, at),
+    solve: (at, caseId) => live.ask('solve', { kind: 'solve', caseId }, at),
+    scan: (at, caseId, focusBus) => live.ask('scan', { kind: 'scan', caseId, focusBus }, at),
+    probe: (at, caseId, order) => live.ask('probe', { kind: 'probe', caseId, order }, at),
+    judge: (at, caseId) => patient.ask('judge', { kind: 'judge', caseId }, at),
     judgeAll: (at, caseIds, onCase) =>
-      round(
-        'judgeAll',
-        caseIds,
-        (caseId) => dispatcher.ask('judgeAll', { kind: 'judge', caseId }, at),
-        onCase,
-      ),
+      round('judgeAll', caseIds, (caseId) => patient.ask('judgeAll', { kind: 'judge', caseId }, at), onCase),
     dossiers: (at, caseIds, buses, onCase) =>
       round(
         'dossiers',
         caseIds,
-        (caseId) => dispatcher.ask('dossiers', { kind: 'dossier', caseId, buses }, at),
+        (caseId) => patient.ask('dossiers', { kind: 'dossier', caseId, buses }, at),
         (_, dossier, done) => onCase(dossier, done),
       ),
-    results: (at) => dispatcher.ask('results', { kind: 'results' }, at),
-    cancel: (lane) => dispatcher.cancel(lane),
-    close: () => dispatcher.close(),
+    results: (at) => patient.ask('results', { kind: 'results' }, at),
+    cancel: (lane) => {
+      for (const dispatcher of [live, patient]) dispatcher.cancel(lane);
+    },
+    close: () => {
+      for (const dispatcher of [live, patient]) dispatcher.close();
+    },
   };
 }

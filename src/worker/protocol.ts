@@ -18,13 +18,13 @@ export interface ScanPair {
   without: ImpedanceScan;
 }
 
-/** Everything the drawing, rail and readings show of one case. */
+/** Everything the drawing and readings show of one case, and the verdicts that rest on it alone. */
 export interface CaseNumbers {
   solution: CaseSolution;
   /** The same case with all banks and filters out of service. */
   without: CaseSolution;
-  /** Absent where no busbar was asked for. */
-  scan?: ScanPair;
+  /** All but the screening rows, which scan the network again and again and come by `judge`. */
+  verdicts: Verdict[];
 }
 
 /** Driving-point impedance at one real-valued order, ohm per phase, positive sequence, bus by bus. */
@@ -50,7 +50,7 @@ export interface CaseDossier {
 
 export type Job =
   | { kind: 'warm' }
-  | { kind: 'solve'; caseId: string; focusBus?: string }
+  | { kind: 'solve'; caseId: string }
   | { kind: 'scan'; caseId: string; focusBus: string }
   | { kind: 'probe'; caseId: string; order: number }
   | { kind: 'judge'; caseId: string }

@@ -1,3 +1,4 @@
+import type { Verdict } from '../checks/index.ts';
 import { type CaseSolution, solveCase } from '../engine/index.ts';
 import { casesOf, type Study } from '../study/index.ts';
 import { judgeNumbers, probeOrder, resultsOf, scanPair, solveNumbers } from './compute.ts';
@@ -40,7 +41,7 @@ export function createSession(): Session {
     const now = heldAt(revision);
     switch (job.kind) {
       case 'solve':
-        return solveAndKeep(now, job.caseId, job.focusBus);
+        return solveAndKeep(now, job.caseId);
       case 'scan':
         return scanPair(now.study, job.caseId, job.focusBus);
       case 'probe':
@@ -66,9 +67,14 @@ export function createSession(): Session {
   };
 }
 
-/** The numbers are copied before their arrays leave: the verdicts are usually asked for next. */
-function solveAndKeep(held: Held, caseId: string, focusBus?: string): CaseNumbers {
-  const numbers = solveNumbers(held.study, caseId, focusBus);
+/** The numbers are copied before their arrays leave: other answers rest on them. */
+function solveAndKeep(held: Held, caseId: string): CaseNumbers {
+  const others = casesOf(held.study).filter(({ id }) => id !== caseId);
+  const numbers = solveNumbers(
+    held.study,
+    caseId,
+    others.map(({ id }) => keptSolution(held, id)),
+  );
   held.solutions.set(caseId, structuredClone(numbers.solution));
   held.without.set(caseId, structuredClone(numbers.without));
   return numbers;
@@ -80,7 +86,7 @@ function keptSolution({ study, solutions }: Held, caseId: string): CaseSolution 
   return known;
 }
 
-function judgeKept(held: Held, caseId: string) {
+function judgeKept(held: Held, caseId: string): Verdict[] {
   const otherCases = casesOf(held.study).map(({ id }) => keptSolution(held, id));
   const withoutCorrection = held.without.get(caseId);
   return judgeNumbers(held.study, keptSolution(held, caseId), {

@@ -1,4 +1,4 @@
-import { judgeNumbers, probeOrder, solveNumbers } from './compute.ts';
+import { judgeNumbers, probeOrder, scanPair, solveNumbers } from './compute.ts';
 import { warmStudy } from './warmStudy.ts';
 
 const window = 6;
@@ -16,7 +16,8 @@ export function createWarmUp(): () => { hot: boolean } {
     const start = performance.now();
     // A fresh object, as after an edit: otherwise what is remembered per study would spare the compiling.
     const study = { ...warmStudy };
-    const { solution } = solveNumbers(study, 'base', 'lv');
+    const { solution } = solveNumbers(study, 'base', []);
+    scanPair(study, 'base', 'lv');
     probeOrder(study, 'base', 6.5);
     judgeNumbers(study, solution);
     roundMs.push(performance.now() - start);

@@ -87,8 +87,7 @@ export class ScriptedComputation implements Computation {
   }
 
   warm = async (): Promise<void> => {};
-  solve = (at: StudyAt, caseId: string, focusBus?: string) =>
-    this.ask<CaseNumbers>({ kind: 'solve', at, caseId, focusBus });
+  solve = (at: StudyAt, caseId: string) => this.ask<CaseNumbers>({ kind: 'solve', at, caseId });
   scan = (at: StudyAt, caseId: string, focusBus: string) =>
     this.ask<ScanPair>({ kind: 'scan', at, caseId, focusBus });
   probe = (at: StudyAt, caseId: string, order: number) =>
@@ -122,12 +121,11 @@ export class ScriptedComputation implements Computation {
   /** Answers a request, by default the newest of its kind, and lets the store take it in. */
   async answer(kind: Asked['kind'], asked: Asked = this.open(kind)): Promise<void> {
     const { caseId, focusBus, order = 1 } = asked;
-    const scan = focusBus === undefined ? {} : { scan: scanPair(focusBus) };
     const values = {
-      solve: { solution: solution(caseId), without: solution(caseId), ...scan },
+      solve: { solution: solution(caseId), without: solution(caseId), verdicts: [verdictOf(caseId, 'pass')] },
       scan: scanPair(focusBus ?? ''),
       probe: { caseId, order, buses: [], with: points, without: points },
-      judge: [verdictOf(caseId, 'pass')],
+      judge: [verdictOf(caseId, 'pass'), { ...verdictOf(caseId, 'watch'), screening: true }],
     };
     asked.settle({ outcome: 'done', value: values[kind] as never });
     await settled();

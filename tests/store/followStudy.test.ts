@@ -4,6 +4,8 @@ import {
   createWorkbench,
   followStudy,
   freshVerdicts,
+  isScanStale,
+  isScreened,
   isStale,
   type WorkbenchStore,
 } from '../../src/store/index.ts';
@@ -36,16 +38,37 @@ describe('following the study', () => {
     expect(computation.asked).toHaveLength(0);
   });
 
-  it('solves the case on screen when a study is opened, then judges it', async () => {
+  it('solves the case on screen when a study is opened, then scans its busbar and screens it', async () => {
     state().openStudy(site);
-    expect(computation.open('solve')).toMatchObject({ caseId: 'day', focusBus: 'main' });
+    expect(computation.open('solve').caseId).toBe('day');
     expect(state().status.solving).toBe(true);
     await computation.answer('solve');
     expect(state().status.solving).toBe(false);
-    expect(state().answer).toMatchObject({ caseId: 'day', scan: { bus: 'main' }, verdicts: null });
-    expect(isStale(state())).toBe(false);
-    await computation.answer('judge');
+    expect(state().answer).toMatchObject({ caseId: 'day', scan: null, screening: null });
     expect(freshVerdicts(state())).toHaveLength(1);
+    expect([isStale(state()), isScanStale(state()), isScreened(state())]).toEqual([false, true, false]);
+    await computation.answer('scan');
+    expect(state().answer?.scan).toMatchObject({ bus: 'main', revision: state().revision });
+    expect(isScanStale(state())).toBe(false);
+    await computation.answer('judge');
+    expect(freshVerdicts(state())).toHaveLength(2);
+    expect(isScreened(state())).toBe(true);
+  });
+
+  it('keeps the curves and screening rows before an edit, as older ones, until the new ones arrive', async () => {
+    state().openStudy(site);
+    await computation.answer('solve');
+    await computation.answer('scan');
+    await computation.answer('judge');
+    const { revision } = state();
+    state().edit(retitle('A'));
+    await computation.answer('solve');
+    expect(state().answer).toMatchObject({ scan: { revision }, screening: { revision } });
+    expect(state().answer?.verdicts).toHaveLength(1);
+    expect([isScanStale(state()), isScreened(state())]).toEqual([true, false]);
+    await computation.answer('scan');
+    await computation.answer('judge');
+    expect([isScanStale(state()), isScreened(state())]).toEqual([false, true]);
   });
 
   it('marks the answer stale from the edit until the new answer', async () => {

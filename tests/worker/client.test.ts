@@ -93,29 +93,42 @@ describe('the computation client', () => {
   it('drops every waiting request of an older revision when a newer one is asked for', async () => {
     const { computation, worker } = setUp();
     const running = computation.probe(at(1), 'base', 2);
-    const judging = computation.judge(at(1), 'base');
-    const results = computation.results(at(1));
-    void computation.solve(at(2), 'base', 'main');
-    expect(await judging).toEqual({ outcome: 'superseded' });
-    expect(await results).toEqual({ outcome: 'superseded' });
+    const scan = computation.scan(at(1), 'base', 'main');
+    void computation.solve(at(2), 'base');
+    expect(await scan).toEqual({ outcome: 'superseded' });
     worker().reply(probe(2));
     expect(await running).toMatchObject({ outcome: 'done' });
-    expect(worker().last).toMatchObject({ revision: 2, job: { kind: 'solve', focusBus: 'main' } });
+    expect(worker().last).toMatchObject({ revision: 2, job: { kind: 'solve' } });
   });
 
-  it('serves the scrub first, then the case on screen, then all cases', () => {
+  it('serves the scrub first, then the case on screen, then the curves', () => {
     const { computation, worker } = setUp();
-    void computation.results(at(1));
-    void computation.judgeAll(at(1), ['base'], () => {});
-    void computation.judge(at(1), 'base');
-    void computation.solve(at(1), 'base', 'main');
+    void computation.scan(at(1), 'base', 'main');
+    void computation.scan(at(1), 'base', 'intake');
+    void computation.solve(at(1), 'base');
     void computation.probe(at(1), 'base', 5);
     const kinds: string[] = [];
-    for (let i = 0; i < 5; i += 1) {
+    for (let i = 0; i < 4; i += 1) {
       kinds.push(worker().last.job.kind);
       worker().reply([]);
     }
-    expect(kinds).toEqual(['results', 'probe', 'solve', 'judge', 'judge']);
+    expect(kinds).toEqual(['scan', 'probe', 'solve', 'scan']);
+  });
+
+  it('judges in a worker of its own, the case on screen before all cases, so that solving never waits', () => {
+    const { computation, workers } = setUp();
+    void computation.results(at(1));
+    void computation.judgeAll(at(1), ['base'], () => {});
+    void computation.judge(at(1), 'base');
+    void computation.solve(at(1), 'base');
+    const [patient, live] = workers as [ScriptedWorker, ScriptedWorker];
+    expect(live.last).toMatchObject({ study, job: { kind: 'solve' } });
+    const kinds: string[] = [];
+    for (let i = 0; i < 3; i += 1) {
+      kinds.push(patient.last.job.kind);
+      patient.reply([]);
+    }
+    expect(kinds).toEqual(['results', 'judge', 'judge']);
   });
 
   it('judges all cases one by one and reports after each', async () => {
@@ -145,7 +158,7 @@ describe('the computation client', () => {
   it('cancels what waits and what runs, and ignores the late answer', async () => {
     const { computation, worker } = setUp();
     const running = computation.probe(at(1), 'base', 2);
-    const waiting = computation.solve(at(1), 'base', 'main');
+    const waiting = computation.solve(at(1), 'base');
     computation.cancel();
     expect(await running).toEqual({ outcome: 'cancelled' });
     expect(await waiting).toEqual({ outcome: 'cancelled' });
@@ -158,8 +171,8 @@ describe('the computation client', () => {
   it('cancels one lane alone', async () => {
     const { computation, worker } = setUp();
     const running = computation.probe(at(1), 'base', 2);
-    const waiting = computation.results(at(1));
-    computation.cancel('results');
+    const waiting = computation.solve(at(1), 'base');
+    computation.cancel('solve');
     expect(await waiting).toEqual({ outcome: 'cancelled' });
     worker().reply(probe(2));
     expect(await running).toMatchObject({ outcome: 'done' });
@@ -208,7 +221,7 @@ describe('the computation client', () => {
     worker().crash('');
     expect(await first).toMatchObject({ outcome: 'failed' });
     expect(await second).toMatchObject({ outcome: 'failed' });
-    expect(await computation.results(at(1))).toMatchObject({ outcome: 'failed' });
+    expect(await computation.scan(at(1), 'base', 'main')).toMatchObject({ outcome: 'failed' });
     expect(workers).toHaveLength(3);
     expect(reports.at(-1)).toContain('reload the page');
   });
@@ -231,20 +244,28 @@ describe('the computation client', () => {
     computation.close();
     expect(await running).toEqual({ outcome: 'cancelled' });
     expect(worker().terminated).toBe(true);
+    expect(await computation.solve(at(1), 'base')).toEqual({ outcome: 'cancelled' });
     expect(await computation.results(at(1))).toEqual({ outcome: 'cancelled' });
   });
 
-  it('warms slice by slice until the code is hot', async () => {
-    const { computation, worker } = setUp();
+  it('warms both workers, slice by slice, until the code is hot', async () => {
+    const { computation, worker, workers } = setUp();
     const warmed = computation.warm();
-    for (const hot of [false, false, true]) {
+    for (const [index, hot] of [
+      [0, false],
+      [0, true],
+      [1, false],
+      [1, false],
+      [1, true],
+    ] as const) {
+      await vi.waitFor(() => expect(workers).toHaveLength(index + 1));
       expect(worker().last.job).toEqual({ kind: 'warm' });
       const before = worker().sent.length;
       worker().reply({ hot });
       if (!hot) await vi.waitFor(() => expect(worker().sent.length).toBe(before + 1));
     }
     await warmed;
-    expect(worker().sent).toHaveLength(3);
+    expect(workers.map(({ sent }) => sent.length)).toEqual([2, 3]);
   });
 });
 

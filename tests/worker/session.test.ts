@@ -37,16 +37,11 @@ const magnitude = (re: number | undefined, im: number | undefined): number =>
 describe('the session in the worker', () => {
   it('answers the case as it stands and without banks and filters, as the engine solves them', () => {
     const { send } = behindBoundary();
-    const numbers = good(send({ kind: 'solve', caseId: 'day', focusBus: 'main' }, 1, site));
+    const numbers = good(send({ kind: 'solve', caseId: 'day' }, 1, site));
     expect(numbers.solution).toEqual(solveCase(site, 'day'));
     expect(numbers.without).toEqual(solveCase(site, 'day', { without: correctionParts(site) }));
     expect(numbers.without.terminals.some(({ element }) => element === 'c1')).toBe(false);
-    expect(numbers.scan?.bus).toBe('main');
-  });
-
-  it('answers without curves where no busbar is named', () => {
-    const { send } = behindBoundary();
-    expect(good(send({ kind: 'solve', caseId: 'day' }, 1, site)).scan).toBeUndefined();
+    expect(numbers.verdicts).toEqual(judgeCase(site, solveCase(site, 'day'), { screening: false }));
   });
 
   it('judges a case the same before and after its numbers have left the worker', () => {
@@ -54,7 +49,7 @@ describe('the session in the worker', () => {
     const others: CaseSolution[] = casesOf(site).map(({ id }) => solveCase(site, id));
     const expected = judgeCase(site, solveCase(site, 'day'), { otherCases: others });
     expect(good(send({ kind: 'judge', caseId: 'day' }, 1, site))).toEqual(expected);
-    send({ kind: 'solve', caseId: 'day', focusBus: 'main' });
+    send({ kind: 'solve', caseId: 'day' });
     expect(good(send({ kind: 'judge', caseId: 'day' }))).toEqual(expected);
     expect(expected.length).toBeGreaterThan(0);
   });
