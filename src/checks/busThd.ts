@@ -5,6 +5,7 @@ import { figure } from './figure.ts';
 import { type Choice, voltageSetFor } from './limits/choice.ts';
 import { thdLimit } from './limits/voltageLimit.ts';
 import { margin, verdictWord } from './margin.ts';
+import { noLimitSet } from './source.ts';
 import type { Source, Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
@@ -17,7 +18,7 @@ export function busThd(context: CheckContext): Verdict[] {
 export function namedSource(choice: Choice): Source {
   return 'set' in choice
     ? { document: choice.set.document, edition: choice.set.edition, provenance: 'memory' }
-    : { document: 'no limit set', provenance: 'practice' };
+    : noLimitSet;
 }
 
 /** IEEE 519 judges the PCC; away from it the row informs like a screening rule. */

@@ -12,7 +12,8 @@ import {
 } from './limits/capacitorLimit.ts';
 import { capacitorSetFor } from './limits/choice.ts';
 import type { LimitSet } from './limits/types.ts';
-import type { Source, Verdict } from './types.ts';
+import { noLimitSet } from './source.ts';
+import type { Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
 /** A set of three equal capacitors and the current through each unit, by order. */
@@ -27,8 +28,6 @@ export interface CapacitorUnits {
   amperes: readonly Float64Array[];
   orderCount: number;
 }
-
-const noSource: Source = { document: 'no limit set', provenance: 'practice' };
 
 function unitWith(duties: readonly CapacitorDuty[], of: (duty: CapacitorDuty) => number): CapacitorDuty {
   const worst = [...duties].sort((a, b) => of(b) - of(a))[0];
@@ -76,7 +75,7 @@ function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): P
       subject: { kind: 'element', id: units.id },
       caseId: context.caseId,
       unit: 'p.u.',
-      source: noSource,
+      source: noLimitSet,
       working: [],
       remarks,
       ...(part === undefined ? {} : { part }),
@@ -84,8 +83,17 @@ function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): P
   };
 }
 
-const mendDuty =
-  'Detune the bank below the lowest present order, move its steps away from the resonance, or choose capacitors of a higher rated voltage.';
+function mendDuty(units: CapacitorUnits): string {
+  return units.checks.current === 'filter-duty'
+    ? 'Choose a filter of more kvar or capacitors of a higher rated voltage, and see which other sources and how much supply distortion it takes up.'
+    : 'Detune the bank below the lowest present order, move its steps away from the resonance, or choose capacitors of a higher rated voltage.';
+}
+
+/** Continuous duty is designed to U_N; a watched value is given room of a tenth. */
+function mendVoltage(rmsV: number, ratedV: number, limit: number): string {
+  const neededV = rmsV > limit * ratedV ? rmsV : rmsV / (0.9 * limit);
+  return `Choose capacitors rated for at least ${figure(Math.max(neededV, rmsV), 3)} V, with the kvar they give at the busbar's voltage kept; a reactor in series raises the capacitor's voltage.`;
+}
 
 /** I_rms/I_N, U_C,rms/U_N, crest and kvar of a set of capacitors against the study's capacitor limits. */
 export function capacitorVerdicts(context: CheckContext, study: Study, units: CapacitorUnits): Verdict[] {
@@ -97,7 +105,7 @@ export function capacitorVerdicts(context: CheckContext, study: Study, units: Ca
       subject: { kind: 'element', id: units.id },
       caseId: context.caseId,
       unit: 'p.u.',
-      source: noSource,
+      source: noLimitSet,
       working: [],
     };
     return [
@@ -142,7 +150,7 @@ function currentVerdict(units: CapacitorUnits, { set, row, duties }: Prepared): 
         numbers: `${figure(duty.rmsA)} A / ${figure(duty.ratedA)} A = ${figure(value)}`,
       },
     ],
-    mend: mendDuty,
+    mend: () => mendDuty(units),
   });
 }
 
@@ -173,7 +181,7 @@ function voltageVerdict(
       },
     ],
     remarks: [...(base.remarks ?? []), supplyRemark],
-    mend: `Choose capacitors rated for at least ${figure(duty.rmsV / limit.value, 3)} V; a detuning reactor raises the capacitor's voltage by 1/(1 − p).`,
+    mend: () => mendVoltage(duty.rmsV, duty.ratedV, limit.value),
   });
 }
 
@@ -199,7 +207,7 @@ function peakVerdict(units: CapacitorUnits, { set, row, raised, supplyRemark }: 
       supplyRemark,
       'The crests of all orders are taken to coincide, the safe side.',
     ],
-    mend: mendDuty,
+    mend: () => mendDuty(units),
   });
 }
 
@@ -225,6 +233,6 @@ function kvarVerdict(units: CapacitorUnits, { set, row, duties }: Prepared): Ver
         numbers: `${figure(duty.kvarProduct)} kvar / ${figure(duty.ratedKvar)} kvar = ${figure(duty.kvarProduct / duty.ratedKvar)}`,
       },
     ],
-    mend: mendDuty,
+    mend: () => mendDuty(units),
   });
 }

@@ -1,5 +1,5 @@
 import type { Bus } from '../study/index.ts';
-import { busById } from '../study/index.ts';
+import { busById, elementsOfKind, isOn } from '../study/index.ts';
 import { namedSource } from './busThd.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { angleRemarks } from './distortion.ts';
@@ -11,8 +11,15 @@ import { margin, WATCH_MARGIN } from './margin.ts';
 import type { Verdict, Working } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
-/** TDD and single harmonic currents at each PCC against the current set (pcc-tdd, pcc-order). */
+/**
+ * TDD and single harmonic currents at each PCC against the current set (pcc-tdd, pcc-order). Nothing is
+ * said for a site off the grid, or where no set is chosen nor default and no demand current is entered.
+ */
 export function pccCurrent(context: CheckContext): Verdict[] {
+  const { study } = context;
+  const asked = 'set' in currentSetFor(study) || study.limits?.current !== undefined;
+  if (!asked && study.criteria?.demandCurrentA === undefined) return [];
+  if (!elementsOfKind(study, 'supply').some(isOn)) return [];
   return [...context.pccBuses].flatMap((id) => {
     const bus = busById(context.study, id);
     return bus ? atPcc(context, bus) : [];

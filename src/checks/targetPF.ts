@@ -2,6 +2,7 @@ import { busById, nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
 import { type Inflow, inflowAt } from './inflow.ts';
+import { meteredBusesOf } from './pcc.ts';
 import { commonPractice } from './source.ts';
 import type { Verdict } from './types.ts';
 import { judged, keptQuietly, type Row, unknown } from './verdict.ts';
@@ -12,12 +13,12 @@ const LOW_LOAD_SHARE = 0.1;
 const direction = (kvar: number): string => (kvar >= 0 ? 'lagging' : 'leading');
 
 /**
- * Displacement power factor at each PCC (target-pf): cos φ1 ≥ criteria.targetPF (0.95) in load cases;
+ * Displacement power factor at each PCC, or at a generator that feeds the site alone (target-pf): cos φ1 ≥ criteria.targetPF (0.95) in load cases;
  * kvar against criteria.leadingKvarLimit in light, generator and low-load cases; export is left to the
  * tariff's quadrant rule, in words.
  */
 export function targetPF(context: CheckContext): Verdict[] {
-  return [...context.pccBuses].map((bus) => atPcc(context, bus));
+  return meteredBusesOf(context.study, context.pccBuses).map((bus) => atPcc(context, bus));
 }
 
 function rowAt(context: CheckContext, bus: string): Row {
@@ -65,9 +66,7 @@ function loadCase(context: CheckContext, row: Row, inflow: Inflow): Verdict {
     },
   ];
   const lagging = inflow.kvar >= 0;
-  const mend = lagging
-    ? `Add about ${figure(Math.max(0, missing), 3)} kvar of correction, or switch in more steps.`
-    : 'Overcorrected: switch steps off or shorten the bank.';
+  const mend = mendWords(lagging, missing);
   const remarks = lagging ? [] : ['The site is leading here; many tariffs bill capacitive energy as well.'];
   if (target >= 1)
     return unknown(
@@ -77,6 +76,13 @@ function loadCase(context: CheckContext, row: Row, inflow: Inflow): Verdict {
       target,
     );
   return judged({ ...row, working, remarks, value: pf, limit: target, reference: 1, sense: 'lower', mend });
+}
+
+function mendWords(lagging: boolean, missingKvar: number): string {
+  if (!lagging) return 'Overcorrected: switch steps off or choose a smaller bank.';
+  return missingKvar > 0
+    ? `Add about ${figure(missingKvar, 3)} kvar of correction, or switch in more steps.`
+    : 'Met with little room: one more step would give it.';
 }
 
 function leadingKvar(context: CheckContext, row: Row, inflow: Inflow, largestKW: number | null): Verdict {

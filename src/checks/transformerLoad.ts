@@ -6,7 +6,7 @@ import { figure } from './figure.ts';
 import { SolvedCase } from './SolvedCase.ts';
 import { type HarmonicLoss, harmonicLoss, permissibleLoad } from './transformerHeating.ts';
 import type { Source, Verdict, Working } from './types.ts';
-import { judged, type Row, unknown } from './verdict.ts';
+import { judged, keptQuietly, type Row, unknown } from './verdict.ts';
 
 const source: Source = {
   document: 'IEEE C57.110',
@@ -73,24 +73,33 @@ function atTransformer(context: CheckContext, part: Transformer): Verdict {
     source,
     working: [],
   };
-  if (!side || !context.solved.energised(part.to))
-    return unknown(row, `${nameOf(part)} carries no current in this case`);
+  if (!context.solved.energised(part.to))
+    return unknown(row, `${nameOf(part)} has no path to a source in this case`);
+  if (!side) return keptQuietly(row, `${nameOf(part)} carries no current in this case.`, 0, 1);
   const { loss, ratedA } = side;
   const load = loss.rmsA / ratedA;
   const base: Row = { ...row, working: loadWorking(side), remarks: remarksOf(context, side) };
   const mend =
     'Move load to another transformer, choose a larger or K-rated one, or filter the orders that heat it.';
   const share = part.eddyLossShare;
-  if (share !== undefined || loss.lossFactor < NEGLIGIBLE_LOSS_FACTOR) {
-    const eddy = share ?? 0;
-    const permissible = permissibleLoad(loss.lossFactor, eddy);
+  if (share === undefined && loss.lossFactor < NEGLIGIBLE_LOSS_FACTOR) {
+    return judged({
+      ...base,
+      value: load,
+      limit: 1,
+      mend,
+      remarks: [...(base.remarks ?? []), 'F_HL is near 1: no derating, whatever P_EC-R is.'],
+    });
+  }
+  if (share !== undefined) {
+    const permissible = permissibleLoad(loss.lossFactor, share);
     const value = load / permissible;
     return judged({
       ...base,
       value,
       limit: 1,
       mend,
-      working: [...base.working, derating(loss, eddy, permissible, load)],
+      working: [...base.working, derating(loss, share, permissible, load)],
     });
   }
   const missing = `enter the winding eddy-current loss P_EC-R of ${nameOf(part)}: with F_HL = ${figure(loss.lossFactor)} the rating must be derated`;

@@ -77,16 +77,19 @@ export function judged(row: JudgedRow): Verdict {
   return build(row, { value, limit, margin: marginValue, verdict, remarks: row.remarks ?? [], mend });
 }
 
-/** No verdict: `missing` says in a sentence which data would allow one. A known value is still shown. */
+/** No verdict: `missing`, a sentence without its full stop, says which data would allow one. A known value is still shown. */
 export function unknown(
   row: Row,
   missing: string,
   value: number | null = null,
   limit: number | null = null,
 ): Verdict {
-  const remarks = [missing, ...(row.remarks ?? [])];
-  return build(row, { value, limit, margin: null, verdict: 'unknown', remarks, mend: missing });
+  const mend = sentence(missing);
+  const remarks = [mend, ...(row.remarks ?? [])];
+  return build(row, { value, limit, margin: null, verdict: 'unknown', remarks, mend });
 }
+
+const sentence = (words: string): string => `${words.charAt(0).toUpperCase()}${words.slice(1)}.`;
 
 /** Kept without a margin to form: nothing is there for the limit to act on; `why` says so. */
 export function keptQuietly(
