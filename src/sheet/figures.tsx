@@ -10,7 +10,7 @@ import { orderTable } from '../checks/index.ts';
 import { layoutStudy, StaticDrawing } from '../drawing/index.ts';
 import type { ImpedanceScan } from '../engine/index.ts';
 import { type Pin, studyInCase } from '../study/index.ts';
-import type { FigureRequest, SheetCase, SheetInput } from './document/index.ts';
+import { DRAWING_CROP, type FigureRequest, type SheetCase, type SheetInput } from './document/index.ts';
 import type { FigureComposer } from './FigureComposer.ts';
 import { type PinSpectra, phasesToDraw, pinSpectra } from './pinSpectra.ts';
 
@@ -31,12 +31,13 @@ function emptyScan({ bus, sequence }: ImpedanceScan): ImpedanceScan {
 
 function drawing(input: SheetInput, computed: SheetCase, size: Size) {
   const layout = layoutStudy(input.study);
+  const crop = DRAWING_CROP;
   return (
     <svg
       xmlns="http://www.w3.org/2000/svg"
       width={size.width}
       height={size.height}
-      viewBox={`0 0 ${layout.width} ${layout.height}`}
+      viewBox={[crop, crop, layout.width - 2 * crop, layout.height - 2 * crop].join(' ')}
     >
       <StaticDrawing
         study={input.study}

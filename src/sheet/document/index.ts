@@ -14,3 +14,4 @@ export type {
   TableBlock,
   TitleBlock,
 } from './model.ts';
+export { DRAWING_CROP } from './sections/frontSections.ts';

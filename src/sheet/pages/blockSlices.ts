@@ -9,24 +9,23 @@ import { wrap } from './wrap.ts';
 
 const FIGURE_GAP = 14;
 
-/** What blocks are set into: the width, the greatest height of a figure, and whether figures are drawn tight. */
+/** What blocks are set into: the width, and the greatest height of a figure. */
 export interface Room {
   width: number;
   tallest: number;
-  tight: boolean;
 }
 
-function figureSlice(block: FigureBlock, room: Room): Slice {
-  const scale = room.tight ? (block.tightest ?? 1) : 1;
-  const wanted = Math.min(room.width, block.widest ?? room.width) * scale;
-  const height = Math.min(wanted * block.aspect, room.tallest);
-  const set = height / block.aspect;
-  return {
-    height,
-    marks: [{ kind: 'figure', id: block.id, x: 0, y: 0, width: set, height }],
-    glued: false,
-    gap: 4,
+function figureSlice(block: FigureBlock, { width, tallest }: Room): Slice {
+  const drawn = (scale: number): { height: number; marks: PageMark[] } => {
+    const wanted = Math.min(width, block.widest ?? width) * scale;
+    const height = Math.min(wanted * block.aspect, tallest);
+    return {
+      height,
+      marks: [{ kind: 'figure', id: block.id, x: 0, y: 0, width: height / block.aspect, height }],
+    };
   };
+  const slice: Slice = { ...drawn(1), glued: false, gap: 4 };
+  return block.tightest === undefined ? slice : { ...slice, tight: drawn(block.tightest) };
 }
 
 function figureRowSlice(block: FigureRowBlock, width: number): Slice {

@@ -41,12 +41,13 @@ export function layoutPages(document: SheetDocument): SheetPages {
   const foot = frontFoot(document, paper, '1 of 1');
   const whole = paper.height - paper.margin.top - paper.margin.bottom;
   const tallest = whole - slimHeadHeight - 60;
-  const fill = (tight: boolean): PlacedSlice[][] =>
-    paginate(documentSlices(document, { width, tallest, tight }), (page) =>
+  const fill = (slices: Slice[]): PlacedSlice[][] =>
+    paginate(slices, (page) =>
       page === 0 ? whole - front.height - foot.height - 20 : whole - slimHeadHeight,
     );
-  const loose = fill(false);
-  const tight = fill(true);
+  const slices = documentSlices(document, { width, tallest });
+  const loose = fill(slices);
+  const tight = fill(slices.map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice)));
   const placed = sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
   const count = placed.length;
   const pages = placed.map((slices, index) => {

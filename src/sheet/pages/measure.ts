@@ -90,7 +90,16 @@ function glyphOf(character: string, face: Face): [Face, string, number] {
   return [face, STAND_IN, WIDTHS[face].get(0x25a1) ?? 600];
 }
 
+const known = new Map<string, number>();
+const KNOWN_LIMIT = 20_000;
+
 /** Width of one line of text in points. */
 export function textWidth(text: string, size: number, weight: Weight = 'regular'): number {
-  return faceRuns(text, size, weight).reduce((sum, run) => sum + run.width, 0);
+  const key = `${weight} ${size} ${text}`;
+  const found = known.get(key);
+  if (found !== undefined) return found;
+  const width = faceRuns(text, size, weight).reduce((sum, run) => sum + run.width, 0);
+  if (known.size >= KNOWN_LIMIT) known.clear();
+  known.set(key, width);
+  return width;
 }

@@ -10,6 +10,8 @@ export interface Slice {
   gap?: number;
   /** Repeated above this slice where it begins a page: the head of its table. */
   repeat?: Slice;
+  /** The same drawn smaller, where more then fits on the first page. */
+  tight?: { height: number; marks: PageMark[] };
   /** The section that begins here. */
   section?: { id: string; title: string };
 }

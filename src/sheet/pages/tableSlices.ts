@@ -1,6 +1,6 @@
 import type { Cell, Row, TableBlock } from '../document/model.ts';
 import { SIGN_OF } from '../document/signs.ts';
-import type { Ink, PageMark, Weight } from './marks.ts';
+import { type Ink, type PageMark, shifted, type Weight } from './marks.ts';
 import { textWidth } from './measure.ts';
 import { LEADING, TYPE } from './paper.ts';
 import type { Slice } from './slice.ts';
@@ -11,6 +11,8 @@ import { wrap } from './wrap.ts';
 const SIZE = TYPE.table;
 const LINE = SIZE * LEADING;
 const PADDING = 1.9;
+/** White space over the name of a group. */
+const GROUP_GAP = 3;
 
 function rule(y: number, width: number, stroke: number, ink: Ink): PageMark {
   return { kind: 'line', x1: 0, y1: y, x2: width, y2: y, width: stroke, ink };
@@ -87,13 +89,7 @@ function numberCell(cell: Cell, placed: PlacedColumn): CellLines {
 }
 
 function rowSlice(row: Row, columns: PlacedColumn[], width: number, repeat: Slice): Slice {
-  if (row.kind === 'group') {
-    const aside = row.aside === undefined ? [] : [asideMark(row.text, row.aside)];
-    const height = LINE + 2 * PADDING + 3;
-    const y = 3 + PADDING + baseline(SIZE);
-    const marks = [textMark(row.text, { size: SIZE, weight: 'semibold' }, y), ...aside];
-    return { height, marks: [...marks, rule(height, width, 0.4, 'hairline')], glued: true, repeat };
-  }
+  if (row.kind === 'group') return groupSlice(row, width, repeat);
   const cells = columns.map((placed, k) => {
     const cell = row.cells[k] ?? { text: '' };
     return placed.column.align === 'left' ? leftCell(cell, placed) : numberCell(cell, placed);
@@ -105,9 +101,23 @@ function rowSlice(row: Row, columns: PlacedColumn[], width: number, repeat: Slic
   return { height, marks: [...marks, rule(height, width, 0.4, 'hairline')], glued: false, repeat };
 }
 
-function asideMark(text: string, aside: string): PageMark {
-  const x = textWidth(text, SIZE, 'semibold') + 8;
-  return textMark(aside, { size: SIZE, ink: 'quiet', x }, 3 + PADDING + baseline(SIZE));
+/** A group's name over the whole width, its aside beside it or, where it is too long, under it. */
+function groupSlice(row: Extract<Row, { kind: 'group' }>, width: number, repeat: Slice): Slice {
+  const lines = wrap(row.text, width, SIZE, 'semibold');
+  const marks = linesAt(lines, 0, { weight: 'semibold', x: 0 });
+  const aside = row.aside ?? '';
+  const after = textWidth(lines.at(-1) ?? '', SIZE, 'semibold') + 8;
+  const beside = after + textWidth(aside, SIZE) <= width;
+  const under = beside ? [] : wrap(aside, width, SIZE);
+  if (aside !== '' && beside) marks.push(...linesAt([aside], lines.length - 1, { ink: 'quiet', x: after }));
+  marks.push(...linesAt(under, lines.length, { ink: 'quiet', x: 0 }));
+  const height = (lines.length + under.length) * LINE + 2 * PADDING + GROUP_GAP;
+  return {
+    height,
+    marks: [...marks.map((mark) => shifted(mark, 0, GROUP_GAP)), rule(height, width, 0.4, 'hairline')],
+    glued: true,
+    repeat,
+  };
 }
 
 /** A table cut into rows: never a head without two rows, a group's name without a row, a last row alone. */

@@ -17,17 +17,22 @@ function cut(word: string, width: number, size: number, weight: Weight): string[
 
 /** Lines of a text no wider than `width`, broken at spaces, inside a word only where it alone is too wide. */
 export function wrap(text: string, width: number, size: number, weight: Weight = 'regular'): string[] {
+  const space = textWidth(' ', size, weight);
   const lines: string[] = [];
   let line = '';
+  let filled = 0;
   for (const word of text.split(/[ \n]+/)) {
-    const longer = line === '' ? word : `${line} ${word}`;
-    if (textWidth(longer, size, weight) <= width) {
-      line = longer;
+    const own = textWidth(word, size, weight);
+    const longer = line === '' ? own : filled + space + own;
+    if (longer <= width) {
+      line = line === '' ? word : `${line} ${word}`;
+      filled = longer;
       continue;
     }
     if (line !== '') lines.push(line);
-    const pieces = cut(word, width, size, weight);
+    const pieces = own <= width ? [word] : cut(word, width, size, weight);
     line = pieces.pop() ?? '';
+    filled = own <= width ? own : textWidth(line, size, weight);
     lines.push(...pieces);
   }
   return [...lines, line];

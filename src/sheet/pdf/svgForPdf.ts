@@ -7,6 +7,7 @@ const SVG = 'http://www.w3.org/2000/svg';
  * fallback font inside a text. Changes the given drawing.
  */
 export function markRuns(svg: SVGElement): void {
+  if (!svg.hasAttribute('font-family')) svg.setAttribute('font-family', 'Varwright Sans');
   const walker = document.createTreeWalker(svg, NodeFilter.SHOW_TEXT);
   const texts: Text[] = [];
   for (let node = walker.nextNode(); node; node = walker.nextNode()) {

@@ -5,10 +5,18 @@ import { provenanceNote, sourceWithMark } from '../provenance.ts';
 import { caseName, type SheetView, solvedIn, subjectName } from '../SheetView.ts';
 import { byMargin, counted, decides, marginText, withUnit } from '../verdictWords.ts';
 
+/** Units of the drawing's own margin that the sheet leaves out on each side. */
+export const DRAWING_CROP = 16;
 /** Points for one unit of the drawing at most: letters of 12 units become 9 points. */
 const LARGEST_SCALE = 0.75;
 /** Letters of 12 units stay above 7.5 points. */
 const TIGHTEST = 0.85;
+
+/** The drawing without most of its own margin, in its units. */
+function croppedSize({ input }: SheetView): { width: number; height: number } | undefined {
+  const size = input.drawingSize;
+  return size && { width: size.width - 2 * DRAWING_CROP, height: size.height - 2 * DRAWING_CROP };
+}
 
 const shownWords = (view: SheetView): string =>
   view.shownIsBusiest ? `${view.shown.name}, the busiest case` : view.shown.name;
@@ -19,7 +27,7 @@ export function drawingSection(view: SheetView): Section {
   const aside = solved
     ? `${shownWords(view)}; readings at the fundamental`
     : `${view.shown.name}; no readings: the case is not solved`;
-  const size = view.input.drawingSize;
+  const size = croppedSize(view);
   return {
     id: 'drawing',
     title: 'Single-line diagram',

@@ -1,4 +1,5 @@
 import {
+  builtInSpectrum,
   busName,
   elementsOfKind,
   fieldsOf,
@@ -57,7 +58,9 @@ function supplyTable(study: Study): TableBlock | undefined {
       { head: 'background distortion', unit: '% of U_n by order', align: 'left', grow: 3 },
     ],
     rows,
-    notes: rows.length > 0 ? [`${NONE} not given.`] : [],
+    notes: rows.some((row) => row.kind === 'cells' && row.cells.some(({ text }) => text === NONE))
+      ? [`${NONE} not given.`]
+      : [],
   };
 }
 
@@ -72,7 +75,9 @@ function spectrumOf(study: Study, part: LoadPart): string {
   if (typeof part.spectrum !== 'string')
     return field ? (fieldValue(study, field, part.spectrum) ?? NONE) : NONE;
   const own = study.spectra?.find(({ id }) => id === part.spectrum);
-  return own ? [nameOf(own), own.origin].filter(Boolean).join('; ') : part.spectrum;
+  if (own) return [nameOf(own), own.origin].filter(Boolean).join('; ');
+  const known = builtInSpectrum(part.spectrum);
+  return known ? `${known.name} (${known.provenance})` : part.spectrum;
 }
 
 function loadRow(study: Study, part: LoadPart): Row {

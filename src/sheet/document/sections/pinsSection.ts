@@ -1,4 +1,4 @@
-import { busesOf, busName, elementName, type Pin, type Study } from '../../../study/index.ts';
+import { busesOf, busName, elementById, elementName, type Pin, type Study } from '../../../study/index.ts';
 import { cells, NONE } from '../cells.ts';
 import { correctionOf } from '../correctionParts.ts';
 import { fixed, significant } from '../formatNumber.ts';
@@ -23,11 +23,16 @@ export function pinsOf(view: SheetView): { pins: Pin[]; chosenBySheet: boolean }
   };
 }
 
+function isSource(study: Study, id: string): boolean {
+  const kind = elementById(study, id)?.kind;
+  return kind === 'supply' || kind === 'generator';
+}
+
 /** "voltage at Main board", "current into Bank C1 at Main board". */
 export function pinName(study: Study, pin: Pin): string {
   return pin.quantity === 'voltage'
     ? `voltage at ${busName(study, pin.bus)}`
-    : `current into ${elementName(study, pin.element)} at ${busName(study, pin.bus)}`;
+    : `current ${isSource(study, pin.element) ? 'from' : 'into'} ${elementName(study, pin.element)} at ${busName(study, pin.bus)}`;
 }
 
 function pinRow(view: SheetView, pin: Pin): Row {

@@ -28,7 +28,8 @@ const closed = (text: string): string => (/[.!?)]$/.test(text) ? text : `${text}
 /** What a verdict remarks besides what all verdicts of its list say. */
 function remarksOf(verdict: Verdict): string[] {
   const mend = verdict.mend !== undefined && !verdict.remarks.includes(verdict.mend) ? [verdict.mend] : [];
-  const screening = verdict.screening ? ['Screening rule: it never fails and never decides.'] : [];
+  const said = verdict.remarks.some((text) => /screening/i.test(text));
+  const screening = verdict.screening && !said ? ['Screening rule: it never fails and never decides.'] : [];
   return [...verdict.remarks, ...screening, ...mend].map(closed);
 }
 
