@@ -13,3 +13,4 @@ export { busSubject, partSubject, readSubject, type Subject, selectedIds } from 
 export type { Primitive, SymbolShape } from './symbols/primitives.ts';
 export { symbolPaths, symbolShape } from './symbols/symbolShape.ts';
 export { Tray, type TrayProps } from './tray/Tray.tsx';
+export * from './slip/index.ts';

@@ -17,6 +17,7 @@ function solids(layout: Layout, site: Study): { what: string; box: Box }[] {
   return [
     ...layout.buses.flatMap((bus) => [
       { what: `name of ${bus.id}`, box: bus.label },
+      { what: `mark of ${bus.id}`, box: bus.mark },
       { what: `bar ${bus.id}`, box: { x: bus.x1, y: bus.y - 2, width: bus.x2 - bus.x1, height: 4 } },
       { what: `dial of ${bus.id}`, box: { x: bus.dial.x - 16, y: bus.dial.y - 16, width: 32, height: 32 } },
     ]),
@@ -27,6 +28,7 @@ function solids(layout: Layout, site: Study): { what: string; box: Box }[] {
       const [width, height] = p.hang === 'across' ? [along, across] : [across, along];
       return [
         { what: `text of ${p.id}`, box: p.label },
+        { what: `mark of ${p.id}`, box: p.mark },
         { what: `symbol ${p.id}`, box: { x: p.x - width / 2, y: p.y - height / 2, width, height } },
       ];
     }),

@@ -56,7 +56,12 @@ export function BusGlyph({ place, figure, palette, letters = '', hatchId }: BusG
         {letters}
       </text>
       {figure.mark && figure.mark !== 'pass' && (
-        <VerdictMark verdict={figure.mark} palette={palette} x={8} y={14} />
+        <VerdictMark
+          verdict={figure.mark}
+          palette={palette}
+          x={place.mark.x - place.x1 + 8}
+          y={place.mark.y - place.y + 8}
+        />
       )}
     </g>
   );

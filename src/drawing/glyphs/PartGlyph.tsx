@@ -1,5 +1,6 @@
 import { measures, type PartPlace, type Point, textWidth } from '../layout/index.ts';
 import type { PartFigure } from '../readings/figures.ts';
+import { verdictWords } from '../readings/worstVerdict.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
 import type { Palette } from './Palette.ts';
 import { SymbolGlyph } from './SymbolGlyph.tsx';
@@ -103,23 +104,23 @@ interface MarkProps {
   letters: string;
 }
 
-/** Marks stand right of a hanging symbol, left of the symbol of a part with its text on the right. */
+/** Beside a hanging symbol the word stands under the mark; elsewhere mark, word and letters share a row. */
 function MarkAndLetters({ place, figure, palette, letters }: MarkProps) {
   const shown = figure.mark !== undefined && figure.mark !== 'pass';
   if (!shown && letters === '') return null;
-  const word = figure.mark === 'fail' ? 'fails' : figure.mark === 'watch' ? 'watch' : 'no verdict';
-  const wide = shown ? 12 + textWidth(word, 11) + 6 : 0;
-  const beside =
-    place.align === 'middle' ? { x: 28, y: place.hang === 'across' ? -16 : 0 } : { x: 28, y: 36 };
+  const stacked = place.hang === 'below';
+  const [x, y] = [place.mark.x - place.x + 8, place.mark.y - place.y + 8];
+  const word = figure.mark ? verdictWords[figure.mark] : '';
+  const lettersX = !shown ? -8 : stacked ? 12 : 18 + textWidth(word, 11);
   return (
     <g>
       {shown && figure.mark && (
-        <VerdictMark verdict={figure.mark} palette={palette} x={beside.x + 8} y={beside.y} />
+        <VerdictMark verdict={figure.mark} palette={palette} x={x} y={y} stacked={stacked} />
       )}
       <text
         className="letters"
-        x={beside.x + 8 + wide}
-        y={beside.y + 4}
+        x={x + lettersX}
+        y={y + 4}
         fontSize={12}
         fontWeight={600}
         fill={figure.mark === 'fail' ? palette.fail : palette.ink2}

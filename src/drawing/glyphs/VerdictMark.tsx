@@ -7,13 +7,15 @@ export interface VerdictMarkProps {
   palette: Palette;
   x: number;
   y: number;
+  /** The word stands below the mark instead of beside it. */
+  stacked?: boolean;
 }
 
 /**
  * A verdict's mark and word around (x, y): a disc with a cross fails, a triangle watches, an open ring with a
  * question mark has no verdict, a bare tick passes. Each shape is told apart without colour.
  */
-export function VerdictMark({ verdict, palette, x, y }: VerdictMarkProps) {
+export function VerdictMark({ verdict, palette, x, y, stacked = false }: VerdictMarkProps) {
   const ink = { fail: palette.fail, watch: palette.watch, pass: palette.pass, unknown: palette.ink2 }[
     verdict
   ];
@@ -40,7 +42,7 @@ export function VerdictMark({ verdict, palette, x, y }: VerdictMarkProps) {
         </>
       )}
       {verdict === 'pass' && <path d="M-5,0 L-1.5,4 L5,-4.5" fill="none" stroke={ink} strokeWidth={1.8} />}
-      <text x={12} y={4} fontSize={11} fill={ink}>
+      <text x={stacked ? -8 : 12} y={stacked ? 20 : 4} fontSize={11} fill={ink}>
         {verdictWords[verdict]}
       </text>
     </g>

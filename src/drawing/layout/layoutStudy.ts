@@ -3,7 +3,15 @@ import { type Arrangement, arrange } from './alongBusbar.ts';
 import { addBlock, type Block, emptyBlock, shiftBeside } from './block.ts';
 import { assignLanes, type IslandDepths, islandDepths, type Lane } from './islandDepths.ts';
 import { busLabelWidth } from './labels.ts';
-import { BUS_LABEL_HEIGHT, DIAL_RADIUS, ISLAND_GAP, LANE_PITCH, MARGIN } from './measures.ts';
+import {
+  BUS_LABEL_HEIGHT,
+  BUS_MARK_ROOM,
+  DIAL_RADIUS,
+  ISLAND_GAP,
+  LANE_PITCH,
+  MARGIN,
+  MARK_HEIGHT,
+} from './measures.ts';
 import { gapRule, type Packing, packBusbar } from './packBusbar.ts';
 import { placePart, placeTie } from './placePart.ts';
 import { type SiteGraph, siteGraph } from './siteGraph.ts';
@@ -96,6 +104,7 @@ function placeBusbar(site: Site, bus: number, x1: number, x2: number, island: nu
     storey,
     island,
     label: { x: x1, y: y - 6 - BUS_LABEL_HEIGHT, width: busLabelWidth(data), height: BUS_LABEL_HEIGHT },
+    mark: { x: x1, y: y + 6, width: BUS_MARK_ROOM - 8, height: MARK_HEIGHT },
     dial: tiedRight ? { x: x2 - DIAL_RADIUS - 2, y: y - DIAL_RADIUS - 4 } : { x: x2 + DIAL_RADIUS + 12, y },
   };
   return place;

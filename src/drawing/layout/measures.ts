@@ -16,7 +16,7 @@ export const TIE_ZONE = 96;
 /** Room above the top busbars for supplies and generators. */
 export const SOURCE_ZONE = 116;
 /** Room above a busbar for its name and volts, or its dial. */
-export const BUS_LABEL_BAND = 38;
+export const BUS_LABEL_BAND = 44;
 export const BUS_LABEL_HEIGHT = 18;
 export const LANE_PITCH = 12;
 
@@ -43,3 +43,7 @@ export const DIAL_RADIUS = 16;
 /** Room right of a busbar for its dial and the letters of its notes. */
 export const DIAL_ROOM = 64;
 export const MARGIN = 28;
+/** A busbar's verdict stands under its left end: parts leading on keep clear of it. */
+export const BUS_MARK_ROOM = 84;
+export const MARK_HEIGHT = 16;
+export const MARK_WIDTH = 110;

@@ -6,9 +6,11 @@ import {
   ARRIVAL_PITCH,
   BAR_INSET,
   BUS_GAP,
+  BUS_MARK_ROOM,
   DIAL_RADIUS,
   DIAL_ROOM,
   LEAF_READING,
+  MARK_WIDTH,
   SIDE_TEXT_OFFSET,
   SLOT_GAP,
 } from './measures.ts';
@@ -50,7 +52,7 @@ export function packBusbar(
   for (const part of fedBy) {
     const x = part === fedBy[0] ? leadX : leadRight + SYMBOL_HALF + SLOT_GAP;
     block.symbols.push({ part, x, hang: 'from' in part ? 'leads-on' : 'above' });
-    topEnd = x + ARRIVAL_PITCH;
+    topEnd = x + ('from' in part ? ARRIVAL_PITCH : SIDE_TEXT_OFFSET + MARK_WIDTH);
     leadRight = x + SIDE_TEXT_OFFSET + sideLabel(part, study).width;
   }
   for (const part of arrangement.fromAbove[bus] ?? []) {
@@ -79,17 +81,19 @@ function closeBar(packing: Packing, block: Block, bus: number, topEnd: number, f
 function packSlots(packing: Packing, bus: number, firstLead: number): { block: Block; slotXs: number[] } {
   const slots = packing.arrangement.slots[bus] ?? [];
   const block = emptyBlock();
-  let left = BAR_INSET;
+  let left = BUS_MARK_ROOM;
   for (const part of packing.arrangement.fromBelow[bus] ?? []) {
     block.arrivals.push({ part, bus, x: left, from: 'below' });
     left += ARRIVAL_PITCH;
   }
-  block.rows[0] = { left: 0, right: left - SLOT_GAP, leftBus: -1, rightBus: -1 };
+  const arrived = left > BUS_MARK_ROOM;
+  block.rows[0] = { left: 0, right: (arrived ? left : BAR_INSET) - SLOT_GAP, leftBus: -1, rightBus: -1 };
   const slotXs: number[] = [];
   for (const slot of slots) {
     const next = packSlot(packing, bus, slot);
     const nearest = shiftBeside(block, next, gapRule(packing));
-    const x = slots.length === 1 && slot.kind !== 'leaf' ? Math.max(nearest, firstLead) : nearest;
+    const clear = slot.kind === 'leaf' ? nearest : Math.max(nearest, BUS_MARK_ROOM + SYMBOL_HALF);
+    const x = slots.length === 1 && slot.kind !== 'leaf' ? Math.max(clear, firstLead) : clear;
     addBlock(block, next, x);
     slotXs.push(x);
   }

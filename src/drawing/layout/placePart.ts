@@ -3,7 +3,15 @@ import { symbolShape } from '../symbols/symbolShape.ts';
 import type { SymbolX } from './block.ts';
 import type { Lane } from './islandDepths.ts';
 import { leafLabelWidth, sideLabel } from './labels.ts';
-import { LEAF_TEXT_DEPTH, LINE_PX, SIDE_TEXT_OFFSET, SOURCE_HEIGHT, SYMBOL_DEPTH } from './measures.ts';
+import {
+  LEAF_TEXT_DEPTH,
+  LINE_PX,
+  MARK_HEIGHT,
+  MARK_WIDTH,
+  SIDE_TEXT_OFFSET,
+  SOURCE_HEIGHT,
+  SYMBOL_DEPTH,
+} from './measures.ts';
 import type { Box, BusPlace, PartEnd, PartPlace, Point } from './types.ts';
 
 export interface Route {
@@ -70,6 +78,7 @@ function placeLeaf(study: Study, part: SeriesElement | ShuntElement, x: number, 
     label: { x: x - width / 2, y: bar.y + LEAF_TEXT_DEPTH, width, height: LINES * LINE_PX },
     align: 'middle',
     oneLine: false,
+    mark: { x: x + SIDE_TEXT_OFFSET, y: centre.y - MARK_HEIGHT, width: 56, height: 2 * MARK_HEIGHT },
   };
 }
 
@@ -77,11 +86,12 @@ function sideBox(
   study: Study,
   part: SeriesElement | ShuntElement,
   centre: Point,
-): { label: Box; oneLine: boolean } {
+): { label: Box; mark: Box; oneLine: boolean } {
   const { width, oneLine } = sideLabel(part, study);
   const height = (oneLine ? LINES - 1 : LINES) * LINE_PX;
   return {
     label: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y - height / 2, width, height },
+    mark: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y + 31, width: MARK_WIDTH, height: MARK_HEIGHT },
     oneLine,
   };
 }
@@ -175,5 +185,6 @@ export function placeTie(study: Study, part: SeriesElement, left: BusPlace, righ
     label: { x: centre.x - width / 2, y: centre.y + 26, width, height: LINES * LINE_PX },
     align: 'middle',
     oneLine: false,
+    mark: { x: centre.x - 50, y: centre.y - 26 - MARK_HEIGHT, width: MARK_WIDTH, height: MARK_HEIGHT },
   };
 }

@@ -23,6 +23,8 @@ export interface BusPlace {
   label: Box;
   /** Centre of the three-phasor dial. */
   dial: Point;
+  /** Room for the verdict's mark and word. */
+  mark: Box;
   /** 0 is the topmost. */
   storey: number;
   /** 0, 1, … from left to right; busbars of one island are joined by series parts. */
@@ -59,6 +61,8 @@ export interface PartPlace {
   /** Name, nameplate and readings; `align` says where the lines start. */
   label: Box;
   align: 'middle' | 'start';
+  /** Room for the verdict's mark, its word and the letters of notes: stacked in two rows or in one. */
+  mark: Box;
   /** Name and nameplate share the first line. */
   oneLine: boolean;
 }

@@ -1,4 +1,4 @@
-import { formatNumber, formatQuantity } from '../../study/index.ts';
+import { formatNumber } from '../../study/index.ts';
 
 /** Decimals that keep three digits, so that a live number does not jump in width. */
 function decimalsOf(value: number): number {
@@ -12,7 +12,7 @@ export function liveNumber(value: number): string {
 }
 
 export function liveQuantity(value: number, unit: string): string {
-  return Number.isFinite(value) ? formatQuantity(value, unit, { decimals: decimalsOf(value) }) : '–';
+  return `${liveNumber(value)}\u00a0${unit}`;
 }
 
 /** kW, kvar or kVA, in the mega unit from ten thousand. */
@@ -22,8 +22,8 @@ export function livePower(kilo: number, unit: 'W' | 'var' | 'VA'): string {
 
 export function liveVolts(volts: number): string {
   if (!Number.isFinite(volts)) return '–';
-  if (volts >= 1000) return formatQuantity(volts / 1000, 'kV', { decimals: volts >= 99_950 ? 1 : 2 });
-  return formatQuantity(volts, 'V', { decimals: volts >= 9.995 ? 1 : 2 });
+  if (volts >= 1000) return `${formatNumber(volts / 1000, { decimals: volts >= 99_950 ? 1 : 2 })}\u00a0kV`;
+  return `${formatNumber(volts, { decimals: volts >= 9.995 ? 1 : 2 })}\u00a0V`;
 }
 
 export function livePercent(perUnit: number): string {
