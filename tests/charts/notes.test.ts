@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { noteLetters, pinKey, pinSubject, subjectKey } from '../../src/charts/index.ts';
+import { dropPlace } from '../../src/charts/notes/dropPlace.ts';
 import { movedPin } from '../../src/charts/notes/movedPin.ts';
 import { moveInColumn } from '../../src/charts/notes/noteKeys.ts';
 import { readingText, verdictText } from '../../src/charts/notes/noteText.ts';
@@ -217,6 +218,16 @@ describe('walking the column by keyboard', () => {
     expect(go('End', 'r')).toBe(true);
     expect(go('x', 'r')).toBe(false);
     expect(visited).toEqual(['v1', 'v2']);
+  });
+
+  it('drops a dragged note after the middles it has passed', () => {
+    const middles = [50, 150, 250];
+    expect(dropPlace(middles, 0, 60)).toBe(0);
+    expect(dropPlace(middles, 0, 160)).toBe(1);
+    expect(dropPlace(middles, 0, 999)).toBe(2);
+    expect(dropPlace(middles, 2, 140)).toBe(-1);
+    expect(dropPlace(middles, 2, 10)).toBe(-2);
+    expect(dropPlace(middles, 1, 150)).toBe(0);
   });
 
   it('moves a pin one place and refuses beyond the ends', () => {

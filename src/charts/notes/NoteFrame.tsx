@@ -1,4 +1,4 @@
-import type { KeyboardEvent, ReactNode } from 'react';
+import type { HTMLAttributes, KeyboardEvent, ReactNode } from 'react';
 
 export type NoteState = 'line' | 'card' | 'lens';
 
@@ -22,6 +22,8 @@ interface NoteFrameProps extends NoteHandlers {
   lit: boolean;
   /** Whether this note is the column's tab stop. */
   tabStop: boolean;
+  /** Handlers that let the title be dragged. */
+  drag?: HTMLAttributes<HTMLButtonElement> | undefined;
   text(): string;
   actions?: ReactNode;
   children?: ReactNode;
@@ -52,6 +54,7 @@ export function NoteFrame(props: NoteFrameProps) {
           className="note-title"
           aria-expanded={state !== 'line'}
           tabIndex={props.tabStop ? 0 : -1}
+          {...props.drag}
           onClick={props.onToggle}
           onKeyDown={props.onKeyDown}
         >

@@ -10,6 +10,7 @@ import { type NoteSubject, pinKey, pinSubject, subjectKey } from './noteLetters.
 import type { Reading } from './Reading.ts';
 import { ReadingNote } from './ReadingNote.tsx';
 import { useLatest } from './useLatest.ts';
+import { type NoteDrag, useNoteDrag } from './useNoteDrag.ts';
 import { VerdictRow } from './VerdictRow.tsx';
 import { groupedVerdicts, type VerdictGrouping, verdictCounts } from './verdictOrder.ts';
 
@@ -74,13 +75,21 @@ export function NotesColumn(props: NotesColumnProps) {
     props.litSubject ? subjectKey(props.litSubject) === subjectKey(subject) : false;
   const letterOf = (subject: NoteSubject) => props.letters.get(subjectKey(subject)) ?? '';
 
+  const readingKeys = readings.map((one) => pinKey(one.pin));
+  const moveReading = (key: string, by: number) => {
+    const moved = movedPin(
+      readings.map((one) => one.pin),
+      readingKeys.indexOf(key),
+      by,
+    );
+    if (moved) props.onReorder?.(moved);
+  };
+  const { drag, handlersOf } = useNoteDrag(column, readingKeys, moveReading);
+
   const onReadingKey = (reading: Reading, event: KeyboardEvent<HTMLElement>) => {
     const key = pinKey(reading.pin);
-    if (event.altKey && isVertical(event.key)) {
-      const pins = readings.map((one) => one.pin);
-      const moved = movedPin(pins, readings.indexOf(reading), event.key === 'ArrowUp' ? -1 : 1);
-      if (moved) props.onReorder?.(moved);
-    } else if (event.key === 'Delete') props.onUnpin?.(reading.pin);
+    if (event.altKey && isVertical(event.key)) moveReading(key, event.key === 'ArrowUp' ? -1 : 1);
+    else if (event.key === 'Delete') props.onUnpin?.(reading.pin);
     else {
       handlers.walk(key, event);
       return;
@@ -99,6 +108,8 @@ export function NotesColumn(props: NotesColumnProps) {
         state={state}
         lit={isLit(subject)}
         tabStop={key === tabStop}
+        dropMark={dropMark(drag, readingKeys, key)}
+        drag={props.onReorder && handlersOf(key)}
         order={props.order}
         timeTurn={props.timeTurn}
         onOrder={props.onOrder}
@@ -157,6 +168,13 @@ export function NotesColumn(props: NotesColumnProps) {
       </div>
     </section>
   );
+}
+
+function dropMark(drag: NoteDrag | null, keys: readonly string[], key: string) {
+  if (!drag) return undefined;
+  if (drag.key === key) return 'dragged';
+  if (drag.by === 0 || keys.indexOf(drag.key) + drag.by !== keys.indexOf(key)) return undefined;
+  return drag.by < 0 ? 'drop-before' : 'drop-after';
 }
 
 function isVertical(key: string): boolean {

@@ -1,4 +1,4 @@
-import { memo, useMemo, useState } from 'react';
+import { type HTMLAttributes, memo, useMemo, useState } from 'react';
 import { joinParts } from '../figure/quantityParts.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
 import { PhasorView } from '../phasor/PhasorView.tsx';
@@ -20,6 +20,9 @@ export interface ReadingNoteProps extends NoteHandlers {
   state: NoteState;
   lit?: boolean;
   tabStop?: boolean;
+  /** Drawn as being dragged, or as the place where a dragged note would land. */
+  dropMark?: 'dragged' | 'drop-before' | 'drop-after' | undefined;
+  drag?: HTMLAttributes<HTMLButtonElement> | undefined;
   /** The rail's order. */
   order: number;
   /** Shared time cursor, 0…1 of a fundamental period. */
@@ -47,7 +50,7 @@ export const ReadingNote = memo(function ReadingNote(props: ReadingNoteProps) {
     <NoteFrame
       {...props}
       noteKey={pinKey(reading.pin)}
-      className="reading"
+      className={props.dropMark ? `reading ${props.dropMark}` : 'reading'}
       title={state === 'line' ? lineTitle(reading, numbers) : reading.title}
       lit={props.lit ?? false}
       tabStop={props.tabStop ?? true}
@@ -114,7 +117,7 @@ function ReadingBody(props: ReadingBodyProps) {
         order={order}
         size={size}
         timeTurn={timeTurn}
-        anglesUnknown={reading.anglesUnknown[order - 1] ?? false}
+        anglesUnknown={size === 'lens' && (reading.anglesUnknown[order - 1] ?? false)}
         magnitudesOnly={reading.summation === 'alpha' && order > 1}
         lit={lit}
         onLit={showLit}

@@ -1,7 +1,7 @@
 import type { Pin } from '../../study/types.ts';
 
-/** The pins with the one at `from` moved one place up (−1) or down (+1); null at an end. */
-export function movedPin(pins: readonly Pin[], from: number, by: 1 | -1): Pin[] | null {
+/** The pins with the one at `from` moved up (negative) or down by a number of places; null beyond an end. */
+export function movedPin(pins: readonly Pin[], from: number, by: number): Pin[] | null {
   const to = from + by;
   const pin = pins[from];
   if (!pin || to < 0 || to >= pins.length) return null;

@@ -5,7 +5,7 @@ import { impedanceAt } from './impedanceCurve.ts';
 import type { Injection } from './injections.ts';
 import { OrderEntryField } from './OrderEntryField.tsx';
 import { clampOrder, type OrderDomain, revealOrder, zoomDomain } from './orderAxis.ts';
-import { RailHandle } from './RailHandle.tsx';
+import { RailHandle, RailHandleLine } from './RailHandle.tsx';
 import { RailAxis, RailCurves, RailFlags, RailInjected } from './RailLandscape.tsx';
 import { RailStrip } from './RailStrip.tsx';
 import { railKeyAction } from './railKeys.ts';
@@ -118,6 +118,7 @@ export function FrequencyRail(props: FrequencyRailProps) {
             <RailAxis model={model} style={SCREEN_STYLE} />
             <RailInjected model={model} style={SCREEN_STYLE} />
             <RailCurves model={model} style={SCREEN_STYLE} />
+            <RailHandleLine model={model} style={SCREEN_STYLE} order={order} />
             <RailFlags model={model} style={SCREEN_STYLE} frequencyHz={frequencyHz} />
             <RailHandle
               model={model}

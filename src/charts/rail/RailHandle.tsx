@@ -16,7 +16,15 @@ interface RailHandleProps {
   exact: boolean;
 }
 
-/** The handle on the curve with its line through the axis and its words beside it. */
+/** The handle's line through the axis; flags stand over it. */
+export function RailHandleLine({ model, style, order }: Pick<RailHandleProps, 'model' | 'style' | 'order'>) {
+  const { layout, axis } = model;
+  if (order < axis.domain.low || order > axis.domain.high) return null;
+  const x = axis.x(order);
+  return <line x1={x} x2={x} y1={0} y2={layout.axisY + 5} stroke={style.ink.accent} strokeWidth={1.5} />;
+}
+
+/** The handle on the curve with its words beside it. */
 export function RailHandle({ model, style, order, frequencyHz, probe, exact }: RailHandleProps) {
   const { layout, axis, ohm, withCurve } = model;
   if (order < axis.domain.low || order > axis.domain.high) return null;
@@ -30,7 +38,6 @@ export function RailHandle({ model, style, order, frequencyHz, probe, exact }: R
   const box = handleLabelBox({ x, y }, size, bounds, flags, model.curveHeights);
   return (
     <g pointerEvents="none">
-      <line x1={x} x2={x} y1={0} y2={layout.axisY + 5} stroke={style.ink.accent} strokeWidth={1.5} />
       <circle cx={x} cy={y} r={7} fill={style.ink.sheet} stroke={style.ink.accent} strokeWidth={2.5} />
       <rect {...box} rx={3} fill={style.ink.sheet} stroke={style.ink.accent} strokeWidth={1} />
       <text

@@ -9,6 +9,8 @@ export interface ImpedanceCurve {
 export interface CurvePoint {
   order: number;
   ohm: number;
+  /** A refined resonance: never left out of the drawing. */
+  turning: boolean;
 }
 
 /**
@@ -20,9 +22,10 @@ export function impedanceCurve(scan: ImpedanceScan, frequencyHz: number): Impeda
   const points: CurvePoint[] = [];
   for (let i = 0; i < scan.frequencyHz.length; i++) {
     const ohm = Math.hypot(scan.re[i] ?? Number.NaN, scan.im[i] ?? Number.NaN);
-    points.push({ order: (scan.frequencyHz[i] ?? Number.NaN) / frequencyHz, ohm });
+    points.push({ order: (scan.frequencyHz[i] ?? Number.NaN) / frequencyHz, ohm, turning: false });
   }
-  for (const resonance of scan.resonances) points.push({ order: resonance.order, ohm: resonance.ohm });
+  for (const resonance of scan.resonances)
+    points.push({ order: resonance.order, ohm: resonance.ohm, turning: true });
   const drawable = points.filter((p) => p.order > 0 && Number.isFinite(p.order) && isDrawable(p.ohm));
   return { points: drawable.sort((a, b) => a.order - b.order) };
 }

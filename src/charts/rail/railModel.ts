@@ -1,4 +1,4 @@
-import { area, line } from 'd3';
+import { area, curveMonotoneX, line } from 'd3';
 import type { VerdictWord } from '../../checks/types.ts';
 import type { ImpedanceScan } from '../../engine/types.ts';
 import type { Box } from '../figure/box.ts';
@@ -135,8 +135,25 @@ function curvePath(
   const path = line<CurvePoint>()
     .x((point) => axis.x(point.order))
     .y((point) => ohm.y(point.ohm))
+    .curve(curveMonotoneX)
     .digits(2);
-  return path(curve.points.filter((point) => nearView(point.order, axis.domain)));
+  return path(thinned(curve.points, axis));
+}
+
+const CLOSEST = 0.8;
+
+/** Points in and a little beyond the view, no closer than the eye can tell apart; resonances all stay. */
+function thinned(points: readonly CurvePoint[], axis: OrderAxis): CurvePoint[] {
+  const kept: CurvePoint[] = [];
+  let lastX = Number.NEGATIVE_INFINITY;
+  for (const point of points) {
+    if (!nearView(point.order, axis.domain)) continue;
+    const x = axis.x(point.order);
+    if (!point.turning && x - lastX < CLOSEST) continue;
+    kept.push(point);
+    lastX = x;
+  }
+  return kept;
 }
 
 /** Points a little beyond the view keep the line running to the edge of the clip. */

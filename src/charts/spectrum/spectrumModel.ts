@@ -92,12 +92,14 @@ function orderLabels(bars: readonly PlacedBar[], smallSize: number): { h: number
 }
 
 const WORDED_BARS = 4;
+const WORDED_SHARE = 0.08;
 
 /** Words over the failing and the largest bars, never over one another. */
 function withWords(bars: readonly PlacedBar[], place: SpectrumPlace, left: number): PlacedBar[] {
   const taken: Box[] = [];
+  const largest = Math.max(0, ...bars.map((bar) => bar.percent));
   const inTurn = [...bars]
-    .filter((bar) => bar.percent > 0)
+    .filter((bar) => bar.fails || bar.percent > WORDED_SHARE * largest)
     .sort((a, b) => Number(b.fails) - Number(a.fails) || b.percent - a.percent)
     .slice(0, WORDED_BARS);
   const words = new Map<number, PlacedBar['words']>();
