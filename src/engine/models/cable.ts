@@ -1,5 +1,5 @@
 import type { Skin } from '../../study/index.ts';
-import type { PartLaw } from './PartLaw.ts';
+import { type PartLaw, writeInverse } from './PartLaw.ts';
 import { skinFactor } from './skinFactor.ts';
 
 export interface CableData {
@@ -28,6 +28,17 @@ export function cableLaw(data: CableData, omega: number): PartLaw {
   const x0 = x1 * data.x0OverX1;
   const b0 = b1 * data.c0OverC1;
   const { runs, skin } = data;
+  if (b1 === 0)
+    return (h, out, at) => {
+      const factor = skinFactor(h, skin) / runs;
+      const x = h / runs;
+      writeInverse(r0 * factor, x0 * x, out, at);
+      writeInverse(r1 * factor, x1 * x, out, at + 2);
+      for (let k = at; k < at + 4; k++) {
+        out[k + 4] = out[k]!;
+        out[k + 8] = -out[k]!;
+      }
+    };
   return (h, out, at) => {
     const factor = skinFactor(h, skin);
     writeLine(r0 * factor, h * x0, h * b0, runs, out, at);

@@ -5,8 +5,8 @@ import type { Skin } from '../../study/index.ts';
  * which costs as much as the rest of a part's law.
  */
 export function skinFactor(h: number, skin: Skin): number {
-  const [s, e] = skin;
-  return s === 0 ? 1 : 1 - s + s * power(h, e);
+  const s = skin[0];
+  return s === 0 ? 1 : 1 - s + s * power(h, skin[1]);
 }
 
 function power(h: number, e: number): number {

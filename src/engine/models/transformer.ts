@@ -44,7 +44,7 @@ export function transformerLaw(data: TransformerData): PartLaw {
   return (h, out, at) => {
     const r = resistance * skinFactor(h, skin);
     const x = h * reactance;
-    out.fill(0, at, at + 12);
+    for (let k = 0; k < 10; k++) out[at + k] = 0;
     writeInverse(r, x, out, at + 6);
     const re = out[at + 6] as number;
     const im = out[at + 7] as number;

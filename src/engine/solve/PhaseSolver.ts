@@ -1,4 +1,4 @@
-import { BlockLdl, BlockLu, GuardedSolver } from '../kernel/index.ts';
+import { BlockLdl, BlockLu, type BlockMatrix, GuardedSolver } from '../kernel/index.ts';
 import type { Network, Role } from '../network/Network.ts';
 import { NodeAdmittances } from './NodeAdmittances.ts';
 import { type FactorMethod, type OrderSolver, SingularNetworkError } from './OrderSolver.ts';
@@ -6,8 +6,8 @@ import { PhaseStamps } from './PhaseStamps.ts';
 import { planFor } from './planFor.ts';
 
 interface Factor {
-  stamps: PhaseStamps;
   guard: GuardedSolver<BlockLdl> | GuardedSolver<BlockLu>;
+  stamp: Record<Role, () => void>;
 }
 
 /**
@@ -30,8 +30,8 @@ export class PhaseSolver implements OrderSolver {
     this.admittances = new NodeAdmittances(network);
     const matrix = new BlockLdl(planFor(network, lastNode));
     this.reciprocal = {
-      stamps: new PhaseStamps(this.admittances, matrix),
       guard: new GuardedSolver(matrix, (plan) => new BlockLdl(plan)),
+      stamp: this.stampsInto(matrix),
     };
     this.current = this.reciprocal;
   }
@@ -39,9 +39,9 @@ export class PhaseSolver implements OrderSolver {
   prepare(h: number, role: Role): void {
     this.admittances.evaluate(h, role);
     this.current = this.admittances.negativeParts(role).length > 0 ? this.generalFactor() : this.reciprocal;
-    const { stamps, guard } = this.current;
-    stamps.write(role);
-    const { status, method } = guard.factor(() => stamps.write(role));
+    const { guard, stamp } = this.current;
+    stamp[role]();
+    const { status, method } = guard.factor(stamp[role]);
     this.method = method;
     if (status !== 'factored') throw new SingularNetworkError(h);
   }
@@ -59,9 +59,14 @@ export class PhaseSolver implements OrderSolver {
     if (this.general) return this.general;
     const matrix = new BlockLu(planFor(this.network, this.lastNode));
     this.general = {
-      stamps: new PhaseStamps(this.admittances, matrix),
       guard: new GuardedSolver(matrix, (plan) => new BlockLu(plan)),
+      stamp: this.stampsInto(matrix),
     };
     return this.general;
+  }
+
+  private stampsInto(matrix: BlockMatrix): Record<Role, () => void> {
+    const stamps = new PhaseStamps(this.admittances, matrix);
+    return { fundamental: () => stamps.write('fundamental'), harmonic: () => stamps.write('harmonic') };
   }
 }

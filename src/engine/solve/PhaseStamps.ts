@@ -84,14 +84,15 @@ export class PhaseStamps {
   }
 
   private addPhasePart({ node, at, phases: { p, q } }: ShuntPart): void {
-    const y = { re: this.network.values[at + 2]!, im: this.network.values[at + 3]! };
+    const re = this.network.values[at + 2]!;
+    const im = this.network.values[at + 3]!;
     this.re.fill(0);
     this.im.fill(0);
-    this.setEntry(p, p, y.re, y.im);
+    this.setEntry(p, p, re, im);
     if (q >= 0) {
-      this.setEntry(q, q, y.re, y.im);
-      this.setEntry(p, q, -y.re, -y.im);
-      this.setEntry(q, p, -y.re, -y.im);
+      this.setEntry(q, q, re, im);
+      this.setEntry(p, q, -re, -im);
+      this.setEntry(q, p, -re, -im);
     }
     this.matrix.addDiagonalBlock(node, this.re, this.im);
   }

@@ -28,6 +28,7 @@ export class SequenceSolver implements OrderSolver {
   private readonly sin: Float64Array;
   private readonly x: Float64Array;
   private readonly six = new Float64Array(6);
+  private readonly restamp = (): void => this.stamp();
   private sequence: SequenceNumber = 1;
 
   constructor(network: Network, lastNode?: number) {
@@ -50,7 +51,7 @@ export class SequenceSolver implements OrderSolver {
     this.sequence = sequence;
     this.admittances.evaluate(h, role);
     this.stamp();
-    const { status, method } = this.guard.factor(() => this.stamp());
+    const { status, method } = this.guard.factor(this.restamp);
     this.method = method;
     if (status !== 'factored') throw new SingularNetworkError(h);
   }
