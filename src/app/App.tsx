@@ -1,0 +1,45 @@
+import { useCallback, useState } from 'react';
+import { useWorkbench } from '../store/index.ts';
+import { CommandList } from './commands/CommandList.tsx';
+import { KeyMap } from './commands/KeyMap.tsx';
+import { useCommandKeys } from './commands/useCommandKeys.ts';
+import { useCommands } from './commands/useCommands.ts';
+import { CorrectionPlace } from './correction/CorrectionPlace.tsx';
+import { StudyDetails } from './details/StudyDetails.tsx';
+import { DropTarget } from './files/DropTarget.tsx';
+import { NoticeDialog, NoticeLine } from './files/NoticeDialog.tsx';
+import { Header } from './header/Header.tsx';
+import { SheetConnection } from './sheet/SheetConnection.tsx';
+import { RailConnection } from './site/RailConnection.tsx';
+import { SitePlace } from './site/SitePlace.tsx';
+import { useTheme } from './theme/useTheme.ts';
+
+type OpenDialog = 'commands' | 'keys' | 'details' | null;
+
+/** The shell: header, the place looked at, the rail, and what may lie above them. */
+export function App() {
+  useTheme();
+  const place = useWorkbench((state) => state.view.place);
+  const [dialog, setDialog] = useState<OpenDialog>(null);
+  const openList = useCallback(() => setDialog('commands'), []);
+  const close = useCallback(() => setDialog(null), []);
+  const commands = useCommands(setDialog);
+  useCommandKeys(commands, openList);
+  return (
+    <div className="workbench" data-place={place}>
+      <Header commands={commands} onCommandList={openList} />
+      <NoticeLine />
+      <main className="place">
+        {place === 'site' && <SitePlace />}
+        {place === 'correction' && <CorrectionPlace />}
+        {place === 'sheet' && <SheetConnection />}
+      </main>
+      {place !== 'sheet' && <RailConnection />}
+      <CommandList commands={commands} open={dialog === 'commands'} onOpenChange={close} />
+      <KeyMap commands={commands} open={dialog === 'keys'} onClose={close} />
+      {dialog === 'details' && <StudyDetails onClose={close} />}
+      <NoticeDialog />
+      <DropTarget />
+    </div>
+  );
+}

@@ -1,0 +1,88 @@
+import { Button, Dialog, Heading, Modal, ModalOverlay } from 'react-aria-components';
+import { type Command, shownKeys } from './command.ts';
+
+interface Props {
+  commands: readonly Command[];
+  open: boolean;
+  onClose(): void;
+}
+
+const placesKeys: readonly { place: string; keys: readonly [string, string][] }[] = [
+  {
+    place: 'On the drawing',
+    keys: [
+      ['←  →  ↑  ↓', 'move along parts and busbars'],
+      ['Enter', 'open the data of the part'],
+      ['Delete', 'delete what is selected'],
+      ['Mod+D', 'duplicate'],
+      ['F', 'fit the drawing'],
+      ['Escape', 'close, or cancel the gesture'],
+    ],
+  },
+  {
+    place: 'In the tray',
+    keys: [['Enter', 'take the part; arrows choose the busbar, Enter drops it']],
+  },
+  {
+    place: 'On the rail',
+    keys: [
+      ['←  →', 'one order'],
+      ['Shift + ←  →', 'fine'],
+      ['P', 'next peak'],
+      ['Home', 'fundamental'],
+      ['0 … 9', 'type an order or a frequency'],
+    ],
+  },
+];
+
+/** Every key, by where it works. */
+export function KeyMap({ commands, open, onClose }: Props) {
+  return (
+    <ModalOverlay isOpen={open} onOpenChange={onClose} isDismissable className="veil">
+      <Modal className="key-map">
+        <Dialog>
+          <Heading slot="title">Keys</Heading>
+          <div className="key-columns">
+            <section>
+              <h3>Everywhere</h3>
+              <dl>
+                <dt>
+                  <kbd>{shownKeys('Mod+K')}</kbd>
+                </dt>
+                <dd>find a command by its words</dd>
+                {commands
+                  .filter((command) => command.keys)
+                  .map((command) => (
+                    <div key={command.id} className="pair">
+                      <dt>
+                        <kbd>{shownKeys(command.keys as string)}</kbd>
+                      </dt>
+                      <dd>{command.words}</dd>
+                    </div>
+                  ))}
+              </dl>
+            </section>
+            {placesKeys.map(({ place, keys }) => (
+              <section key={place}>
+                <h3>{place}</h3>
+                <dl>
+                  {keys.map(([key, words]) => (
+                    <div key={key} className="pair">
+                      <dt>
+                        <kbd>{shownKeys(key)}</kbd>
+                      </dt>
+                      <dd>{words}</dd>
+                    </div>
+                  ))}
+                </dl>
+              </section>
+            ))}
+          </div>
+          <Button autoFocus onPress={onClose}>
+            Close
+          </Button>
+        </Dialog>
+      </Modal>
+    </ModalOverlay>
+  );
+}

@@ -1,0 +1,30 @@
+import { useEffect } from 'react';
+import { type Command, matchesKeys } from './command.ts';
+
+function typing(target: EventTarget | null): boolean {
+  return (
+    target instanceof HTMLElement && target.closest('input, textarea, select, [contenteditable]') !== null
+  );
+}
+
+/** Runs a command when its keys are pressed; a field being typed in keeps its own undo and letters. */
+export function useCommandKeys(commands: readonly Command[], onCommandList: () => void): void {
+  useEffect(() => {
+    const press = (event: KeyboardEvent) => {
+      if (event.defaultPrevented) return;
+      if (matchesKeys('Mod+K', event)) {
+        event.preventDefault();
+        onCommandList();
+        return;
+      }
+      const command = commands.find((one) => one.keys && matchesKeys(one.keys, event));
+      if (!command || command.enabled === false) return;
+      const inField = typing(event.target);
+      if (inField && (!command.keys?.includes('Mod') || command.id.startsWith('edit.'))) return;
+      event.preventDefault();
+      command.run();
+    };
+    window.addEventListener('keydown', press);
+    return () => window.removeEventListener('keydown', press);
+  }, [commands, onCommandList]);
+}

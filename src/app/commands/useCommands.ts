@@ -1,0 +1,117 @@
+import { useMemo } from 'react';
+import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
+import { casesOf, nameOf, newStudy, type Study } from '../../study/index.ts';
+import { openSample } from '../files/openSample.ts';
+import { samples } from '../files/samples.ts';
+import type { Command } from './command.ts';
+
+function fileCommands(study: Study | null): Command[] {
+  const { openStudy, openFile, saveFile, saveFileAs } = workbench.getState();
+  return [
+    {
+      id: 'study.new',
+      words: 'New study, 50 Hz',
+      run: () => openStudy(newStudy({ title: 'New study', frequencyHz: 50 })),
+    },
+    {
+      id: 'study.new60',
+      words: 'New study, 60 Hz',
+      run: () => openStudy(newStudy({ title: 'New study', frequencyHz: 60 })),
+    },
+    { id: 'study.open', words: 'Open a study…', keys: 'Mod+O', run: () => void openFile() },
+    {
+      id: 'study.save',
+      words: 'Save the study',
+      keys: 'Mod+S',
+      enabled: study !== null,
+      run: () => void saveFile(),
+    },
+    {
+      id: 'study.saveAs',
+      words: 'Save the study as…',
+      keys: 'Mod+Shift+S',
+      enabled: study !== null,
+      run: () => void saveFileAs(),
+    },
+    ...samples.map((sample) => ({
+      id: `sample.${sample.id}`,
+      words: `Sample: ${sample.title}`,
+      run: () => void openSample(sample),
+    })),
+  ];
+}
+
+function historyCommands(undoing: string | null, redoing: string | null): Command[] {
+  const { undo, redo } = workbench.getState();
+  return [
+    {
+      id: 'edit.undo',
+      words: undoing ? `Undo: ${undoing}` : 'Undo',
+      keys: 'Mod+Z',
+      enabled: undoing !== null,
+      run: undo,
+    },
+    {
+      id: 'edit.redo',
+      words: redoing ? `Redo: ${redoing}` : 'Redo',
+      keys: 'Mod+Shift+Z',
+      enabled: redoing !== null,
+      run: redo,
+    },
+  ];
+}
+
+function viewCommands(study: Study | null): Command[] {
+  const { setPlace, setReadingMode, setTheme, setCase } = workbench.getState();
+  return [
+    { id: 'place.site', words: 'Go to Site', keys: 'Mod+1', run: () => setPlace('site') },
+    { id: 'place.correction', words: 'Go to Correction', keys: 'Mod+2', run: () => setPlace('correction') },
+    { id: 'place.sheet', words: 'Go to Sheet', keys: 'Mod+3', run: () => setPlace('sheet') },
+    {
+      id: 'reading.fundamental',
+      words: 'Readings on the drawing: fundamental',
+      run: () => setReadingMode('fundamental'),
+    },
+    {
+      id: 'reading.rms',
+      words: 'Readings on the drawing: rms of all orders',
+      run: () => setReadingMode('rms'),
+    },
+    {
+      id: 'reading.order',
+      words: 'Readings on the drawing: order at the handle',
+      run: () => setReadingMode('order'),
+    },
+    { id: 'theme.light', words: 'Light: paper', run: () => setTheme('light') },
+    { id: 'theme.dark', words: 'Dark: slate', run: () => setTheme('dark') },
+    { id: 'theme.system', words: 'Light or dark as the machine', run: () => setTheme('system') },
+    ...(study ? casesOf(study) : []).map((one) => ({
+      id: `case.${one.id}`,
+      words: `Case: ${nameOf(one)}`,
+      run: () => setCase(one.id),
+    })),
+  ];
+}
+
+/** Every command of the page in its present state. */
+export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): Command[] {
+  const study = useWorkbench((state: Workbench) => state.study);
+  const undoing = useWorkbench(undoWords);
+  const redoing = useWorkbench(redoWords);
+  return useMemo(
+    () => [
+      ...fileCommands(study),
+      ...historyCommands(undoing, redoing),
+      {
+        id: 'study.details',
+        words: 'Title, criteria and limits of the study…',
+        keys: 'Mod+I',
+        enabled: study !== null,
+        run: () => openDialog('details'),
+      },
+      ...viewCommands(study),
+      { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
+    ],
+    [study, undoing, redoing, openDialog],
+  );
+}

@@ -1,0 +1,17 @@
+import { openSample } from './openSample.ts';
+import { samples } from './samples.ts';
+
+/** The sample sites by their story, on the paper of an empty study. */
+export function Samples() {
+  return (
+    <section className="samples" aria-label="Sample sites">
+      <h2>Or begin with a site that tells a story</h2>
+      {samples.map((sample) => (
+        <button key={sample.id} type="button" onClick={() => void openSample(sample)}>
+          <strong>{sample.title}</strong>
+          <span>{sample.story}</span>
+        </button>
+      ))}
+    </section>
+  );
+}

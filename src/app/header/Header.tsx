@@ -1,0 +1,26 @@
+import { type Command, shownKeys } from '../commands/command.ts';
+import { CaseMenu } from './CaseMenu.tsx';
+import { PlaceTabs } from './PlaceTabs.tsx';
+import { StudyMenu } from './StudyMenu.tsx';
+import { VerdictCounts } from './VerdictCounts.tsx';
+
+interface Props {
+  commands: readonly Command[];
+  onCommandList(): void;
+}
+
+/** One quiet line: study, case, places, verdict counts. */
+export function Header({ commands, onCommandList }: Props) {
+  return (
+    <header className="header">
+      <h1>Varwright</h1>
+      <StudyMenu commands={commands} />
+      <CaseMenu />
+      <PlaceTabs />
+      <VerdictCounts />
+      <button type="button" className="command-key" onClick={onCommandList} aria-label="Command list">
+        {shownKeys('Mod+K')}
+      </button>
+    </header>
+  );
+}

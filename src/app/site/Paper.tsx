@@ -1,0 +1,97 @@
+import { useCallback, useState } from 'react';
+import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
+import { useWorkbench, workbench } from '../../store/index.ts';
+import type { Study } from '../../study/index.ts';
+import { Samples } from '../files/Samples.tsx';
+import { SlipConnection } from './SlipConnection.tsx';
+
+const noVerdicts: never[] = [];
+
+interface Props {
+  study: Study;
+  letters: ReadonlyMap<string, string>;
+  lit: Subject | null;
+  armedKind: TrayKind | null;
+  onArm(kind: TrayKind | null): void;
+  onHover(subject: Subject | null): void;
+}
+
+function select(items: readonly Subject[]): void {
+  workbench.getState().select(items);
+}
+
+function openSlip(subject: Subject | null): void {
+  const state = workbench.getState();
+  if (subject === null) state.closeSlip();
+  else state.openSlip(subject);
+}
+
+/** The drawing, or the same site as an outline. */
+export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props) {
+  const view = useWorkbench((state) => state.view);
+  const answer = useWorkbench((state) => state.answer);
+  const stale = useWorkbench((state) => state.answer?.revision !== state.revision);
+  const probe = useWorkbench((state) => (state.probe?.revision === state.revision ? state.probe : null));
+  const openedRevision = useWorkbench((state) => state.openedRevision);
+  const { edit, setFocusBus, setReadingMode } = workbench.getState();
+  const [outlined, setOutlined] = useState(false);
+  const verdicts = answer?.verdicts ?? noVerdicts;
+  const ofCase = answer?.caseId === view.caseId;
+  const renderSlip = useCallback(
+    (subject: Subject) => <SlipConnection study={study} subject={subject} />,
+    [study],
+  );
+  return (
+    <section className="paper" aria-label="Drawing">
+      {outlined ? (
+        <div className="outline-place">
+          <Outline
+            study={study}
+            selection={view.selection}
+            verdicts={verdicts}
+            onSelect={select}
+            onFocusBus={setFocusBus}
+            onOpenSlip={openSlip}
+          />
+          {view.openSlip && <div className="outline-slip">{renderSlip(view.openSlip)}</div>}
+        </div>
+      ) : (
+        <Drawing
+          study={study}
+          caseId={view.caseId}
+          solution={ofCase ? answer.solution : null}
+          stale={stale}
+          verdicts={verdicts}
+          focusBus={view.focusBus}
+          order={view.order}
+          readingMode={view.readingMode}
+          probe={probe}
+          selection={view.selection}
+          openSlip={view.openSlip}
+          letters={letters}
+          lit={lit}
+          armedKind={armedKind}
+          fitKey={String(openedRevision)}
+          onSelect={select}
+          onFocusBus={setFocusBus}
+          onOpenSlip={openSlip}
+          onEdit={edit}
+          onReadingMode={setReadingMode}
+          onArm={onArm}
+          onHover={onHover}
+          renderSlip={renderSlip}
+        >
+          <Samples />
+        </Drawing>
+      )}
+      <button
+        type="button"
+        className="outline-toggle"
+        aria-pressed={outlined}
+        onClick={() => setOutlined(!outlined)}
+      >
+        {outlined ? 'as a drawing' : 'as a list'}
+      </button>
+    </section>
+  );
+}
