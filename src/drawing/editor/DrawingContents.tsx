@@ -3,6 +3,7 @@ import type { Layout } from '../layout/index.ts';
 import type { Figures } from '../readings/figures.ts';
 import { busSubject, partSubject, type Subject } from '../subject.ts';
 import { BusView } from './BusView.tsx';
+import { EndHandles } from './EndHandles.tsx';
 import { PartView } from './PartView.tsx';
 
 export interface DrawingContentsProps {
@@ -20,7 +21,7 @@ export interface DrawingContentsProps {
   hatchId: string;
 }
 
-/** Parts first, busbars over their conductors. */
+/** Parts first, busbars over their conductors, the handles of selected parts over all. */
 export const DrawingContents = memo(function DrawingContents(props: DrawingContentsProps) {
   const { layout, figures, letters, selection, current, lit, hatchId } = props;
   const selected = new Set(selection);
@@ -61,6 +62,11 @@ export const DrawingContents = memo(function DrawingContents(props: DrawingConte
           />
         ) : null;
       })}
+      {layout.parts.map((place) =>
+        place.foot && selected.has(partSubject(place.id)) ? (
+          <EndHandles key={place.id} place={place} />
+        ) : null,
+      )}
     </>
   );
 });

@@ -3,7 +3,7 @@ import { trayNames } from '../gestures/TrayKind.ts';
 import { screenPalette } from '../glyphs/Palette.ts';
 import { PartGlyph } from '../glyphs/PartGlyph.tsx';
 import { measures, type PartPlace, textWidth } from '../layout/index.ts';
-import type { PartFigure } from '../readings/figures.ts';
+import { type PartFigure, readingLines } from '../readings/figures.ts';
 import { verdictWords } from '../readings/worstVerdict.ts';
 import { partSubject } from '../subject.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
@@ -91,7 +91,6 @@ export const PartView = memo(function PartView(props: PartViewProps) {
       <rect className="frame" {...symbol} rx={3} />
       <ReadingHatch place={place} figure={figure} hatchId={hatchId} />
       <PartGlyph place={place} figure={figure} palette={screenPalette} letters={letters} />
-      {selected && place.foot && <Handles place={place} />}
     </g>
   );
 }, sameProps);
@@ -99,7 +98,8 @@ export const PartView = memo(function PartView(props: PartViewProps) {
 /** Shown while the readings are older than the drawing. */
 function ReadingHatch({ place, figure, hatchId }: Pick<PartViewProps, 'place' | 'figure' | 'hatchId'>) {
   if (figure.lines.length === 0 || figure.off) return null;
-  const width = Math.max(...figure.lines.map((line) => textWidth(line)));
+  const lines = readingLines(figure, place.align);
+  const width = Math.max(...lines.map((line) => textWidth(line)));
   const middle = place.align === 'middle';
   const x = (middle ? place.label.x + (place.label.width - width) / 2 : place.label.x) - place.x;
   const y = place.label.y - place.y + (place.oneLine ? 1 : 2) * measures.LINE_PX;
@@ -109,26 +109,8 @@ function ReadingHatch({ place, figure, hatchId }: Pick<PartViewProps, 'place' | 
       x={x}
       y={y}
       width={width}
-      height={figure.lines.length * measures.LINE_PX}
+      height={lines.length * measures.LINE_PX}
       fill={`url(#${hatchId})`}
     />
   );
-}
-
-/** The two ends of a selected series part, to be dragged to other busbars. */
-function Handles({ place }: { place: PartPlace }) {
-  return place.ends.map((end) => {
-    const touch = end.path[0];
-    if (!touch) return null;
-    return (
-      <circle
-        key={end.bus}
-        className="handle"
-        data-end={end.bus}
-        cx={touch.x - place.x}
-        cy={touch.y - place.y}
-        r={6}
-      />
-    );
-  });
 }

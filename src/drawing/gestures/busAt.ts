@@ -24,12 +24,10 @@ export function busAt(layout: Layout, point: Point): BusPlace | undefined {
   return nearest;
 }
 
-/** Parts touching a busbar, left to right as drawn. */
+/** Parts hanging from a busbar or leading down from it, left to right as drawn. */
 export function partsAlong(layout: Layout, bus: string): { id: string; x: number }[] {
-  const touching = layout.parts.flatMap((part) => {
-    const end = part.ends.find((e) => e.bus === bus);
-    const x = end?.path[0]?.x;
-    return x === undefined || part.hang === 'above' || part.hang === 'across' ? [] : [{ id: part.id, x }];
-  });
-  return touching.sort((a, b) => a.x - b.x);
+  return layout.parts
+    .filter((part) => part.bus === bus && part.hang !== 'above' && part.hang !== 'across')
+    .map((part) => ({ id: part.id, x: part.top.x }))
+    .sort((a, b) => a.x - b.x);
 }

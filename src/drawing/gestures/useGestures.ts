@@ -84,9 +84,11 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
   }, []);
 
   const cancel = useCallback(() => {
+    const under = gesture.current !== null;
     gesture.current = null;
     touches.current.clear();
     setHand(null);
+    return under;
   }, []);
 
   const drop = useCallback((held: Held, screen: Point) => {

@@ -1,5 +1,5 @@
 import { measures, type PartPlace, type Point, textWidth } from '../layout/index.ts';
-import type { PartFigure } from '../readings/figures.ts';
+import { type PartFigure, readingLines } from '../readings/figures.ts';
 import { verdictWords } from '../readings/worstVerdict.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
 import type { Palette } from './Palette.ts';
@@ -14,6 +14,8 @@ export interface PartGlyphProps {
   letters?: string;
 }
 
+/** Lines are told apart by their place. */
+const PLACES = ['first', 'second', 'third'];
 const REACTIVE = new Set(['bank', 'filter']);
 
 function turnOf(place: PartPlace): number {
@@ -79,10 +81,9 @@ function PartText({ place, figure, palette }: Omit<PartGlyphProps, 'letters'>) {
           {plate}
         </text>
       )}
-      {figure.lines.map((text, at) => (
+      {readingLines(figure, place.align).map((text, at) => (
         <text
-          // Lines are told apart by their place: first, second.
-          key={at === 0 ? 'first' : 'second'}
+          key={PLACES[at]}
           className="reading"
           x={x}
           y={top + (firstReading + at) * line}

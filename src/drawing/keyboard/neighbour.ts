@@ -53,10 +53,7 @@ function row(layout: Layout, bus: string, hang: string): string[] {
     const feeds = layout.parts.filter((p) => p.bus === bus && p.hang === 'above');
     return feeds.sort((a, b) => a.x - b.x).map((p) => p.id);
   }
-  const below = new Set(layout.parts.filter((p) => p.bus === bus).map((p) => p.id));
-  const along = partsAlong(layout, bus)
-    .filter((p) => below.has(p.id))
-    .map((p) => p.id);
+  const along = partsAlong(layout, bus).map((p) => p.id);
   const tie = layout.parts.find((p) => p.bus === bus && p.hang === 'across');
   return tie ? [...along, tie.id] : along;
 }

@@ -29,7 +29,8 @@ export interface KeyContext {
   setCurrent(subject: Subject): void;
   setCarried(held: Held | null): void;
   setTarget(bus: string | undefined): void;
-  cancelGesture(): void;
+  /** Ends a pointer gesture; false when none is under way. */
+  cancelGesture(): boolean;
   onArm(kind: TrayKind | null): void;
   onSelect(items: readonly Subject[]): void;
   onFocusBus(bus: string): void;
@@ -176,7 +177,7 @@ function mark(c: KeyContext, adding: boolean): boolean {
 }
 
 function stepBack(c: KeyContext): boolean {
-  c.cancelGesture();
+  if (c.cancelGesture() && !c.armedKind) return true;
   if (c.carried || c.armedKind) {
     c.setCarried(null);
     c.onArm(null);

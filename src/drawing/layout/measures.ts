@@ -5,14 +5,14 @@ export const LINE_PX = 15;
 
 /** Busbar to the top of a hanging symbol. */
 export const LEAD = 38;
-/** Depth of a storey that holds hanging parts: lead, symbol, four lines of text. */
-export const LEAF_ZONE = 158;
+/** Depth of a storey that holds hanging parts: lead, symbol, five lines of text. */
+export const LEAF_ZONE = 173;
 /** Depth of a storey that holds only parts leading further down. */
 export const TRUNK_ZONE = 116;
 /** Depth of a storey with nothing below its busbars. */
 export const BARE_ZONE = 30;
 /** A tie between two busbars end to end, its text below it. */
-export const TIE_ZONE = 96;
+export const TIE_ZONE = 106;
 /** Room above the top busbars for supplies and generators. */
 export const SOURCE_ZONE = 116;
 /** Room above a busbar for its name and volts, or its dial. */
@@ -27,8 +27,8 @@ export const SOURCE_HEIGHT = 72;
 /** Top of a hanging part's text below its busbar. */
 export const LEAF_TEXT_DEPTH = 94;
 
-/** Width kept for the live reading under a hanging part and beside a part that leads on. */
-export const LEAF_READING = 154;
+/** Width kept for the live reading under a hanging part (three lines) and beside a part that leads on (two). */
+export const LEAF_READING = 112;
 export const SIDE_READING = 176;
 /** Width kept for the live volts beside a busbar's name. */
 export const BUS_READING = 128;

@@ -19,8 +19,9 @@ export interface Route {
   y: number;
 }
 
-/** Name, plate and two lines of readings. */
-const LINES = 4;
+/** Name, plate and two lines of readings beside a symbol, three below it. */
+const SIDE_LINES = 4;
+const LEAF_LINES = 5;
 
 function endsOf(part: SeriesElement | ShuntElement): [string, string] {
   return 'from' in part ? [part.from, part.to] : [part.bus, part.bus];
@@ -75,7 +76,7 @@ function placeLeaf(study: Study, part: SeriesElement | ShuntElement, x: number, 
         ],
       },
     ],
-    label: { x: x - width / 2, y: bar.y + LEAF_TEXT_DEPTH, width, height: LINES * LINE_PX },
+    label: { x: x - width / 2, y: bar.y + LEAF_TEXT_DEPTH, width, height: LEAF_LINES * LINE_PX },
     align: 'middle',
     oneLine: false,
     mark: { x: x + SIDE_TEXT_OFFSET, y: centre.y - MARK_HEIGHT, width: 56, height: 2 * MARK_HEIGHT },
@@ -88,7 +89,7 @@ function sideBox(
   centre: Point,
 ): { label: Box; mark: Box; oneLine: boolean } {
   const { width, oneLine } = sideLabel(part, study);
-  const height = (oneLine ? LINES - 1 : LINES) * LINE_PX;
+  const height = (oneLine ? SIDE_LINES - 1 : SIDE_LINES) * LINE_PX;
   return {
     label: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y - height / 2, width, height },
     mark: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y + 31, width: MARK_WIDTH, height: MARK_HEIGHT },
@@ -182,7 +183,7 @@ export function placeTie(study: Study, part: SeriesElement, left: BusPlace, righ
         ],
       },
     ],
-    label: { x: centre.x - width / 2, y: centre.y + 26, width, height: LINES * LINE_PX },
+    label: { x: centre.x - width / 2, y: centre.y + 26, width, height: LEAF_LINES * LINE_PX },
     align: 'middle',
     oneLine: false,
     mark: { x: centre.x - 50, y: centre.y - 26 - MARK_HEIGHT, width: MARK_WIDTH, height: MARK_HEIGHT },

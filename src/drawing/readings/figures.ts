@@ -14,6 +14,7 @@ export interface PartFigure {
   element: StudyElement;
   name: string;
   plate: string;
+  /** Live readings, one figure or two to a line. */
   lines: string[];
   /** Conductor width by busbar id, px. */
   widths: Record<string, number>;
@@ -81,4 +82,11 @@ export function figuresOf(
     });
   }
   return { parts, buses };
+}
+
+/** The readings as they stand in the part's text: three short lines below a symbol, two beside it. */
+export function readingLines(figure: PartFigure, align: 'middle' | 'start'): string[] {
+  const [first, ...rest] = figure.lines;
+  if (align === 'middle' || first === undefined || rest.length < 2) return figure.lines;
+  return [first, rest.join(' · ')];
 }

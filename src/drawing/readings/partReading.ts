@@ -50,7 +50,7 @@ function fundamentalLines(solution: CaseSolution, part: StudyElement, terminal: 
       : '';
   if (part.kind === 'bank' || part.kind === 'filter') return [reactive, withLoading(part, ampere)];
   if (part.kind === 'coupler' || part.kind === 'reactor') return [withLoading(part, ampere)];
-  return [`${withLoading(part, ampere)}${pf}`, `${livePower(kW, 'W')} · ${reactive}`];
+  return [`${withLoading(part, ampere)}${pf}`, livePower(kW, 'W'), reactive];
 }
 
 function rmsLines(solution: CaseSolution, part: StudyElement, terminal: number): string[] {
