@@ -1,0 +1,61 @@
+import { cpus } from 'node:os';
+import { editToResults, elasticityTime, scanTime } from './engineFigures.ts';
+import { kernelFigure, sequenceRefactor } from './kernelFigures.ts';
+import { buildYardstick } from './kluYardstick.ts';
+
+/** The benchmark: `npm run bench`. Ratios are of medians taken alternately in this one run. */
+
+const yardstick = buildYardstick();
+console.log(`Node ${process.version}, ${cpus().length} × ${cpus()[0]?.model ?? 'unknown processor'}`);
+if ('missing' in yardstick) console.log(`No native yardstick, no ratios: ${yardstick.missing}.`);
+console.log(line('figure', 'measured', 'target'));
+
+const kernel = [30, 100, 300, 1000].map((busbars) => {
+  const figure = kernelFigure(busbars, yardstick);
+  const { refactor, oneSolve, threeSolves, residual, ratios } = figure;
+  report(
+    `${busbars} busbars, refactor`,
+    us(refactor) + beside(ratios?.refactor),
+    busbars > 100 ? '' : '≤ 0.60',
+  );
+  report(`${busbars} busbars, refactor + 1 solve`, us(oneSolve) + beside(ratios?.oneSolve));
+  report(`${busbars} busbars, refactor + 3 solves`, us(threeSolves) + beside(ratios?.threeSolves));
+  report(`${busbars} busbars, normalised residual`, residual.toExponential(1));
+  return refactor / busbars;
+});
+if (!('missing' in yardstick)) yardstick.close();
+report('30 → 1000 busbars, refactor per busbar', `${spread(kernel).toFixed(2)} times`, '≤ 1.6');
+report('30 busbars, one sequence network, refactor', us(sequenceRefactor(30)));
+report('30 busbars, scan of 2000 points', ms(scanTime(30, 2000)), '≤ 15 ms');
+report('30 busbars, what moves a resonance', ms(elasticityTime(30)));
+const whole = [30, 100, 300, 1000].map((busbars) => {
+  const time = editToResults(busbars);
+  report(`${busbars} busbars × 50 orders, edit to results`, ms(time), busbars === 30 ? '≤ 8 ms' : '');
+  return time / busbars;
+});
+report('30 → 1000 busbars, edit to results per busbar', `${spread(whole).toFixed(2)} times`, '≤ 1.6');
+
+function us(x: number): string {
+  return `${x < 10 ? x.toFixed(2) : x.toFixed(1)} µs`;
+}
+
+function ms(x: number): string {
+  return `${x.toFixed(2)} ms`;
+}
+
+function beside(ratio: number | undefined): string {
+  return ratio === undefined ? '' : `, ${ratio.toFixed(2)} of native`;
+}
+
+/** Largest over smallest. */
+function spread(values: number[]): number {
+  return Math.max(...values) / Math.min(...values);
+}
+
+function report(figure: string, measured: string, target = ''): void {
+  console.log(line(figure, measured, target));
+}
+
+function line(figure: string, measured: string, target: string): string {
+  return `${figure.padEnd(48)}${measured.padEnd(28)}${target}`.trimEnd();
+}
