@@ -21,7 +21,7 @@ export function LazyPage({ count, ...props }: ComponentProps<typeof PagePreview>
     <section
       ref={holder}
       className="sheet-leaf"
-      style={{ aspectRatio: `${props.width} / ${props.height}` }}
+      style={{ aspectRatio: `${props.page.width} / ${props.page.height}` }}
       aria-label={`Page ${props.page.number} of ${count}`}
     >
       {near && <PagePreview {...props} />}

@@ -9,8 +9,6 @@ const TEXT_STYLE = { fontKerning: 'none', whiteSpace: 'pre' } as const;
 
 interface PageProps {
   page: SheetPage;
-  width: number;
-  height: number;
   figures: ReadonlyMap<string, Figure>;
   compose: FigureComposer;
 }
@@ -102,9 +100,9 @@ function Mark({ mark, ...rest }: { mark: PageMark } & Pick<PageProps, 'figures' 
 }
 
 /** One page of the sheet, drawn from the same marks the PDF is written from. */
-export const PagePreview = memo(function PagePreview({ page, width, height, ...rest }: PageProps) {
+export const PagePreview = memo(function PagePreview({ page, ...rest }: PageProps) {
   return (
-    <svg className="sheet-page" viewBox={`0 0 ${width} ${height}`} fontFamily={FAMILY}>
+    <svg className="sheet-page" viewBox={`0 0 ${page.width} ${page.height}`} fontFamily={FAMILY}>
       {page.marks.map((mark) => (
         <Mark key={placeOf(mark)} mark={mark} {...rest} />
       ))}

@@ -89,15 +89,13 @@ function Pages({ input: latest }: { input: SheetInput }) {
     const document = buildDocument(input);
     return { pages: layoutPages(document), figures: figuresOf(document), compose: sheetFigures(input) };
   }, [input]);
-  const { pages, width, height } = sheet.pages;
+  const { pages } = sheet;
   return (
     <div className="sheet-pages" aria-busy={input !== latest}>
       {pages.map((page) => (
         <LazyPage
           key={page.number}
           page={page}
-          width={width}
-          height={height}
           count={pages.length}
           figures={sheet.figures}
           compose={sheet.compose}

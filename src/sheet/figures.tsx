@@ -10,7 +10,7 @@ import { orderTable } from '../checks/index.ts';
 import { layoutStudy, StaticDrawing } from '../drawing/index.ts';
 import type { ImpedanceScan } from '../engine/index.ts';
 import { type Pin, studyInCase } from '../study/index.ts';
-import { DRAWING_CROP, type FigureRequest, type SheetCase, type SheetInput } from './document/index.ts';
+import type { DrawingWindow, FigureRequest, SheetCase, SheetInput } from './document/index.ts';
 import type { FigureComposer } from './FigureComposer.ts';
 import { type PinSpectra, phasesToDraw, pinSpectra } from './pinSpectra.ts';
 
@@ -29,24 +29,30 @@ function emptyScan({ bus, sequence }: ImpedanceScan): ImpedanceScan {
   return { bus, sequence, frequencyHz: none, re: none, im: none, resonances: [], error: 'not computed' };
 }
 
-function drawing(input: SheetInput, computed: SheetCase, size: Size) {
+function drawing(input: SheetInput, computed: SheetCase, window: DrawingWindow, size: Size) {
   const layout = layoutStudy(input.study);
-  const crop = DRAWING_CROP;
+  const shown = window ?? { x: 0, y: 0, width: layout.width, height: layout.height };
+  const clip = `piece-${[shown.x, shown.y].map(Math.round).join('-')}`;
   return (
     <svg
       xmlns="http://www.w3.org/2000/svg"
       width={size.width}
       height={size.height}
-      viewBox={[crop, crop, layout.width - 2 * crop, layout.height - 2 * crop].join(' ')}
+      viewBox={[shown.x, shown.y, shown.width, shown.height].join(' ')}
     >
-      <StaticDrawing
-        study={input.study}
-        caseId={computed.caseId}
-        layout={layout}
-        solution={computed.solution.converged ? computed.solution : null}
-        verdicts={computed.verdicts}
-        fontFamily={FAMILY}
-      />
+      <clipPath id={clip}>
+        <rect {...shown} />
+      </clipPath>
+      <g clipPath={`url(#${clip})`}>
+        <StaticDrawing
+          study={input.study}
+          caseId={computed.caseId}
+          layout={layout}
+          solution={computed.solution.converged ? computed.solution : null}
+          verdicts={computed.verdicts}
+          fontFamily={FAMILY}
+        />
+      </g>
     </svg>
   );
 }
@@ -148,7 +154,7 @@ export function sheetFigures(input: SheetInput): FigureComposer {
     const computed = input.cases.find(({ caseId }) => caseId === request.caseId);
     if (!computed) return null;
     const size = { width, height };
-    if (request.kind === 'drawing') return drawing(input, computed, size);
+    if (request.kind === 'drawing') return drawing(input, computed, request.window, size);
     if (request.kind === 'impedance') return impedance(input, computed, request, size);
     return pinFigure(input, computed, request, size);
   };

@@ -6,5 +6,5 @@ export {
   sheetFileName,
 } from './exportStudySheet.ts';
 export { layoutPages } from './pages/layoutPages.ts';
-export type { PageMark, SheetPage, SheetPages } from './pages/marks.ts';
+export type { PageMark, SheetPage } from './pages/marks.ts';
 export { SheetPlace, type SheetPlaceProps } from './SheetPlace.tsx';

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { buildDocument, type SheetDocument, type TableBlock } from '../../src/sheet/document/index.ts';
 import { layoutPages } from '../../src/sheet/pages/layoutPages.ts';
-import type { SheetPages, TextMark } from '../../src/sheet/pages/marks.ts';
+import type { SheetPage, TextMark } from '../../src/sheet/pages/marks.ts';
 import { faceRuns, textWidth } from '../../src/sheet/pages/measure.ts';
 import { paginate } from '../../src/sheet/pages/paginate.ts';
 import type { Slice } from '../../src/sheet/pages/slice.ts';
@@ -16,8 +16,8 @@ const document = buildDocument(
   ]),
 );
 
-const textsOf = (pages: SheetPages): TextMark[] =>
-  pages.pages.flatMap(({ marks }) => marks.filter((mark) => mark.kind === 'text'));
+const textsOf = (pages: SheetPage[]): TextMark[] =>
+  pages.flatMap(({ marks }) => marks.filter((mark) => mark.kind === 'text'));
 
 const withTable = (rows: number): SheetDocument => {
   const table: TableBlock = {
@@ -40,11 +40,13 @@ describe('pages of the sheet', () => {
     const pages = layoutPages({ ...document, paper });
 
     it(`keep every mark inside the margins on ${paper}`, () => {
-      for (const mark of textsOf(pages)) {
-        expect(mark.x).toBeGreaterThanOrEqual(42.4);
-        expect(mark.x + textWidth(mark.text, mark.size, mark.weight)).toBeLessThanOrEqual(pages.width - 42);
-        expect(mark.y).toBeGreaterThan(30);
-        expect(mark.y).toBeLessThan(pages.height - 30);
+      for (const page of pages) {
+        for (const mark of textsOf([page])) {
+          expect(mark.x).toBeGreaterThanOrEqual(42.4);
+          expect(mark.x + textWidth(mark.text, mark.size, mark.weight)).toBeLessThanOrEqual(page.width - 42);
+          expect(mark.y).toBeGreaterThan(30);
+          expect(mark.y).toBeLessThan(page.height - 30);
+        }
       }
     });
 
@@ -56,7 +58,7 @@ describe('pages of the sheet', () => {
     });
 
     it(`never set two texts over one another on ${paper}`, () => {
-      for (const { marks } of pages.pages) {
+      for (const { marks } of pages) {
         const texts = marks.filter((mark) => mark.kind === 'text');
         const boxes = texts.map((mark) => ({
           left: mark.x,
@@ -82,7 +84,7 @@ describe('pages of the sheet', () => {
   }
 
   it('carry title, revision and page n of m on each page', () => {
-    const { pages } = layoutPages(document);
+    const pages = layoutPages(document);
     expect(pages.length).toBeGreaterThan(3);
     pages.forEach(({ marks, number }) => {
       const text = marks.flatMap((mark) => (mark.kind === 'text' ? [mark.text] : [])).join('\n');
@@ -112,7 +114,7 @@ describe('pages of the sheet', () => {
 
   it('repeat the heads of a table wherever it goes on, and leave no row alone', () => {
     for (const rows of [1, 2, 28, 29, 30, 31, 32, 33, 60, 95, 96, 97, 150]) {
-      const { pages } = layoutPages(withTable(rows));
+      const pages = layoutPages(withTable(rows));
       const counts = pages.map(({ marks }) => {
         const texts = marks.flatMap((mark) => (mark.kind === 'text' ? [mark.text] : []));
         const own = texts.filter((text) => /^row \d+\.$/.test(text)).length;

@@ -1,12 +1,13 @@
 import type { SheetInput } from './input.ts';
 import type { Section, SheetDocument } from './model.ts';
-import { viewOf } from './SheetView.ts';
+import { type SheetView, viewOf } from './SheetView.ts';
 import { busbarsSection } from './sections/busbarsSection.ts';
 import { casesSection } from './sections/casesSection.ts';
 import { cautionsSection, FRONT_CAUTION } from './sections/cautionsSection.ts';
 import { correctionSection } from './sections/correctionSection.ts';
 import { dataSection } from './sections/dataSection.ts';
-import { drawingSection, frontImpedanceSection, marginsSection } from './sections/frontSections.ts';
+import { drawingSection } from './sections/drawingSection.ts';
+import { frontImpedanceSection, marginsSection } from './sections/frontSections.ts';
 import { harmonicsSection } from './sections/harmonicsSection.ts';
 import { impedanceSection } from './sections/impedanceSection.ts';
 import { limitsSection } from './sections/limitsSection.ts';
@@ -65,6 +66,16 @@ function identity(input: SheetInput, revisionDate: string | undefined): Section 
   };
 }
 
+/** Result, drawing, impedance and margins; a drawing on pages of its own comes after the other three. */
+function frontPages(view: SheetView): Section[] {
+  const drawing = drawingSection(view);
+  const impedance = frontImpedanceSection(view);
+  const rest = [...(impedance ? [impedance] : []), marginsSection(view)];
+  return drawing.landscape
+    ? [resultSection(view), ...rest, drawing]
+    : [resultSection(view), drawing, ...rest];
+}
+
 /**
  * The results sheet as data, from a study and what was computed for its cases. Pure and without a clock:
  * the same input gives the same document. A number that was not computed is named so with the reason.
@@ -77,7 +88,6 @@ export function buildDocument(input: SheetInput): SheetDocument {
   const site = study.site?.trim() || 'site not stated';
   const revision = study.revision?.trim() ? `revision ${study.revision.trim()}` : 'no revision stated';
   const preparedBy = study.preparedBy?.trim() ?? '';
-  const impedance = frontImpedanceSection(view);
   return {
     paper: input.paper,
     title: study.title,
@@ -95,10 +105,7 @@ export function buildDocument(input: SheetInput): SheetDocument {
     },
     frontCaution: FRONT_CAUTION,
     sections: [
-      resultSection(view),
-      drawingSection(view),
-      ...(impedance ? [impedance] : []),
-      marginsSection(view),
+      ...frontPages(view),
       dataSection(view),
       loadsSection(view),
       casesSection(view),

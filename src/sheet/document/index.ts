@@ -4,6 +4,7 @@ export type {
   Block,
   Cell,
   Column,
+  DrawingWindow,
   Figure,
   FigureBlock,
   FigureRequest,
@@ -14,4 +15,3 @@ export type {
   TableBlock,
   TitleBlock,
 } from './model.ts';
-export { DRAWING_CROP } from './sections/frontSections.ts';

@@ -36,9 +36,12 @@ export interface TableBlock {
   notes: string[];
 }
 
+/** The piece of the single-line diagram that a figure shows, in the drawing's own units; absent: all of it. */
+export type DrawingWindow = { x: number; y: number; width: number; height: number } | null;
+
 /** What a figure shows; the composer of figures turns it into a drawing of the wanted size. */
 export type FigureRequest =
-  | { kind: 'drawing'; caseId: string }
+  | { kind: 'drawing'; caseId: string; window: DrawingWindow }
   | { kind: 'impedance'; caseId: string; bus: string; sequence: 'positive' | 'zero' }
   | { kind: 'waveform'; caseId: string; pin: Pin }
   | { kind: 'phasors'; caseId: string; pin: Pin }
@@ -56,6 +59,8 @@ export interface FigureBlock extends Figure {
   kind: 'figure';
   /** Height over width. */
   aspect: number;
+  /** Printed under the figure in small type. */
+  caption?: string;
   /** Drawn no wider than this, in points; absent: over the whole width. */
   widest?: number;
   /** May be drawn smaller by this factor where more then fits on the first page. */
@@ -78,9 +83,10 @@ export interface TermsBlock {
   terms: { label: string; text: string }[];
 }
 
+/** A paragraph that leads on stays on the page of the block after it. */
 export type Block =
   | { kind: 'heading'; text: string; aside?: string }
-  | { kind: 'paragraph'; text: string; small?: boolean }
+  | { kind: 'paragraph'; text: string; small?: boolean; leadsOn?: boolean }
   | { kind: 'list'; items: string[] }
   | TermsBlock
   | TableBlock
@@ -100,6 +106,8 @@ export interface Section {
   title: string;
   /** Beside the title in lighter ink. */
   aside?: string;
+  /** Set on pages of its own, turned on their side. */
+  landscape?: boolean;
   blocks: Block[];
 }
 

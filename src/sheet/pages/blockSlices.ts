@@ -15,7 +15,7 @@ export interface Room {
   tallest: number;
 }
 
-function figureSlice(block: FigureBlock, { width, tallest }: Room): Slice {
+function figureSlices(block: FigureBlock, { width, tallest }: Room): Slice[] {
   const drawn = (scale: number): { height: number; marks: PageMark[] } => {
     const wanted = Math.min(width, block.widest ?? width) * scale;
     const height = Math.min(wanted * block.aspect, tallest);
@@ -24,8 +24,9 @@ function figureSlice(block: FigureBlock, { width, tallest }: Room): Slice {
       marks: [{ kind: 'figure', id: block.id, x: 0, y: 0, width: height / block.aspect, height }],
     };
   };
-  const slice: Slice = { ...drawn(1), glued: false, gap: 4 };
-  return block.tightest === undefined ? slice : { ...slice, tight: drawn(block.tightest) };
+  const captions = block.caption === undefined ? [] : paragraphSlices(block.caption, width, true);
+  const slice: Slice = { ...drawn(1), glued: captions.length > 0, gap: 4 };
+  return [block.tightest === undefined ? slice : { ...slice, tight: drawn(block.tightest) }, ...captions];
 }
 
 function figureRowSlice(block: FigureRowBlock, width: number): Slice {
@@ -98,7 +99,9 @@ export function blockSlices(block: Block, room: Room): Slice[] {
     case 'heading':
       return headingSlices(block.text, block.aside, width, false);
     case 'paragraph':
-      return paragraphSlices(block.text, width, block.small ?? false);
+      return paragraphSlices(block.text, width, block.small ?? false).map((slice) =>
+        block.leadsOn ? { ...slice, glued: true } : slice,
+      );
     case 'list':
       return listSlices(block.items, width);
     case 'terms':
@@ -106,7 +109,7 @@ export function blockSlices(block: Block, room: Room): Slice[] {
     case 'table':
       return tableSlices(block, width);
     case 'figure':
-      return [figureSlice(block, room)];
+      return figureSlices(block, room);
     case 'figureRow':
       return [figureRowSlice(block, width)];
     case 'caution':

@@ -1,14 +1,17 @@
-import type { SheetDocument } from '../document/model.ts';
+import type { Section, SheetDocument } from '../document/model.ts';
 import { blockSlices, type Room } from './blockSlices.ts';
-import { type SheetPage, type SheetPages, shifted } from './marks.ts';
+import { type SheetPage, shifted } from './marks.ts';
 import { frontFoot, frontHead, slimHead, slimHeadHeight } from './pageFrame.ts';
 import { type PlacedSlice, paginate } from './paginate.ts';
-import { contentWidth, type Paper, paperOf } from './paper.ts';
+import { contentWidth, type Paper, paperOf, turned } from './paper.ts';
 import type { Slice } from './slice.ts';
 import { headingSlices } from './textSlices.ts';
 
-function documentSlices(document: SheetDocument, room: Room): Slice[] {
-  return document.sections.flatMap((section) => {
+/** Space under the head and over the foot of the first page. */
+const FRONT_GAP = 10;
+
+function slicesOf(sections: readonly Section[], room: Room): Slice[] {
+  return sections.flatMap((section) => {
     const [head, ...under] = headingSlices(section.title, section.aside, room.width, true);
     const blocks = section.blocks.flatMap((block) => blockSlices(block, room));
     if (!head) return blocks;
@@ -16,16 +19,49 @@ function documentSlices(document: SheetDocument, room: Room): Slice[] {
   });
 }
 
+/** Sections that follow one another on the same paper. */
+interface Run {
+  paper: Paper;
+  sections: Section[];
+}
+
+function runsOf({ paper, sections }: SheetDocument): Run[] {
+  const upright = paperOf(paper);
+  const onSide = turned(upright);
+  const runs: Run[] = [];
+  for (const section of sections) {
+    const wanted = section.landscape ? onSide : upright;
+    const last = runs.at(-1);
+    if (last?.paper === wanted) last.sections.push(section);
+    else runs.push({ paper: wanted, sections: [section] });
+  }
+  return runs;
+}
+
 const sectionsOnFirst = (pages: PlacedSlice[][]): number =>
   pages[0]?.filter(({ slice }) => slice.section !== undefined).length ?? 0;
 
+/** The pages of a run; on the first page of all, head and foot leave less room. */
+function fillRun({ paper, sections }: Run, frame: number | undefined): PlacedSlice[][] {
+  const whole = paper.height - paper.margin.top - paper.margin.bottom;
+  const later = whole - slimHeadHeight;
+  const slices = slicesOf(sections, { width: contentWidth(paper), tallest: later - 60 });
+  const room = (page: number): number => (page === 0 && frame !== undefined ? whole - frame : later);
+  const loose = paginate(slices, room);
+  if (frame === undefined) return loose;
+  const tightened = slices.map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
+  const tight = paginate(tightened, room);
+  return sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
+}
+
 function pageOf(placed: PlacedSlice[], number: number, head: Slice, paper: Paper): SheetPage {
-  const { left, top } = paper.margin;
-  const textTop = top + head.height + (number === 1 ? 10 : 0);
-  const page: SheetPage = { number, sections: [], marks: head.marks.map((mark) => shifted(mark, left, top)) };
+  const { width, height, margin } = paper;
+  const textTop = margin.top + head.height + (number === 1 ? FRONT_GAP : 0);
+  const marks = head.marks.map((mark) => shifted(mark, margin.left, margin.top));
+  const page: SheetPage = { number, width, height, sections: [], marks };
   for (const { slice, y } of placed) {
     if (slice.section) page.sections.push({ ...slice.section, y: textTop + y });
-    page.marks.push(...slice.marks.map((mark) => shifted(mark, left, textTop + y)));
+    page.marks.push(...slice.marks.map((mark) => shifted(mark, margin.left, textTop + y)));
   }
   return page;
 }
@@ -34,31 +70,21 @@ function pageOf(placed: PlacedSlice[], number: number, head: Slice, paper: Paper
  * The document set on paper: every mark of every page, in points. The preview and the PDF both draw
  * exactly these marks, so they cannot differ. The same document gives the same pages.
  */
-export function layoutPages(document: SheetDocument): SheetPages {
-  const paper = paperOf(document.paper);
-  const width = contentWidth(paper);
-  const front = frontHead(document, paper);
-  const foot = frontFoot(document, paper, '1 of 1');
-  const whole = paper.height - paper.margin.top - paper.margin.bottom;
-  const tallest = whole - slimHeadHeight - 60;
-  const fill = (slices: Slice[]): PlacedSlice[][] =>
-    paginate(slices, (page) =>
-      page === 0 ? whole - front.height - foot.height - 20 : whole - slimHeadHeight,
-    );
-  const slices = documentSlices(document, { width, tallest });
-  const loose = fill(slices);
-  const tight = fill(slices.map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice)));
-  const placed = sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
+export function layoutPages(document: SheetDocument): SheetPage[] {
+  const upright = paperOf(document.paper);
+  const front = frontHead(document, upright);
+  const frame = front.height + frontFoot(document, upright, '1 of 1').height + 2 * FRONT_GAP;
+  const placed = runsOf(document).flatMap((run, index) =>
+    fillRun(run, index === 0 ? frame : undefined).map((slices) => ({ slices, paper: run.paper })),
+  );
   const count = placed.length;
-  const pages = placed.map((slices, index) => {
-    const page = `page ${index + 1} of ${count}`;
-    return pageOf(slices, index + 1, index === 0 ? front : slimHead(document, paper, page), paper);
+  const pages = placed.map(({ slices, paper }, index) => {
+    const head = index === 0 ? front : slimHead(document, paper, `page ${index + 1} of ${count}`);
+    return pageOf(slices, index + 1, head, paper);
   });
-  const first = pages[0];
-  if (first) {
-    const set = frontFoot(document, paper, `1 of ${count}`);
-    const y = paper.height - paper.margin.bottom - set.height;
-    first.marks.push(...set.marks.map((mark) => shifted(mark, paper.margin.left, y)));
-  }
-  return { width: paper.width, height: paper.height, pages };
+  const foot = frontFoot(document, upright, `1 of ${count}`);
+  const { left, bottom } = upright.margin;
+  const y = upright.height - bottom - foot.height;
+  pages[0]?.marks.push(...foot.marks.map((mark) => shifted(mark, left, y)));
+  return pages;
 }

@@ -60,15 +60,11 @@ export type PageMark = TextMark | LineMark | BoxMark | FigureMark;
 
 export interface SheetPage {
   number: number;
+  width: number;
+  height: number;
   /** Section titles that begin here, for the outline. */
   sections: { id: string; title: string; y: number }[];
   marks: PageMark[];
-}
-
-export interface SheetPages {
-  width: number;
-  height: number;
-  pages: SheetPage[];
 }
 
 /** The same mark moved down and to the right. */

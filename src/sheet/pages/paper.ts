@@ -18,6 +18,11 @@ export function paperOf(name: PaperName): Paper {
   return { width, height, margin: { left: 42.5, right: 42.5, top: 36, bottom: 36 } };
 }
 
+/** The same paper turned on its side. */
+export function turned(paper: Paper): Paper {
+  return { ...paper, width: paper.height, height: paper.width };
+}
+
 export function contentWidth(paper: Paper): number {
   return paper.width - paper.margin.left - paper.margin.right;
 }

@@ -9,9 +9,10 @@ import { layoutPages } from '../pages/layoutPages.ts';
 import type { FigureMark, SheetPage } from '../pages/marks.ts';
 import { deflatePdf } from './deflatePdf.ts';
 import { drawMark } from './drawMark.ts';
-import { addFonts, type FontFiles, loadFontFiles } from './fontFiles.ts';
+import { addFonts, type FontFiles, loadFontFiles, PDF_FONT } from './fontFiles.ts';
 import { mountFigure } from './mountFigure.ts';
-import { newPdf } from './newPdf.ts';
+import { newPdf, orientationOf } from './newPdf.ts';
+import { portions } from './portions.ts';
 import { type Slicing, slicing } from './slicing.ts';
 import { markRuns } from './svgForPdf.ts';
 
@@ -30,8 +31,14 @@ async function drawFigure(
   const figure = mountFigure(element, mark.width, mark.height);
   try {
     markRuns(figure.svg);
-    await tasks.turn();
-    await svg2pdf(figure.svg, pdf, { x: mark.x, y: mark.y, width: mark.width, height: mark.height });
+    const { family, style, weight } = PDF_FONT['varwright-sans-regular'];
+    const place = { x: mark.x, y: mark.y, width: mark.width, height: mark.height };
+    for (const portion of portions(figure.svg)) {
+      await tasks.turn();
+      // svg2pdf begins with a family of its own in the style last set, which must be one that family has.
+      pdf.setFont(family, style, weight);
+      await svg2pdf(portion, pdf, place);
+    }
   } finally {
     figure.remove();
   }
@@ -77,9 +84,11 @@ export async function exportSheet(
   const pages = layoutPages(document);
   const figures = figuresOf(document);
   await tasks.turn();
-  const pdf = newPdf(document, pages);
+  const [first] = pages;
+  if (!first) throw new RangeError('the sheet has no page');
+  const pdf = newPdf(document, first);
   addFonts(pdf, fonts);
-  const count = pages.pages.length;
+  const count = pages.length;
   const total = count + figures.size;
   let done = 0;
   const draw = async (mark: FigureMark): Promise<void> => {
@@ -89,8 +98,8 @@ export async function exportSheet(
     done += 1;
     onProgress?.({ done, total, what: `figures and pages, ${done} of ${total}` });
   };
-  for (const page of pages.pages) {
-    if (page.number > 1) pdf.addPage([pages.width, pages.height]);
+  for (const page of pages) {
+    if (page.number > 1) pdf.addPage([page.width, page.height], orientationOf(page));
     for (const section of page.sections) pdf.outline.add(null, section.title, { pageNumber: page.number });
     await drawPage(pdf, page, draw, tasks);
     done += 1;

@@ -8,7 +8,7 @@ export interface MountedFigure {
   remove(): void;
 }
 
-/** Renders a figure off-screen. Throws RangeError where it renders no drawing. */
+/** Renders a figure off-screen; the drawing is a copy that may be changed. Throws RangeError where it renders no drawing. */
 export function mountFigure(element: ReactElement, width: number, height: number): MountedFigure {
   const host = document.createElement('div');
   host.setAttribute('aria-hidden', 'true');
@@ -16,14 +16,13 @@ export function mountFigure(element: ReactElement, width: number, height: number
   document.body.append(host);
   const root = createRoot(host);
   flushSync(() => root.render(element));
-  const svg = host.querySelector('svg');
-  const remove = (): void => {
-    root.unmount();
+  const drawn = host.querySelector('svg');
+  const copy = drawn?.cloneNode(true);
+  flushSync(() => root.unmount());
+  if (!(copy instanceof SVGSVGElement)) {
     host.remove();
-  };
-  if (!svg) {
-    remove();
     throw new RangeError('a figure of the sheet rendered no drawing');
   }
-  return { svg, remove };
+  host.replaceChildren(copy);
+  return { svg: copy, remove: () => host.remove() };
 }

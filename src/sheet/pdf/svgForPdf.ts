@@ -18,7 +18,10 @@ export function markRuns(svg: SVGElement): void {
     if (runs.every(({ face }) => face !== 'varwright-marks')) continue;
     const parts = runs.map((run) => {
       const span = document.createElementNS(SVG, 'tspan');
-      if (run.face === 'varwright-marks') span.setAttribute('font-family', 'Varwright Marks');
+      if (run.face === 'varwright-marks') {
+        span.setAttribute('font-family', 'Varwright Marks');
+        span.setAttribute('font-weight', '400');
+      }
       span.textContent = run.text;
       return span;
     });

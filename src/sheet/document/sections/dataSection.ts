@@ -143,6 +143,7 @@ export function dataSection(view: SheetView): Section {
   const blocks: Block[] = [
     {
       kind: 'paragraph',
+      leadsOn: true,
       text: 'Values of the base study; what a case changes stands under “Operating cases”. “Default, assumed”: no value was entered, and the default stands in for it until checked against the nameplate. “Not stated”: entered without an origin.',
     },
     { kind: 'table', columns: columns(), rows, notes: [] },

@@ -2,49 +2,11 @@ import { busName } from '../../../study/index.ts';
 import { cells } from '../cells.ts';
 import type { Block, FigureBlock, Section } from '../model.ts';
 import { provenanceNote, sourceWithMark } from '../provenance.ts';
-import { caseName, type SheetView, solvedIn, subjectName } from '../SheetView.ts';
+import { caseName, type SheetView, subjectName } from '../SheetView.ts';
 import { byMargin, counted, decides, marginText, withUnit } from '../verdictWords.ts';
 
-/** Units of the drawing's own margin that the sheet leaves out on each side. */
-export const DRAWING_CROP = 16;
-/** Points for one unit of the drawing at most: letters of 12 units become 9 points. */
-const LARGEST_SCALE = 0.75;
-/** Letters of 12 units stay above 7.5 points. */
-const TIGHTEST = 0.85;
-
-/** The drawing without most of its own margin, in its units. */
-function croppedSize({ input }: SheetView): { width: number; height: number } | undefined {
-  const size = input.drawingSize;
-  return size && { width: size.width - 2 * DRAWING_CROP, height: size.height - 2 * DRAWING_CROP };
-}
-
-const shownWords = (view: SheetView): string =>
+export const shownWords = (view: SheetView): string =>
   view.shownIsBusiest ? `${view.shown.name}, the busiest case` : view.shown.name;
-
-/** The single-line diagram of the shown case. */
-export function drawingSection(view: SheetView): Section {
-  const solved = solvedIn(view.shown) !== undefined;
-  const aside = solved
-    ? `${shownWords(view)}; readings at the fundamental`
-    : `${view.shown.name}; no readings: the case is not solved`;
-  const size = croppedSize(view);
-  return {
-    id: 'drawing',
-    title: 'Single-line diagram',
-    aside,
-    blocks: [
-      {
-        kind: 'figure',
-        id: 'drawing',
-        request: { kind: 'drawing', caseId: view.shown.id },
-        label: `Single-line diagram, ${view.shown.name}`,
-        aspect: size ? size.height / size.width : 0.5,
-        tightest: TIGHTEST,
-        ...(size ? { widest: size.width * LARGEST_SCALE } : {}),
-      },
-    ],
-  };
-}
 
 /** The impedance at the first chosen busbar in the shown case; absent where none was scanned. */
 export function frontImpedanceSection(view: SheetView): Section | undefined {

@@ -145,6 +145,7 @@ export function harmonicsSection(view: SheetView): Section {
       {
         kind: 'paragraph',
         small: true,
+        leadsOn: true,
         text: `Orders below ${fixed(SHOWN_FROM_PERCENT, 2)} % in every case, with the correction and without, are left out. Groups of sources of unknown mutual phase are added by magnitude, or by the summation law where the study chooses it.`,
       },
       ...view.study.buses.flatMap((bus) => busBlocks(view, bus)),
