@@ -25,7 +25,7 @@ export interface CapacitorUnits {
   checks: { current: string; voltage: string; kvar: string };
   xcOhm: number;
   ratedV: number;
-  amperes: readonly Float64Array[];
+  amperes: readonly (readonly number[])[];
   orderCount: number;
 }
 
@@ -57,7 +57,7 @@ function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): P
   const duties = units.amperes.map((unit) => capacitorDuty(unit, units.xcOhm, units.ratedV));
   const highest = highestSupply(context.study);
   const raised = units.amperes.map((unit) => {
-    const scaled = Float64Array.from(unit);
+    const scaled = [...unit];
     scaled[0] = (scaled[0] ?? 0) * highest.factor;
     return capacitorDuty(scaled, units.xcOhm, units.ratedV);
   });

@@ -3,9 +3,9 @@ import type { SolvedCase } from './SolvedCase.ts';
 
 /** A busbar's harmonic voltages in per cent of U_1, each order in the phase where it is largest. */
 export interface BusSpectrum {
-  /** Index h − 1; entry 0 (h = 1) unused. null in no entry: a busbar without fundamental has no spectrum. */
-  percent: Float64Array;
-  phase: Uint8Array;
+  /** Index h − 1; entry 0 (h = 1) is unused. */
+  percent: number[];
+  phase: number[];
 }
 
 const spectra = new WeakMap<SolvedCase, Map<string, BusSpectrum | null>>();
@@ -24,8 +24,9 @@ export function busSpectrum(solved: SolvedCase, bus: Bus): BusSpectrum | null {
 function measure(solved: SolvedCase, bus: Bus): BusSpectrum | null {
   const index = solved.bus(bus.id);
   const floor = (1e-6 * bus.nominalV) / Math.sqrt(3);
-  const percent = new Float64Array(solved.maxOrder);
-  const phase = new Uint8Array(solved.maxOrder);
+  // Plain arrays: many short typed arrays cost the collector more than the sums they hold.
+  const percent = new Array<number>(solved.maxOrder).fill(0);
+  const phase = new Array<number>(solved.maxOrder).fill(0);
   let carried = false;
   for (let k = 0; k < 3; k++) {
     const fundamental = solved.volts(index, 1, k);

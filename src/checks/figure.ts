@@ -11,8 +11,11 @@ export function figure(value: number, digits = 4): string {
 
 function fraction(size: number, digits: number): string {
   if (size === 0) return '0';
-  // Number → String is the shortest form and has no exponent from 1e-6 upwards.
-  if (size >= 1e-6) return String(Number(size.toPrecision(digits)));
+  if (size >= 1e-6) {
+    // An integer over a power of ten is the double nearest to that decimal, so it prints without a tail.
+    const scale = 10 ** (digits - 1 - Math.floor(Math.log10(size)));
+    return String(Math.round(size * scale) / scale);
+  }
   const text = size.toFixed(12).replace(/0+$/, '');
   return text === '0.' ? '0' : text;
 }

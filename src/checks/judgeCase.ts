@@ -130,7 +130,12 @@ export function withSteps(study: Study, caseId: string, steps: ReadonlyMap<strin
   return { ...study, cases };
 }
 
-/** Over every case of the study, kW into the site at the PCC; null for a study with one case. */
+const largestKnown = new WeakMap<Study, Map<string, number | null>>();
+
+/**
+ * Over every case of the study, kW into the site at the PCC; null for a study with one case. Remembered per
+ * study, which is never mutated, so that judging all its cases solves each at most once more.
+ */
 function largestKW(
   study: Study,
   solution: CaseSolution,
@@ -139,12 +144,17 @@ function largestKW(
 ): number | null {
   const cases = casesOf(study);
   if (cases.length < 2) return null;
-  const known = new Map([...given, solution].map((item) => [item.caseId, item]));
+  const known = largestKnown.get(study) ?? new Map<string, number | null>();
+  largestKnown.set(study, known);
+  const found = known.get(bus);
+  if (found !== undefined) return found;
+  const solutions = new Map([...given, solution].map((item) => [item.caseId, item]));
   const powers = cases.flatMap(({ id }) => {
-    const solved = known.get(id) ?? solveCase(study, id);
-    if (!solved.converged) return [];
-    const inflow = inflowAt(studyInCase(study, id), new SolvedCase(solved), bus);
+    const solved = solutions.get(id) ?? solveCase(study, id);
+    const inflow = solved.converged ? inflowAt(studyInCase(study, id), new SolvedCase(solved), bus) : null;
     return inflow ? [inflow.kW] : [];
   });
-  return powers.length > 0 ? Math.max(...powers) : null;
+  const largest = powers.length > 0 ? Math.max(...powers) : null;
+  known.set(bus, largest);
+  return largest;
 }

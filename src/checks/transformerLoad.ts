@@ -47,9 +47,7 @@ function sideOf(
   if (terminal === undefined) return null;
   const ratedA = (part.ratedKVA * 1000) / (Math.sqrt(3) * ratedV);
   const phase = SolvedCase.worstPhase((k) => solved.rmsAmperes(terminal, k));
-  const amperes = Float64Array.from({ length: solved.maxOrder }, (_, i) =>
-    solved.amperes(terminal, i + 1, phase),
-  );
+  const amperes = Array.from({ length: solved.maxOrder }, (_, i) => solved.amperes(terminal, i + 1, phase));
   const loss = harmonicLoss(amperes, ratedA);
   return loss ? { words, phase, ratedA, terminal, loss } : null;
 }

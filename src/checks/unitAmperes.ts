@@ -6,9 +6,9 @@ import type { SolvedCase } from './SolvedCase.ts';
  * a delta unit carries |I_k − I_(k+1)|/3, here times √3 so that its rated value is the line's I_N.
  * Where angles are unknown (judged magnitudes, or the α law) a delta unit takes the larger of its two lines.
  */
-export function unitAmperes(solved: SolvedCase, terminal: number, connection: StarDelta): Float64Array[] {
+export function unitAmperes(solved: SolvedCase, terminal: number, connection: StarDelta): number[][] {
   return [0, 1, 2].map((unit) => {
-    const amperes = new Float64Array(solved.maxOrder);
+    const amperes = new Array<number>(solved.maxOrder).fill(0);
     for (let h = 1; h <= solved.maxOrder; h++) {
       amperes[h - 1] =
         connection === 'delta' ? deltaAmperes(solved, terminal, h, unit) : solved.amperes(terminal, h, unit);

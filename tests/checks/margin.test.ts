@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { figure, margin, ordinal, verdictWord } from '../../src/checks/index.ts';
 
@@ -61,6 +62,20 @@ describe('numbers in the working', () => {
       '−2.5',
       '0.0000001',
     ]);
+  });
+
+  it('stay within half a unit of the last digit shown', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 1e-6, max: 1e6, noNaN: true }), (value) => {
+        const text = figure(value);
+        expect(text).toMatch(/^\d+(\.\d+)?$/);
+        expect(Math.abs(Number(text) - value)).toBeLessThanOrEqual(
+          Math.max(5.0001e-4 * value, value >= 1000 ? 0.5 : 0),
+        );
+        expect(text.replace('.', '').replace(/^0+/, '').length).toBeLessThanOrEqual(7);
+      }),
+      { seed: 4711 },
+    );
   });
 
   it('refuse what is not finite', () => {
