@@ -18,6 +18,7 @@ import {
   setOrigin,
   updateBus,
 } from '../../study/index.ts';
+import { FindingLine } from './FieldRow.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import { fallbackOf, fieldValue, findingsAt, refusalOf } from './SlipScope.ts';
@@ -35,7 +36,11 @@ export interface BusSlipProps {
 }
 
 /** The data slip of a busbar. */
-export function BusSlip({ bus: { id }, study, findings, onEdit, onClose }: BusSlipProps) {
+export function BusSlip(props: BusSlipProps) {
+  return <Nameplate key={props.bus.id} {...props} />;
+}
+
+function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipProps) {
   const prefix = useId();
   const [focused, setFocused] = useState<Field | null>(null);
   const bus = busById(study, id);
@@ -110,9 +115,7 @@ export function BusSlip({ bus: { id }, study, findings, onEdit, onClose }: BusSl
       }
     >
       {findingsAt(findings, path, null).map((finding) => (
-        <p key={finding.code} className="slip-finding" data-severity={finding.severity}>
-          {finding.message}
-        </p>
+        <FindingLine key={finding.code} finding={finding} />
       ))}
       {main.map(row)}
       {rare.map(row)}

@@ -1,5 +1,7 @@
 import type { ReactNode } from 'react';
 import type { DataOrigin, Field, Finding } from '../../study/index.ts';
+import { Formula } from './Formula.tsx';
+import { OriginDetail } from './OriginDetail.tsx';
 import { OriginMark } from './OriginMark.tsx';
 
 export interface FieldRowProps {
@@ -24,7 +26,7 @@ export function FieldRow(props: FieldRowProps) {
   return (
     <div className={wide ? 'slip-row slip-row-wide' : 'slip-row'}>
       <label htmlFor={id} title={title}>
-        {field.label}
+        <Formula text={field.label} />
       </label>
       <div className="slip-value">{children}</div>
       <span className="slip-unit">{unit}</span>
@@ -32,12 +34,24 @@ export function FieldRow(props: FieldRowProps) {
       <span id={`${id}-help`} className="slip-hidden">
         {title}
       </span>
+      {onOrigin && origin && (
+        <OriginDetail id={`${id}-origin`} label={field.label} origin={origin} onChange={onOrigin} />
+      )}
       {remark && <div className="slip-remark">{remark}</div>}
       {findings.map((finding) => (
-        <p key={finding.code + finding.path} className="slip-finding" data-severity={finding.severity}>
-          <span aria-hidden="true">{finding.severity === 'error' ? '✕' : '!'}</span> {finding.message}
-        </p>
+        <FindingLine key={finding.code + finding.path} finding={finding} />
       ))}
     </div>
+  );
+}
+
+/** What is said about the value; the slip already names the part, so its name is left out. */
+export function FindingLine({ finding }: { finding: Finding }) {
+  const text = finding.message.replace(/^[^:]{1,60}: /, '');
+  return (
+    <p className="slip-finding" data-severity={finding.severity}>
+      <span aria-hidden="true">{finding.severity === 'error' ? '✕' : '!'}</span>{' '}
+      {text.charAt(0).toUpperCase() + text.slice(1)}
+    </p>
   );
 }

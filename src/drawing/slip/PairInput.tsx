@@ -13,10 +13,11 @@ export interface PairInputProps {
 
 interface Half {
   name: string;
+  sign: string;
   field: NumberField;
 }
 
-function half(name: string, unit: NumberField['unit'], range: Partial<NumberField>): Half {
+function half(name: string, sign: string, unit: NumberField['unit'], range: Partial<NumberField>): Half {
   const field: NumberField = {
     key: name,
     label: name,
@@ -27,14 +28,14 @@ function half(name: string, unit: NumberField['unit'], range: Partial<NumberFiel
     unit,
     ...range,
   };
-  return { name, field };
+  return { name, sign, field };
 }
 
 const halves: Readonly<Record<PairField['type'], readonly [Half, Half]>> = {
-  skin: [half('s', '', { min: 0, max: 1 }), half('e', '', { min: 0, max: 5 })],
+  skin: [half('s', 's', '', { min: 0, max: 1 }), half('e', 'e', '', { min: 0, max: 5 })],
   tolerance: [
-    half('minus', '%', { min: -100, minExclusive: true, max: 100 }),
-    half('plus', '%', { min: -100, minExclusive: true, max: 1000 }),
+    half('minus', 'from', '%', { min: -100, minExclusive: true, max: 100 }),
+    half('plus', 'to', '%', { min: -100, minExclusive: true, max: 1000 }),
   ],
 };
 
@@ -43,9 +44,9 @@ export function PairInput({ id, field, value, fallback, describedBy, onFocus, on
   const standing = value ?? fallback;
   return (
     <fieldset className="slip-pair" aria-label={field.label}>
-      {halves[field.type].map(({ name, field: part }, index) => (
+      {halves[field.type].map(({ name, sign, field: part }, index) => (
         <span key={name} className="slip-pair-half">
-          <span className="slip-unit">{name}</span>
+          <span className="slip-unit">{sign}</span>
           <QuantityInput
             id={index === 0 ? id : `${id}-${name}`}
             field={part}

@@ -32,6 +32,7 @@ import {
   setOrigin,
   updateElement,
 } from '../../study/index.ts';
+import { FindingLine } from './FieldRow.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import {
@@ -61,7 +62,12 @@ export interface PartSlipProps {
 }
 
 /** The data slip of a part: a nameplate that can be written on, for the base study or for the open case alone. */
-export function PartSlip({ element: { id }, bus, study, caseId, findings, onEdit, onClose }: PartSlipProps) {
+export function PartSlip(props: PartSlipProps) {
+  // Another part or case is another slip: nothing half-typed is carried over.
+  return <Nameplate key={`${props.element.id} ${props.caseId}`} {...props} />;
+}
+
+function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onClose }: PartSlipProps) {
   const prefix = useId();
   const variant = variantCase(study, caseId);
   const [caseOnly, setCaseOnly] = useState(variant !== undefined && hasChanges(variant, id));
@@ -165,9 +171,7 @@ export function PartSlip({ element: { id }, bus, study, caseId, findings, onEdit
       foot={<PartActions {...{ study, base, onEdit, onClose }} />}
     >
       {findingsAt(findings, path, null).map((finding) => (
-        <p key={finding.code} className="slip-finding" data-severity={finding.severity}>
-          {finding.message}
-        </p>
+        <FindingLine key={finding.code} finding={finding} />
       ))}
       {main.map((field) => row(field))}
       {rare.length + groups.length > 0 && (

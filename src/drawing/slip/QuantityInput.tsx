@@ -20,7 +20,7 @@ export interface QuantityInputProps {
 const arrowPauseMs = 300;
 
 /**
- * A number with its unit as text: read on Enter and on leaving, put back by Escape, stepped by the arrows.
+ * A number with its unit as text: at rest in trade formatting, while edited with every digit; read on Enter and on leaving, put back by Escape, stepped by the arrows.
  * What was understood stands below while it differs from what was typed; an error stays until it is mended.
  */
 export function QuantityInput(props: QuantityInputProps) {
@@ -29,9 +29,15 @@ export function QuantityInput(props: QuantityInputProps) {
   const [error, setError] = useState<string | null>(null);
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
   const standing = value === undefined ? '' : editText(value);
-  const text = draft ?? standing;
+  const [editing, setEditing] = useState(false);
+  const atRest = value === undefined ? '' : formatNumber(value, { digits: 6 });
+  const text = draft ?? (editing ? standing : atRest);
   const said = draft !== null && error === null ? sayConversion(draft, field) : null;
+  const input = useRef<HTMLInputElement>(null);
   useEffect(() => () => clearTimeout(timer.current), []);
+  useEffect(() => {
+    if (editing) input.current?.select();
+  }, [editing]);
 
   const commit = (typed: string) => {
     clearTimeout(timer.current);
@@ -64,6 +70,7 @@ export function QuantityInput(props: QuantityInputProps) {
   return (
     <>
       <input
+        ref={input}
         id={id}
         className="slip-quantity"
         type="text"
@@ -78,11 +85,14 @@ export function QuantityInput(props: QuantityInputProps) {
           setDraft(event.target.value);
           setError(null);
         }}
-        onFocus={(event) => {
-          event.target.select();
+        onFocus={() => {
+          setEditing(true);
           props.onFocus?.();
         }}
-        onBlur={() => draft !== null && commit(text)}
+        onBlur={() => {
+          setEditing(false);
+          if (draft !== null) commit(text);
+        }}
         onKeyDown={onKeyDown}
       />
       {said !== null && (

@@ -40,51 +40,54 @@ export function RowsTable({ id, caption, rows, onFocus, onCommit }: RowsTablePro
   };
   return (
     <div className="slip-rows" onPaste={onPaste}>
-      <table>
-        <caption className="slip-hidden">{caption}</caption>
-        <thead>
-          <tr>
-            {columns.map((column) => (
-              <th key={column.key} scope="col">
-                {heads[column.key]}
-              </th>
-            ))}
-            <th scope="col">
-              <span className="slip-hidden">remove</span>
-            </th>
-          </tr>
-        </thead>
-        <tbody>
-          {rows.map((row, index) => (
-            <tr key={row.h}>
+      {rows.length > 0 && (
+        <table>
+          <caption className="slip-hidden">{caption}</caption>
+          <thead>
+            <tr>
               {columns.map((column) => (
-                <td key={column.key}>
-                  <QuantityInput
-                    id={`${id}-${row.h}-${column.key}`}
-                    field={column}
-                    label={`Order ${row.h}, ${column.label}`}
-                    value={row[column.key as keyof HarmonicRow]}
-                    onFocus={onFocus}
-                    onCommit={(value) => take(rows.with(index, changedRow(row, column.key, value)))}
-                  />
-                </td>
+                <th key={column.key} scope="col">
+                  {heads[column.key]}
+                </th>
               ))}
-              <td>
-                <button
-                  type="button"
-                  className="slip-small"
-                  aria-label={`Remove order ${row.h}`}
-                  onClick={() => take(rows.toSpliced(index, 1))}
-                >
-                  ×
-                </button>
-              </td>
+              <th scope="col">
+                <span className="slip-hidden">remove</span>
+              </th>
             </tr>
-          ))}
-        </tbody>
-      </table>
+          </thead>
+          <tbody>
+            {rows.map((row, index) => (
+              <tr key={row.h}>
+                {columns.map((column) => (
+                  <td key={column.key}>
+                    <QuantityInput
+                      id={index === 0 && column.key === 'h' ? id : `${id}-${row.h}-${column.key}`}
+                      field={column}
+                      label={`Order ${row.h}, ${column.label}`}
+                      value={row[column.key as keyof HarmonicRow]}
+                      onFocus={onFocus}
+                      onCommit={(value) => take(rows.with(index, changedRow(row, column.key, value)))}
+                    />
+                  </td>
+                ))}
+                <td>
+                  <button
+                    type="button"
+                    className="slip-small"
+                    aria-label={`Remove order ${row.h}`}
+                    onClick={() => take(rows.toSpliced(index, 1))}
+                  >
+                    ×
+                  </button>
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      )}
       <button
         type="button"
+        id={rows.length === 0 ? id : undefined}
         className="slip-small"
         onClick={() => take([...rows, { h: nextOrder(rows), percent: 1 }])}
       >

@@ -1,5 +1,6 @@
 import { type KeyboardEvent, type ReactNode, useEffect, useRef } from 'react';
 import type { Field } from '../../study/index.ts';
+import { Formula } from './Formula.tsx';
 
 export interface SlipFrameProps {
   /** Accessible name: "Data of Bank C1". */
@@ -76,7 +77,9 @@ export function SlipFrame({
       </div>
       <footer className="slip-foot">
         <p className="slip-help" aria-hidden="true">
-          {focused ? `${focused.help}${focused.typical ? ` Typical: ${focused.typical}.` : ''}` : ' '}
+          <Formula
+            text={focused ? `${focused.help}${focused.typical ? ` Typical: ${focused.typical}.` : ''}` : ' '}
+          />
         </p>
         <div className="slip-actions">{foot}</div>
       </footer>

@@ -9,6 +9,7 @@ import {
   nameOf,
   type Study,
   spectrumById,
+  spectrumOf,
   updateSpectrum,
 } from '../../study/index.ts';
 import { RowsTable } from './RowsTable.tsx';
@@ -34,8 +35,9 @@ const ownRows = '\u0000rows';
 export function SpectrumInput(props: SpectrumInputProps) {
   const { id, study, value, onFocus, onCommit } = props;
   const named = typeof value === 'string' ? spectrumById(study, value) : undefined;
-  const rows = typeof value === 'string' ? (named?.orders ?? []) : value;
   const builtIn = typeof value === 'string' ? builtInSpectrum(value) : undefined;
+  const rows =
+    typeof value !== 'string' ? value : builtIn ? copied(spectrumOf(study, value)) : (named?.orders ?? []);
   const users =
     named && !builtIn
       ? study.elements.filter((element) => element.kind === 'converter' && element.spectrum === named.id)
@@ -157,4 +159,9 @@ function SharedSpectrum({ id, study, spectrumId, name, origin, users, onEdit }: 
 export function rowsText(rows: readonly HarmonicRow[]): string {
   const first = rows.slice(0, 6).map((row) => `${row.h}: ${formatNumber(row.percent, { digits: 3 })} %`);
   return `${first.join(', ')}${rows.length > 6 ? ' …' : ''}`;
+}
+
+/** A copy to be edited: cut at the study's highest order, six digits of a computed percentage. */
+function copied(rows: readonly HarmonicRow[]): HarmonicRow[] {
+  return rows.map((row) => ({ ...row, percent: Number(row.percent.toPrecision(6)) }));
 }

@@ -1,0 +1,192 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { nextOrigin } from '../../../src/drawing/slip/OriginMark.tsx';
+import { parseRows } from '../../../src/drawing/slip/parseRows.ts';
+import { parseSteps, stepsText } from '../../../src/drawing/slip/parseSteps.ts';
+import { changedRow, nextOrder } from '../../../src/drawing/slip/RowsTable.tsx';
+import { findingsAt, refusalOf, storedValue, variantCase } from '../../../src/drawing/slip/SlipScope.ts';
+import { slipSections } from '../../../src/drawing/slip/slipFields.ts';
+import { isInside, stepValue } from '../../../src/drawing/slip/stepValue.ts';
+import {
+  elementKinds,
+  fieldOf,
+  fieldsOf,
+  type NumberField,
+  updateElement,
+} from '../../../src/study/index.ts';
+import { exampleStudy } from '../../study/exampleStudies.ts';
+
+function numberField(owner: Parameters<typeof fieldOf>[0], key: string): NumberField {
+  const field = fieldOf(owner, key);
+  if (field?.type !== 'number' && field?.type !== 'integer') throw new Error(`${key} is no number`);
+  return field;
+}
+
+describe('Steps are read as they are spoken of', () => {
+  const spoken: [string, number[]][] = [
+    ['6x25', [25, 25, 25, 25, 25, 25]],
+    ['2 × 12,5 + 1x25 kvar', [12.5, 12.5, 25]],
+    ['25; 25; 50', [25, 25, 50]],
+    ['2*0.05 Mvar', [50, 50]],
+    ['50', [50]],
+  ];
+  it.each(spoken)('%s', (text, kvar) => {
+    const parsed = parseSteps(text);
+    expect(parsed.ok && parsed.steps.map((step) => step.kvar)).toEqual(kvar);
+  });
+
+  it.each(['', '6x', 'x25', '3x-5', '3x0', '0x25', '100x5', '6 x 25 V'])(
+    'and "%s" is refused in a sentence',
+    (text) => {
+      const parsed = parseSteps(text);
+      expect(parsed.ok).toBe(false);
+      if (!parsed.ok) expect(parsed.error).toMatch(/\.$/);
+    },
+  );
+
+  it('and written back so that they read the same', () => {
+    expect(stepsText([{ kvar: 25 }, { kvar: 25, on: false }, { kvar: 50 }])).toBe('2 × 25 + 50');
+    const kvar = fc.constantFrom(6.25, 12.5, 25, 50, 100);
+    fc.assert(
+      fc.property(fc.array(kvar, { minLength: 1, maxLength: 20 }), (values) => {
+        const steps = values.map((value) => ({ kvar: value }));
+        expect(parseSteps(stepsText(steps))).toEqual({ ok: true, steps });
+      }),
+      { seed: 5 },
+    );
+  });
+});
+
+describe('A pasted spectrum', () => {
+  it('may come with a head, decimal commas, per-cent signs and unknown angles', () => {
+    expect(parseRows('order\tpercent\tangle\n5\t38,2 %\t174\r\n7\t14.1\t-\n\nh=11; 6')).toEqual({
+      ok: true,
+      rows: [
+        { h: 5, percent: 38.2, angleDeg: 174 },
+        { h: 7, percent: 14.1 },
+        { h: 11, percent: 6 },
+      ],
+    });
+  });
+  it.each([
+    ['5 20\n5 10', /Line 2: order 5 stands there twice/],
+    ['5.5 20', /no whole order/],
+    ['5 -1', /no percentage/],
+    ['5 20 north', /no angle/],
+    ['nothing here', /No rows were found/],
+  ] as const)('%j is refused with its line', (text, error) => {
+    const parsed = parseRows(text);
+    expect(!parsed.ok && parsed.error).toMatch(error);
+  });
+  it('grows by the next odd order, and an emptied angle is unknown, not zero', () => {
+    expect(nextOrder([])).toBe(3);
+    expect(nextOrder([{ h: 5, percent: 1 }])).toBe(7);
+    expect(nextOrder([{ h: 4, percent: 1 }])).toBe(5);
+    expect(changedRow({ h: 5, percent: 1, angleDeg: 3 }, 'angleDeg', undefined)).toEqual({
+      h: 5,
+      percent: 1,
+    });
+  });
+});
+
+describe('The arrow keys step a value', () => {
+  const stepped: [number, 1 | -1, boolean, number][] = [
+    [1000, 1, false, 1100],
+    [1000, -1, false, 990],
+    [990, 1, false, 1000],
+    [55, 1, false, 56],
+    [5.67, 1, false, 5.7],
+    [5.67, -1, false, 5.6],
+    [440, 1, true, 500],
+    [7, -1, false, 6.9],
+  ];
+  it.each(stepped)('%d by %d, coarse %s, to %d', (value, direction, coarse, next) => {
+    expect(stepValue(value, direction, numberField('load', 'kW'), coarse)).toBe(next);
+  });
+  it('whole numbers by one, ratios by hundredths, never out of range', () => {
+    expect(stepValue(1, -1, numberField('motor', 'count'), false)).toBe(1);
+    expect(stepValue(3, 1, numberField('motor', 'count'), false)).toBe(4);
+    expect(stepValue(0.95, 1, numberField('load', 'powerFactor'), false)).toBe(0.96);
+    expect(stepValue(1, 1, numberField('load', 'powerFactor'), false)).toBe(1);
+    expect(stepValue(0, -1, numberField('bank', 'detuningPercent'), false)).toBe(0);
+    expect(stepValue(0, 1, numberField('bank', 'detuningPercent'), false)).toBe(1);
+  });
+  it('and stay inside the range of every field of every kind', () => {
+    const fields = elementKinds
+      .flatMap((kind) => fieldsOf(kind))
+      .filter((field): field is NumberField => field.type === 'number');
+    fc.assert(
+      fc.property(
+        fc.constantFrom(...fields),
+        fc.double({ min: -1e6, max: 1e6, noNaN: true }),
+        fc.constantFrom<1 | -1>(1, -1),
+        fc.boolean(),
+        (field, value, direction, coarse) => {
+          fc.pre(isInside(value, field));
+          expect(isInside(stepValue(value, direction, field, coarse), field)).toBe(true);
+        },
+      ),
+      { seed: 8, numRuns: 1000 },
+    );
+  });
+});
+
+describe('The slip', () => {
+  const study = exampleStudy('1-detuned-400v');
+
+  it.each(elementKinds)(
+    'shows every field of a %s once, but name, service and what other places edit',
+    (kind) => {
+      const { main, rare, groups } = slipSections(fieldsOf(kind));
+      const shown = [...main, ...rare, ...groups].map((field) => field.key);
+      const expected = fieldsOf(kind).filter(
+        (field) => field.type !== 'opaque' && field.key !== 'name' && field.key !== 'on',
+      );
+      expect(shown.toSorted()).toEqual(expected.map((field) => field.key).toSorted());
+    },
+  );
+
+  it('goes round the origins and keeps note and date', () => {
+    expect(nextOrigin(undefined)).toEqual({ origin: 'nameplate' });
+    expect(nextOrigin({ origin: 'nameplate', note: 'plate photo' })).toEqual({
+      origin: 'measured',
+      note: 'plate photo',
+    });
+    expect(nextOrigin({ origin: 'assumed' })).toBeNull();
+  });
+
+  it('leaves a default out of the file', () => {
+    expect(storedValue('delta', 'delta')).toBeUndefined();
+    expect(storedValue('star', 'delta')).toBe('star');
+  });
+
+  it('asks whether to write a case only where one differs from the base', () => {
+    expect(variantCase(study, 'base')).toBeUndefined();
+    expect(variantCase(study, 'night')?.name).toBe('Night');
+  });
+
+  it('refuses what would make the study, or one of its cases, unsound', () => {
+    expect(
+      refusalOf(study, updateElement(study, 'bank', { detuningPercent: 5.67 }), 'capacitor bank bank'),
+    ).toBeNull();
+    expect(refusalOf(study, updateElement(study, 't1', { ukPercent: 0.5 }), 'transformer t1')).toMatch(
+      /^Load loss 7.2 kW makes R larger/,
+    );
+  });
+
+  it('finds the findings of a field, its rows and the record', () => {
+    const finding = (path: string) => ({ code: 'x', severity: 'warning' as const, path, message: 'M.' });
+    const all = [
+      '$.elements[1]',
+      '$.elements[1].steps[0].kvar',
+      '$.elements[1].steps',
+      '$.elements[1].stepsMore',
+      '$.elements[11].steps',
+    ].map(finding);
+    expect(findingsAt(all, '$.elements[1]', 'steps').map((item) => item.path)).toEqual([
+      '$.elements[1].steps[0].kvar',
+      '$.elements[1].steps',
+    ]);
+    expect(findingsAt(all, '$.elements[1]', null)).toHaveLength(1);
+  });
+});
