@@ -1,5 +1,5 @@
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
-export { applySet, casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
+export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
 export { addPin, type End, moveEnd, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
@@ -7,7 +7,7 @@ export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } 
 export { makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter, joinEdits } from './edits/errorsAfter.ts';
 export { originOf, originPath, originsOf, setOrigin } from './edits/origins.ts';
-export { doomedWith, removeBus, removeParts } from './edits/removeParts.ts';
+export { removeBus, removeParts } from './edits/removeParts.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {
   resetInCase,
@@ -44,7 +44,6 @@ export {
   isOn,
   isSeries,
 } from './lookup.ts';
-export { currentVersion } from './migrate.ts';
 export { busName, elementName, fullNameOf, kindWords, nameOf } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';

@@ -2,7 +2,7 @@ import type { Finding } from './types.ts';
 import { errorIssue, findingOf, isRecord, valueText } from './validate/issue.ts';
 
 /** The study format this programme writes. */
-export const currentVersion = 1;
+const currentVersion = 1;
 
 interface Migrated {
   study: Record<string, unknown> | null;

@@ -58,16 +58,12 @@ describe('A study file', () => {
     expect(findings[0]?.message).toContain(place);
   });
 
-  it('of 300 parts is read within a blink (printed, not judged)', () => {
+  it('of 300 parts is read whole', () => {
     const loose = looseStudy('1-detuned-400v');
     for (let index = 0; loose.elements.length < 300; index += 1) {
       loose.elements.push({ ...loose.elements[3 + (index % 5)]!, id: `copy${index}` });
     }
-    const text = JSON.stringify(loose);
-    readStudy(text);
-    const start = performance.now();
-    const { study } = readStudy(text);
-    console.info(`300 parts read in ${(performance.now() - start).toFixed(1)} ms`);
+    const { study } = readStudy(JSON.stringify(loose));
     expect(study?.elements).toHaveLength(300);
   });
 });

@@ -638,6 +638,17 @@ describe('A warning is given, and the study accepted, for', () => {
     );
   });
 
+  it('an unknown field inside a step or a row as well', () => {
+    const { findings } = findingsAfter((s) => {
+      Object.assign((part(s, 'bank').steps as object[])[1]!, { serial: 1 });
+      Object.assign((part(s, 'grid').background as object[])[0]!, { phase: 'L1' });
+    });
+    expect(codeAt(findings).toSorted()).toEqual([
+      'unknown-field $.elements[0].background[0].phase',
+      'unknown-field $.elements[7].steps[1].serial',
+    ]);
+  });
+
   it('not for a rated voltage 15 % off, nor for equal shift in parallel', () => {
     expect(findingsAfter((s) => Object.assign(part(s, 't1'), { lvV: 460 })).findings).toEqual([]);
     expect(findingsAfter((s) => s.elements.push({ ...part(s, 't1'), id: 't2' })).findings).toEqual([]);

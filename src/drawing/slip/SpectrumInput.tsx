@@ -156,7 +156,7 @@ function SharedSpectrum({ id, study, spectrumId, name, origin, users, onEdit }: 
 }
 
 /** The first rows in words: "5: 40 %, 7: 16 % …". */
-export function rowsText(rows: readonly HarmonicRow[]): string {
+function rowsText(rows: readonly HarmonicRow[]): string {
   const first = rows.slice(0, 6).map((row) => `${row.h}: ${formatNumber(row.percent, { digits: 3 })} %`);
   return `${first.join(', ')}${rows.length > 6 ? ' …' : ''}`;
 }

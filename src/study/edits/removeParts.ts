@@ -38,7 +38,7 @@ export function removeBus(study: Study, id: string): Edit {
 }
 
 /** What removeParts would take: the parts themselves, and the busbars and parts left without a feed. */
-export function doomedWith(study: Study, ids: readonly string[], gone?: string): Doomed {
+function doomedWith(study: Study, ids: readonly string[], gone?: string): Doomed {
   const elements = new Set(ids.filter((id) => elementById(study, id)));
   const buses = new Set<string>();
   const left = study.elements.filter((element) => !elements.has(element.id));

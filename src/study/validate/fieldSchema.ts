@@ -100,13 +100,13 @@ function requiredSchema(field: Field): Schema {
 }
 
 /** The schema of one field of the catalogue: absent is accepted unless the field is required. */
-export function fieldSchema(field: Field): Schema {
+function fieldSchema(field: Field): Schema {
   const schema = requiredSchema(field);
   return field.required ? schema : schema.optional();
 }
 
 /** An object shape from a field table. Required choices refuse undefined by themselves. */
-export function shapeOf(fields: readonly Field[]): Record<string, Schema> {
+function shapeOf(fields: readonly Field[]): Record<string, Schema> {
   return Object.fromEntries(fields.map((field) => [field.key, fieldSchema(field)]));
 }
 

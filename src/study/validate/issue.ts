@@ -35,7 +35,7 @@ export function warningIssue(
 }
 
 /** JSON path: $.elements[3].ukPercent; a key that is no identifier stands in brackets. */
-export function jsonPath(steps: readonly PathStep[]): string {
+function jsonPath(steps: readonly PathStep[]): string {
   return steps.reduce<string>((path, step) => {
     if (typeof step === 'number') return `${path}[${step}]`;
     return /^[A-Za-z_$][\w$]*$/.test(step) ? `${path}.${step}` : `${path}[${JSON.stringify(step)}]`;

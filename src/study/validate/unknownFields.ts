@@ -4,13 +4,7 @@ import { kindOf } from './elementIssues.ts';
 import { findingOf, isRecord, type PathStep, warningIssue } from './issue.ts';
 import { unknownKeys } from './shapeIssues.ts';
 
-interface Sighting {
-  owner: string;
-  key: string;
-  value: unknown;
-  path: PathStep[];
-  count: number;
-}
+type Owned = Record<string, unknown>;
 
 const studyExtras = [
   'format',
@@ -24,45 +18,73 @@ const studyExtras = [
   'view',
 ];
 
-/** One warning for each unknown field of each kind of record, at its first place. The data are kept. */
-export function unknownFieldWarnings(study: Record<string, unknown>): Finding[] {
-  const sightings = new Map<string, Sighting>();
-  const look = (owner: FieldOwner, record: unknown, path: PathStep[], extras: readonly string[]) => {
+/** Unknown fields seen so far, each once by the kind of its record. */
+class Sightings {
+  private readonly seen = new Map<
+    string,
+    { owner: FieldOwner; value: unknown; path: PathStep[]; count: number }
+  >();
+
+  look(owner: FieldOwner, record: unknown, path: PathStep[], extras: readonly string[] = []): void {
     if (!isRecord(record)) return;
     for (const key of unknownKeys(owner, record, extras)) {
-      const name = `${owner} ${key}`;
-      const seen = sightings.get(name);
-      if (seen) seen.count += 1;
-      else sightings.set(name, { owner, key, value: record[key], path: [...path, key], count: 1 });
+      const known = this.seen.get(`${owner} ${key}`);
+      if (known) known.count += 1;
+      else this.seen.set(`${owner} ${key}`, { owner, value: record[key], path: [...path, key], count: 1 });
     }
-  };
-  const each = (name: string, visit: (record: unknown, path: PathStep[]) => void) => {
-    const list = study[name];
-    if (!Array.isArray(list)) return;
-    for (const [index, record] of list.entries()) visit(record, [name, index]);
-  };
-  look('study', study, [], studyExtras);
-  look('limits', study.limits, ['limits'], []);
-  look('criteria', study.criteria, ['criteria'], []);
-  each('buses', (record, path) => look('bus', record, path, ['id']));
-  each('spectra', (record, path) => look('spectrum', record, path, ['id', 'orders']));
-  each('cases', (record, path) => look('case', record, path, ['id', 'changes']));
-  each('scans', (record, path) => look('scan', record, path, ['bus']));
-  each('elements', (record, path) => {
-    const kind = kindOf(record);
-    if (kind) look(kind, record, path, ['id', 'kind']);
-  });
-  return [...sightings.values()].map(({ owner, key, value, path, count }) => {
-    const places = count > 1 ? `, in ${count} places` : '';
-    return findingOf(
-      warningIssue(
-        'unknown-field',
-        [],
-        value,
-        `the field "${key}" of ${owner} is not known here${places}; it is kept and takes no part`,
-      ),
-      '',
-      path,
-    );
-  });
+  }
+
+  lookWithin(
+    holder: Owned,
+    list: string,
+    owner: FieldOwner,
+    path: PathStep[],
+    extras?: readonly string[],
+  ): void {
+    const records = holder[list];
+    if (!Array.isArray(records)) return;
+    for (const [index, record] of records.entries()) this.look(owner, record, [...path, list, index], extras);
+  }
+
+  warnings(): Finding[] {
+    return [...this.seen.values()].map(({ owner, value, path, count }) => {
+      const kind = owner === 'harmonicRow' ? 'harmonic row' : owner;
+      const places = count > 1 ? `, in ${count} places` : '';
+      const text = `the field "${path.at(-1)}" (${kind}) is not known here${places}; it is kept and takes no part`;
+      return findingOf(warningIssue('unknown-field', [], value, text), '', path);
+    });
+  }
+}
+
+/** One warning for each unknown field of each kind of record, at its first place. The data are kept. */
+export function unknownFieldWarnings(study: Owned): Finding[] {
+  const sightings = new Sightings();
+  sightings.look('study', study, [], studyExtras);
+  sightings.look('limits', study.limits, ['limits']);
+  sightings.look('criteria', study.criteria, ['criteria']);
+  sightings.lookWithin(study, 'buses', 'bus', [], ['id']);
+  sightings.lookWithin(study, 'spectra', 'spectrum', [], ['id', 'orders']);
+  sightings.lookWithin(study, 'cases', 'case', [], ['id', 'changes']);
+  sightings.lookWithin(study, 'scans', 'scan', [], ['bus']);
+  for (const [index, spectrum] of recordsOf(study.spectra)) {
+    sightings.lookWithin(spectrum, 'orders', 'harmonicRow', ['spectra', index]);
+  }
+  for (const [index, element] of recordsOf(study.elements)) {
+    const kind = kindOf(element);
+    const path = ['elements', index];
+    if (!kind) continue;
+    sightings.look(kind, element, path, ['id', 'kind']);
+    sightings.look('controller', element.controller, [...path, 'controller']);
+    sightings.lookWithin(element, 'steps', 'step', path);
+    sightings.lookWithin(element, 'spectrum', 'harmonicRow', path);
+    sightings.lookWithin(element, 'background', 'harmonicRow', path);
+  }
+  return sightings.warnings();
+}
+
+function recordsOf(list: unknown): [number, Owned][] {
+  if (!Array.isArray(list)) return [];
+  return list.flatMap((record: unknown, index): [number, Owned][] =>
+    isRecord(record) ? [[index, record]] : [],
+  );
 }
