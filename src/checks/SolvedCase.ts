@@ -1,4 +1,4 @@
-import type { CaseSolution } from '../engine/types.ts';
+import type { CaseSolution } from '../engine/index.ts';
 
 /**
  * A converged solution with its busbars and terminals found by id, read in the magnitudes the checks

@@ -23,7 +23,7 @@ interface Worst {
  * The phase nearest to (or furthest beyond) an end of the band. Values in per cent of U_n/√3; the
  * reference of both ends is 100 %.
  */
-export function worstOfBand(
+function worstOfBand(
   percents: readonly number[],
   band: Pick<VoltageBand, 'lowPercent' | 'highPercent'>,
 ): Worst {

@@ -98,24 +98,7 @@ function mendVoltage(rmsV: number, ratedV: number, limit: number): string {
 /** I_rms/I_N, U_C,rms/U_N, crest and kvar of a set of capacitors against the study's capacitor limits. */
 export function capacitorVerdicts(context: CheckContext, study: Study, units: CapacitorUnits): Verdict[] {
   const choice = capacitorSetFor(study, units);
-  if (!('set' in choice)) {
-    const row: Row = {
-      check: units.checks.current,
-      title: `${units.words} current`,
-      subject: { kind: 'element', id: units.id },
-      caseId: context.caseId,
-      unit: 'p.u.',
-      source: noLimitSet,
-      working: [],
-    };
-    return [
-      unknown({ ...row, part: 'current' }, choice.missing),
-      unknown(
-        { ...row, check: units.checks.voltage, title: `${units.words} voltage`, part: 'voltage' },
-        choice.missing,
-      ),
-    ];
-  }
+  if (!('set' in choice)) return withoutSet(context, units, choice.missing);
   const prepared = prepare(context, units, choice.set);
   return [
     currentVerdict(units, prepared),
@@ -123,6 +106,25 @@ export function capacitorVerdicts(context: CheckContext, study: Study, units: Ca
     peakVerdict(units, prepared),
     kvarVerdict(units, prepared),
   ];
+}
+
+/** The rows that a known set would judge, each without a verdict. */
+function withoutSet(context: CheckContext, units: CapacitorUnits, missing: string): Verdict[] {
+  return (['current', 'voltage', 'kvar'] as const).map((quantity) => {
+    const check = units.checks[quantity];
+    const part = partOf(check, quantity);
+    const row: Row = {
+      check,
+      title: `${units.words} ${quantity}`,
+      subject: { kind: 'element', id: units.id },
+      caseId: context.caseId,
+      unit: 'p.u.',
+      source: noLimitSet,
+      working: [],
+      ...(part === undefined ? {} : { part }),
+    };
+    return unknown(row, missing);
+  });
 }
 
 const partOf = (check: string, part: string): string | undefined =>

@@ -37,7 +37,7 @@ function networkSide(study: Study, bus: string, sources: readonly (Supply | Gene
 }
 
 /** The in-service parts at a busbar through which the network feeds it. */
-export function feedersOf(study: Study, bus: string): StudyElement[] {
+function feedersOf(study: Study, bus: string): StudyElement[] {
   const sources = sourcesOf(study);
   const side = networkSide(study, bus, sources);
   const ids = new Set(sources.map((source) => source.id));

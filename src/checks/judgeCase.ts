@@ -122,7 +122,7 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
 }
 
 /** The study with some banks' steps replaced, in one case, by a single step of the kvar given. */
-export function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
+function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
   const changes = [...steps].map(([element, kvar]) => ({ element, set: { steps: [{ kvar }] } }));
   const cases: StudyCase[] = casesOf(study).map((item) =>
     item.id === caseId ? { ...item, changes: [...item.changes, ...changes] } : item,

@@ -25,7 +25,7 @@ function limitAt(context: CheckContext, isPcc: boolean): { set: LimitSet; cited:
 }
 
 /** |V2|/|V1| in per cent at the fundamental; null without positive-sequence voltage. */
-export function unbalancePercent(solved: SolvedCase, bus: Bus): number | null {
+function unbalancePercent(solved: SolvedCase, bus: Bus): number | null {
   const { voltage, maxOrder } = solved.solution;
   const at = solved.bus(bus.id) * maxOrder * 3;
   const phases: Rectangular[] = [0, 1, 2].map((k) => ({

@@ -1,4 +1,4 @@
-import type { ResultsCheck } from '../engine/types.ts';
+import type { ResultsCheck } from '../engine/index.ts';
 import { margin, type Sense, verdictWord } from './margin.ts';
 import { sourceText } from './source.ts';
 import type { Source, Verdict, VerdictWord, Working } from './types.ts';

@@ -569,6 +569,42 @@ describe('distance of the resonance from present orders (screening)', () => {
     expect(verdict.working[0]?.numbers).toMatch(/150 of 150 kvar on, C2 at 150 kvar/);
   });
 
+  it('searches a filter on a busbar without a bank: its parallel peak lies below its tuned order', () => {
+    const filter = {
+      id: 'F',
+      kind: 'filter' as const,
+      bus: 'LV',
+      type: 'single-tuned' as const,
+      kvar: 150,
+      tunedOrder: 4.7,
+      qFactor: 40,
+      ratedV: 500,
+    };
+    const study = site({
+      bank: null,
+      more: [filter],
+      drive: {
+        spectrum: [
+          { h: 4, percent: 6 },
+          { h: 5, percent: 30 },
+        ],
+      },
+    });
+    const verdict = one(verdictsOf(study), 'resonance-distance', 'F');
+    const scan = scanImpedance(study, 'base', {
+      bus: 'LV',
+      sequence: 'positive',
+      fromHz: 50,
+      toHz: 400,
+      points: 1401,
+    });
+    const peak = scan.resonances.find(({ kind }) => kind === 'parallel')?.order ?? 0;
+    expect(peak).toBeLessThan(4.7);
+    expect(verdict.order).toBeCloseTo(peak, 4);
+    expect(verdict).toMatchObject({ verdict: 'watch', screening: true });
+    expect(of(verdictsOf(site({ more: [filter] })), 'resonance-distance', 'F')).toHaveLength(0);
+  });
+
   it('thins the combinations of many banks and says so', () => {
     const many = [1, 2, 3, 4].map((n) => ({
       id: `B${n}`,

@@ -1,4 +1,4 @@
-import type { Bank, Study } from '../../study/types.ts';
+import type { Bank, Study } from '../../study/index.ts';
 import { limitSet } from './limitSets.ts';
 import type { LimitSet } from './types.ts';
 

@@ -1,7 +1,7 @@
 import type { LimitSet, OrderRow } from './types.ts';
 
 /** Compatibility levels shared by IEC 61000-2-2 (low voltage) and IEC 61000-2-12 (medium voltage). */
-export const publicNetworkOrders: OrderRow[] = [
+const publicNetworkOrders: OrderRow[] = [
   { family: 'odd-nontriplen', from: 5, to: 5, percent: 6 },
   { family: 'odd-nontriplen', from: 7, to: 7, percent: 5 },
   { family: 'odd-nontriplen', from: 11, to: 11, percent: 3.5 },

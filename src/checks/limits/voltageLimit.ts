@@ -27,7 +27,7 @@ function percentOf(row: OrderRow, h: number): number {
 }
 
 /** The table of the set whose span (aboveV, upToV] holds this nominal line-to-line voltage. */
-export function voltageTable(set: LimitSet, nominalV: number): VoltageTable | undefined {
+function voltageTable(set: LimitSet, nominalV: number): VoltageTable | undefined {
   return set.voltage?.tables.find(
     (table) => nominalV > table.aboveV && (table.upToV === undefined || nominalV <= table.upToV),
   );
