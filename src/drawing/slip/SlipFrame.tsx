@@ -1,6 +1,7 @@
 import { type KeyboardEvent, type ReactNode, useEffect, useRef } from 'react';
 import type { Field } from '../../study/index.ts';
 import { Formula } from './Formula.tsx';
+import { useSlipFocus } from './useSlipFocus.ts';
 
 export interface SlipFrameProps {
   /** Accessible name: "Data of Bank C1". */
@@ -32,10 +33,7 @@ export function SlipFrame({
   onClose,
 }: SlipFrameProps) {
   const paper = useRef<HTMLElement>(null);
-  useEffect(() => {
-    const body = paper.current?.querySelector<HTMLElement>(`[data-slip="${CSS.escape(subjectKey)}"]`);
-    body?.querySelector<HTMLElement>('input, select, button')?.focus({ preventScroll: true });
-  }, [subjectKey]);
+  useSlipFocus(paper, subjectKey);
   useEffect(() => {
     const element = paper.current;
     const keepWheel = (event: WheelEvent) => {
