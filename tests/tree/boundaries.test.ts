@@ -34,7 +34,9 @@ function sources(folder: string): string[] {
 /** Every module specifier a file names: static, type-only, re-exported, dynamic, or a worker's URL. */
 function specifiers(file: string): string[] {
   const text = readFileSync(file, 'utf8').replace(/\/\*[\s\S]*?\*\/|^\s*\/\/.*$/gm, '');
-  const found = text.matchAll(/(?:\bfrom\s*|\bimport\s*\(\s*|\bimport\s+|new URL\(\s*)['"]([^'"]+)['"]/g);
+  const found = text.matchAll(
+    /(?:[\s}*]from\s+|\bimport\s*\(\s*|^import\s+|new URL\(\s*)['"]([^'"\n]+)['"]/gm,
+  );
   return [...found].map((match) => match[1] as string);
 }
 

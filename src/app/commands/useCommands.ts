@@ -64,9 +64,9 @@ function historyCommands(undoing: string | null, redoing: string | null): Comman
 function viewCommands(study: Study | null): Command[] {
   const { setPlace, setReadingMode, setTheme, setCase } = workbench.getState();
   return [
-    { id: 'place.site', words: 'Go to Site', keys: 'Mod+1', run: () => setPlace('site') },
-    { id: 'place.correction', words: 'Go to Correction', keys: 'Mod+2', run: () => setPlace('correction') },
-    { id: 'place.sheet', words: 'Go to Sheet', keys: 'Mod+3', run: () => setPlace('sheet') },
+    { id: 'place.site', words: 'Go to Site', keys: 'F2', run: () => setPlace('site') },
+    { id: 'place.correction', words: 'Go to Correction', keys: 'F3', run: () => setPlace('correction') },
+    { id: 'place.sheet', words: 'Go to Sheet', keys: 'F4', run: () => setPlace('sheet') },
     {
       id: 'reading.fundamental',
       words: 'Readings on the drawing: fundamental',

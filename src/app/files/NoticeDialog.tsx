@@ -5,7 +5,7 @@ import { useWorkbench } from '../../store/index.ts';
 export function NoticeDialog() {
   const notice = useWorkbench((state) => state.notice);
   const dismiss = useWorkbench((state) => state.dismissNotice);
-  if (!notice || notice.severity !== 'error') return null;
+  if (notice?.severity !== 'error') return null;
   return (
     <ModalOverlay isOpen onOpenChange={dismiss} isDismissable className="veil">
       <Modal className="notice">

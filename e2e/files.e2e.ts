@@ -1,0 +1,50 @@
+import { expect, type Page, test } from '@playwright/test';
+import { sampleText } from './engineSays.ts';
+import { saveByDownload, savedStudy, settled } from './workbench.ts';
+
+async function dropFile(page: Page, name: string, text: string): Promise<void> {
+  const data = await page.evaluateHandle(
+    ([fileName, content]) => {
+      const transfer = new DataTransfer();
+      transfer.items.add(new File([content as string], fileName as string, { type: 'application/json' }));
+      return transfer;
+    },
+    [name, text],
+  );
+  await page.dispatchEvent('body', 'dragover', { dataTransfer: data });
+  await page.dispatchEvent('body', 'drop', { dataTransfer: data });
+}
+
+test.beforeEach(async ({ page }) => {
+  await saveByDownload(page);
+  await page.goto('/?sample=cold-store');
+  await settled(page);
+});
+
+test('a study file dropped on the window opens', async ({ page }) => {
+  await dropFile(page, 'office-tower.json', sampleText('office-tower'));
+  await expect(page.getByRole('button', { name: /Harrow Lane offices/ }).first()).toBeVisible();
+  await settled(page);
+  expect((await savedStudy(page)).title).toBe('Harrow Lane offices');
+});
+
+test('a broken file is refused with every finding, and the open study stays', async ({ page }) => {
+  const before = await savedStudy(page);
+  const broken = JSON.parse(sampleText('office-tower'));
+  broken.elements[1].ukPercent = -4;
+  broken.elements[2].bus = 'nowhere';
+  await dropFile(page, 'broken.json', JSON.stringify(broken));
+  const dialog = page.getByRole('alertdialog');
+  await expect(dialog).toContainText('$.elements[1].ukPercent');
+  await expect(dialog).toContainText('-4');
+  await expect(dialog).toContainText('$.elements[2].bus');
+  await expect(dialog).toContainText('nowhere');
+  await page.keyboard.press('Escape');
+  await expect(dialog).toBeHidden();
+  expect(await savedStudy(page)).toEqual(before);
+});
+
+test('a file that is not JSON is refused by line and column', async ({ page }) => {
+  await dropFile(page, 'notes.txt', 'kvar: lots\n');
+  await expect(page.getByRole('alertdialog')).toContainText(/line 1/i);
+});
