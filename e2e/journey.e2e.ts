@@ -6,6 +6,7 @@ import { middle, note, part, pdfPages, rail, saveByDownload, savedStudy, settled
 test.beforeEach(async ({ page }) => {
   await saveByDownload(page);
   await page.goto('/');
+  await expect(page.getByRole('region', { name: 'Drawing' })).toBeVisible();
 });
 
 /** The screen agrees with the engine run here on the very study that was saved. */
@@ -93,6 +94,7 @@ async function tabTo(page: Page, selector: string): Promise<void> {
 
 async function command(page: Page, words: string): Promise<void> {
   await page.keyboard.press('Control+k');
+  await expect(page.getByRole('searchbox', { name: 'Find a command' })).toBeFocused();
   await page.keyboard.type(words);
   await page.keyboard.press('ArrowDown');
   await page.keyboard.press('Enter');
