@@ -1,10 +1,11 @@
 import { useDeferredValue, useMemo } from 'react';
 import { figuresOf } from './document/figuresOf.ts';
 import { buildDocument, type PaperName, type SheetInput } from './document/index.ts';
-import type { ExportProgress } from './exportStudySheet.ts';
+import type { ExportProgress } from './ExportOptions.ts';
 import { sheetFigures } from './figures.tsx';
 import { LazyPage } from './LazyPage.tsx';
 import { layoutPages } from './pages/layoutPages.ts';
+import { withDrawingSize } from './withDrawingSize.ts';
 import './sheet.css';
 
 export interface SheetPlaceProps {
@@ -86,7 +87,7 @@ export function SheetPlace(props: SheetPlaceProps) {
 function Pages({ input: latest }: { input: SheetInput }) {
   const input = useDeferredValue(latest);
   const sheet = useMemo(() => {
-    const document = buildDocument(input);
+    const document = buildDocument(withDrawingSize(input));
     return { pages: layoutPages(document), figures: figuresOf(document), compose: sheetFigures(input) };
   }, [input]);
   const { pages } = sheet;

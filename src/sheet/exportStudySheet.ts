@@ -1,18 +1,7 @@
 import { buildDocument, type SheetDocument, type SheetInput } from './document/index.ts';
+import type { ExportOptions } from './ExportOptions.ts';
 import { sheetFigures } from './figures.tsx';
-
-export interface ExportProgress {
-  /** Pages and figures finished. */
-  done: number;
-  total: number;
-  /** e.g. "page 3 of 9". */
-  what: string;
-}
-
-export interface ExportOptions {
-  onProgress?: (progress: ExportProgress) => void;
-  signal?: AbortSignal;
-}
+import { withDrawingSize } from './withDrawingSize.ts';
 
 /** A file name that tells site and revision: "kelder-cold-store-revision-b.pdf". */
 export function sheetFileName(document: Pick<SheetDocument, 'title' | 'titleBlock'>): string {
@@ -35,5 +24,5 @@ export function sheetFileName(document: Pick<SheetDocument, 'title' | 'titleBloc
 export async function exportStudySheet(input: SheetInput, options: ExportOptions = {}): Promise<Blob> {
   const { exportSheet } = await import('./pdf/exportSheet.ts');
   options.signal?.throwIfAborted();
-  return exportSheet(buildDocument(input), sheetFigures(input), options);
+  return exportSheet(buildDocument(withDrawingSize(input)), sheetFigures(input), options);
 }

@@ -73,7 +73,7 @@ function frontPages(view: SheetView): Section[] {
   const rest = [...(impedance ? [impedance] : []), marginsSection(view)];
   return drawing.landscape
     ? [resultSection(view), ...rest, drawing]
-    : [resultSection(view), drawing, ...rest];
+    : [resultSection(view), { ...drawing, floatsPast: rest.length }, ...rest];
 }
 
 /**

@@ -1,4 +1,4 @@
-import { busName, type Field, type Study } from '../../study/index.ts';
+import { builtInSpectrum, busName, type Field, type Study } from '../../study/index.ts';
 import { stepsInWords } from './correctionParts.ts';
 import { entered } from './formatNumber.ts';
 
@@ -56,6 +56,8 @@ function groupValue(study: Study, fields: readonly Field[], value: Record<string
 
 function textValue(study: Study, field: Field, value: string): string {
   if (field.type === 'busRef') return busName(study, value);
+  if (field.type === 'spectrum')
+    return study.spectra?.find(({ id }) => id === value)?.name ?? builtInSpectrum(value)?.name ?? value;
   if (field.type === 'choice') return field.options.find((option) => option.value === value)?.label ?? value;
   return value;
 }

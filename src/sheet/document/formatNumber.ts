@@ -1,7 +1,7 @@
 /** Numbers as the sheet prints them: a fixed decimal point, thin spaces between thousands, a true minus. */
 
-const THIN = ' ';
-const MINUS = '−';
+const THIN = '\u202f';
+const MINUS = '\u2212';
 
 function grouped(digits: string): string {
   const [whole = '', fraction] = digits.split('.');

@@ -61,7 +61,7 @@ export interface FigureBlock extends Figure {
   aspect: number;
   /** Printed under the figure in small type. */
   caption?: string;
-  /** Drawn no wider than this, in points; absent: over the whole width. */
+  /** Drawn no wider than this, in points; may reach a little into the margins. Absent: over the whole width. */
   widest?: number;
   /** May be drawn smaller by this factor where more then fits on the first page. */
   tightest?: number;
@@ -106,6 +106,8 @@ export interface Section {
   title: string;
   /** Beside the title in lighter ink. */
   aside?: string;
+  /** May stand after this many of the sections that follow, where the first page then holds more. */
+  floatsPast?: number;
   /** Set on pages of its own, turned on their side. */
   landscape?: boolean;
   blocks: Block[];

@@ -8,6 +8,8 @@ import { baseline, headingSlices, listSlices, paragraphSlices, termsSlices, text
 import { wrap } from './wrap.ts';
 
 const FIGURE_GAP = 14;
+/** How far a wide drawing may reach into the margin on either side, in points. */
+const BLEED = 15;
 
 /** What blocks are set into: the width, and the greatest height of a figure. */
 export interface Room {
@@ -17,12 +19,11 @@ export interface Room {
 
 function figureSlices(block: FigureBlock, { width, tallest }: Room): Slice[] {
   const drawn = (scale: number): { height: number; marks: PageMark[] } => {
-    const wanted = Math.min(width, block.widest ?? width) * scale;
+    const wanted = Math.min(width + 2 * BLEED, block.widest ?? width) * scale;
     const height = Math.min(wanted * block.aspect, tallest);
-    return {
-      height,
-      marks: [{ kind: 'figure', id: block.id, x: 0, y: 0, width: height / block.aspect, height }],
-    };
+    const set = height / block.aspect;
+    const x = -Math.max(0, set - width) / 2;
+    return { height, marks: [{ kind: 'figure', id: block.id, x, y: 0, width: set, height }] };
   };
   const captions = block.caption === undefined ? [] : paragraphSlices(block.caption, width, true);
   const slice: Slice = { ...drawn(1), glued: captions.length > 0, gap: 4 };

@@ -9,6 +9,8 @@ import { headingSlices } from './textSlices.ts';
 
 /** Space under the head and over the foot of the first page. */
 const FRONT_GAP = 10;
+/** Room a section's title takes at the head of a page. */
+const HEADING = 20;
 
 function slicesOf(sections: readonly Section[], room: Room): Slice[] {
   return sections.flatMap((section) => {
@@ -45,13 +47,30 @@ const sectionsOnFirst = (pages: PlacedSlice[][]): number =>
 function fillRun({ paper, sections }: Run, frame: number | undefined): PlacedSlice[][] {
   const whole = paper.height - paper.margin.top - paper.margin.bottom;
   const later = whole - slimHeadHeight;
-  const slices = slicesOf(sections, { width: contentWidth(paper), tallest: later - 60 });
+  const set = (order: readonly Section[]): Slice[] =>
+    slicesOf(order, { width: contentWidth(paper), tallest: later - HEADING });
   const room = (page: number): number => (page === 0 && frame !== undefined ? whole - frame : later);
-  const loose = paginate(slices, room);
+  const loose = paginate(set(sections), room);
   if (frame === undefined) return loose;
-  const tightened = slices.map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
-  const tight = paginate(tightened, room);
-  return sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
+  const tightened = set(sections).map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
+  const alone = sectionsOnFirst(loose) === 1;
+  const others = [paginate(tightened, room), ...(alone ? [paginate(set(floated(sections)), room)] : [])];
+  return others.reduce(
+    (best, pages) => (sectionsOnFirst(pages) > sectionsOnFirst(best) ? pages : best),
+    loose,
+  );
+}
+
+/** The sections with each floating one moved past those it may follow. */
+function floated(sections: readonly Section[]): Section[] {
+  const order = [...sections];
+  for (const section of sections) {
+    if (section.floatsPast === undefined) continue;
+    const at = order.indexOf(section);
+    order.splice(at, 1);
+    order.splice(at + section.floatsPast, 0, section);
+  }
+  return order;
 }
 
 function pageOf(placed: PlacedSlice[], number: number, head: Slice, paper: Paper): SheetPage {

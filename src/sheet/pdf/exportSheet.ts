@@ -1,48 +1,19 @@
 import type { jsPDF } from 'jspdf';
-import type { ReactElement } from 'react';
-import { svg2pdf } from 'svg2pdf.js';
 import { figuresOf } from '../document/figuresOf.ts';
 import type { SheetDocument } from '../document/index.ts';
-import type { ExportOptions } from '../exportStudySheet.ts';
+import type { ExportOptions } from '../ExportOptions.ts';
 import type { FigureComposer } from '../FigureComposer.ts';
 import { layoutPages } from '../pages/layoutPages.ts';
 import type { FigureMark, SheetPage } from '../pages/marks.ts';
 import { deflatePdf } from './deflatePdf.ts';
 import { drawMark } from './drawMark.ts';
-import { addFonts, type FontFiles, loadFontFiles, PDF_FONT } from './fontFiles.ts';
-import { mountFigure } from './mountFigure.ts';
+import { addFonts, type FontFiles, loadFontFiles } from './fontFiles.ts';
 import { newPdf, orientationOf } from './newPdf.ts';
-import { portions } from './portions.ts';
 import { type Slicing, slicing } from './slicing.ts';
-import { markRuns } from './svgForPdf.ts';
 
 interface WriterOptions extends ExportOptions {
   /** Already loaded fonts; absent: fetched from the programme's own files. */
   fonts?: FontFiles;
-}
-
-async function drawFigure(
-  pdf: jsPDF,
-  mark: FigureMark,
-  element: ReactElement,
-  tasks: Slicing,
-): Promise<void> {
-  await tasks.turn();
-  const figure = mountFigure(element, mark.width, mark.height);
-  try {
-    markRuns(figure.svg);
-    const { family, style, weight } = PDF_FONT['varwright-sans-regular'];
-    const place = { x: mark.x, y: mark.y, width: mark.width, height: mark.height };
-    for (const portion of portions(figure.svg)) {
-      await tasks.turn();
-      // svg2pdf begins with a family of its own in the style last set, which must be one that family has.
-      pdf.setFont(family, style, weight);
-      await svg2pdf(portion, pdf, place);
-    }
-  } finally {
-    figure.remove();
-  }
-  await tasks.turn();
 }
 
 async function drawPage(
@@ -58,15 +29,6 @@ async function drawPage(
   }
 }
 
-/** Fonts must be ready in the page too, as figures are measured there. */
-async function pageFonts(): Promise<void> {
-  await Promise.all(
-    ['400 10px "Varwright Sans"', '600 10px "Varwright Sans"', '10px "Varwright Marks"'].map((font) =>
-      document.fonts.load(font, 'Aφ∠'),
-    ),
-  );
-}
-
 /**
  * Writes the sheet as a PDF: vectors, selectable text, embedded fonts. The same document and figures give
  * the same bytes. Works in short tasks on the main thread; an aborted signal rejects with its reason.
@@ -79,7 +41,7 @@ export async function exportSheet(
   const { signal, onProgress } = options;
   signal?.throwIfAborted();
   const tasks = slicing(signal);
-  const [fonts] = await Promise.all([options.fonts ?? loadFontFiles(), pageFonts()]);
+  const fonts = options.fonts ?? (await loadFontFiles());
   await tasks.turn();
   const pages = layoutPages(document);
   const figures = figuresOf(document);
@@ -94,7 +56,10 @@ export async function exportSheet(
   const draw = async (mark: FigureMark): Promise<void> => {
     const block = figures.get(mark.id);
     const element = block && compose(block, mark.width, mark.height);
-    if (element) await drawFigure(pdf, mark, element, tasks);
+    if (element) {
+      const { drawFigure } = await import('./drawFigure.ts');
+      await drawFigure(pdf, mark, element, tasks);
+    }
     done += 1;
     onProgress?.({ done, total, what: `figures and pages, ${done} of ${total}` });
   };

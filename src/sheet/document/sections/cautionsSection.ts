@@ -4,7 +4,7 @@ import type { SheetView } from '../SheetView.ts';
 
 /** Cautions on stored charge. The first two lines stand on the first page as well. */
 export const FRONT_CAUTION = [
-  'Capacitors stay charged after isolation; discharge devices can fail. Isolate, lock, wait the stated time, prove dead, earth and short.',
+  'Capacitors stay charged after isolation; discharge devices can fail: isolate, lock, wait, prove dead, earth and short.',
   'Local codes, the network operator’s rules and the responsible licensed engineer decide. This sheet is a calculation aid.',
 ];
 

@@ -1,4 +1,4 @@
-import type { Block, DrawingWindow, FigureBlock, Section } from '../model.ts';
+import type { Block, DrawingWindow, FigureBlock, PaperName, Section } from '../model.ts';
 import { type SheetView, solvedIn } from '../SheetView.ts';
 import { shownWords } from './frontSections.ts';
 
@@ -11,9 +11,17 @@ const LEAST_LETTER = 7;
 const LARGEST_SCALE = 0.75;
 /** How far neighbouring pieces of a drawing overlap, in its units. */
 const OVERLAP = 60;
-/** Room for the drawing on an upright page and on one turned on its side, in points, on either paper. */
-const UPRIGHT = { width: 510, height: 620 };
-const TURNED = { width: 700, height: 430 };
+/** Room for the drawing on an upright page and on one turned on its side, in points; a little wider than text. */
+const UPRIGHT: Record<PaperName, Size> = {
+  A4: { width: 540, height: 620 },
+  Letter: { width: 556, height: 580 },
+};
+const TURNED: Record<PaperName, Size> = {
+  A4: { width: 786, height: 480 },
+  Letter: { width: 736, height: 496 },
+};
+/** Room a piece leaves for the words under it. */
+const CAPTION = 18;
 
 interface Size {
   width: number;
@@ -52,8 +60,9 @@ function pieces(whole: number, longest: number): { from: number; length: number 
 /** A drawing too large for one page with readable letters, cut into overlapping pieces. */
 function tiles(view: SheetView, size: Size): Block[] {
   const scale = LEAST_LETTER / LETTER_UNITS;
-  const across = pieces(size.width, TURNED.width / scale);
-  const down = pieces(size.height, TURNED.height / scale);
+  const room = TURNED[view.input.paper];
+  const across = pieces(size.width, room.width / scale);
+  const down = pieces(size.height, (room.height - CAPTION) / scale);
   return down.flatMap((row, r) =>
     across.map((column, c) => {
       const place = [
@@ -86,18 +95,18 @@ export function drawingSection(view: SheetView): Section {
   if (!given) {
     const block: FigureBlock = {
       ...figure(view, null, { width: 2, height: 1 }, 1, ''),
-      widest: UPRIGHT.width,
+      widest: UPRIGHT[view.input.paper].width,
     };
     return { ...section, blocks: [block] };
   }
   const size = { width: given.width - 2 * CROP, height: given.height - 2 * CROP };
   const window = { x: CROP, y: CROP, ...size };
-  const upright = scaleFor(size, UPRIGHT);
+  const upright = scaleFor(size, UPRIGHT[view.input.paper]);
   if (readable(upright)) {
     const tightest = Math.max(LEAST_LETTER / (upright * LETTER_UNITS), 0.8);
     return { ...section, blocks: [{ ...figure(view, window, size, upright, ''), tightest }] };
   }
-  const turned = scaleFor(size, TURNED);
+  const turned = scaleFor(size, TURNED[view.input.paper]);
   return {
     ...section,
     landscape: true,
