@@ -1,10 +1,6 @@
 export * from './document/index.ts';
-export {
-  type ExportOptions,
-  type ExportProgress,
-  exportStudySheet,
-  sheetFileName,
-} from './exportStudySheet.ts';
+export type { ExportOptions, ExportProgress } from './ExportOptions.ts';
+export { exportStudySheet, sheetFileName } from './exportStudySheet.ts';
 export { layoutPages } from './pages/layoutPages.ts';
 export type { PageMark, SheetPage } from './pages/marks.ts';
 export { SheetPlace, type SheetPlaceProps } from './SheetPlace.tsx';
