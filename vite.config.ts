@@ -1,6 +1,7 @@
 import { resolve } from 'node:path';
 import react from '@vitejs/plugin-react';
 import type { Plugin } from 'vite';
+import { VitePWA } from 'vite-plugin-pwa';
 import { defineConfig } from 'vitest/config';
 
 const contentSecurityPolicy = [
@@ -35,7 +36,23 @@ function policy(): Plugin {
 const absent = resolve(import.meta.dirname, 'src/sheet/pdf/absent.ts');
 
 export default defineConfig({
-  plugins: [react(), policy()],
+  plugins: [
+    react(),
+    policy(),
+    VitePWA({
+      registerType: 'autoUpdate',
+      injectRegister: 'script',
+      workbox: { globPatterns: ['**/*.{html,js,css,json,svg,ttf,woff2}'] },
+      manifest: {
+        name: 'Varwright',
+        short_name: 'Varwright',
+        description: 'Power-factor correction and harmonic studies',
+        theme_color: '#f6f3ec',
+        background_color: '#f6f3ec',
+        icons: [{ src: 'icon.svg', sizes: 'any', type: 'image/svg+xml' }],
+      },
+    }),
+  ],
   resolve: { alias: { canvg: absent, html2canvas: absent, dompurify: absent } },
   worker: { format: 'es' },
   build: { target: 'es2023', chunkSizeWarningLimit: 700 },
