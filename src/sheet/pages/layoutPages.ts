@@ -53,12 +53,9 @@ function fillRun({ paper, sections }: Run, frame: number | undefined): PlacedSli
   const loose = paginate(set(sections), room);
   if (frame === undefined) return loose;
   const tightened = set(sections).map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
-  const alone = sectionsOnFirst(loose) === 1;
-  const others = [paginate(tightened, room), ...(alone ? [paginate(set(floated(sections)), room)] : [])];
-  return others.reduce(
-    (best, pages) => (sectionsOnFirst(pages) > sectionsOnFirst(best) ? pages : best),
-    loose,
-  );
+  const tight = paginate(tightened, room);
+  const best = sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
+  return sectionsOnFirst(best) > 1 ? best : paginate(set(floated(sections)), room);
 }
 
 /** The sections with each floating one moved past those it may follow. */

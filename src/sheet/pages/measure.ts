@@ -43,7 +43,7 @@ export interface FaceRun {
 }
 
 /** A symbol of one letter with its subscript as the trade types it: I_rms, u_k, U_C,h, P_EC-R. */
-const SUBSCRIPT = /(?<![\p{L}\p{N}_])(\p{L}\p{M}?″?)_([\p{L}\p{N}]+(?:,[\p{L}\p{N}]+)*(?:-R)?)/gu;
+const SUBSCRIPT = /(?<![\p{L}\p{N}_])(\p{L}\p{M}?″?)_([\p{L}\p{Nd}]+(?:,[\p{L}\p{Nd}]+)*(?:-R)?)/gu;
 const SUBSCRIPT_SIZE = 0.8;
 const SUBSCRIPT_DROP = 0.2;
 

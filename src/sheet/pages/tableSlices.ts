@@ -120,11 +120,32 @@ function groupSlice(row: Extract<Row, { kind: 'group' }>, width: number, repeat:
   };
 }
 
+/** A group no higher than this, in points, stays on one page. */
+const WHOLE_GROUP = 110;
+
+/** Rows of each group: from after its name to the next. */
+function keepGroupsWhole(table: TableBlock, rows: readonly Slice[]): void {
+  let group: Slice[] = [];
+  const close = (): void => {
+    const height = group.reduce((sum, slice) => sum + slice.height, 0);
+    if (height <= WHOLE_GROUP) for (const slice of group.slice(0, -1)) slice.glued = true;
+  };
+  rows.forEach((slice, index) => {
+    if (table.rows[index]?.kind === 'group') {
+      close();
+      group = [];
+    }
+    if (group.length > 0 || table.rows[index]?.kind === 'group') group.push(slice);
+  });
+  close();
+}
+
 /** A table cut into rows: never a head without two rows, a group's name without a row, a last row alone. */
 export function tableSlices(table: TableBlock, width: number): Slice[] {
   const columns = placeColumns(table, width);
   const head = headSlice(columns, width);
   const rows = table.rows.map((row) => rowSlice(row, columns, width, head));
+  keepGroupsWhole(table, rows);
   rows.forEach((slice, index) => {
     if (rows.length > 1 && (index === 0 || index === rows.length - 2)) slice.glued = true;
   });

@@ -25,6 +25,8 @@ function workingText(verdict: Verdict, equationSaid: boolean): string {
 
 const closed = (text: string): string => (/[.!?)]$/.test(text) ? text : `${text}.`);
 
+const capitalised = (text: string): string => `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
+
 /** What a verdict remarks besides what all verdicts of its list say. */
 function remarksOf(verdict: Verdict): string[] {
   const mend = verdict.mend !== undefined && !verdict.remarks.includes(verdict.mend) ? [verdict.mend] : [];
@@ -86,7 +88,7 @@ function checkBlocks(view: SheetView, check: string, verdicts: readonly Verdict[
   const unitHead = unit === undefined || unit === '' ? {} : { unit };
   const rowFor = (verdict: Verdict): Row =>
     rowOf(view, verdict, unit !== undefined, workingText(verdict, Boolean(equation)), said);
-  const blocks: Block[] = [{ kind: 'heading', text: checkWords(check, sorted) }];
+  const blocks: Block[] = [{ kind: 'heading', text: capitalised(checkWords(check, sorted)) }];
   if (terms.length > 0) blocks.push({ kind: 'terms', terms, leadsOn: true });
   blocks.push({
     kind: 'table',
