@@ -1,5 +1,8 @@
-import { type ComponentProps, useEffect, useRef, useState } from 'react';
+import { type ComponentProps, startTransition, useEffect, useRef, useState } from 'react';
 import { PagePreview } from './PagePreview.tsx';
+
+/** The id of a page in the preview. */
+export const leafId = (page: number): string => `sheet-page-${page}`;
 
 /** A page that is drawn once it comes near the window, so that a long sheet opens at once. */
 export function LazyPage({ count, ...props }: ComponentProps<typeof PagePreview> & { count: number }) {
@@ -10,9 +13,9 @@ export function LazyPage({ count, ...props }: ComponentProps<typeof PagePreview>
     if (!element || near) return;
     const observer = new IntersectionObserver(
       (entries) => {
-        if (entries.some(({ isIntersecting }) => isIntersecting)) setNear(true);
+        if (entries.some(({ isIntersecting }) => isIntersecting)) startTransition(() => setNear(true));
       },
-      { rootMargin: '800px' },
+      { rootMargin: '400px' },
     );
     observer.observe(element);
     return () => observer.disconnect();
@@ -20,6 +23,7 @@ export function LazyPage({ count, ...props }: ComponentProps<typeof PagePreview>
   return (
     <section
       ref={holder}
+      id={leafId(props.page.number)}
       className="sheet-leaf"
       style={{ aspectRatio: `${props.page.width} / ${props.page.height}` }}
       aria-label={`Page ${props.page.number} of ${count}`}

@@ -3,8 +3,9 @@ import { figuresOf } from './document/figuresOf.ts';
 import { buildDocument, type PaperName, type SheetInput } from './document/index.ts';
 import type { ExportProgress } from './ExportOptions.ts';
 import { sheetFigures } from './figures.tsx';
-import { LazyPage } from './LazyPage.tsx';
+import { LazyPage, leafId } from './LazyPage.tsx';
 import { layoutPages } from './pages/layoutPages.ts';
+import type { SheetPage } from './pages/marks.ts';
 import { withDrawingSize } from './withDrawingSize.ts';
 import './sheet.css';
 
@@ -93,9 +94,10 @@ function Pages({ input: latest }: { input: SheetInput }) {
   const { pages } = sheet;
   return (
     <div className="sheet-pages" aria-busy={input !== latest}>
+      <Contents pages={pages} />
       {pages.map((page) => (
         <LazyPage
-          key={page.number}
+          key={`${input.paper} ${page.number}`}
           page={page}
           count={pages.length}
           figures={sheet.figures}
@@ -103,5 +105,24 @@ function Pages({ input: latest }: { input: SheetInput }) {
         />
       ))}
     </div>
+  );
+}
+
+/** The sections with their pages; a click brings the page into view. */
+function Contents({ pages }: { pages: readonly SheetPage[] }) {
+  return (
+    <nav className="sheet-contents" aria-label="Contents of the sheet">
+      {pages.flatMap(({ number, sections }) =>
+        sections.map(({ id, title }) => (
+          <button
+            type="button"
+            key={id}
+            onClick={() => document.getElementById(leafId(number))?.scrollIntoView({ block: 'start' })}
+          >
+            {title} <span className="unit">{number}</span>
+          </button>
+        )),
+      )}
+    </nav>
   );
 }
