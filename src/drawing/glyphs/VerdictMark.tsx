@@ -42,9 +42,13 @@ export function VerdictMark({ verdict, palette, x, y, stacked = false }: Verdict
         </>
       )}
       {verdict === 'pass' && <path d="M-5,0 L-1.5,4 L5,-4.5" fill="none" stroke={ink} strokeWidth={1.8} />}
-      <text x={stacked ? -8 : 12} y={stacked ? 20 : 4} fontSize={11} fill={ink}>
-        {verdictWords[verdict]}
-      </text>
+      {/* Stacked there is room for the short words only; the ring with its mark stands alone. */}
+      {!(stacked && verdict === 'unknown') && (
+        <text x={stacked ? -8 : 12} y={stacked ? 20 : 4} fontSize={11} fill={ink}>
+          {verdictWords[verdict]}
+        </text>
+      )}
+      <title>{verdictWords[verdict]}</title>
     </g>
   );
 }

@@ -47,3 +47,5 @@ export const MARGIN = 28;
 export const BUS_MARK_ROOM = 84;
 export const MARK_HEIGHT = 16;
 export const MARK_WIDTH = 110;
+/** Beside a hanging symbol, the word below the mark. */
+export const STACKED_MARK_WIDTH = 38;

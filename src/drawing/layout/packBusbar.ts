@@ -13,13 +13,15 @@ import {
   MARK_WIDTH,
   SIDE_TEXT_OFFSET,
   SLOT_GAP,
+  STACKED_MARK_WIDTH,
 } from './measures.ts';
 import type { Storeys } from './storeys.ts';
 
 const SYMBOL_HALF = 20;
 const LABEL_TO_LEAD = 18;
-/** How far right of its earliest place a feed may move to stand straight above a part. */
-const STRAIGHTEN = 110;
+/** How far left of the feed a part may stand and still be moved straight under it. */
+const STRAIGHTEN_LEAD = 110;
+const STRAIGHTEN_LEAF = 40;
 
 export interface Packing {
   study: Study;
@@ -45,8 +47,8 @@ export function packBusbar(
 ): PackedBusbar {
   const { arrangement, study } = packing;
   const label = busLabelWidth(study.buses[bus] ?? { id: '', nominalV: 0 });
-  const { block, slotXs } = packSlots(packing, bus, label + LABEL_TO_LEAD);
-  const leadX = straightened(slotXs, label + LABEL_TO_LEAD);
+  const leadX = label + LABEL_TO_LEAD;
+  const block = packSlots(packing, bus, leadX);
 
   let [topEnd, leadRight] = [leadX, leadX];
   for (const part of fedBy) {
@@ -77,8 +79,8 @@ function closeBar(packing: Packing, block: Block, bus: number, topEnd: number, f
   block.rows[0] = { left: 0, right, leftBus: bus, rightBus: bus };
 }
 
-/** Slots from left to right; a lone part leading on stands under the busbar's own feed. */
-function packSlots(packing: Packing, bus: number, firstLead: number): { block: Block; slotXs: number[] } {
+/** Slots from left to right, clear of the busbar's mark and, where that is near, straight under its feed. */
+function packSlots(packing: Packing, bus: number, leadX: number): Block {
   const slots = packing.arrangement.slots[bus] ?? [];
   const block = emptyBlock();
   let left = BUS_MARK_ROOM;
@@ -88,22 +90,22 @@ function packSlots(packing: Packing, bus: number, firstLead: number): { block: B
   }
   const arrived = left > BUS_MARK_ROOM;
   block.rows[0] = { left: 0, right: (arrived ? left : BAR_INSET) - SLOT_GAP, leftBus: -1, rightBus: -1 };
-  const slotXs: number[] = [];
   for (const slot of slots) {
     const next = packSlot(packing, bus, slot);
-    const nearest = shiftBeside(block, next, gapRule(packing));
-    const clear = slot.kind === 'leaf' ? nearest : Math.max(nearest, BUS_MARK_ROOM + SYMBOL_HALF);
-    const x = slots.length === 1 && slot.kind !== 'leaf' ? Math.max(clear, firstLead) : clear;
-    addBlock(block, next, x);
-    slotXs.push(x);
+    const nearest = Math.max(shiftBeside(block, next, gapRule(packing)), BUS_MARK_ROOM);
+    addBlock(block, next, straightened(nearest, leadX, slot, slots.length));
   }
-  return { block, slotXs };
+  return block;
 }
 
-/** The feed stands straight above the next slot to its right when that is near. */
-function straightened(slotXs: number[], earliest: number): number {
-  const near = slotXs.filter((x) => x >= earliest && x <= earliest + STRAIGHTEN);
-  return near.length > 0 ? Math.min(...near) : earliest;
+/**
+ * A part leading on moves right to stand straight under the feed when that is near, a hanging one when it is
+ * nearly there. The part moves, never the feed: what is hung later must not shift what stands above.
+ */
+function straightened(nearest: number, leadX: number, slot: Slot, count: number): number {
+  if (nearest >= leadX) return nearest;
+  const reach = slot.kind === 'leaf' ? STRAIGHTEN_LEAF : count === 1 ? leadX : STRAIGHTEN_LEAD;
+  return leadX - nearest <= reach ? leadX : nearest;
 }
 
 /** A slot with its (first) symbol at x = 0. */
@@ -112,7 +114,8 @@ function packSlot(packing: Packing, bus: number, slot: Slot): Block {
   const block = emptyBlock();
   if (slot.kind === 'leaf') {
     const half = leafLabelWidth(slot.part, study) / 2;
-    block.rows.push({ left: -half, right: half, leftBus: -1, rightBus: -1 });
+    const right = Math.max(half, SIDE_TEXT_OFFSET + STACKED_MARK_WIDTH);
+    block.rows.push({ left: -half, right, leftBus: -1, rightBus: -1 });
     block.symbols.push({ part: slot.part, x: 0, hang: 'below' });
   } else if (slot.kind === 'column') {
     const right = SIDE_TEXT_OFFSET + sideLabel(slot.part, study).width;

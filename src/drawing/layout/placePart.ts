@@ -10,6 +10,7 @@ import {
   MARK_WIDTH,
   SIDE_TEXT_OFFSET,
   SOURCE_HEIGHT,
+  STACKED_MARK_WIDTH,
   SYMBOL_DEPTH,
 } from './measures.ts';
 import type { Box, BusPlace, PartEnd, PartPlace, Point } from './types.ts';
@@ -79,7 +80,12 @@ function placeLeaf(study: Study, part: SeriesElement | ShuntElement, x: number, 
     label: { x: x - width / 2, y: bar.y + LEAF_TEXT_DEPTH, width, height: LEAF_LINES * LINE_PX },
     align: 'middle',
     oneLine: false,
-    mark: { x: x + SIDE_TEXT_OFFSET, y: centre.y - MARK_HEIGHT, width: 56, height: 2 * MARK_HEIGHT },
+    mark: {
+      x: x + SIDE_TEXT_OFFSET,
+      y: centre.y - MARK_HEIGHT,
+      width: STACKED_MARK_WIDTH,
+      height: 2 * MARK_HEIGHT,
+    },
   };
 }
 
