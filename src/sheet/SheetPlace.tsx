@@ -1,12 +1,8 @@
-import { useDeferredValue, useMemo } from 'react';
-import { figuresOf } from './document/figuresOf.ts';
-import { buildDocument, type PaperName, type SheetInput } from './document/index.ts';
+import type { PaperName, SheetInput } from './document/index.ts';
 import type { ExportProgress } from './ExportOptions.ts';
-import { sheetFigures } from './figures.tsx';
 import { LazyPage, leafId } from './LazyPage.tsx';
-import { layoutPages } from './pages/layoutPages.ts';
 import type { SheetPage } from './pages/marks.ts';
-import { withDrawingSize } from './withDrawingSize.ts';
+import { useSheetPages } from './useSheetPages.ts';
 import './sheet.css';
 
 export interface SheetPlaceProps {
@@ -85,23 +81,20 @@ export function SheetPlace(props: SheetPlaceProps) {
   );
 }
 
-function Pages({ input: latest }: { input: SheetInput }) {
-  const input = useDeferredValue(latest);
-  const sheet = useMemo(() => {
-    const document = buildDocument(withDrawingSize(input));
-    return { pages: layoutPages(document), figures: figuresOf(document), compose: sheetFigures(input) };
-  }, [input]);
-  const { pages } = sheet;
+function Pages({ input }: { input: SheetInput }) {
+  const sheet = useSheetPages(input);
+  if (!sheet) return <p className="sheet-waiting">Setting the pages</p>;
+  const { pages, paper, figures, compose } = sheet;
   return (
-    <div className="sheet-pages" aria-busy={input !== latest}>
+    <div className="sheet-pages" aria-busy={sheet.input !== input}>
       <Contents pages={pages} />
       {pages.map((page) => (
         <LazyPage
-          key={`${input.paper} ${page.number}`}
+          key={`${paper} ${page.number}`}
           page={page}
           count={pages.length}
-          figures={sheet.figures}
-          compose={sheet.compose}
+          figures={figures}
+          compose={compose}
         />
       ))}
     </div>

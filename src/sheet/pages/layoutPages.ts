@@ -12,13 +12,11 @@ const FRONT_GAP = 10;
 /** Room a section's title takes at the head of a page. */
 const HEADING = 20;
 
-function slicesOf(sections: readonly Section[], room: Room): Slice[] {
-  return sections.flatMap((section) => {
-    const [head, ...under] = headingSlices(section.title, section.aside, room.width, true);
-    const blocks = section.blocks.flatMap((block) => blockSlices(block, room));
-    if (!head) return blocks;
-    return [{ ...head, section: { id: section.id, title: section.title } }, ...under, ...blocks];
-  });
+function slicesOf(section: Section, room: Room): Slice[] {
+  const [head, ...under] = headingSlices(section.title, section.aside, room.width, true);
+  const blocks = section.blocks.flatMap((block) => blockSlices(block, room));
+  if (!head) return blocks;
+  return [{ ...head, section: { id: section.id, title: section.title } }, ...under, ...blocks];
 }
 
 /** Sections that follow one another on the same paper. */
@@ -44,28 +42,39 @@ const sectionsOnFirst = (pages: PlacedSlice[][]): number =>
   pages[0]?.filter(({ slice }) => slice.section !== undefined).length ?? 0;
 
 /** The pages of a run; on the first page of all, head and foot leave less room. */
-function fillRun({ paper, sections }: Run, frame: number | undefined): PlacedSlice[][] {
+function* fillRun({ paper, sections }: Run, frame: number | undefined): Generator<void, PlacedSlice[][]> {
   const whole = paper.height - paper.margin.top - paper.margin.bottom;
   const later = whole - slimHeadHeight;
-  const set = (order: readonly Section[]): Slice[] =>
-    slicesOf(order, { width: contentWidth(paper), tallest: later - HEADING });
+  const sets: { section: Section; slices: Slice[] }[] = [];
+  for (const section of sections) {
+    sets.push({
+      section,
+      slices: slicesOf(section, { width: contentWidth(paper), tallest: later - HEADING }),
+    });
+    yield;
+  }
   const room = (page: number): number => (page === 0 && frame !== undefined ? whole - frame : later);
-  const loose = paginate(set(sections), room);
+  const slices = sets.flatMap((set) => set.slices);
+  const loose = paginate(slices, room);
   if (frame === undefined) return loose;
-  const tightened = set(sections).map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
+  const tightened = slices.map((slice) => (slice.tight ? { ...slice, ...slice.tight } : slice));
   const tight = paginate(tightened, room);
   const best = sectionsOnFirst(tight) > sectionsOnFirst(loose) ? tight : loose;
-  return sectionsOnFirst(best) > 1 ? best : paginate(set(floated(sections)), room);
+  if (sectionsOnFirst(best) > 1) return best;
+  return paginate(
+    floated(sets).flatMap((set) => set.slices),
+    room,
+  );
 }
 
 /** The sections with each floating one moved past those it may follow. */
-function floated(sections: readonly Section[]): Section[] {
-  const order = [...sections];
-  for (const section of sections) {
-    if (section.floatsPast === undefined) continue;
-    const at = order.indexOf(section);
+function floated<T extends { section: Section }>(sets: readonly T[]): T[] {
+  const order = [...sets];
+  for (const set of sets) {
+    if (set.section.floatsPast === undefined) continue;
+    const at = order.indexOf(set);
     order.splice(at, 1);
-    order.splice(at + section.floatsPast, 0, section);
+    order.splice(at + set.section.floatsPast, 0, set);
   }
   return order;
 }
@@ -82,17 +91,16 @@ function pageOf(placed: PlacedSlice[], number: number, head: Slice, paper: Paper
   return page;
 }
 
-/**
- * The document set on paper: every mark of every page, in points. The preview and the PDF both draw
- * exactly these marks, so they cannot differ. The same document gives the same pages.
- */
-export function layoutPages(document: SheetDocument): SheetPage[] {
+/** layoutPages in steps of a section each, for callers that must not hold the page for long. */
+export function* layoutSteps(document: SheetDocument): Generator<void, SheetPage[]> {
   const upright = paperOf(document.paper);
   const front = frontHead(document, upright);
   const frame = front.height + frontFoot(document, upright, '1 of 1').height + 2 * FRONT_GAP;
-  const placed = runsOf(document).flatMap((run, index) =>
-    fillRun(run, index === 0 ? frame : undefined).map((slices) => ({ slices, paper: run.paper })),
-  );
+  const placed: { slices: PlacedSlice[]; paper: Paper }[] = [];
+  for (const [index, run] of runsOf(document).entries()) {
+    const pages = yield* fillRun(run, index === 0 ? frame : undefined);
+    placed.push(...pages.map((slices) => ({ slices, paper: run.paper })));
+  }
   const count = placed.length;
   const pages = placed.map(({ slices, paper }, index) => {
     const head = index === 0 ? front : slimHead(document, paper, `page ${index + 1} of ${count}`);
@@ -103,4 +111,16 @@ export function layoutPages(document: SheetDocument): SheetPage[] {
   const y = upright.height - bottom - foot.height;
   pages[0]?.marks.push(...foot.marks.map((mark) => shifted(mark, left, y)));
   return pages;
+}
+
+/**
+ * The document set on paper: every mark of every page, in points. The preview and the PDF both draw
+ * exactly these marks, so they cannot differ. The same document gives the same pages.
+ */
+export function layoutPages(document: SheetDocument): SheetPage[] {
+  const steps = layoutSteps(document);
+  for (;;) {
+    const step = steps.next();
+    if (step.done) return step.value;
+  }
 }

@@ -2,10 +2,10 @@ import type { jsPDF } from 'jspdf';
 import type { ReactElement } from 'react';
 import { svg2pdf } from 'svg2pdf.js';
 import type { FigureMark } from '../pages/marks.ts';
+import type { Slicing } from '../slicing.ts';
 import { PDF_FONT } from './fontFiles.ts';
 import { mountFigure } from './mountFigure.ts';
 import { portions } from './portions.ts';
-import type { Slicing } from './slicing.ts';
 import { markRuns } from './svgForPdf.ts';
 
 /** Fonts must be ready in the page too, as figures are measured there. */

@@ -3,13 +3,13 @@ import { figuresOf } from '../document/figuresOf.ts';
 import type { SheetDocument } from '../document/index.ts';
 import type { ExportOptions } from '../ExportOptions.ts';
 import type { FigureComposer } from '../FigureComposer.ts';
-import { layoutPages } from '../pages/layoutPages.ts';
+import { layoutInTasks } from '../layoutInTasks.ts';
 import type { FigureMark, SheetPage } from '../pages/marks.ts';
+import { type Slicing, slicing } from '../slicing.ts';
 import { deflatePdf } from './deflatePdf.ts';
 import { drawMark } from './drawMark.ts';
 import { addFonts, type FontFiles, loadFontFiles } from './fontFiles.ts';
 import { newPdf, orientationOf } from './newPdf.ts';
-import { type Slicing, slicing } from './slicing.ts';
 
 interface WriterOptions extends ExportOptions {
   /** Already loaded fonts; absent: fetched from the programme's own files. */
@@ -43,7 +43,7 @@ export async function exportSheet(
   const tasks = slicing(signal);
   const fonts = options.fonts ?? (await loadFontFiles());
   await tasks.turn();
-  const pages = layoutPages(document);
+  const pages = await layoutInTasks(document, tasks);
   const figures = figuresOf(document);
   await tasks.turn();
   const [first] = pages;
