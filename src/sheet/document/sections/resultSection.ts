@@ -154,8 +154,7 @@ function openLine(view: SheetView): string {
       .join(', ');
     parts.push(`the minimum fault level of ${named} is not given`);
   }
-  if (parts.length === 0)
-    return 'Open: the parts are computed at their entered values; tolerances are not searched.';
+  parts.push('parts are computed at their entered values, tolerances are not searched');
   return sentence(`open: ${parts.join('; ')}`);
 }
 
