@@ -8,6 +8,8 @@ const SVG = 'http://www.w3.org/2000/svg';
  */
 export function markRuns(svg: SVGElement): void {
   if (!svg.hasAttribute('font-family')) svg.setAttribute('font-family', 'Varwright Sans');
+  // There is no slanted cut in the file: such text stands upright.
+  for (const slanted of svg.querySelectorAll('[font-style]')) slanted.removeAttribute('font-style');
   const walker = document.createTreeWalker(svg, NodeFilter.SHOW_TEXT);
   const texts: Text[] = [];
   for (let node = walker.nextNode(); node; node = walker.nextNode()) {

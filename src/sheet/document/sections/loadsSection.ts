@@ -10,7 +10,7 @@ import {
 } from '../../../study/index.ts';
 import { cells, NONE } from '../cells.ts';
 import { fieldValue } from '../fieldValue.ts';
-import { entered } from '../formatNumber.ts';
+import { entered, significant } from '../formatNumber.ts';
 import type { Block, Row, Section, TableBlock } from '../model.ts';
 import type { SheetView } from '../SheetView.ts';
 
@@ -37,7 +37,7 @@ function supplyTable(study: Study): TableBlock | undefined {
     return cells(
       nameOf(part),
       busName(study, part.bus),
-      entered((part.ratedKVA * 100) / part.xdSubtransientPercent / 1000),
+      significant((part.ratedKVA * 100) / part.xdSubtransientPercent / 1000, 4),
       NONE,
       entered(xOverR),
       entered(setpointPercent),

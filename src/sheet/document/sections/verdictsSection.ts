@@ -125,9 +125,10 @@ export function verdictsSection(view: SheetView): Section {
       {
         kind: 'paragraph',
         small: true,
+        leadsOn: true,
         text: '✓ pass: the limit is kept. ! watch: kept by a margin of less than 0.10, or a screening rule not met. ✕ fail: the limit is exceeded. ? unknown: data are missing, no verdict. Margin = (limit − value)/(limit − reference), its sign turned for lower limits; the reference is 0 for one-sided limits, nominal voltage for voltage bands and 1 for power factors.',
       },
-      ...marks.map((text): Block => ({ kind: 'paragraph', small: true, text })),
+      ...marks.map((text): Block => ({ kind: 'paragraph', small: true, leadsOn: true, text })),
       ...byCheck(view.verdicts).flatMap(({ check, verdicts }) => checkBlocks(view, check, verdicts)),
     ],
   };
