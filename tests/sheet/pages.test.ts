@@ -134,6 +134,54 @@ describe('pages of the sheet', () => {
   });
 });
 
+describe('the single-line diagram on paper', () => {
+  const input = inputOf(quarry, []);
+  const drawn = (width: number, height: number) => {
+    const sheet = buildDocument({ ...input, drawingSize: { width, height } });
+    return layoutPages(sheet).flatMap((page) =>
+      page.marks.flatMap((mark) =>
+        mark.kind === 'figure' && mark.id.startsWith('drawing') ? [{ page, mark }] : [],
+      ),
+    );
+  };
+
+  it('stands on the first page, upright, where it fits', () => {
+    const [only, ...more] = drawn(700, 400);
+    expect(more).toEqual([]);
+    expect(only?.page.number).toBe(1);
+  });
+
+  it('stands on a page turned on its side where its letters would be too small upright', () => {
+    const [only, ...more] = drawn(1250, 700);
+    expect(more).toEqual([]);
+    expect(only && only.page.width > only.page.height).toBe(true);
+  });
+
+  it('is cut into overlapping pieces that keep its letters at 7 points', () => {
+    const pieces = drawn(4000, 1000);
+    expect(pieces.length).toBeGreaterThan(3);
+    for (const { page, mark } of pieces) {
+      expect(page.width).toBeGreaterThan(page.height);
+      expect(mark.x).toBeGreaterThan(20);
+      expect(mark.x + mark.width).toBeLessThan(page.width - 20);
+      expect(mark.y + mark.height).toBeLessThan(page.height - 30);
+    }
+  });
+
+  it('never has letters under 7 points', () => {
+    for (const [width, height] of [
+      [700, 400],
+      [936, 882],
+      [1250, 700],
+      [4000, 1000],
+      [600, 3000],
+    ] as const) {
+      const area = drawn(width, height).reduce((sum, { mark }) => sum + mark.width * mark.height, 0);
+      expect(area).toBeGreaterThanOrEqual((7 / 12) ** 2 * (width - 32) * (height - 32) * 0.999);
+    }
+  });
+});
+
 describe('filling pages', () => {
   const slice = fc.record({
     height: fc.double({ min: 1, max: 60, noNaN: true }),
