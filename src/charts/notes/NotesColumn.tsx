@@ -1,6 +1,6 @@
 import { type KeyboardEvent, useMemo, useRef, useState } from 'react';
-import type { Verdict, VerdictWord } from '../../checks/types.ts';
-import type { Pin } from '../../study/types.ts';
+import type { Verdict, VerdictWord } from '../../checks/index.ts';
+import type { Pin } from '../../study/index.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
 import { columnHandlers } from './columnHandlers.ts';
 import { movedPin } from './movedPin.ts';

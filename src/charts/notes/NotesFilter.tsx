@@ -1,4 +1,4 @@
-import type { VerdictWord } from '../../checks/types.ts';
+import type { VerdictWord } from '../../checks/index.ts';
 import { VerdictMark } from './VerdictMark.tsx';
 import type { VerdictGrouping } from './verdictOrder.ts';
 

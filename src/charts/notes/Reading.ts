@@ -1,5 +1,5 @@
-import type { BusReading, TerminalReading } from '../../engine/types.ts';
-import type { Pin } from '../../study/types.ts';
+import type { BusReading, TerminalReading } from '../../engine/index.ts';
+import type { Pin } from '../../study/index.ts';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
 import type { OrderLimit } from '../spectrum/spectrumBars.ts';
 

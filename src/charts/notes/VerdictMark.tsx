@@ -1,4 +1,4 @@
-import type { VerdictWord } from '../../checks/types.ts';
+import type { VerdictWord } from '../../checks/index.ts';
 import { VERDICT_WORDS } from './verdictWords.ts';
 
 const GLYPHS: Record<VerdictWord, string> = {

@@ -1,4 +1,4 @@
-import type { Verdict } from '../../checks/types.ts';
+import type { Verdict } from '../../checks/index.ts';
 import { NoteFrame, type NoteHandlers } from './NoteFrame.tsx';
 import { verdictText } from './noteText.ts';
 import { VerdictMark } from './VerdictMark.tsx';

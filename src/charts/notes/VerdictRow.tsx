@@ -1,5 +1,5 @@
 import { memo } from 'react';
-import type { Verdict } from '../../checks/types.ts';
+import type { Verdict } from '../../checks/index.ts';
 import type { ColumnHandlers } from './columnHandlers.ts';
 import { VerdictNote } from './VerdictNote.tsx';
 

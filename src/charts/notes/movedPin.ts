@@ -1,4 +1,4 @@
-import type { Pin } from '../../study/types.ts';
+import type { Pin } from '../../study/index.ts';
 
 /** The pins with the one at `from` moved up (negative) or down by a number of places; null beyond an end. */
 export function movedPin(pins: readonly Pin[], from: number, by: number): Pin[] | null {

@@ -1,4 +1,4 @@
-import type { Pin } from '../../study/types.ts';
+import type { Pin } from '../../study/index.ts';
 
 /** The part or busbar a note speaks of. */
 export interface NoteSubject {

@@ -1,4 +1,4 @@
-import type { Verdict } from '../../checks/types.ts';
+import type { Verdict } from '../../checks/index.ts';
 import { joinParts } from '../figure/quantityParts.ts';
 import { phasorsAt } from '../phasor/phasorSpectrum.ts';
 import { phasorSummary } from '../phasor/phasorWords.ts';

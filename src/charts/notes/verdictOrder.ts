@@ -1,4 +1,4 @@
-import type { Verdict, VerdictWord } from '../../checks/types.ts';
+import type { Verdict, VerdictWord } from '../../checks/index.ts';
 
 export type VerdictGrouping = 'margin' | 'part' | 'check';
 

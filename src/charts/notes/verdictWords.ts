@@ -1,4 +1,4 @@
-import type { Provenance, Source, Verdict, VerdictWord } from '../../checks/types.ts';
+import type { Provenance, Source, Verdict, VerdictWord } from '../../checks/index.ts';
 import { ABSENT, plainNumber } from '../figure/quantityParts.ts';
 
 export const VERDICT_MARKS: Record<VerdictWord, string> = { pass: '✓', watch: '!', fail: '✕', unknown: '?' };

@@ -1,4 +1,4 @@
-import type { ComplexArray } from '../../engine/types.ts';
+import type { ComplexArray } from '../../engine/index.ts';
 
 /** One rms phasor. */
 export interface Phasor {

@@ -1,5 +1,5 @@
 import { bisector } from 'd3';
-import type { ImpedanceScan } from '../../engine/types.ts';
+import type { ImpedanceScan } from '../../engine/index.ts';
 
 /** |Z| over order, ascending, with the refined resonances put between the scan's own points. */
 export interface ImpedanceCurve {

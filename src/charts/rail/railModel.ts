@@ -1,6 +1,6 @@
 import { area, curveMonotoneX, line } from 'd3';
-import type { VerdictWord } from '../../checks/types.ts';
-import type { ImpedanceScan } from '../../engine/types.ts';
+import type { VerdictWord } from '../../checks/index.ts';
+import type { ImpedanceScan } from '../../engine/index.ts';
 import type { Box } from '../figure/box.ts';
 import type { CurveHeight } from '../figure/curveCrossings.ts';
 import { textWidth } from '../figure/textWidth.ts';

@@ -1,4 +1,4 @@
-import type { ImpedanceScan, Resonance } from '../../engine/types.ts';
+import type { ImpedanceScan, Resonance } from '../../engine/index.ts';
 import { impedanceAt } from './impedanceCurve.ts';
 
 /** A resonance of the impedance seen, with what the correction makes of it. */
