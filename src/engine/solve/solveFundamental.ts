@@ -35,7 +35,7 @@ export function solveFundamental(network: Network, solver: OrderSolver): Fundame
   const noLoad = v.slice();
   const { converged, rounds } = iterateDemands(network, solver, v, own);
   if (converged) return { v, own, iterations: rounds, error: null };
-  const continued = continueFromNoLoad(network, solver, noLoad, own);
+  const continued = continueFromNoLoad(network, noLoad, own);
   const iterations = rounds + continued.steps;
   if (continued.converged) return { v: continued.v, own, iterations, error: null };
   return {
