@@ -19,7 +19,15 @@ const mayImport: Record<string, readonly string[]> = {
 
 /** Packages the pure folders may use: no DOM, no React. */
 const purePackages = new Set(['complex.js', 'zod', '@noble/hashes', 'd3-hierarchy']);
-const pureFolders = ['study', 'engine', 'checks', 'sizing', 'drawing/layout', 'sheet/document', 'sheet/pages'];
+const pureFolders = [
+  'study',
+  'engine',
+  'checks',
+  'sizing',
+  'drawing/layout',
+  'sheet/document',
+  'sheet/pages',
+];
 
 const src = resolve(import.meta.dirname, '../../src');
 
