@@ -119,19 +119,22 @@ export function Drawing(props: DrawingProps) {
     setCarried,
     setTarget,
     cancelGesture: gestures.cancel,
+    focusPane: () => paneRef.current?.focus({ preventScroll: true }),
     onDrop,
   });
 
   useEffect(() => {
     setCarried(armedKind ? { what: 'new', kind: armedKind } : null);
     if (!armedKind) return;
-    setTarget((bus) => bus ?? (props.focusBus || layout.buses[0]?.id));
+    const stands = (id: string | undefined) => layout.buses.some((bus) => bus.id === id);
+    setTarget((bus) => (stands(bus) ? bus : stands(props.focusBus) ? props.focusBus : layout.buses[0]?.id));
     paneRef.current?.focus({ preventScroll: true });
   }, [armedKind, props.focusBus, layout]);
 
   const { hand } = gestures;
   const plan =
-    hand?.plan ?? (carried && target ? dropPlan(study, layout, carried, { bus: target }) : undefined);
+    hand?.plan ??
+    (carried ? dropPlan(study, layout, carried, target ? { bus: target } : OFF_PAPER) : undefined);
   const empty = study.buses.length === 0 && study.elements.length === 0;
   const far = controls.view.scale < 0.45;
   const { scale, x, y } = controls.view;
@@ -194,6 +197,9 @@ export function Drawing(props: DrawingProps) {
     </section>
   );
 }
+
+/** Where a carried part is while the study has no busbar to choose. */
+const OFF_PAPER = { x: Number.NaN, y: Number.NaN };
 
 function subjectOf(target: EventTarget): Subject | null {
   const found = target instanceof Element ? target.closest('[data-subject]') : null;

@@ -1,6 +1,7 @@
 import {
   addBus,
   addPart,
+  busById,
   busName,
   type Edit,
   elementById,
@@ -36,7 +37,8 @@ export interface DropPlan {
 
 /** Plans a drop at a point; `bus` given instead of found by the point is the keyboard's way. */
 export function dropPlan(study: Study, layout: Layout, held: Held, at: Point | { bus: string }): DropPlan {
-  const bus = 'bus' in at ? at.bus : busAt(layout, at)?.id;
+  const named = 'bus' in at ? at.bus : busAt(layout, at)?.id;
+  const bus = named !== undefined && busById(study, named) ? named : undefined;
   const x = 'bus' in at ? undefined : at.x;
   if (held.what === 'new' && held.kind === 'bus') return newBusbar(study);
   if (bus === undefined) return onPaper(study, held);

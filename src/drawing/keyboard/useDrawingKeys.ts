@@ -31,6 +31,8 @@ export interface KeyContext {
   setTarget(bus: string | undefined): void;
   /** Ends a pointer gesture; false when none is under way. */
   cancelGesture(): boolean;
+  /** Keeps the keyboard in the drawing when the focused part goes. */
+  focusPane(): void;
   onArm(kind: TrayKind | null): void;
   onSelect(items: readonly Subject[]): void;
   onFocusBus(bus: string): void;
@@ -128,8 +130,12 @@ function plainKey(c: KeyContext, event: KeyboardEvent): boolean {
     case 'Delete':
     case 'Backspace': {
       const edit = removeSelection(c.study, c.selection);
-      if (edit) c.onDrop(edit, undefined);
-      if (edit) c.onSelect([]);
+      if (!edit) return true;
+      const next = neighbour(c.layout, c.current, 'up');
+      c.focusPane();
+      c.onDrop(edit, undefined);
+      c.onSelect([]);
+      if (next) c.setCurrent(next);
       return true;
     }
     case 'm':
