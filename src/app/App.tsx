@@ -14,7 +14,7 @@ import { RailConnection } from './site/RailConnection.tsx';
 import { SitePlace } from './site/SitePlace.tsx';
 import { useTheme } from './theme/useTheme.ts';
 
-type OpenDialog = 'commands' | 'keys' | 'details' | null;
+type OpenDialog = 'commands' | 'keys' | 'details' | 'case' | null;
 
 /** The shell: header, the place looked at, the rail, and what may lie above them. */
 export function App() {
@@ -22,12 +22,19 @@ export function App() {
   const place = useWorkbench((state) => state.view.place);
   const [dialog, setDialog] = useState<OpenDialog>(null);
   const openList = useCallback(() => setDialog('commands'), []);
+  const openDetails = useCallback(() => setDialog('details'), []);
   const close = useCallback(() => setDialog(null), []);
   const commands = useCommands(setDialog);
   useCommandKeys(commands, openList);
   return (
     <div className="workbench" data-place={place}>
-      <Header commands={commands} onCommandList={openList} />
+      <Header
+        commands={commands}
+        caseFormOpen={dialog === 'case'}
+        onCaseFormClose={close}
+        onDetails={openDetails}
+        onCommandList={openList}
+      />
       <NoticeLine />
       <main className="place">
         {place === 'site' && <SitePlace />}

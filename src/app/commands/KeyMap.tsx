@@ -12,10 +12,14 @@ const placesKeys: readonly { place: string; keys: readonly [string, string][] }[
     place: 'On the drawing',
     keys: [
       ['←  →  ↑  ↓', 'move along parts and busbars'],
+      ['Shift + ←  →', 'select further parts'],
+      ['Space', 'select; on a busbar, move the rail there'],
       ['Enter', 'open the data of the part'],
+      ['M', 'move the part: arrows choose the busbar, Enter drops it'],
+      ['Alt + ←  →', 'move it along its busbar'],
       ['Delete', 'delete what is selected'],
       ['Mod+D', 'duplicate'],
-      ['F', 'fit the drawing'],
+      ['F  +  −', 'fit, enlarge, reduce'],
       ['Escape', 'close, or cancel the gesture'],
     ],
   },
@@ -46,10 +50,12 @@ export function KeyMap({ commands, open, onClose }: Props) {
             <section>
               <h3>Everywhere</h3>
               <dl>
-                <dt>
-                  <kbd>{shownKeys('Mod+K')}</kbd>
-                </dt>
-                <dd>find a command by its words</dd>
+                <div className="pair">
+                  <dt>
+                    <kbd>{shownKeys('Mod+K')}</kbd>
+                  </dt>
+                  <dd>find a command by its words</dd>
+                </div>
                 {commands
                   .filter((command) => command.keys)
                   .map((command) => (

@@ -1,6 +1,7 @@
 import { useMemo } from 'react';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
-import { casesOf, nameOf, newStudy, type Study } from '../../study/index.ts';
+import { newStudy, type Study } from '../../study/index.ts';
+import { caseCommands } from '../cases/caseCommands.ts';
 import { openSample } from '../files/openSample.ts';
 import { samples } from '../files/samples.ts';
 import type { Command } from './command.ts';
@@ -61,8 +62,8 @@ function historyCommands(undoing: string | null, redoing: string | null): Comman
   ];
 }
 
-function viewCommands(study: Study | null): Command[] {
-  const { setPlace, setReadingMode, setTheme, setCase } = workbench.getState();
+function viewCommands(): Command[] {
+  const { setPlace, setReadingMode, setTheme } = workbench.getState();
   return [
     { id: 'place.site', words: 'Go to Site', keys: 'F2', run: () => setPlace('site') },
     { id: 'place.correction', words: 'Go to Correction', keys: 'F3', run: () => setPlace('correction') },
@@ -85,17 +86,13 @@ function viewCommands(study: Study | null): Command[] {
     { id: 'theme.light', words: 'Light: paper', run: () => setTheme('light') },
     { id: 'theme.dark', words: 'Dark: slate', run: () => setTheme('dark') },
     { id: 'theme.system', words: 'Light or dark as the machine', run: () => setTheme('system') },
-    ...(study ? casesOf(study) : []).map((one) => ({
-      id: `case.${one.id}`,
-      words: `Case: ${nameOf(one)}`,
-      run: () => setCase(one.id),
-    })),
   ];
 }
 
 /** Every command of the page in its present state. */
-export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): Command[] {
+export function useCommands(openDialog: (dialog: 'details' | 'keys' | 'case') => void): Command[] {
   const study = useWorkbench((state: Workbench) => state.study);
+  const caseId = useWorkbench((state: Workbench) => state.view.caseId);
   const undoing = useWorkbench(undoWords);
   const redoing = useWorkbench(redoWords);
   return useMemo(
@@ -109,9 +106,10 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
         enabled: study !== null,
         run: () => openDialog('details'),
       },
-      ...viewCommands(study),
+      ...viewCommands(),
+      ...(study ? caseCommands(study, caseId, () => openDialog('case')) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
-    [study, undoing, redoing, openDialog],
+    [study, caseId, undoing, redoing, openDialog],
   );
 }

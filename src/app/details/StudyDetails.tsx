@@ -13,6 +13,7 @@ import {
   updateGroup,
   updateStudy,
 } from '../../study/index.ts';
+import { useFocusField } from '../fields/useFocusField.ts';
 
 const limitUses = ['pcc', 'internal', 'current', 'capacitor'] as const;
 
@@ -53,6 +54,7 @@ export function StudyDetails({ onClose }: { onClose(): void }) {
   const study = useWorkbench((state) => state.study);
   const edit = useWorkbench((state) => state.edit);
   const [focused, setFocused] = useState<Field | null>(null);
+  useFocusField('details-study-title');
   const findings = useMemo(() => (study ? siteFindings(study) : []), [study]);
   if (!study) return null;
   const attempt = (next: Edit): string | null => {
@@ -67,7 +69,7 @@ export function StudyDetails({ onClose }: { onClose(): void }) {
           <Heading slot="title">Title, criteria and limits</Heading>
           <div className="details-columns">
             {groups.map(({ title, owner, fields }) => (
-              <section key={owner} aria-label={title} className="slip-body">
+              <section key={owner} aria-label={title} className="slip-body slip-form">
                 <h3>{title}</h3>
                 {fields.map((field) => (
                   <SlipField
