@@ -69,17 +69,34 @@ export function unknownFieldWarnings(study: Owned): Finding[] {
   for (const [index, spectrum] of recordsOf(study.spectra)) {
     sightings.lookWithin(spectrum, 'orders', 'harmonicRow', ['spectra', index]);
   }
+  const kinds = new Map<unknown, FieldOwner>();
   for (const [index, element] of recordsOf(study.elements)) {
     const kind = kindOf(element);
-    const path = ['elements', index];
     if (!kind) continue;
-    sightings.look(kind, element, path, ['id', 'kind']);
-    sightings.look('controller', element.controller, [...path, 'controller']);
-    sightings.lookWithin(element, 'steps', 'step', path);
-    sightings.lookWithin(element, 'spectrum', 'harmonicRow', path);
-    sightings.lookWithin(element, 'background', 'harmonicRow', path);
+    kinds.set(element.id, kind);
+    lookAtElement(sightings, kind, element, ['elements', index]);
   }
+  lookAtChanges(sightings, study, kinds);
   return sightings.warnings();
+}
+
+function lookAtElement(sightings: Sightings, kind: FieldOwner, element: Owned, path: PathStep[]): void {
+  sightings.look(kind, element, path, ['id', 'kind']);
+  sightings.look('controller', element.controller, [...path, 'controller']);
+  sightings.lookWithin(element, 'steps', 'step', path);
+  sightings.lookWithin(element, 'spectrum', 'harmonicRow', path);
+  sightings.lookWithin(element, 'background', 'harmonicRow', path);
+}
+
+/** What a case sets is looked at like the element itself: a misspelt field there would change nothing. */
+function lookAtChanges(sightings: Sightings, study: Owned, kinds: ReadonlyMap<unknown, FieldOwner>): void {
+  for (const [caseIndex, { changes }] of recordsOf(study.cases)) {
+    for (const [index, { element, set }] of recordsOf(changes)) {
+      const kind = kinds.get(element);
+      if (!kind || !isRecord(set)) continue;
+      lookAtElement(sightings, kind, set, ['cases', caseIndex, 'changes', index, 'set']);
+    }
+  }
 }
 
 function recordsOf(list: unknown): [number, Owned][] {
