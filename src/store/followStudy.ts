@@ -1,4 +1,4 @@
-import type { Verdict } from '../checks/index.ts';
+import { sortByMargin } from '../checks/index.ts';
 import { casesOf } from '../study/index.ts';
 import type { CaseNumbers, Computation, Settled, StudyAt } from '../worker/index.ts';
 import type { WorkbenchStore } from './createWorkbench.ts';
@@ -15,8 +15,8 @@ export interface FollowOptions {
 /**
  * Keeps the answers in step with the study: a layer around the store, which itself knows no computation.
  *
- *   study or case changed ──► solve ──► answer ─┬─► scan  ──► answer.scan
- *                                               └─► judge ──► screening rows ──► judge all cases
+ *   study or case changed ──► solve ──► answer ─┬─► verdicts ──► judge (with screening) ──► judge all cases
+ *                                               └─► scan ──► answer.scan
  *   busbar changed ─────────► scan ───► answer.scan
  *   any of these, or order ─► probe, once a frame
  *
@@ -59,16 +59,26 @@ export function followStudy(
     if (!numbers || !fits(at, caseId)) return;
     store.setState((state) => ({ answer: answerOf(state, at, caseId, numbers) }));
     if (run !== solveRun) return;
+    const judged = isScreened(store.getState()) ? null : judge(at, caseId);
     void rescan(at, store.getState().view);
-    if (!isScreened(store.getState())) await judge(at, caseId);
+    await judged;
     if (run === solveRun) judgeAllTimer = setTimeout(() => void judgeOthers(at), judgeAllAfterMs);
   }
 
+  /** First the verdicts that need no scan, with the screening rows last known; then all of them. */
   async function judge(at: StudyAt, caseId: string): Promise<void> {
+    const { revision } = at;
+    const quick = answered(await computation.verdicts(at, caseId));
+    if (!quick) return;
+    store.setState(({ answer }) => {
+      const older = answer?.verdicts.filter(({ screening }) => screening) ?? [];
+      const verdicts = sortByMargin([...quick, ...older]);
+      return { answer: amended(answer, revision, caseId, { verdicts, verdictsRevision: revision }) };
+    });
     const verdicts = answered(await computation.judge(at, caseId));
     if (!verdicts) return;
-    const part = { verdicts, screening: screeningOf(verdicts, at.revision) };
-    store.setState((state) => ({ answer: amended(state.answer, at.revision, caseId, part) }));
+    const part = { verdicts, verdictsRevision: revision, screeningRevision: revision };
+    store.setState(({ answer }) => ({ answer: amended(answer, revision, caseId, part) }));
   }
 
   async function judgeOthers(at: StudyAt): Promise<void> {
@@ -141,25 +151,22 @@ export function followStudy(
   };
 }
 
-/** The new answer; curves and screening rows of the same case stay until newer ones arrive. */
-function answerOf(state: Workbench, at: StudyAt, caseId: string, numbers: CaseNumbers): Answer {
+/** The new answer; verdicts and curves of the same case stay, as older ones, until newer ones arrive. */
+function answerOf(state: Workbench, { revision }: StudyAt, caseId: string, numbers: CaseNumbers): Answer {
   const { answer, allVerdicts } = state;
-  const { revision } = at;
   const before = answer?.caseId === caseId ? answer : null;
   const known = allVerdicts?.revision === revision ? allVerdicts.byCase[caseId] : undefined;
+  const { solution, without } = numbers;
   return {
     revision,
     caseId,
-    solution: numbers.solution,
-    without: numbers.without,
-    verdicts: known ?? numbers.verdicts,
-    screening: known ? screeningOf(known, revision) : (before?.screening ?? null),
+    solution,
+    without,
+    verdicts: known ?? before?.verdicts ?? [],
+    verdictsRevision: known ? revision : (before?.verdictsRevision ?? null),
+    screeningRevision: known ? revision : (before?.screeningRevision ?? null),
     scan: before?.scan ?? null,
   };
-}
-
-function screeningOf(verdicts: Verdict[], revision: number): Answer['screening'] {
-  return { revision, verdicts: verdicts.filter(({ screening }) => screening) };
 }
 
 function amended(

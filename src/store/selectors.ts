@@ -27,15 +27,17 @@ export function freshAnswer(state: Workbench): Answer | null {
   return isStale(state) ? null : state.answer;
 }
 
-/** Verdicts of the case on screen, where they belong to the study on screen. */
+/** Verdicts of the case on screen, where they belong to the study on screen; the screening rows among them
+ * may be older until `isScreened`. */
 export function freshVerdicts(state: Workbench): Verdict[] | null {
-  return freshAnswer(state)?.verdicts ?? null;
+  const answer = freshAnswer(state);
+  return answer && answer.verdictsRevision === answer.revision ? answer.verdicts : null;
 }
 
-/** Whether the screening rows are among the verdicts of the study and case on screen. */
+/** Whether the screening rows among the verdicts belong to the study and case on screen, too. */
 export function isScreened(state: Workbench): boolean {
   const answer = freshAnswer(state);
-  return answer !== null && answer.screening?.revision === answer.revision;
+  return answer !== null && answer.screeningRevision === answer.revision;
 }
 
 /** Whether the rail's curves belong to the study, case and busbar on screen. */
@@ -54,13 +56,22 @@ export function busById(id: string): (state: Workbench) => Bus | undefined {
   return ({ study }) => study?.buses.find((bus) => bus.id === id);
 }
 
-/** How many verdicts of the case on screen, or of all cases, end so; null while not all are known. */
+/**
+ * How many verdicts of the case on screen, or of all cases, end so; null while not all are known. Screening
+ * rows older than the study on screen are not counted.
+ */
 export function countVerdicts(word: VerdictWord, scope: 'case' | 'all'): (state: Workbench) => number | null {
-  const ends = ({ verdict }: Verdict): boolean => verdict === word;
   return (state) => {
-    if (scope === 'case') return freshVerdicts(state)?.filter(ends).length ?? null;
+    if (scope === 'case') {
+      const screened = isScreened(state);
+      const counts = ({ verdict, screening }: Verdict): boolean =>
+        verdict === word && (screened || !screening);
+      return freshVerdicts(state)?.filter(counts).length ?? null;
+    }
     const { allVerdicts, revision } = state;
     if (allVerdicts?.revision !== revision || !allVerdicts.complete) return null;
-    return Object.values(allVerdicts.byCase).flat().filter(ends).length;
+    return Object.values(allVerdicts.byCase)
+      .flat()
+      .filter(({ verdict }) => verdict === word).length;
   };
 }

@@ -37,11 +37,13 @@ export interface Answer {
   solution: CaseSolution;
   /** The same case, all banks and filters out of service. */
   without: CaseSolution;
-  /** Of this revision. The screening rows are among them once `screening` is of this revision too. */
+  /** What was last known of this case; of an older revision for a moment after each edit. */
   verdicts: Verdict[];
-  /** The screening rows of this case last known; of an older revision for a moment after each edit. */
-  screening: { revision: number; verdicts: Verdict[] } | null;
-  /** The rail's curves of this case last known, of the busbar they name; older for a moment likewise. */
+  /** Revision of the verdicts; null while there are none. */
+  verdictsRevision: number | null;
+  /** Revision of the screening rows among them, which follow a little later still; null while none are. */
+  screeningRevision: number | null;
+  /** The rail's curves last known of this case, of the busbar and revision they name. */
   scan: ScanAnswer | null;
 }
 

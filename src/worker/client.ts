@@ -6,7 +6,7 @@ import type { CaseDossier, CaseNumbers, Probe, ScanPair, Settled } from './proto
 /**
  * The computation as the page sees it. Every promise settles: done, failed, cancelled or superseded; none
  * rejects. Of several requests of one kind only the newest waits. Two workers: one answers what must keep
- * pace with the hand (probe, solve, scan), the other what may take its time (verdicts with their screening
+ * pace with the hand (probe, solve, verdicts, scan), the other what may take its time (verdicts with their screening
  * rows, all cases, results, dossiers), so that the second never holds up the first.
  */
 export interface Computation {
@@ -15,6 +15,8 @@ export interface Computation {
   solve(at: StudyAt, caseId: string): Promise<Settled<CaseNumbers>>;
   scan(at: StudyAt, caseId: string, focusBus: string): Promise<Settled<ScanPair>>;
   probe(at: StudyAt, caseId: string, order: number): Promise<Settled<Probe>>;
+  /** The verdicts of a case that need no scan: all but the screening rows. */
+  verdicts(at: StudyAt, caseId: string): Promise<Settled<Verdict[]>>;
   /** Every verdict of a case, screening rows included. */
   judge(at: StudyAt, caseId: string): Promise<Settled<Verdict[]>>;
   /** Judges case by case, `onCase` after each; any other request goes first in between. */
@@ -78,9 +80,15 @@ export function createComputation(options: ComputationOptions): Computation {
     solve: (at, caseId) => live.ask('solve', { kind: 'solve', caseId }, at),
     scan: (at, caseId, focusBus) => live.ask('scan', { kind: 'scan', caseId, focusBus }, at),
     probe: (at, caseId, order) => live.ask('probe', { kind: 'probe', caseId, order }, at),
-    judge: (at, caseId) => patient.ask('judge', { kind: 'judge', caseId }, at),
+    verdicts: (at, caseId) => live.ask('verdicts', { kind: 'judge', caseId, screening: false }, at),
+    judge: (at, caseId) => patient.ask('judge', { kind: 'judge', caseId, screening: true }, at),
     judgeAll: (at, caseIds, onCase) =>
-      round('judgeAll', caseIds, (caseId) => patient.ask('judgeAll', { kind: 'judge', caseId }, at), onCase),
+      round(
+        'judgeAll',
+        caseIds,
+        (caseId) => patient.ask('judgeAll', { kind: 'judge', caseId, screening: true }, at),
+        onCase,
+      ),
     dossiers: (at, caseIds, buses, onCase) =>
       round(
         'dossiers',

@@ -12,12 +12,12 @@ import type { Study } from '../study/index.ts';
 import type { CaseNumbers, Probe, ScanPair } from './protocol.ts';
 import { mergeScans, peakAxis, scanAxis } from './scanAxis.ts';
 
-/** The case as it stands and with all banks and filters out, judged by the checks that need no scan. */
-export function solveNumbers(study: Study, caseId: string, otherCases: readonly CaseSolution[]): CaseNumbers {
-  const solution = solveCase(study, caseId);
-  const without = solveCase(study, caseId, { without: correctionParts(study) });
-  const atHand = { otherCases, withoutCorrection: without };
-  return { solution, without, verdicts: judgeCase(study, solution, { ...atHand, screening: false }) };
+/** The case as it stands and with all banks and filters out. */
+export function solveNumbers(study: Study, caseId: string): CaseNumbers {
+  return {
+    solution: solveCase(study, caseId),
+    without: solveCase(study, caseId, { without: correctionParts(study) }),
+  };
 }
 
 /** Driving-point impedance of a busbar with and without the correction, both on one axis refined at the peaks. */

@@ -17,7 +17,17 @@ export interface StudyAt {
 }
 
 /** Lanes in the order they are served. Each holds one waiting request: the newest. */
-const lanes = ['probe', 'solve', 'scan', 'judge', 'results', 'dossiers', 'judgeAll', 'warm'] as const;
+const lanes = [
+  'probe',
+  'solve',
+  'verdicts',
+  'scan',
+  'judge',
+  'results',
+  'dossiers',
+  'judgeAll',
+  'warm',
+] as const;
 export type Lane = (typeof lanes)[number];
 
 export interface ComputationOptions {

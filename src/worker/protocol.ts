@@ -18,13 +18,11 @@ export interface ScanPair {
   without: ImpedanceScan;
 }
 
-/** Everything the drawing and readings show of one case, and the verdicts that rest on it alone. */
+/** Everything the drawing and readings show of one case. */
 export interface CaseNumbers {
   solution: CaseSolution;
   /** The same case with all banks and filters out of service. */
   without: CaseSolution;
-  /** All but the screening rows, which scan the network again and again and come by `judge`. */
-  verdicts: Verdict[];
 }
 
 /** Driving-point impedance at one real-valued order, ohm per phase, positive sequence, bus by bus. */
@@ -53,7 +51,8 @@ export type Job =
   | { kind: 'solve'; caseId: string }
   | { kind: 'scan'; caseId: string; focusBus: string }
   | { kind: 'probe'; caseId: string; order: number }
-  | { kind: 'judge'; caseId: string }
+  /** Without the screening rows, which scan the network again and again, it is a matter of milliseconds. */
+  | { kind: 'judge'; caseId: string; screening: boolean }
   | { kind: 'dossier'; caseId: string; buses: readonly string[] }
   | { kind: 'results' };
 

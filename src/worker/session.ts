@@ -47,7 +47,7 @@ export function createSession(): Session {
       case 'probe':
         return probeOrder(now.study, job.caseId, job.order);
       case 'judge':
-        return judgeKept(now, job.caseId);
+        return judgeKept(now, job.caseId, job.screening);
       case 'dossier':
         return dossierOf(now, job.caseId, job.buses);
       case 'results':
@@ -69,12 +69,7 @@ export function createSession(): Session {
 
 /** The numbers are copied before their arrays leave: other answers rest on them. */
 function solveAndKeep(held: Held, caseId: string): CaseNumbers {
-  const others = casesOf(held.study).filter(({ id }) => id !== caseId);
-  const numbers = solveNumbers(
-    held.study,
-    caseId,
-    others.map(({ id }) => keptSolution(held, id)),
-  );
+  const numbers = solveNumbers(held.study, caseId);
   held.solutions.set(caseId, structuredClone(numbers.solution));
   held.without.set(caseId, structuredClone(numbers.without));
   return numbers;
@@ -86,11 +81,12 @@ function keptSolution({ study, solutions }: Held, caseId: string): CaseSolution 
   return known;
 }
 
-function judgeKept(held: Held, caseId: string): Verdict[] {
+function judgeKept(held: Held, caseId: string, screening: boolean): Verdict[] {
   const otherCases = casesOf(held.study).map(({ id }) => keptSolution(held, id));
   const withoutCorrection = held.without.get(caseId);
   return judgeNumbers(held.study, keptSolution(held, caseId), {
     otherCases,
+    screening,
     ...(withoutCorrection ? { withoutCorrection } : {}),
   });
 }
@@ -98,5 +94,5 @@ function judgeKept(held: Held, caseId: string): Verdict[] {
 function dossierOf(held: Held, caseId: string, buses: readonly string[]): CaseDossier {
   const { solution, without } = solveAndKeep(held, caseId);
   const scans = buses.map((bus) => scanPair(held.study, caseId, bus));
-  return { caseId, solution, without, scans, verdicts: judgeKept(held, caseId) };
+  return { caseId, solution, without, scans, verdicts: judgeKept(held, caseId, true) };
 }

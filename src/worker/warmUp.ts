@@ -16,7 +16,7 @@ export function createWarmUp(): () => { hot: boolean } {
     const start = performance.now();
     // A fresh object, as after an edit: otherwise what is remembered per study would spare the compiling.
     const study = { ...warmStudy };
-    const { solution } = solveNumbers(study, 'base', []);
+    const { solution } = solveNumbers(study, 'base');
     scanPair(study, 'base', 'lv');
     probeOrder(study, 'base', 6.5);
     judgeNumbers(study, solution);

@@ -3,7 +3,7 @@ import type { CaseSolution, ImpedanceScan } from '../../src/engine/index.ts';
 import type { CaseNumbers, Computation, Probe, ScanPair, Settled, StudyAt } from '../../src/worker/index.ts';
 
 interface Asked {
-  kind: 'solve' | 'scan' | 'probe' | 'judge';
+  kind: 'solve' | 'scan' | 'probe' | 'verdicts' | 'judge';
   at: StudyAt;
   caseId: string;
   focusBus?: string | undefined;
@@ -92,6 +92,7 @@ export class ScriptedComputation implements Computation {
     this.ask<ScanPair>({ kind: 'scan', at, caseId, focusBus });
   probe = (at: StudyAt, caseId: string, order: number) =>
     this.ask<Probe>({ kind: 'probe', at, caseId, order });
+  verdicts = (at: StudyAt, caseId: string) => this.ask<Verdict[]>({ kind: 'verdicts', at, caseId });
   judge = (at: StudyAt, caseId: string) => this.ask<Verdict[]>({ kind: 'judge', at, caseId });
   results = () => Promise.resolve({ outcome: 'cancelled' } as const);
   dossiers = () => Promise.resolve({ outcome: 'cancelled' } as const);
@@ -122,7 +123,8 @@ export class ScriptedComputation implements Computation {
   async answer(kind: Asked['kind'], asked: Asked = this.open(kind)): Promise<void> {
     const { caseId, focusBus, order = 1 } = asked;
     const values = {
-      solve: { solution: solution(caseId), without: solution(caseId), verdicts: [verdictOf(caseId, 'pass')] },
+      solve: { solution: solution(caseId), without: solution(caseId) },
+      verdicts: [verdictOf(caseId, 'pass')],
       scan: scanPair(focusBus ?? ''),
       probe: { caseId, order, buses: [], with: points, without: points },
       judge: [verdictOf(caseId, 'pass'), { ...verdictOf(caseId, 'watch'), screening: true }],

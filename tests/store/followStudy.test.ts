@@ -38,37 +38,55 @@ describe('following the study', () => {
     expect(computation.asked).toHaveLength(0);
   });
 
-  it('solves the case on screen when a study is opened, then scans its busbar and screens it', async () => {
+  it('solves the case on screen when a study is opened, then judges, scans and screens it', async () => {
     state().openStudy(site);
     expect(computation.open('solve').caseId).toBe('day');
     expect(state().status.solving).toBe(true);
     await computation.answer('solve');
     expect(state().status.solving).toBe(false);
-    expect(state().answer).toMatchObject({ caseId: 'day', scan: null, screening: null });
+    expect(state().answer).toMatchObject({ caseId: 'day', scan: null, verdicts: [], verdictsRevision: null });
+    expect([isStale(state()), freshVerdicts(state())]).toEqual([false, null]);
+    await computation.answer('verdicts');
     expect(freshVerdicts(state())).toHaveLength(1);
-    expect([isStale(state()), isScanStale(state()), isScreened(state())]).toEqual([false, true, false]);
     await computation.answer('scan');
-    expect(state().answer?.scan).toMatchObject({ bus: 'main', revision: state().revision });
     expect(isScanStale(state())).toBe(false);
+    expect(isScreened(state())).toBe(false);
     await computation.answer('judge');
     expect(freshVerdicts(state())).toHaveLength(2);
     expect(isScreened(state())).toBe(true);
   });
 
-  it('keeps the curves and screening rows before an edit, as older ones, until the new ones arrive', async () => {
+  it('keeps verdicts and curves before an edit, as older ones, until the new ones arrive', async () => {
     state().openStudy(site);
-    await computation.answer('solve');
-    await computation.answer('scan');
-    await computation.answer('judge');
+    for (const kind of ['solve', 'verdicts', 'scan', 'judge'] as const) await computation.answer(kind);
     const { revision } = state();
+    expect(countVerdicts('watch', 'case')(state())).toBe(1);
     state().edit(retitle('A'));
     await computation.answer('solve');
-    expect(state().answer).toMatchObject({ scan: { revision }, screening: { revision } });
-    expect(state().answer?.verdicts).toHaveLength(1);
+    expect(state().answer).toMatchObject({ scan: { revision }, verdictsRevision: revision });
+    expect(state().answer?.verdicts).toHaveLength(2);
+    expect(freshVerdicts(state())).toBeNull();
+    await computation.answer('verdicts');
+    expect(freshVerdicts(state())).toHaveLength(2);
+    expect(countVerdicts('watch', 'case')(state())).toBe(0);
     expect([isScanStale(state()), isScreened(state())]).toEqual([true, false]);
     await computation.answer('scan');
     await computation.answer('judge');
     expect([isScanStale(state()), isScreened(state())]).toEqual([false, true]);
+    expect(countVerdicts('watch', 'case')(state())).toBe(1);
+  });
+
+  it('keeps nothing of the case looked at before', async () => {
+    state().openStudy(site);
+    for (const kind of ['solve', 'verdicts', 'scan'] as const) await computation.answer(kind);
+    state().setCase('night');
+    await computation.answer('solve');
+    expect(state().answer).toMatchObject({
+      caseId: 'night',
+      scan: null,
+      verdicts: [],
+      verdictsRevision: null,
+    });
   });
 
   it('marks the answer stale from the edit until the new answer', async () => {
@@ -200,6 +218,7 @@ describe('scrubbing', () => {
 describe('judging all cases', () => {
   async function solveAndJudge(): Promise<void> {
     await computation.answer('solve');
+    await computation.answer('verdicts');
     await computation.answer('judge');
     await new Promise((resolve) => setTimeout(resolve, 20));
   }
@@ -208,6 +227,7 @@ describe('judging all cases', () => {
     state().openStudy(site);
     await computation.answer('solve');
     expect(countVerdicts('fail', 'all')(state())).toBeNull();
+    await computation.answer('verdicts');
     await computation.answer('judge');
     await new Promise((resolve) => setTimeout(resolve, 20));
     expect(computation.allRounds).toMatchObject([{ caseIds: ['night'] }]);

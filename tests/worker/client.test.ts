@@ -101,18 +101,19 @@ describe('the computation client', () => {
     expect(worker().last).toMatchObject({ revision: 2, job: { kind: 'solve' } });
   });
 
-  it('serves the scrub first, then the case on screen, then the curves', () => {
+  it('serves the scrub first, then the case on screen, its verdicts, then the curves', () => {
     const { computation, worker } = setUp();
     void computation.scan(at(1), 'base', 'main');
     void computation.scan(at(1), 'base', 'intake');
+    void computation.verdicts(at(1), 'base');
     void computation.solve(at(1), 'base');
     void computation.probe(at(1), 'base', 5);
     const kinds: string[] = [];
-    for (let i = 0; i < 4; i += 1) {
+    for (let i = 0; i < 5; i += 1) {
       kinds.push(worker().last.job.kind);
       worker().reply([]);
     }
-    expect(kinds).toEqual(['scan', 'probe', 'solve', 'scan']);
+    expect(kinds).toEqual(['scan', 'probe', 'solve', 'judge', 'scan']);
   });
 
   it('judges in a worker of its own, the case on screen before all cases, so that solving never waits', () => {
@@ -136,7 +137,7 @@ describe('the computation client', () => {
     const judged: string[] = [];
     const asked = computation.judgeAll(at(1), ['day', 'night'], (caseId) => judged.push(caseId));
     worker().reply([]);
-    await vi.waitFor(() => expect(worker().last.job).toEqual({ kind: 'judge', caseId: 'night' }));
+    await vi.waitFor(() => expect(worker().last.job).toMatchObject({ kind: 'judge', caseId: 'night' }));
     expect(judged).toEqual(['day']);
     worker().reply([]);
     expect(await asked).toEqual({ outcome: 'done', value: [[], []] });

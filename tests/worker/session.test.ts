@@ -41,23 +41,30 @@ describe('the session in the worker', () => {
     expect(numbers.solution).toEqual(solveCase(site, 'day'));
     expect(numbers.without).toEqual(solveCase(site, 'day', { without: correctionParts(site) }));
     expect(numbers.without.terminals.some(({ element }) => element === 'c1')).toBe(false);
-    expect(numbers.verdicts).toEqual(judgeCase(site, solveCase(site, 'day'), { screening: false }));
   });
 
   it('judges a case the same before and after its numbers have left the worker', () => {
     const { send } = behindBoundary();
     const others: CaseSolution[] = casesOf(site).map(({ id }) => solveCase(site, id));
     const expected = judgeCase(site, solveCase(site, 'day'), { otherCases: others });
-    expect(good(send({ kind: 'judge', caseId: 'day' }, 1, site))).toEqual(expected);
+    expect(good(send({ kind: 'judge', caseId: 'day', screening: true }, 1, site))).toEqual(expected);
     send({ kind: 'solve', caseId: 'day' });
-    expect(good(send({ kind: 'judge', caseId: 'day' }))).toEqual(expected);
+    expect(good(send({ kind: 'judge', caseId: 'day', screening: true }))).toEqual(expected);
     expect(expected.length).toBeGreaterThan(0);
+  });
+
+  it('judges all but the screening rows when asked to be quick', () => {
+    const { send } = behindBoundary();
+    const all = good(send({ kind: 'judge', caseId: 'day', screening: true }, 1, site));
+    const quick = good(send({ kind: 'judge', caseId: 'day', screening: false }));
+    expect(quick).toEqual(all.filter(({ screening }) => !screening));
+    expect(quick.length).toBeLessThan(all.length);
   });
 
   it('keeps nothing of an older revision', () => {
     const { send } = behindBoundary();
     send({ kind: 'solve', caseId: 'day' }, 1, site);
-    send({ kind: 'judge', caseId: 'day' });
+    send({ kind: 'judge', caseId: 'day', screening: true });
     const edited: Study = {
       ...site,
       elements: site.elements.map((part) =>
@@ -67,7 +74,7 @@ describe('the session in the worker', () => {
     const { solution } = good(send({ kind: 'solve', caseId: 'day' }, 2, edited));
     expect(solution).toEqual(solveCase(edited, 'day'));
     const others = casesOf(edited).map(({ id }) => solveCase(edited, id));
-    expect(good(send({ kind: 'judge', caseId: 'day' }, 2))).toEqual(
+    expect(good(send({ kind: 'judge', caseId: 'day', screening: true }, 2))).toEqual(
       judgeCase(edited, solveCase(edited, 'day'), { otherCases: others }),
     );
   });
