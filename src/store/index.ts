@@ -5,9 +5,7 @@ export { type FollowOptions, followStudy } from './followStudy.ts';
 export type { History, Revision } from './history.ts';
 export { restore } from './restore.ts';
 export {
-  busById,
   countVerdicts,
-  elementById,
   freshAnswer,
   freshVerdicts,
   isScanStale,

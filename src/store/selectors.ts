@@ -1,5 +1,4 @@
 import type { Verdict, VerdictWord } from '../checks/index.ts';
-import type { Bus, StudyElement } from '../study/index.ts';
 import type { Answer, Workbench } from './types.ts';
 
 /** Words for "Undo …"; null where there is nothing to undo. */
@@ -44,16 +43,6 @@ export function isScreened(state: Workbench): boolean {
 export function isScanStale(state: Workbench): boolean {
   const scan = freshAnswer(state)?.scan;
   return !scan || scan.revision !== state.revision || scan.bus !== state.view.focusBus;
-}
-
-/** Selects the element of an id; its identity changes only when the element does. */
-export function elementById(id: string): (state: Workbench) => StudyElement | undefined {
-  return ({ study }) => study?.elements.find((element) => element.id === id);
-}
-
-/** Selects the busbar of an id. */
-export function busById(id: string): (state: Workbench) => Bus | undefined {
-  return ({ study }) => study?.buses.find((bus) => bus.id === id);
 }
 
 /**

@@ -21,7 +21,9 @@ function editOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
   const before = state.beforePreview ?? state.study;
   if (!before) return {};
   const after = edit.apply(before);
-  const settled = { ...(after === state.study ? {} : withStudy(state, after)), beforePreview: null };
+  // The end of a gesture counts as a change also where it ends as it began: what waited for it goes on.
+  const still = after === state.study && !state.beforePreview;
+  const settled = { ...(still ? {} : withStudy(state, after)), beforePreview: null };
   if (after === before) return settled;
   return {
     ...settled,
@@ -41,7 +43,7 @@ function previewOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
 function cancelled(state: WorkbenchState): Partial<WorkbenchState> {
   const { beforePreview } = state;
   if (!beforePreview) return {};
-  return { ...(beforePreview === state.study ? {} : withStudy(state, beforePreview)), beforePreview: null };
+  return { ...withStudy(state, beforePreview), beforePreview: null };
 }
 
 function stepped(state: WorkbenchState, step: typeof stepBack): Partial<WorkbenchState> {
