@@ -51,3 +51,55 @@ export async function middle(locator: Locator): Promise<{ x: number; y: number }
   if (!box) throw new Error('nothing to point at');
   return { x: box.x + box.width / 2, y: box.y + box.height / 2 };
 }
+
+/** Opens a sample site and waits for its answer. */
+export async function openSampleSite(page: Page, id: 'cold-store' | 'office-tower'): Promise<void> {
+  await page.goto(`/?sample=${id}`);
+  await expect(page.getByRole('region', { name: 'Drawing' })).toBeVisible();
+  await settled(page);
+}
+
+/** Opens a part's data by a click and Enter, as its slip. */
+export async function slipOf(page: Page, name: RegExp): Promise<Locator> {
+  await part(page, name).locator('.hit').first().click();
+  await page.keyboard.press('Enter');
+  const slip = page.locator('.slip');
+  await expect(slip).toBeVisible();
+  return slip;
+}
+
+/** Takes a kind from the tray and holds it over a point; the pointer is not let go yet. */
+export async function carryFromTray(page: Page, kind: string, to: { x: number; y: number }): Promise<void> {
+  const symbol = page.locator(`[data-tray="${kind}"]`);
+  await symbol.scrollIntoViewIfNeeded();
+  await carry(page, await middle(symbol), to);
+}
+
+/** Presses at one point and moves to another; the pointer is not let go yet. */
+export async function carry(
+  page: Page,
+  from: { x: number; y: number },
+  to: { x: number; y: number },
+): Promise<void> {
+  await page.mouse.move(from.x, from.y);
+  await page.mouse.down();
+  await page.mouse.move(to.x, to.y, { steps: 6 });
+}
+
+/** A point just under a busbar, at a fraction of its length. */
+export async function under(bus: Locator, fraction: number): Promise<{ x: number; y: number }> {
+  const bar = await bus.locator('.bar').first().boundingBox();
+  if (!bar) throw new Error('no busbar to point at');
+  return { x: bar.x + bar.width * fraction, y: bar.y + bar.height / 2 + 24 };
+}
+
+/** What Undo would undo, in the words of the command list. */
+export async function undoWords(page: Page): Promise<string> {
+  await page.keyboard.press('Control+k');
+  await expect(page.getByRole('searchbox', { name: 'Find a command' })).toBeFocused();
+  await page.keyboard.type('undo');
+  const words = await page.getByRole('menuitem', { name: /^Undo/ }).textContent();
+  await page.keyboard.press('Escape');
+  await expect(page.getByRole('searchbox', { name: 'Find a command' })).toBeHidden();
+  return (words ?? '').replace(/^Undo:? ?/, '').replace(/Ctrl\+Z$/, '');
+}

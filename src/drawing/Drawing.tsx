@@ -72,8 +72,12 @@ export function Drawing(props: DrawingProps) {
   );
   const controls = usePaneView(paneRef, layout, props.fitKey ?? '');
   const [current, setCurrent] = useRovingFocus(paneRef, layout, selection, controls.panBy);
-  const [carried, setCarried] = useState<Held | null>(null);
-  const [target, setTarget] = useState<string | undefined>();
+  const [moved, setMoved] = useState<Held | null>(null);
+  // The armed kind is in the hand from the very press that armed it.
+  const carried: Held | null = armedKind ? { what: 'new', kind: armedKind } : moved;
+  const [aimed, setAimed] = useState<string | undefined>();
+  const stands = (id: string | undefined) => layout.buses.some((bus) => bus.id === id);
+  const target = [aimed, props.focusBus, layout.buses[0]?.id].find(stands);
 
   const onDrop = (edit: Edit, select: Subject | undefined) => {
     props.onEdit(edit);
@@ -116,20 +120,18 @@ export function Drawing(props: DrawingProps) {
     carried,
     targetBus: target,
     setCurrent,
-    setCarried,
-    setTarget,
+    setCarried: setMoved,
+    setTarget: setAimed,
     cancelGesture: gestures.cancel,
     focusPane: () => paneRef.current?.focus({ preventScroll: true }),
     onDrop,
   });
 
   useEffect(() => {
-    setCarried(armedKind ? { what: 'new', kind: armedKind } : null);
+    setMoved(null);
     if (!armedKind) return;
-    const stands = (id: string | undefined) => layout.buses.some((bus) => bus.id === id);
-    setTarget((bus) => (stands(bus) ? bus : stands(props.focusBus) ? props.focusBus : layout.buses[0]?.id));
     paneRef.current?.focus({ preventScroll: true });
-  }, [armedKind, props.focusBus, layout]);
+  }, [armedKind]);
 
   const { hand } = gestures;
   const plan =

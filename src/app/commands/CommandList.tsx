@@ -29,12 +29,14 @@ export function CommandList({ commands, open, onOpenChange }: Props) {
     if (!next) setText('');
     onOpenChange(next);
   };
+  // A search field would only clear itself at the first Escape.
+  const closeOnEscape = (event: { key: string }) => event.key === 'Escape' && close(false);
   return (
     <ModalOverlay isOpen={open} onOpenChange={close} isDismissable className="veil">
       <Modal className="command-list">
         <Dialog aria-label="Commands">
           <Autocomplete filter={contains} inputValue={text} onInputChange={setText}>
-            <SearchField autoFocus aria-label="Find a command">
+            <SearchField autoFocus aria-label="Find a command" onKeyDown={closeOnEscape}>
               <Label className="visually-hidden">Find a command</Label>
               <Input placeholder="What would you like to do?" />
             </SearchField>

@@ -7,6 +7,11 @@ function typing(target: EventTarget | null): boolean {
   );
 }
 
+/** A dialog or menu lies above the workbench and has the keyboard. */
+function underLayer(target: EventTarget | null): boolean {
+  return target instanceof Element && target.closest('.veil, .popover') !== null;
+}
+
 /** Runs a command when its keys are pressed; a field being typed in keeps its own undo and letters. */
 export function useCommandKeys(commands: readonly Command[], onCommandList: () => void): void {
   useEffect(() => {
@@ -19,6 +24,7 @@ export function useCommandKeys(commands: readonly Command[], onCommandList: () =
       }
       const command = commands.find((one) => one.keys && matchesKeys(one.keys, event));
       if (!command || command.enabled === false) return;
+      if (underLayer(event.target) && !command.id.startsWith('study.save')) return;
       const inField = typing(event.target);
       if (inField && (!command.keys?.includes('Mod') || command.id.startsWith('edit.'))) return;
       event.preventDefault();

@@ -185,6 +185,8 @@ function mark(c: KeyContext, adding: boolean): boolean {
 function stepBack(c: KeyContext): boolean {
   if (c.cancelGesture() && !c.armedKind) return true;
   if (c.carried || c.armedKind) {
+    // The part that stays where it was has the keyboard again.
+    if (c.carried?.what === 'part') c.setCurrent(partSubject(c.carried.id));
     c.setCarried(null);
     c.onArm(null);
   } else if (c.openSlip) c.onOpenSlip(null);

@@ -1,0 +1,129 @@
+import { expect, type Locator, type Page, test } from '@playwright/test';
+import type { StudyElement } from '../src/study/index.ts';
+import { note, openSampleSite, saveByDownload, savedStudy, settled, slipOf, undoWords } from './workbench.ts';
+
+test.beforeEach(async ({ page }) => {
+  await saveByDownload(page);
+  await openSampleSite(page, 'cold-store');
+});
+
+async function type(page: Page, field: Locator, text: string): Promise<void> {
+  await field.fill(text);
+  await page.keyboard.press('Enter');
+}
+
+async function elementOf(page: Page, id: string): Promise<StudyElement | undefined> {
+  return (await savedStudy(page)).elements.find((element) => element.id === id);
+}
+
+test('a field takes a decimal comma, a prefix, another unit and arithmetic, and says what it understood', async ({
+  page,
+}) => {
+  const slip = await slipOf(page, /^transformer, T1/);
+  const power = slip.getByLabel('rated power', { exact: true });
+  await type(page, power, '1,25 MVA');
+  await settled(page);
+  expect(await elementOf(page, 't1')).toMatchObject({ ratedKVA: 1250 });
+  await power.fill('2*630');
+  await expect(slip.getByRole('status')).toContainText('1 260 kVA');
+  await page.keyboard.press('Enter');
+  await settled(page);
+  expect(await elementOf(page, 't1')).toMatchObject({ ratedKVA: 1260 });
+  await type(page, slip.getByLabel(/^rated low voltage/), '0,4 kV');
+  expect(await elementOf(page, 't1')).toMatchObject({ lvV: 400 });
+  await page.keyboard.press('Escape');
+  await expect(slip).toBeHidden();
+  expect(await undoWords(page)).toBe('set the rated power of transformer T1');
+});
+
+test('a wrong entry is said at the field and changes nothing; Escape puts the old value back', async ({
+  page,
+}) => {
+  const before = await savedStudy(page);
+  const slip = await slipOf(page, /^transformer, T1/);
+  const power = slip.getByLabel('rated power', { exact: true });
+  await type(page, power, '12 bananas');
+  await expect(slip.getByRole('alert')).toContainText('kVA');
+  await expect(power).toHaveAttribute('aria-invalid', 'true');
+  await type(page, power, '-5');
+  await expect(slip.getByRole('alert')).toContainText('allowed');
+  await page.keyboard.press('Escape');
+  await expect(slip.getByRole('alert')).toBeHidden();
+  await expect(power).toHaveValue('1000');
+  await page.keyboard.press('Escape');
+  await expect(slip).toBeHidden();
+  expect(await savedStudy(page)).toEqual(before);
+});
+
+test('steps are written at once as 6x25 and switched one by one', async ({ page }) => {
+  const slip = await slipOf(page, /^bank, Bank C1/);
+  await type(page, slip.getByLabel('steps', { exact: true }), '6x25');
+  await expect(slip.getByText(/150\skvar of 150\skvar/)).toBeVisible();
+  await slip.getByLabel('Step 2 switched in').uncheck();
+  await expect(slip.getByText(/125\skvar of 150\skvar/)).toBeVisible();
+  await settled(page);
+  const bank = await elementOf(page, 'c1');
+  expect(bank?.kind === 'bank' && bank.steps.map(({ kvar, on }) => [kvar, on ?? true])).toEqual([
+    [25, true],
+    [25, false],
+    [25, true],
+    [25, true],
+    [25, true],
+    [25, true],
+  ]);
+});
+
+test('a drive takes a built-in spectrum, or rows of its own that can be edited', async ({ page }) => {
+  const slip = await slipOf(page, /Fans/);
+  await slip.getByRole('button', { name: 'Edit a copy of these rows' }).click();
+  await expect(slip.getByLabel('spectrum', { exact: true })).toHaveValue(/rows$/);
+  const percent = slip.locator('table input').nth(1);
+  await type(page, percent, '33,5');
+  await settled(page);
+  const own = await elementOf(page, 'fans');
+  expect(own?.kind === 'converter' && typeof own.spectrum !== 'string' && own.spectrum[0]?.percent).toBe(
+    33.5,
+  );
+  await slip.getByLabel('spectrum', { exact: true }).selectOption({ index: 1 });
+  await settled(page);
+  const named = await elementOf(page, 'fans');
+  expect(named?.kind === 'converter' && typeof named.spectrum).toBe('string');
+});
+
+test('a change for one case leaves the base study alone and can be taken back', async ({ page }) => {
+  const before = await elementOf(page, 't1');
+  await page.keyboard.press('F8');
+  await settled(page);
+  const slip = await slipOf(page, /^transformer, T1/);
+  await slip.getByLabel('change in Morning, two of three steps only').check();
+  await type(page, slip.getByLabel('rated power', { exact: true }), '800');
+  await settled(page);
+  const study = await savedStudy(page);
+  expect(study.elements.find(({ id }) => id === 't1')).toEqual(before);
+  expect(study.cases?.find(({ id }) => id === 'two')?.changes).toContainEqual({
+    element: 't1',
+    set: { ratedKVA: 800 },
+  });
+  await slip.getByRole('button', { name: 'back to base' }).click();
+  await settled(page);
+  expect((await savedStudy(page)).cases?.find(({ id }) => id === 'two')?.changes).not.toContainEqual(
+    expect.objectContaining({ element: 't1' }),
+  );
+});
+
+test('the origin of a value goes round from nameplate to assumed', async ({ page }) => {
+  const slip = await slipOf(page, /^transformer, T1/);
+  await slip.getByRole('button', { name: 'Origin of rated power: not stated' }).click();
+  await expect(slip.getByRole('button', { name: 'Origin of rated power: nameplate' })).toHaveText('N');
+  await slip.getByRole('button', { name: 'Origin of rated power: nameplate' }).click();
+  await expect(slip.getByRole('button', { name: 'Origin of rated power: measured' })).toHaveText('M');
+});
+
+test('a current pinned from the slip stands among the notes until it is unpinned', async ({ page }) => {
+  const slip = await slipOf(page, /^motor, Compressors/);
+  await slip.getByRole('button', { name: 'Pin current' }).click();
+  const pinned = note(page, 'Compressors · current');
+  await expect(pinned).toBeVisible();
+  await slip.getByRole('button', { name: 'Unpin current' }).click();
+  await expect(pinned).toBeHidden();
+});
