@@ -2,6 +2,7 @@ import { cpus } from 'node:os';
 import { editToResults, elasticityTime, scanTime } from './engineFigures.ts';
 import { kernelFigure, sequenceRefactor } from './kernelFigures.ts';
 import { buildYardstick } from './kluYardstick.ts';
+import { measureScrubbing } from './scrubbing.ts';
 
 /** The benchmark: `npm run bench`. Ratios are of medians taken alternately in this one run. */
 
@@ -34,6 +35,18 @@ const whole = [30, 100, 300, 1000].map((busbars) => {
   return time / busbars;
 });
 report('30 → 1000 busbars, edit to results per busbar', `${spread(whole).toFixed(2)} times`, '≤ 1.6');
+
+const scrubbing = await measureScrubbing('cold-store');
+if (typeof scrubbing === 'string') report('scrubbing in the page', scrubbing);
+else {
+  report('scrubbing, late frames', `${scrubbing.late} of ${scrubbing.frames}`, '0');
+  report('scrubbing, frame, median and worst', `${ms(scrubbing.medianMs)}, ${ms(scrubbing.worstMs)}`);
+  report('scrubbing, longest task of the page', longTask(scrubbing.longestTaskMs), '≤ 50 ms');
+}
+
+function longTask(milliseconds: number): string {
+  return milliseconds === 0 ? 'none over 50 ms' : ms(milliseconds);
+}
 
 function us(x: number): string {
   return `${x < 10 ? x.toFixed(2) : x.toFixed(1)} µs`;

@@ -4,7 +4,7 @@ import { seededRandom } from './seededRandom.ts';
 /**
  * An invented site of about `busbars` busbars, the same for the same seed: a 20 kV switchboard feeding
  * substations of nine 400 V busbars each (a main board and eight radial boards behind cables), the 20 kV
- * side a chain of cables with a ring every few substations, a cable tie in each substation. Loads, motors,
+ * side feeders of cables with a ring every few substations, a cable tie in each substation. Loads, motors,
  * six-pulse drives, detuned and plain banks, and single-phase loads, so that phase coordinates are needed.
  */
 export function benchStudy(busbars: number, seed = 1): Study {
@@ -15,7 +15,7 @@ export function benchStudy(busbars: number, seed = 1): Study {
       id: 'grid-supply',
       kind: 'supply',
       bus: 'grid',
-      shortCircuitMVA: 350,
+      shortCircuitMVA: Math.max(350, 3.5 * busbars),
       xOverR: 8,
       background: [{ h: 5, percent: 1 }],
     },
@@ -32,6 +32,9 @@ export function benchStudy(busbars: number, seed = 1): Study {
   };
 }
 
+/** Substations on one 20 kV feeder; a longer chain could not carry its load. */
+const FEEDER_SUBSTATIONS = 8;
+
 function addSubstation(
   buses: Study['buses'],
   elements: StudyElement[],
@@ -40,7 +43,7 @@ function addSubstation(
   random: () => number,
 ): void {
   const name = (k: number) => `s${substation}b${k}`;
-  const above = substation === 0 ? 'grid' : `s${substation - 1}b0`;
+  const above = substation % FEEDER_SUBSTATIONS === 0 ? 'grid' : `s${substation - 1}b0`;
   buses.push({ id: name(0), nominalV: 20000 });
   elements.push(cable(`${name(0)}-feeder`, above, name(0), 200 + 600 * random(), 0.16));
   if (substation % 4 === 3)

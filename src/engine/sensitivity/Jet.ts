@@ -5,57 +5,60 @@
  * Derivatives, 2nd ed., SIAM 2008, ch. 13).
  */
 export class Jet {
-  /** c₀ … c₄, interleaved re, im. */
-  readonly c: Float64Array;
+  /** c₀ … c₄, interleaved re, im. A plain array: ten numbers are made far faster than a typed array. */
+  readonly c: Ten;
 
-  private constructor(c: Float64Array) {
+  private constructor(c: Ten) {
     this.c = c;
   }
 
   static constant(re: number, im = 0): Jet {
-    const c = new Float64Array(10);
-    c[0] = re;
-    c[1] = im;
-    return new Jet(c);
+    return new Jet([re, im, 0, 0, 0, 0, 0, 0, 0, 0]);
   }
 
   /** The order itself, ∂/∂h = 1. */
   static order(h: number): Jet {
-    const jet = Jet.constant(h);
-    jet.c[2] = 1;
-    return jet;
+    return new Jet([h, 0, 1, 0, 0, 0, 0, 0, 0, 0]);
   }
 
   /** The parameter itself, ∂/∂p = 1. */
   static parameter(value: number): Jet {
-    const jet = Jet.constant(value);
-    jet.c[6] = 1;
-    return jet;
+    return new Jet([value, 0, 0, 0, 0, 0, 1, 0, 0, 0]);
   }
 
   plus(other: Jet): Jet {
-    return new Jet(this.c.map((x, k) => x + other.c[k]!));
+    return this.combined(other, 1);
   }
 
   minus(other: Jet): Jet {
-    return new Jet(this.c.map((x, k) => x - other.c[k]!));
+    return this.combined(other, -1);
   }
 
   times(other: Jet | number): Jet {
-    if (typeof other === 'number') return new Jet(this.c.map((x) => x * other));
-    const out = new Float64Array(10);
-    for (const [k, i, j] of products) {
-      const [a, b] = [this.c[2 * i]!, this.c[2 * i + 1]!];
-      const [x, y] = [other.c[2 * j]!, other.c[2 * j + 1]!];
-      out[2 * k] = out[2 * k]! + (a * x - b * y);
-      out[2 * k + 1] = out[2 * k + 1]! + (a * y + b * x);
+    const [a0, b0, a1, b1, a2, b2, a3, b3, a4, b4] = this.c;
+    if (typeof other === 'number') {
+      const s = other;
+      return new Jet([a0 * s, b0 * s, a1 * s, b1 * s, a2 * s, b2 * s, a3 * s, b3 * s, a4 * s, b4 * s]);
     }
-    return new Jet(out);
+    const [x0, y0, x1, y1, x2, y2, x3, y3, x4, y4] = other.c;
+    return new Jet([
+      a0 * x0 - b0 * y0,
+      a0 * y0 + b0 * x0,
+      a0 * x1 - b0 * y1 + (a1 * x0 - b1 * y0),
+      a0 * y1 + b0 * x1 + (a1 * y0 + b1 * x0),
+      a0 * x2 - b0 * y2 + (a1 * x1 - b1 * y1) + (a2 * x0 - b2 * y0),
+      a0 * y2 + b0 * x2 + (a1 * y1 + b1 * x1) + (a2 * y0 + b2 * x0),
+      a0 * x3 - b0 * y3 + (a3 * x0 - b3 * y0),
+      a0 * y3 + b0 * x3 + (a3 * y0 + b3 * x0),
+      a0 * x4 - b0 * y4 + (a1 * x3 - b1 * y3) + (a3 * x1 - b3 * y1) + (a4 * x0 - b4 * y0),
+      a0 * y4 + b0 * x4 + (a1 * y3 + b1 * x3) + (a3 * y1 + b3 * x1) + (a4 * y0 + b4 * x0),
+    ]);
   }
 
   /** j·f. */
   turned(): Jet {
-    return new Jet(this.c.map((_, k) => (k % 2 === 0 ? -this.c[k + 1]! : this.c[k - 1]!)));
+    const [a0, b0, a1, b1, a2, b2, a3, b3, a4, b4] = this.c;
+    return new Jet([-b0, a0, -b1, a1, -b2, a2, -b3, a3, -b4, a4]);
   }
 
   over(other: Jet): Jet {
@@ -96,26 +99,27 @@ export class Jet {
 
   /** Chain rule: F, F′ and F″ at c₀ given as constants. */
   private composed(f: Jet, slope: Jet, curvature: Jet): Jet {
-    const rest = new Jet(this.c.slice());
-    rest.c[0] = 0;
-    rest.c[1] = 0;
-    const square = rest.times(rest).times(0.5);
-    return f.plus(rest.times(slope)).plus(square.times(curvature));
+    const [, , a1, b1, a2, b2, a3, b3, a4, b4] = this.c;
+    const rest = new Jet([0, 0, a1, b1, a2, b2, a3, b3, a4, b4]);
+    return f.plus(rest.times(slope)).plus(rest.times(rest).times(0.5).times(curvature));
+  }
+
+  private combined(other: Jet, s: number): Jet {
+    const [a0, b0, a1, b1, a2, b2, a3, b3, a4, b4] = this.c;
+    const [x0, y0, x1, y1, x2, y2, x3, y3, x4, y4] = other.c;
+    return new Jet([
+      a0 + s * x0,
+      b0 + s * y0,
+      a1 + s * x1,
+      b1 + s * y1,
+      a2 + s * x2,
+      b2 + s * y2,
+      a3 + s * x3,
+      b3 + s * y3,
+      a4 + s * x4,
+      b4 + s * y4,
+    ]);
   }
 }
 
-/** Which products of coefficients i and j give coefficient k. */
-const products = [
-  [0, 0, 0],
-  [1, 0, 1],
-  [1, 1, 0],
-  [2, 0, 2],
-  [2, 1, 1],
-  [2, 2, 0],
-  [3, 0, 3],
-  [3, 3, 0],
-  [4, 0, 4],
-  [4, 1, 3],
-  [4, 3, 1],
-  [4, 4, 0],
-] as const;
+type Ten = readonly [number, number, number, number, number, number, number, number, number, number];
