@@ -1,6 +1,16 @@
 import { expect, type Locator, type Page, test } from '@playwright/test';
 import type { StudyElement } from '../src/study/index.ts';
-import { note, openSampleSite, saveByDownload, savedStudy, settled, slipOf, undoWords } from './workbench.ts';
+import {
+  note,
+  openSampleSite,
+  part,
+  rail,
+  saveByDownload,
+  savedStudy,
+  settled,
+  slipOf,
+  undoWords,
+} from './workbench.ts';
 
 test.beforeEach(async ({ page }) => {
   await saveByDownload(page);
@@ -126,4 +136,21 @@ test('a current pinned from the slip stands among the notes until it is unpinned
   await expect(pinned).toBeVisible();
   await slip.getByRole('button', { name: 'Unpin current' }).click();
   await expect(pinned).toBeHidden();
+});
+
+test('a note widens to a lens over the paper, and a verdict leads to its part and order', async ({
+  page,
+}) => {
+  const reading = note(page, 'Intake · current from Supply');
+  await reading.hover();
+  await reading.getByRole('button', { name: 'widen' }).click();
+  await expect(reading).toBeInViewport({ ratio: 0.99 });
+  expect((await reading.boundingBox())?.width).toBeGreaterThan(600);
+  await reading.getByRole('button', { name: 'narrow' }).click();
+  await page.keyboard.press('F8');
+  await settled(page);
+  const verdict = note(page, 'Intake · 11th harmonic current at the PCC');
+  await verdict.getByRole('button', { name: 'jump to the part' }).click();
+  await expect(part(page, /^busbar, Intake/)).toHaveAttribute('aria-pressed', 'true');
+  await expect(rail(page)).toHaveAttribute('aria-valuenow', '11');
 });

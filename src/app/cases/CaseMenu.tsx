@@ -40,7 +40,8 @@ export function CaseMenu({ commands, formOpen, onFormClose }: Props) {
       <span className="quiet">Case</span>
       <MenuTrigger>
         <Button ref={buttonRef} className="menu-button case-name">
-          {current ? nameOf(current) : caseId} <span aria-hidden="true">▾</span>
+          <span className="clipped">{current ? nameOf(current) : caseId}</span>{' '}
+          <span aria-hidden="true">▾</span>
         </Button>
         <Popover className="popover">
           <Menu aria-label="Cases" onAction={(id) => byId.get(String(id))?.run()}>

@@ -30,8 +30,11 @@ export function StudyMenu({ commands }: Props) {
   return (
     <MenuTrigger>
       <Button className="menu-button study-title">
-        {title}
-        {unsaved && <span className="quiet"> · not in a file yet</span>} <span aria-hidden="true">▾</span>
+        <span className="clipped">
+          {title}
+          {unsaved && <span className="quiet"> · not in a file yet</span>}
+        </span>{' '}
+        <span aria-hidden="true">▾</span>
       </Button>
       <Popover className="popover">
         <Menu aria-label="Study" onAction={(id) => byId.get(String(id))?.run()}>

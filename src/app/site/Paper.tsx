@@ -1,7 +1,7 @@
 import { useCallback, useState } from 'react';
 import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
-import type { Study } from '../../study/index.ts';
+import { type Study, studyInCase } from '../../study/index.ts';
 import { Samples } from '../files/Samples.tsx';
 import { SlipConnection } from './SlipConnection.tsx';
 
@@ -46,7 +46,7 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
       {outlined ? (
         <div className="outline-place">
           <Outline
-            study={study}
+            study={studyInCase(study, view.caseId)}
             selection={view.selection}
             verdicts={verdicts}
             onSelect={select}

@@ -1,4 +1,5 @@
-import type { Field, FieldType } from '../../study/index.ts';
+import { type BankStep, type Field, type FieldType, formatQuantity } from '../../study/index.ts';
+import { stepsText } from './parseSteps.ts';
 
 /** Fields with a place of their own at the head of the slip. */
 const headKeys: ReadonlySet<string> = new Set(['name', 'on']);
@@ -40,10 +41,22 @@ export function takesOrigin(field: Field): boolean {
   return withOrigin.has(field.type);
 }
 
-/** A value in short words, for "base: 140 kW": a list is counted, not written out. */
+function isSteps(value: unknown): value is BankStep[] {
+  return (
+    Array.isArray(value) &&
+    value.length > 0 &&
+    value.every((item: unknown) => typeof item === 'object' && item !== null && 'kvar' in item)
+  );
+}
+
+/** A value in short words, for "base: 140 kW": steps as they are typed, other lists counted. */
 export function shortValue(value: unknown, unit: string): string {
   if (value === undefined || value === null) return 'not given';
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
+  if (isSteps(value)) {
+    const on = value.reduce((sum, step) => sum + (step.on === false ? 0 : step.kvar), 0);
+    return `${stepsText(value)}, ${formatQuantity(on, 'kvar')} switched in`;
+  }
   if (Array.isArray(value)) return `${value.length} ${value.length === 1 ? 'row' : 'rows'}`;
   return unit === '' || typeof value !== 'number' ? String(value) : `${value} ${unit}`;
 }
