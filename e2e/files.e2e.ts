@@ -48,3 +48,23 @@ test('a file that is not JSON is refused by line and column', async ({ page }) =
   await dropFile(page, 'notes.txt', 'kvar: lots\n');
   await expect(page.getByRole('alertdialog')).toContainText(/line 1/i);
 });
+
+test('a study with changes in no file is not replaced unasked', async ({ page }) => {
+  await page.locator('[data-subject="element:hoist"]').click();
+  await page.keyboard.press('Delete');
+  await settled(page);
+  await dropFile(page, 'office-tower.json', sampleText('office-tower'));
+  const dialog = page.getByRole('alertdialog');
+  await expect(dialog).toContainText('has changes that are in no file');
+  await page.getByRole('button', { name: 'Stay here' }).click();
+  await expect(dialog).toBeHidden();
+  await expect(page.getByRole('button', { name: /Brackwater cold store/ }).first()).toBeVisible();
+
+  await dropFile(page, 'office-tower.json', sampleText('office-tower'));
+  const [saved] = await Promise.all([
+    page.waitForEvent('download'),
+    page.getByRole('button', { name: 'Save it first' }).click(),
+  ]);
+  expect(saved.suggestedFilename()).toContain('cold-store');
+  await expect(page.getByRole('button', { name: /Harrow Lane offices/ }).first()).toBeVisible();
+});

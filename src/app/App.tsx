@@ -7,6 +7,7 @@ import { useCommands } from './commands/useCommands.ts';
 import { CorrectionPlace } from './correction/CorrectionPlace.tsx';
 import { StudyDetails } from './details/StudyDetails.tsx';
 import { DropTarget } from './files/DropTarget.tsx';
+import { LeaveDialog } from './files/LeaveDialog.tsx';
 import { NoticeDialog, NoticeLine } from './files/NoticeDialog.tsx';
 import { Header } from './header/Header.tsx';
 import { SheetConnection } from './sheet/SheetConnection.tsx';
@@ -45,6 +46,7 @@ export function App() {
       <CommandList commands={commands} open={dialog === 'commands'} onOpenChange={close} />
       <KeyMap commands={commands} open={dialog === 'keys'} onClose={close} />
       {dialog === 'details' && <StudyDetails onClose={close} />}
+      <LeaveDialog />
       <NoticeDialog />
       <DropTarget />
     </div>

@@ -14,7 +14,8 @@ const root = document.getElementById('root');
 if (!root) throw new Error('the page has no #root to draw into');
 
 await startWorkbench();
-await openAddressedSample();
+// What was being worked on comes before a sample named in the address.
+if ((workbench.getState().study?.elements.length ?? 0) === 0) await openAddressedSample();
 if (!workbench.getState().study) {
   workbench.getState().openStudy(newStudy({ title: 'New study', frequencyHz: 50 }));
 }

@@ -2,6 +2,7 @@ import { useMemo } from 'react';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
 import { newStudy, type Study } from '../../study/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
+import { leaveStudy } from '../files/leaveStudy.ts';
 import { openSample } from '../files/openSample.ts';
 import { samples } from '../files/samples.ts';
 import type { Command } from './command.ts';
@@ -12,14 +13,14 @@ function fileCommands(study: Study | null): Command[] {
     {
       id: 'study.new',
       words: 'New study, 50 Hz',
-      run: () => openStudy(newStudy({ title: 'New study', frequencyHz: 50 })),
+      run: () => leaveStudy(() => openStudy(newStudy({ title: 'New study', frequencyHz: 50 }))),
     },
     {
       id: 'study.new60',
       words: 'New study, 60 Hz',
-      run: () => openStudy(newStudy({ title: 'New study', frequencyHz: 60 })),
+      run: () => leaveStudy(() => openStudy(newStudy({ title: 'New study', frequencyHz: 60 }))),
     },
-    { id: 'study.open', words: 'Open a study…', keys: 'Mod+O', run: () => void openFile() },
+    { id: 'study.open', words: 'Open a study…', keys: 'Mod+O', run: () => leaveStudy(() => void openFile()) },
     {
       id: 'study.save',
       words: 'Save the study',
@@ -37,7 +38,7 @@ function fileCommands(study: Study | null): Command[] {
     ...samples.map((sample) => ({
       id: `sample.${sample.id}`,
       words: `Sample: ${sample.title}`,
-      run: () => void openSample(sample),
+      run: () => leaveStudy(() => void openSample(sample)),
     })),
   ];
 }

@@ -1,5 +1,6 @@
 import { useEffect, useState } from 'react';
 import { workbench } from '../../store/index.ts';
+import { leaveStudy } from './leaveStudy.ts';
 
 function carriesFile(event: DragEvent): boolean {
   return event.dataTransfer?.types.includes('Files') ?? false;
@@ -22,7 +23,9 @@ export function DropTarget() {
       event.preventDefault();
       setOver(false);
       const file = event.dataTransfer?.files[0];
-      if (file) workbench.getState().openText(await file.text(), file.name);
+      if (!file) return;
+      const text = await file.text();
+      leaveStudy(() => workbench.getState().openText(text, file.name));
     };
     const dropped = (event: DragEvent) => void drop(event);
     window.addEventListener('dragover', drag);

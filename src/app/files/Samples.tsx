@@ -1,3 +1,4 @@
+import { leaveStudy } from './leaveStudy.ts';
 import { openSample } from './openSample.ts';
 import { samples } from './samples.ts';
 
@@ -7,7 +8,7 @@ export function Samples() {
     <section className="samples" aria-label="Sample sites">
       <h2>Or begin with a site that tells a story</h2>
       {samples.map((sample) => (
-        <button key={sample.id} type="button" onClick={() => void openSample(sample)}>
+        <button key={sample.id} type="button" onClick={() => leaveStudy(() => void openSample(sample))}>
           <strong>{sample.title}</strong>
           <span>{sample.story}</span>
         </button>
