@@ -85,9 +85,16 @@ describe('A new part', () => {
     const after = edit.apply(detuned);
     expect(addPart(after, { kind: 'bank', bus: 'hall' }).elementId).toBe('bank2');
     expect(elementById(after, 'bank1')).toMatchObject({
-      ratedV: 400,
+      ratedV: 440,
       steps: Array.from({ length: 6 }, () => ({ kvar: 25 })),
     });
+  });
+
+  it('takes the first name of its kind that no other part has', () => {
+    expect(detuned.elements.some((element) => element.name === 'T1')).toBe(false);
+    const named = updateElement(detuned, 't1', { name: 'T1' }).apply(detuned);
+    const edit = addPart(named, { kind: 'transformer', bus: 'in' });
+    expect(elementById(edit.apply(named), edit.elementId)?.name).toBe('T2');
   });
 
   it('marks what is typical, and the mark falls off with the first edit', () => {

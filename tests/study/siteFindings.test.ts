@@ -32,7 +32,7 @@ describe('A site in the making', () => {
   });
 
   it('says that a capacitor at bus volts cannot stand behind a reactor: 400 V becomes 430.1 V at 7 %', () => {
-    const findings = siteFindings(withBank({ detuningPercent: 7 }));
+    const findings = siteFindings(withBank({ detuningPercent: 7, ratedV: 400 }));
     expect(findings).toMatchObject([
       { code: 'capacitor-voltage', path: '$.elements[2].ratedV', value: '400' },
     ]);

@@ -2,13 +2,23 @@ import { useMemo, useState } from 'react';
 import { figure } from '../../checks/index.ts';
 import { kvarAtBus } from '../../sizing/index.ts';
 import { freshAnswer, useWorkbench, workbench } from '../../store/index.ts';
-import { addPart, busName, type Study } from '../../study/index.ts';
+import { addPart, type BankStep, busById, busName, type Study, typicalValues } from '../../study/index.ts';
 import { BankTable } from './BankTable.tsx';
 import './correction.css';
 
 interface NeedProps {
   study: Study;
   targetPF: number;
+}
+
+const STEP_KVAR = 25;
+
+/** Steps of 25 kvar, rated at the capacitors' own voltage, that give at least `kvar` at the busbar's nominal one. */
+function stepsFor(study: Study, busId: string, kvar: number): BankStep[] {
+  const nominalV = busById(study, busId)?.nominalV ?? 0;
+  const { ratedV } = typicalValues('bank', { nominalV, frequencyHz: study.frequencyHz });
+  const ratedKvar = kvar * (ratedV / nominalV) ** 2;
+  return Array.from({ length: Math.max(1, Math.ceil(ratedKvar / STEP_KVAR)) }, () => ({ kvar: STEP_KVAR }));
 }
 
 /** What the chosen busbar needs in the case on screen, with its working. */
@@ -26,14 +36,9 @@ function Need({ study, targetPF }: NeedProps) {
   const { now, without } = needs;
   if (!now || !without) return <p className="hint">Nothing feeds {busName(study, bus)} in this case.</p>;
   const propose = () => {
-    const kvar = Math.max(1, Math.ceil(without.additionalKvar / 25)) * 25;
     const { edit, setPlace } = workbench.getState();
     edit(
-      addPart(study, {
-        kind: 'bank',
-        bus,
-        values: { steps: Array.from({ length: kvar / 25 }, () => ({ kvar: 25 })) },
-      }),
+      addPart(study, { kind: 'bank', bus, values: { steps: stepsFor(study, bus, without.additionalKvar) } }),
     );
     setPlace('site');
   };

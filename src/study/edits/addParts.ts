@@ -51,10 +51,17 @@ const shortNames: Partial<Record<ElementKind, string>> = {
   shunt: 'R-L-C ',
 };
 
-function nameFor(kind: ElementKind, id: string): string {
+/** The kind's short name with the first number from the id's on that no other part has: "T2". */
+function nameFor(study: Study, kind: ElementKind, id: string): string {
   const short = shortNames[kind] ?? `${kindWords[kind].charAt(0).toUpperCase()}${kindWords[kind].slice(1)} `;
-  const counter = counterOf(id);
-  return kind === 'supply' && counter === '1' ? short : `${short}${kind === 'supply' ? ' ' : ''}${counter}`;
+  const taken = new Set(study.elements.map((element) => element.name));
+  const numbered = (counter: number): string => {
+    if (kind === 'supply') return counter === 1 ? short : `${short} ${counter}`;
+    return `${short}${counter}`;
+  };
+  let counter = Number(counterOf(id));
+  while (taken.has(numbered(counter))) counter += 1;
+  return numbered(counter);
 }
 
 /**
@@ -81,7 +88,7 @@ export function addPart(study: Study, options: AddPartOptions): AddPartEdit {
   const element = {
     id,
     kind: options.kind,
-    name: nameFor(options.kind, id),
+    name: nameFor(study, options.kind, id),
     ...ends,
     ...values,
   } as unknown as StudyElement;

@@ -26,14 +26,14 @@ export const stepFields: readonly Field[] = [
 
 export const bankFields: readonly Field[] = [
   ...shuntFields,
-  list('steps', 'steps', 'steps', 'Q_N = Σ kvar of the steps that are on; X_c = ratedV²/Q_N.', {
+  list('steps', 'steps', 'steps', 'Q_N = Σ kvar of the steps that are on; X_c = U_N²/Q_N.', {
     required: true,
   }),
   number(
     'ratedV',
     'rated voltage of the capacitors',
     'V',
-    'X_c = ratedV²/Q_N; Q at the busbar = Q_N·(U/U_N)²/(1 − p).',
+    'X_c = U_N²/Q_N; Q at the busbar = Q_N·(U/U_N)²/(1 − p).',
     { required: true, above: 0 },
   ),
   number('detuningPercent', 'detuning p', '%', 'X_L = p·X_c; tuned order 1/√p.', {

@@ -8,7 +8,7 @@ export const converterFields: readonly Field[] = [
     'kW',
     'active power, total',
     'kW',
-    'Negative feeds in. I_h = percent/100·|I1|, so amperes scale with kW.',
+    'Negative feeds in. I_h = (%/100)·|I1|, so amperes scale with kW.',
     { required: true },
   ),
   number(
@@ -24,7 +24,7 @@ export const converterFields: readonly Field[] = [
     },
   ),
   leading('Q turns negative: the bridge gives kvar.'),
-  list('spectrum', 'spectrum', 'spectrum', 'I_h = percent/100·|I1| at angle_h + h·φ1, into the part.', {
+  list('spectrum', 'spectrum', 'spectrum', 'I_h = (%/100)·|I1| at angle_h + h·φ1, into the part.', {
     required: true,
   }),
   choice(

@@ -20,7 +20,7 @@ export const generatorFields: readonly Field[] = [
   number('angleDeg', 'angle', '°', 'Absent: the no-load angle of its busbar from the nearest source.', {
     rare: true,
   }),
-  number('z0OverZ1', 'zero-sequence impedance Z0/Z1', '', 'Z0 = z0OverZ1·Z1.', {
+  number('z0OverZ1', 'zero-sequence impedance Z0/Z1', '', 'Z0 = (Z0/Z1)·Z1.', {
     default: 0.5,
     above: 0,
     rare: true,

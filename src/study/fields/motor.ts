@@ -4,13 +4,20 @@ import { shuntFields } from './partFields.ts';
 
 export const motorFields: readonly Field[] = [
   ...shuntFields,
-  number('ratedKW', 'rated shaft power, each', 'kW', 'P = P_N·count·load/100/η.', {
+  number('ratedKW', 'rated shaft power, each', 'kW', 'P = P_N · number of motors · (load/100)/η.', {
     required: true,
     above: 0,
   }),
-  integer('count', 'number of motors', '', 'P = P_N·count·load/100/η.', { default: 1, min: 1 }),
-  number('loadPercent', 'load', '%', 'P = P_N·count·load/100/η.', { default: 75, min: 0, max: 200 }),
-  number('efficiency', 'efficiency η', '', 'P = P_N·count·load/100/η.', {
+  integer('count', 'number of motors', '', 'P = P_N · number of motors · (load/100)/η.', {
+    default: 1,
+    min: 1,
+  }),
+  number('loadPercent', 'load', '%', 'P = P_N · number of motors · (load/100)/η.', {
+    default: 75,
+    min: 0,
+    max: 200,
+  }),
+  number('efficiency', 'efficiency η', '', 'P = P_N · number of motors · (load/100)/η.', {
     default: 0.94,
     above: 0,
     max: 1,

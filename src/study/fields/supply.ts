@@ -34,9 +34,9 @@ export const supplyFields: readonly Field[] = [
     'rows',
     'background',
     'background distortion',
-    'E_h = percent/100 · U/√3 at angle_h + h·angle, behind Z(h).',
+    'E_h = (%/100)·U/√3 at angle_h + h·angle, behind Z(h).',
   ),
-  number('z0OverZ1', 'zero-sequence impedance Z0/Z1', '', 'Z0 = z0OverZ1·Z1 at every order.', {
+  number('z0OverZ1', 'zero-sequence impedance Z0/Z1', '', 'Z0 = (Z0/Z1)·Z1 at every order.', {
     default: 1,
     above: 0,
     rare: true,

@@ -11,23 +11,23 @@ function z0Default({ owner }: DefaultContext): number | undefined {
 
 export const transformerFields: readonly Field[] = [
   ...seriesFields,
-  number('ratedKVA', 'rated power', 'kVA', '|Z| = u_k/100 · lvV²/S.', {
+  number('ratedKVA', 'rated power', 'kVA', '|Z| = u_k/100 · U_LV²/S.', {
     required: true,
     above: 0,
     typical: '100 to 2500 kVA at low voltage',
   }),
-  number('hvV', 'rated high voltage', 'V', 'n = hvV·(1 + tap/100)/lvV.', { required: true, above: 0 }),
-  number('lvV', 'rated low voltage, no load', 'V', 'n = hvV·(1 + tap/100)/lvV.', {
+  number('hvV', 'rated high voltage', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', { required: true, above: 0 }),
+  number('lvV', 'rated low voltage, no load', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', {
     required: true,
     above: 0,
   }),
-  number('ukPercent', 'impedance voltage u_k', '%', '|Z| = u_k/100 · lvV²/S.', {
+  number('ukPercent', 'impedance voltage u_k', '%', '|Z| = u_k/100 · U_LV²/S.', {
     required: true,
     above: 0,
     max: 100,
     typical: '4 % up to 630 kVA, 6 % up to 2500 kVA (common practice)',
   }),
-  number('loadLossKW', 'load loss P_k', 'kW', 'R = P_k·lvV²/S², and R may not exceed |Z|.', {
+  number('loadLossKW', 'load loss P_k', 'kW', 'R = P_k·U_LV²/S², and R may not exceed |Z|.', {
     required: true,
     min: 0,
     typical: '7.6 kW at 1000 kVA (Regulation (EU) 548/2014, tier 2)',
@@ -41,7 +41,7 @@ export const transformerFields: readonly Field[] = [
     'tapPercent',
     'tap',
     '%',
-    'Effective high voltage hvV·(1 + tap/100); a negative tap raises the low voltage.',
+    'Effective high voltage U_HV·(1 + tap/100); a negative tap raises the low voltage.',
     {
       default: 0,
       min: -50,
@@ -49,23 +49,29 @@ export const transformerFields: readonly Field[] = [
       typical: '±2.5 % and ±5 % (common practice)',
     },
   ),
-  number('noLoadLossKW', 'no-load loss P_0', 'kW', 'G = P_0/lvV² at the low-voltage side.', {
+  number('noLoadLossKW', 'no-load loss P_0', 'kW', 'G = P_0/U_LV² at the low-voltage side.', {
     default: 0,
     min: 0,
     rare: true,
   }),
-  number('noLoadCurrentPercent', 'no-load current i_0', '%', '|Y| = i_0/100 · S/lvV², B = −√(|Y|² − G²)/h.', {
-    default: 0,
-    min: 0,
-    max: 100,
-    rare: true,
-    typical: '0.3 to 1 % (common practice)',
-  }),
+  number(
+    'noLoadCurrentPercent',
+    'no-load current i_0',
+    '%',
+    '|Y| = i_0/100 · S/U_LV², B = −√(|Y|² − G²)/h.',
+    {
+      default: 0,
+      min: 0,
+      max: 100,
+      rare: true,
+      typical: '0.3 to 1 % (common practice)',
+    },
+  ),
   number(
     'z0OverZ1',
     'zero-sequence impedance Z0/Z1',
     '',
-    'Z0 = z0OverZ1·Z1 at the earthed star point; needed for Yyn.',
+    'Z0 = (Z0/Z1)·Z1 at the earthed star point; needed for Yyn.',
     {
       defaultFor: z0Default,
       above: 0,
