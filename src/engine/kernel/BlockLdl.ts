@@ -65,30 +65,24 @@ export class BlockLdl implements BlockMatrix {
   }
 
   /** Diagonal block at an offset += self on the diagonal, mutual off it: a balanced, reciprocal part. */
-  addBalancedDiagonal(
-    offset: number,
-    selfRe: number,
-    selfIm: number,
-    mutualRe: number,
-    mutualIm: number,
-  ): void {
-    this.addAt(offset, selfRe, selfIm);
-    this.addAt(offset + 2, mutualRe, mutualIm);
-    this.addAt(offset + 4, mutualRe, mutualIm);
-    this.addAt(offset + 6, selfRe, selfIm);
-    this.addAt(offset + 8, mutualRe, mutualIm);
-    this.addAt(offset + 10, selfRe, selfIm);
-  }
-
-  /** Off-diagonal block at an offset += self on the diagonal, mutual off it (its own transpose). */
-  addBalancedOffDiagonal(
-    offset: number,
-    selfRe: number,
-    selfIm: number,
-    mutualRe: number,
-    mutualIm: number,
-  ): void {
-    this.addCirculantOffDiagonal(offset, false, selfRe, selfIm, mutualRe, mutualIm, mutualRe, mutualIm);
+  addBalancedDiagonal(offset: number, entries: Float64Array): void {
+    const v = this.values;
+    const selfRe = entries[0]!;
+    const selfIm = entries[1]!;
+    const mutualRe = entries[2]!;
+    const mutualIm = entries[3]!;
+    v[offset] = v[offset]! + selfRe;
+    v[offset + 1] = v[offset + 1]! + selfIm;
+    v[offset + 2] = v[offset + 2]! + mutualRe;
+    v[offset + 3] = v[offset + 3]! + mutualIm;
+    v[offset + 4] = v[offset + 4]! + mutualRe;
+    v[offset + 5] = v[offset + 5]! + mutualIm;
+    v[offset + 6] = v[offset + 6]! + selfRe;
+    v[offset + 7] = v[offset + 7]! + selfIm;
+    v[offset + 8] = v[offset + 8]! + mutualRe;
+    v[offset + 9] = v[offset + 9]! + mutualIm;
+    v[offset + 10] = v[offset + 10]! + selfRe;
+    v[offset + 11] = v[offset + 11]! + selfIm;
   }
 
   /**
@@ -96,34 +90,35 @@ export class BlockLdl implements BlockMatrix {
    * c₍c−r₎ mod 3): any part with three equal phases, a transformer's shift included. `turned` as
    * plan.isTransposed(i, j) for the block A_ij.
    */
-  addCirculantOffDiagonal(
-    offset: number,
-    turned: boolean,
-    re0: number,
-    im0: number,
-    re1: number,
-    im1: number,
-    re2: number,
-    im2: number,
-  ): void {
+  addCirculantOffDiagonal(offset: number, turned: boolean, row: Float64Array): void {
     const v = this.values;
-    const up = offset + (turned ? 6 : 2); // entry 01, or 10
-    const down = offset + (turned ? 2 : 6);
+    // c₁ stands at 01, 12, 20 and c₂ at 02, 10, 21; transposed the other way round.
+    const one = turned ? 4 : 2;
+    const two = turned ? 2 : 4;
+    const re0 = row[0]!;
+    const im0 = row[1]!;
+    const re1 = row[one]!;
+    const im1 = row[one + 1]!;
+    const re2 = row[two]!;
+    const im2 = row[two + 1]!;
     v[offset] = v[offset]! + re0;
     v[offset + 1] = v[offset + 1]! + im0;
+    v[offset + 2] = v[offset + 2]! + re1;
+    v[offset + 3] = v[offset + 3]! + im1;
+    v[offset + 4] = v[offset + 4]! + re2;
+    v[offset + 5] = v[offset + 5]! + im2;
+    v[offset + 6] = v[offset + 6]! + re2;
+    v[offset + 7] = v[offset + 7]! + im2;
     v[offset + 8] = v[offset + 8]! + re0;
     v[offset + 9] = v[offset + 9]! + im0;
+    v[offset + 10] = v[offset + 10]! + re1;
+    v[offset + 11] = v[offset + 11]! + im1;
+    v[offset + 12] = v[offset + 12]! + re1;
+    v[offset + 13] = v[offset + 13]! + im1;
+    v[offset + 14] = v[offset + 14]! + re2;
+    v[offset + 15] = v[offset + 15]! + im2;
     v[offset + 16] = v[offset + 16]! + re0;
     v[offset + 17] = v[offset + 17]! + im0;
-    // c₁ stands at 01, 12, 20 and c₂ at 02, 10, 21; transposed the other way round.
-    const far = offset + (turned ? 4 : 12);
-    const near = offset + (turned ? 12 : 4);
-    this.addAt(up, re1, im1);
-    this.addAt(up + 8, re1, im1);
-    this.addAt(far, re1, im1);
-    this.addAt(down, re2, im2);
-    this.addAt(down + 8, re2, im2);
-    this.addAt(near, re2, im2);
   }
 
   /** A = L·D·Lᵀ in place; see FactorOutcome. The outcome object is reused. */

@@ -56,46 +56,21 @@ export class BlockLu implements BlockMatrix {
     }
   }
 
-  addBalancedDiagonal(
-    offset: number,
-    selfRe: number,
-    selfIm: number,
-    mutualRe: number,
-    mutualIm: number,
-  ): void {
-    for (let e = 0; e < 9; e++)
-      if (e % 4 === 0) this.addAt(offset + 2 * e, selfRe, selfIm);
-      else this.addAt(offset + 2 * e, mutualRe, mutualIm);
-  }
-
-  addBalancedOffDiagonal(
-    offset: number,
-    selfRe: number,
-    selfIm: number,
-    mutualRe: number,
-    mutualIm: number,
-  ): void {
-    this.addCirculantOffDiagonal(offset, false, selfRe, selfIm, mutualRe, mutualIm, mutualRe, mutualIm);
+  addBalancedDiagonal(offset: number, entries: Float64Array): void {
+    for (let e = 0; e < 9; e++) {
+      const part = e % 4 === 0 ? 0 : 2;
+      this.addAt(offset + 2 * e, entries[part]!, entries[part + 1]!);
+    }
   }
 
   /** As BlockLdl.addCirculantOffDiagonal, for A_ij and A_ji = A_ijᵀ. */
-  addCirculantOffDiagonal(
-    offset: number,
-    turned: boolean,
-    re0: number,
-    im0: number,
-    re1: number,
-    im1: number,
-    re2: number,
-    im2: number,
-  ): void {
-    for (let r = 0; r < 3; r++) {
-      const next = (r + 1) % 3;
-      const after = (r + 2) % 3;
-      this.addTwice(offset + 8 * r, re0, im0);
-      this.addTwice(offset + 2 * (turned ? 3 * next + r : 3 * r + next), re1, im1);
-      this.addTwice(offset + 2 * (turned ? 3 * after + r : 3 * r + after), re2, im2);
-    }
+  addCirculantOffDiagonal(offset: number, turned: boolean, row: Float64Array): void {
+    for (let r = 0; r < 3; r++)
+      for (let shift = 0; shift < 3; shift++) {
+        const c = (r + shift) % 3;
+        const e = turned ? 3 * c + r : 3 * r + c;
+        this.addTwice(offset + 2 * e, row[2 * shift]!, row[2 * shift + 1]!);
+      }
   }
 
   /** A = L·D·U in place; see FactorOutcome. The outcome object is reused. */

@@ -41,17 +41,29 @@ export function cableLaw(data: CableData, omega: number): PartLaw {
     };
   return (h, out, at) => {
     const factor = skinFactor(h, skin);
-    writeLine(r0 * factor, h * x0, h * b0, runs, out, at);
-    writeLine(r1 * factor, h * x1, h * b1, runs, out, at + 2);
+    line[0] = r0 * factor;
+    line[1] = h * x0;
+    line[2] = h * b0;
+    writeLine(runs, out, at);
+    line[0] = r1 * factor;
+    line[1] = h * x1;
+    line[2] = h * b1;
+    writeLine(runs, out, at + 2);
   };
 }
 
+/** r, x, b of the line being written; in a typed array, as plain numbers would be boxed at each call. */
+const line = new Float64Array(3);
+
 /** One sequence of the π: total series r + jx, total shunt jb, into ff, tt and ft (spaced by four). */
-function writeLine(r: number, x: number, b: number, runs: number, out: Float64Array, at: number): void {
+function writeLine(runs: number, out: Float64Array, at: number): void {
+  const r = line[0]!;
+  const x = line[1]!;
+  const b = line[2]!;
   // S = sinh(√w)/√w and T = (cosh(√w) − 1)/w are entire functions of w = (γl)² = (r + jx)·jb.
-  const wRe = -x * b;
-  const wIm = r * b;
-  entireSums(wRe, wIm);
+  sums[0] = -x * b;
+  sums[1] = r * b;
+  entireSums();
   const sRe = sums[0]!;
   const sIm = sums[1]!;
   const tRe = sums[2]!;
@@ -75,13 +87,14 @@ function writeLine(r: number, x: number, b: number, runs: number, out: Float64Ar
   out[at + 9] = -yIm;
 }
 
-/** S = sinh(√w)/√w and T = (cosh(√w) − 1)/w as re, im, re, im; a typed array, as plain numbers would be boxed. */
+/** In: w as re, im. Out: S = sinh(√w)/√w and T = (cosh(√w) − 1)/w as re, im, re, im. */
 const sums = new Float64Array(4);
 
-/** Fills `sums` for w = wRe + j·wIm. */
-function entireSums(wRe: number, wIm: number): void {
+function entireSums(): void {
+  const wRe = sums[0]!;
+  const wIm = sums[1]!;
   const size = Math.abs(wRe) + Math.abs(wIm);
-  if (size < 1e-3) sumFourTerms(wRe, wIm);
+  if (size < 1e-3) sumFourTerms();
   else if (size < 1) sumPowerSeries(wRe, wIm);
   else closedForms(wRe, wIm);
 }
@@ -90,7 +103,9 @@ function entireSums(wRe: number, wIm: number): void {
  * S = 1 + w/6·(1 + w/20·(1 + w/42)), T = ½·(1 + w/12·(1 + w/30·(1 + w/56))): short lines at ordinary
  * frequencies. Below |w| = 1e-3 the first term left out, w⁴/9!, is under 3e-18.
  */
-function sumFourTerms(wRe: number, wIm: number): void {
+function sumFourTerms(): void {
+  const wRe = sums[0]!;
+  const wIm = sums[1]!;
   let re = 1 + wRe / 42;
   let im = wIm / 42;
   let next = 1 + (re * wRe - im * wIm) / 20;

@@ -23,6 +23,7 @@ export class PhaseStamps {
   private readonly matrix: BlockMatrix;
   private readonly diagonalOffset: Int32Array;
   private readonly series: readonly SeriesStamp[];
+  private readonly entries = new Float64Array(6);
   private readonly re = new Float64Array(9);
   private readonly im = new Float64Array(9);
 
@@ -53,33 +54,33 @@ export class PhaseStamps {
 
   private writeDiagonals(): void {
     const { diagonal } = this.admittances;
-    const { matrix, diagonalOffset } = this;
+    const { matrix, diagonalOffset, entries } = this;
     for (let node = 0, i = 0; node < diagonalOffset.length; node++, i += 4) {
       const mutualR = (diagonal[i]! - diagonal[i + 2]!) / 3;
       const mutualI = (diagonal[i + 1]! - diagonal[i + 3]!) / 3;
-      const selfR = mutualR + diagonal[i + 2]!;
-      const selfI = mutualI + diagonal[i + 3]!;
-      matrix.addBalancedDiagonal(diagonalOffset[node]!, selfR, selfI, mutualR, mutualI);
+      entries[0] = mutualR + diagonal[i + 2]!;
+      entries[1] = mutualI + diagonal[i + 3]!;
+      entries[2] = mutualR;
+      entries[3] = mutualI;
+      matrix.addBalancedDiagonal(diagonalOffset[node]!, entries);
     }
   }
 
   private writeSeries(): void {
     const { values } = this.network;
+    const { entries } = this;
     for (const { at, offset, turned, cos0, cos1, cos2 } of this.series) {
       const zeroR = values[at + 8]! / 3;
       const zeroI = values[at + 9]! / 3;
       const re = values[at + 10]! / 3;
       const im = values[at + 11]! / 3;
-      this.matrix.addCirculantOffDiagonal(
-        offset,
-        turned,
-        zeroR + cos0 * re,
-        zeroI + cos0 * im,
-        zeroR + cos1 * re,
-        zeroI + cos1 * im,
-        zeroR + cos2 * re,
-        zeroI + cos2 * im,
-      );
+      entries[0] = zeroR + cos0 * re;
+      entries[1] = zeroI + cos0 * im;
+      entries[2] = zeroR + cos1 * re;
+      entries[3] = zeroI + cos1 * im;
+      entries[4] = zeroR + cos2 * re;
+      entries[5] = zeroI + cos2 * im;
+      this.matrix.addCirculantOffDiagonal(offset, turned, entries);
     }
   }
 

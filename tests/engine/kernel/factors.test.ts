@@ -102,8 +102,15 @@ describe('three-phase networks in phase coordinates', () => {
     const y1 = 50;
     const y0 = 5e-6;
     for (const node of [0, 1])
-      ldl.addBalancedDiagonal(ldl.diagonalOffset(node), (y0 + 2 * y1) / 3, 0, (y0 - y1) / 3, 0);
-    ldl.addBalancedOffDiagonal(ldl.offDiagonalOffset(0, 1), 0.4 * -y1, 0, 0.4 * 0.5 * y1, 0);
+      ldl.addBalancedDiagonal(
+        ldl.diagonalOffset(node),
+        Float64Array.of((y0 + 2 * y1) / 3, 0, (y0 - y1) / 3, 0),
+      );
+    ldl.addCirculantOffDiagonal(
+      ldl.offDiagonalOffset(0, 1),
+      false,
+      Float64Array.of(0.4 * -y1, 0, 0.4 * 0.5 * y1, 0, 0.4 * 0.5 * y1, 0),
+    );
     const x = new Float64Array(12);
     for (let k = 0; k < 3; k++) {
       x[2 * k] = Math.cos((-2 * Math.PI * k) / 3);
@@ -159,11 +166,15 @@ describe('three-phase networks in phase coordinates', () => {
         [1, 2],
         [2, 0],
       ] as const) {
-        fast.addCirculantOffDiagonal(fast.offDiagonalOffset(i, j), plan.isTransposed(i, j), 1, 4, 2, 5, 3, 6);
+        fast.addCirculantOffDiagonal(
+          fast.offDiagonalOffset(i, j),
+          plan.isTransposed(i, j),
+          Float64Array.of(1, 4, 2, 5, 3, 6),
+        );
         whole.addOffDiagonalBlock(i, j, circulant.re, circulant.im);
-        fast.addBalancedOffDiagonal(fast.offDiagonalOffset(i, j), 7, 1, 8, 9);
+        fast.addCirculantOffDiagonal(fast.offDiagonalOffset(i, j), false, Float64Array.of(7, 1, 8, 9, 8, 9));
         whole.addOffDiagonalBlock(i, j, balanced.re, balanced.im);
-        fast.addBalancedDiagonal(fast.diagonalOffset(i), 7, 1, 8, 9);
+        fast.addBalancedDiagonal(fast.diagonalOffset(i), Float64Array.of(7, 1, 8, 9));
         whole.addDiagonalBlock(i, balanced.re, balanced.im);
       }
       expect(fast.values).toEqual(whole.values);
@@ -189,7 +200,8 @@ describe('three-phase networks in phase coordinates', () => {
   it('a busbar without any admittance is reported as singular, by node', () => {
     const plan = planElimination(4, Int32Array.from([0, 1, 1, 2]));
     const ldl = new BlockLdl(plan);
-    for (const node of [0, 1, 2]) ldl.addBalancedDiagonal(ldl.diagonalOffset(node), 1, 0, 0, 0);
+    for (const node of [0, 1, 2])
+      ldl.addBalancedDiagonal(ldl.diagonalOffset(node), Float64Array.of(1, 0, 0, 0));
     expect({ ...ldl.factor() }).toEqual({
       status: 'singular',
       growth: Number.POSITIVE_INFINITY,
