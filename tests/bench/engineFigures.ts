@@ -14,9 +14,14 @@ export function editToResults(busbars: number, milliseconds = 700): number {
   return medianMicroseconds(work, milliseconds) / 1e3;
 }
 
-/** Milliseconds of a scan of `points` frequencies on an edited study, resonances refined. */
-export function scanTime(busbars: number, points: number, milliseconds = 700): number {
-  const study = benchStudy(busbars);
+/**
+ * Milliseconds of a scan of `points` frequencies on an edited study, resonances refined. The site needs phase
+ * coordinates for its single-phase loads; `balanced` leaves those out, and one sequence network answers.
+ */
+export function scanTime(busbars: number, points: number, balanced: boolean, milliseconds = 700): number {
+  const site = benchStudy(busbars);
+  const threePhase = site.elements.filter((part) => !('connection' in part));
+  const study = balanced ? { ...site, elements: threePhase } : site;
   let round = 0;
   const span = { bus: 's0b1', sequence: 'positive', fromHz: 50, toHz: 2500, points } as const;
   return (
