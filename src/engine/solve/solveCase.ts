@@ -38,8 +38,8 @@ function solve(network: Network, solver: OrderSolver): CaseSolution {
   const currents = new TerminalCurrents(network);
   const i = new Float64Array(6 * network.terminals.length);
   currents.compute('fundamental', fundamental.v, fundamental.own, i);
-  writer.add(1, fundamental.v, i, 1);
-  writer.end(1, 1, 1, false, false);
+  writer.add(fundamental.v, i, 1);
+  writer.end(1, 1, { groups: 1, magnitudesOnly: false, anglesUnknown: false });
   const rescued = solveOrders(network, solver, fundamental, currents, writer);
   const head = header(network, fundamental.iterations);
   return {
@@ -75,9 +75,9 @@ function solveOrders(
       injectionsOf(network, own, v);
       solver.solve(v);
       currents.compute('harmonic', v, own, i);
-      writer.add(h, v, i, exponent);
+      writer.add(v, i, exponent);
     }
-    writer.end(h, groups.length, exponent, alpha, anglesUnknown);
+    writer.end(h, exponent, { groups: groups.length, magnitudesOnly: alpha, anglesUnknown });
   }
   return rescued;
 }
