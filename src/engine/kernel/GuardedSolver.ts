@@ -12,7 +12,7 @@ const BACKWARD_ERROR_LIMIT = 1e-12;
 
 /**
  * How a guarded factorisation went. `method` names what gave the factor in use; anything but "direct"
- * deserves a word in the result. `backwardError` is that of a probe solve, absent when none was needed.
+ * deserves a word in the result. `backwardError` is that of a probe solve, undefined when none was needed.
  * "singular": no method found a finite factor (or, with `notFinite`, a stamped value was not finite).
  */
 export interface GuardedOutcome {
@@ -20,7 +20,7 @@ export interface GuardedOutcome {
   method: 'direct' | 'refined' | 'rerooted' | 'pivoted';
   growth: number;
   worstNode: number;
-  backwardError?: number;
+  backwardError: number | undefined;
 }
 
 /**
@@ -44,6 +44,7 @@ export class GuardedSolver<M extends KernelMatrix> {
     method: 'direct',
     growth: 0,
     worstNode: 0,
+    backwardError: undefined,
   };
   private current: { solve(x: Float64Array, count?: number): void };
   private entries: StampedEntries | undefined;
@@ -65,7 +66,7 @@ export class GuardedSolver<M extends KernelMatrix> {
     outcome.method = 'direct';
     outcome.growth = growth;
     outcome.worstNode = worstNode;
-    delete outcome.backwardError;
+    outcome.backwardError = undefined;
     if (status === 'singular' || growth > REFINE_ABOVE) this.rescue(restamp);
     return outcome;
   }

@@ -71,14 +71,13 @@ function writeLine(runs: number, out: Float64Array, at: number): void {
   const zRe = r * sRe - x * sIm;
   const zIm = r * sIm + x * sRe;
   const square = zRe * zRe + zIm * zIm;
-  const yRe = (runs * zRe) / square;
-  const yIm = (-runs * zIm) / square;
+  const share = runs / square;
+  const yRe = zRe * share;
+  const yIm = -zIm * share;
   // tanh(γl/2)/Zc = jb·T/S at each end.
-  const size = sRe * sRe + sIm * sIm;
-  const qRe = (tRe * sRe + tIm * sIm) / size;
-  const qIm = (tIm * sRe - tRe * sIm) / size;
-  const endRe = yRe - runs * b * qIm;
-  const endIm = yIm + runs * b * qRe;
+  const end = (runs * b) / (sRe * sRe + sIm * sIm);
+  const endRe = yRe - end * (tIm * sRe - tRe * sIm);
+  const endIm = yIm + end * (tRe * sRe + tIm * sIm);
   out[at] = endRe;
   out[at + 1] = endIm;
   out[at + 4] = endRe;
@@ -106,20 +105,20 @@ function entireSums(): void {
 function sumFourTerms(): void {
   const wRe = sums[0]!;
   const wIm = sums[1]!;
-  let re = 1 + wRe / 42;
-  let im = wIm / 42;
-  let next = 1 + (re * wRe - im * wIm) / 20;
-  im = (re * wIm + im * wRe) / 20;
+  let re = 1 + wRe * (1 / 42);
+  let im = wIm * (1 / 42);
+  let next = 1 + (re * wRe - im * wIm) * (1 / 20);
+  im = (re * wIm + im * wRe) * (1 / 20);
   re = next;
-  sums[0] = 1 + (re * wRe - im * wIm) / 6;
-  sums[1] = (re * wIm + im * wRe) / 6;
-  re = 1 + wRe / 56;
-  im = wIm / 56;
-  next = 1 + (re * wRe - im * wIm) / 30;
-  im = (re * wIm + im * wRe) / 30;
+  sums[0] = 1 + (re * wRe - im * wIm) * (1 / 6);
+  sums[1] = (re * wIm + im * wRe) * (1 / 6);
+  re = 1 + wRe * (1 / 56);
+  im = wIm * (1 / 56);
+  next = 1 + (re * wRe - im * wIm) * (1 / 30);
+  im = (re * wIm + im * wRe) * (1 / 30);
   re = next;
-  sums[2] = 0.5 + (re * wRe - im * wIm) / 24;
-  sums[3] = (re * wIm + im * wRe) / 24;
+  sums[2] = 0.5 + (re * wRe - im * wIm) * (1 / 24);
+  sums[3] = (re * wIm + im * wRe) * (1 / 24);
 }
 
 /** Σ w^k/(2k + 1)! and Σ w^k/(2k + 2)!; below |w| = 1 ten terms reach double precision. */
