@@ -28,6 +28,12 @@ export interface CheckContext {
   without(): SolvedCase | null;
   /** The case with these parts out of service. */
   solveWithout(without: ReadonlySet<string>): CaseSolution;
+  /** The case under the supply's distortion alone: converters keep their power and filters, not their spectra. */
+  solveBackground(without: ReadonlySet<string>): CaseSolution;
+  /** The fundamental alone, with some banks' steps replaced by one of the kvar given (0: none on). */
+  solveFundamental(steps: ReadonlyMap<string, number>): CaseSolution;
+  /** Fundamental driving-point impedance of a busbar without the correction, ohm; null without a source. */
+  networkOhm(bus: string): { re: number; im: number } | null;
   scan(span: ScanSpan, without?: ReadonlySet<string>, steps?: ReadonlyMap<string, number>): ImpedanceScan;
   /** Largest active power into the site at a PCC over all cases, kW; null when only this case is known. */
   largestKW(bus: string): number | null;

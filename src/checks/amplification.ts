@@ -25,6 +25,7 @@ export function amplification(context: CheckContext): Verdict[] {
 function rowAt(context: CheckContext, bus: string): Row {
   return {
     check: 'amplification',
+    part: 'impedance',
     title: 'amplification of injected current',
     subject: { kind: 'bus', id: bus },
     caseId: context.caseId,
@@ -70,7 +71,6 @@ function atInjector(context: CheckContext, bus: string): Verdict {
   return judged({
     ...row,
     order: worst.h,
-    part: 'impedance',
     value: worst.ratio,
     limit: LIMIT,
     working: [
@@ -117,11 +117,8 @@ function background(context: CheckContext): Verdict[] {
     ),
   );
   if (orders.size === 0) return [];
-  const converters = context.study.elements
-    .filter((part) => part.kind === 'converter')
-    .map((part) => part.id);
-  const after = context.solveWithout(new Set(converters));
-  const before = context.solveWithout(new Set([...converters, ...context.correction]));
+  const after = context.solveBackground(new Set());
+  const before = context.solveBackground(context.correction);
   const buses = new Set(
     context.study.elements.flatMap((part) =>
       'bus' in part && context.correction.has(part.id) ? [part.bus] : [],
@@ -134,7 +131,10 @@ function background(context: CheckContext): Verdict[] {
       part: 'background',
     };
     if (!after.converged || !before.converged || !context.solved.energised(bus)) {
-      return unknown(row, 'the network without its converters has no solution in this case');
+      return unknown(
+        row,
+        'the network under the distortion of its supply alone has no solution in this case',
+      );
     }
     return atBackground(context, row, bus, orders, new SolvedCase(after), new SolvedCase(before));
   });
@@ -161,7 +161,10 @@ function atBackground(
       return without > 0 ? [{ h, ratio: volts / without, with: volts, without }] : [];
     });
   const worst = worstOf(ratios);
-  if (!worst) return quiet(row, '');
+  if (!worst) {
+    const words = "No order of the supply's distortion is present at this busbar.";
+    return keptQuietly(row, words, null, LIMIT);
+  }
   return judged({
     ...row,
     order: worst.h,

@@ -18,7 +18,7 @@ const LISTED_SHARE = 0.1;
  * orders stand in orderTable.
  */
 export function busOrder(context: CheckContext): Verdict[] {
-  return context.study.buses.flatMap((bus) => atBus(context, bus));
+  return context.study.buses.flatMap((bus) => (context.solved.energised(bus.id) ? atBus(context, bus) : []));
 }
 
 function atBus(context: CheckContext, bus: Bus): Verdict[] {
@@ -34,9 +34,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict[] {
     working: [],
   };
   const spectrum = busSpectrum(context.solved, bus);
-  if (!spectrum || !context.solved.energised(bus.id)) {
-    return [unknown(row, 'the busbar has no path to a source in this case')];
-  }
+  if (!spectrum) return [unknown(row, 'the busbar carries no fundamental voltage')];
   const limits = 'set' in choice ? limitsByOrder(choice.set, bus.nominalV) : [];
   const shown = nearestToLimit(spectrum, limits);
   if (shown.length === 0) return [unknown(row, noLimitWords(choice, bus))];

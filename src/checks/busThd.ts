@@ -9,9 +9,14 @@ import { noLimitSet } from './source.ts';
 import type { Source, Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
-/** Total harmonic distortion of the voltage, one verdict a busbar, worst phase (bus-thd). */
+/**
+ * Total harmonic distortion of the voltage, one verdict a busbar, worst phase (bus-thd). A busbar without a
+ * path to a source is left to bus-voltage, which says so once.
+ */
 export function busThd(context: CheckContext): Verdict[] {
-  return context.study.buses.map((bus) => atBus(context, bus));
+  return context.study.buses.flatMap((bus) =>
+    context.solved.energised(bus.id) ? [atBus(context, bus)] : [],
+  );
 }
 
 /** What stands in for a source where no set speaks. */
@@ -41,8 +46,6 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
     source: namedSource(choice),
     working: [],
   };
-  if (!context.solved.energised(bus.id))
-    return unknown(row, 'the busbar has no path to a source in this case');
   const limit = 'set' in choice ? thdLimit(choice.set, bus.nominalV) : null;
   const thd = thdPercent(context.solved, bus, limit?.toOrder ?? context.solved.maxOrder);
   if (!thd) return unknown(row, 'the busbar carries no fundamental voltage');
@@ -66,7 +69,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
       ...angleRemarks(context.solved, unknownAngleOrders(context.solved, bus)),
       ...(screening ? [informsRemark] : []),
     ],
-    mend: () => mendWords(context, bus, thd.percent),
+    mend: () => mendWords(context, bus, thd.percent, limit.toOrder),
   });
 }
 
@@ -78,9 +81,9 @@ export function noLimitWords(choice: Choice, bus: Bus): string {
     : `${choice.set.label} holds no harmonic limits; choose another set`;
 }
 
-function mendWords(context: CheckContext, bus: Bus, percent: number): string {
+function mendWords(context: CheckContext, bus: Bus, percent: number, toOrder: number): string {
   const without = context.without();
-  const before = without ? thdPercent(without, bus, without.maxOrder)?.percent : undefined;
+  const before = without ? thdPercent(without, bus, toOrder)?.percent : undefined;
   return before !== undefined && before < percent
     ? `The correction raises it from ${figure(before, 3)} %: detune the bank below the lowest present order, or move its steps away from the resonance.`
     : 'Filter the lowest large order, fit chokes or higher pulse numbers at the converters, or stiffen the supply.';

@@ -1,5 +1,11 @@
-import { type CaseSolution, scanImpedance, solveCase } from '../engine/index.ts';
-import type { Study, StudyCase } from '../study/index.ts';
+import {
+  type CaseSolution,
+  type DrivingPoints,
+  drivingPoints,
+  scanImpedance,
+  solveCase,
+} from '../engine/index.ts';
+import type { BankStep, CaseChange, Study, StudyCase } from '../study/index.ts';
 import { casesOf, isOn, studyInCase } from '../study/index.ts';
 import { amplification } from './amplification.ts';
 import { bankDuty } from './bankDuty.ts';
@@ -93,6 +99,7 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
   const found = casesOf(base).find(({ id }) => id === caseId);
   const correction = correctionIds(study);
   const solved = new SolvedCase(solution);
+  let network: DrivingPoints | undefined;
   let without: SolvedCase | null | undefined = correction.size === 0 ? null : undefined;
   const solveWithout = (ids: ReadonlySet<string>): CaseSolution => solveCase(base, caseId, { without: ids });
   return {
@@ -113,6 +120,14 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
       return without;
     },
     solveWithout,
+    solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
+    solveFundamental: (steps) => solveCase({ ...withSteps(base, caseId, steps), maxOrder: 1 }, caseId),
+    networkOhm: (bus) => {
+      network ??= drivingPoints(base, caseId, 1, { without: correction });
+      const index = study.buses.findIndex(({ id }) => id === bus);
+      if (network.present[index] !== 1) return null;
+      return { re: network.re[index] ?? 0, im: network.im[index] ?? 0 };
+    },
     scan(span, ids = new Set(), steps = new Map()) {
       const asked = steps.size === 0 ? base : withSteps(base, caseId, steps);
       return scanImpedance(asked, caseId, span, { without: ids });
@@ -121,9 +136,27 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
   };
 }
 
-/** The study with some banks' steps replaced, in one case, by a single step of the kvar given. */
+/** The study with some banks' steps replaced, in one case, by a single step of the kvar given; 0: none on. */
 function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
-  const changes = [...steps].map(([element, kvar]) => ({ element, set: { steps: [{ kvar }] } }));
+  const step = (kvar: number): BankStep[] => (kvar > 0 ? [{ kvar }] : [{ kvar: 1, on: false }]);
+  return withChanges(
+    study,
+    caseId,
+    [...steps].map(([element, kvar]) => ({ element, set: { steps: step(kvar) } })),
+  );
+}
+
+/** The study with every converter's spectrum emptied in one case. */
+function silenced(study: Study, caseId: string): Study {
+  const converters = study.elements.filter((part) => part.kind === 'converter');
+  return withChanges(
+    study,
+    caseId,
+    converters.map(({ id }) => ({ element: id, set: { spectrum: [] } })),
+  );
+}
+
+function withChanges(study: Study, caseId: string, changes: readonly CaseChange[]): Study {
   const cases: StudyCase[] = casesOf(study).map((item) =>
     item.id === caseId ? { ...item, changes: [...item.changes, ...changes] } : item,
   );

@@ -18,9 +18,13 @@ export function margin(value: number, limit: number, reference = 0, sense: Sense
   return (sense === 'upper' ? limit - value : value - limit) / room;
 }
 
-/** fail below 0, watch below 0.10, else pass; a screening rule only ever says watch or pass. */
-export function verdictWord(marginValue: number, screening = false): VerdictWord {
+/** fail below 0, watch below `watchBelow` (0.10), else pass; a screening rule only ever says watch or pass. */
+export function verdictWord(
+  marginValue: number,
+  screening = false,
+  watchBelow: number = WATCH_MARGIN,
+): VerdictWord {
   if (screening) return marginValue < 0 ? 'watch' : 'pass';
   if (marginValue < 0) return 'fail';
-  return marginValue < WATCH_MARGIN ? 'watch' : 'pass';
+  return marginValue < watchBelow ? 'watch' : 'pass';
 }

@@ -7,7 +7,8 @@ import { figure, ordinal } from './figure.ts';
 import { inflowAt } from './inflow.ts';
 import { currentSetFor } from './limits/choice.ts';
 import { type CurrentRowLimits, currentLimits } from './limits/currentLimit.ts';
-import { margin, WATCH_MARGIN } from './margin.ts';
+import { margin, verdictWord, WATCH_MARGIN } from './margin.ts';
+import type { SolvedCase } from './SolvedCase.ts';
 import type { Verdict, Working } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
@@ -27,8 +28,7 @@ export function pccCurrent(context: CheckContext): Verdict[] {
 }
 
 /** I_h into the site by order (index h − 1), amperes: the larger phase; feeders are added by magnitude. */
-function harmonicAmperes(context: CheckContext, terminals: readonly number[]): number[] {
-  const { solved } = context;
+function harmonicAmperes(solved: SolvedCase, terminals: readonly number[]): number[] {
   return Array.from({ length: solved.maxOrder }, (_, index) =>
     Math.max(
       ...[0, 1, 2].map((k) =>
@@ -64,7 +64,8 @@ function atPcc(context: CheckContext, bus: Bus): Verdict[] {
   const shortCircuitA = (shortCircuitMVA * 1e6) / (Math.sqrt(3) * bus.nominalV);
   const limits = currentLimits(choice.set, bus.nominalV, shortCircuitA / demandA);
   if (!limits) return [unknown(row, `${choice.set.label} has no current limits here; choose another set`)];
-  const amperes = harmonicAmperes(context, inflow.terminals);
+  const amperes = harmonicAmperes(context.solved, inflow.terminals);
+  const before = beforeCorrection(context, bus);
   const ratio: Working = {
     equation: 'Isc / I_L',
     numbers: `${figure(shortCircuitA)} A / ${figure(demandA)} A = ${figure(shortCircuitA / demandA)}: ${limits.words}`,
@@ -75,20 +76,38 @@ function atPcc(context: CheckContext, bus: Bus): Verdict[] {
       : [];
   const base: Row = { ...row, remarks: remark };
   return [
-    tdd(context, base, limits, amperes, demandA, ratio),
-    ...orders(context, base, limits, amperes, demandA, ratio),
+    tdd(context, base, limits, { amperes, before, demandA, ratio }),
+    ...orders(context, base, limits, { amperes, before, demandA, ratio }),
   ];
 }
 
-function tdd(
-  context: CheckContext,
-  row: Row,
-  limits: CurrentRowLimits,
-  amperes: number[],
-  demandA: number,
-  ratio: Working,
-): Verdict {
-  const harmonicA = Math.sqrt(amperes.slice(1, 50).reduce((sum, ampere) => sum + ampere ** 2, 0));
+/** Currents at the PCC by order, with the correction and without, and what they are measured against. */
+interface Emission {
+  amperes: number[];
+  /** The same without the correction; null where there is none or that case has no solution. */
+  before: number[] | null;
+  demandA: number;
+  ratio: Working;
+}
+
+function beforeCorrection(context: CheckContext, bus: Bus): number[] | null {
+  const without = context.without();
+  const inflow = without ? inflowAt(context.study, without, bus.id) : null;
+  return without && inflow ? harmonicAmperes(without, inflow.terminals) : null;
+}
+
+function withoutCorrection(percent: number | null, limit: number): Pick<Row, 'withoutCorrection'> {
+  if (percent === null) return {};
+  return { withoutCorrection: { value: percent, verdict: verdictWord(margin(percent, limit)) } };
+}
+
+/** √(Σ I_h²), h = 2 to 50. */
+const totalOf = (amperes: readonly number[]): number =>
+  Math.sqrt(amperes.slice(1, 50).reduce((sum, ampere) => sum + ampere ** 2, 0));
+
+function tdd(context: CheckContext, row: Row, limits: CurrentRowLimits, emission: Emission): Verdict {
+  const { amperes, before, demandA, ratio } = emission;
+  const harmonicA = totalOf(amperes);
   const value = (harmonicA / demandA) * 100;
   const unknownOrders = amperes.flatMap((ampere, index) =>
     index > 0 && ampere > 1e-3 * demandA && context.solved.anglesUnknown(index + 1) ? [index + 1] : [],
@@ -99,6 +118,7 @@ function tdd(
     value,
     limit: limits.tdd.value,
     source: limits.tdd.source,
+    ...withoutCorrection(before && (totalOf(before) / demandA) * 100, limits.tdd.value),
     working: [
       ratio,
       {
@@ -111,14 +131,8 @@ function tdd(
   });
 }
 
-function orders(
-  context: CheckContext,
-  row: Row,
-  limits: CurrentRowLimits,
-  amperes: number[],
-  demandA: number,
-  ratio: Working,
-): Verdict[] {
+function orders(context: CheckContext, row: Row, limits: CurrentRowLimits, emission: Emission): Verdict[] {
+  const { amperes, before, demandA, ratio } = emission;
   const found = amperes
     .map((ampere, index) => ({
       h: index + 1,
@@ -141,6 +155,7 @@ function orders(
         value: percent,
         limit: limit.value,
         source: limit.source,
+        ...withoutCorrection(before && ((before[h - 1] ?? 0) / demandA) * 100, limit.value),
         working: [
           ratio,
           {

@@ -3,7 +3,9 @@ import { busById } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { kvarOn } from './correctionBranch.ts';
 import { voltageSetFor } from './limits/choice.ts';
-import { voltageLimit } from './limits/voltageLimit.ts';
+import { iec61000x2x4 } from './limits/iec61000-2-4.ts';
+import { limitsByOrder } from './limits/limitsByOrder.ts';
+import type { LimitSet } from './limits/types.ts';
 import type { SolvedCase } from './SolvedCase.ts';
 
 /** Positive- and negative-sequence content meets positive-sequence peaks, zero-sequence content the zero ones. */
@@ -23,16 +25,20 @@ export function contentVolts(solved: SolvedCase, bus: number, h: number, content
   return content === 'positive' ? Math.sqrt(lines) / 3 : Math.sqrt(Math.max(0, 3 * phases - lines)) / 3;
 }
 
+/** Measures presence where the chosen set holds no harmonic limits: an order does not vanish with its limit. */
+const fallback: LimitSet = iec61000x2x4[1] as LimitSet;
+
 function presentByVoltage(context: CheckContext, bus: Bus, content: Content): number[] {
   const solved = context.without() ?? context.solved;
   const choice = voltageSetFor(context.study, context.pccBuses.has(bus.id));
-  if (!('set' in choice) || !solved.energised(bus.id)) return [];
+  if (!solved.energised(bus.id)) return [];
+  const measure = limitsByOrder('set' in choice && choice.set.voltage ? choice.set : fallback, bus.nominalV);
   const index = solved.bus(bus.id);
   const fundamental = contentVolts(solved, index, 1, 'positive');
   if (fundamental <= 0) return [];
   const orders: number[] = [];
   for (let h = 2; h <= solved.maxOrder; h++) {
-    const limit = voltageLimit(choice.set, h, bus.nominalV);
+    const limit = measure[h - 2];
     const percent = (contentVolts(solved, index, h, content) / fundamental) * 100;
     if (limit && percent >= context.presence.voltageShareOfLimit * limit.value) orders.push(h);
   }

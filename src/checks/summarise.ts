@@ -21,9 +21,15 @@ export function summarise(verdicts: readonly Verdict[]): Record<VerdictWord, num
   return count;
 }
 
-/** The smallest margin among verdicts that may decide: screening rows and unknowns stay out. */
+/** Checks that a map of margins draws as contours, not as its worst margin. */
+const contours: ReadonlySet<string> = new Set(['target-pf', 'delivered-kvar']);
+
+/**
+ * The smallest margin among verdicts that may decide. Screening rows and unknowns stay out, and so do
+ * target-pf and delivered-kvar: more correction always mends those, so they bound a choice, not rank it.
+ */
 export function worstMargin(verdicts: readonly Verdict[]): Verdict | undefined {
-  return sortByMargin(verdicts.filter((verdict) => !verdict.screening && verdict.margin !== null)).sort(
-    (a, b) => (a.margin ?? 0) - (b.margin ?? 0),
-  )[0];
+  return sortByMargin(
+    verdicts.filter(({ check, screening, margin }) => !screening && margin !== null && !contours.has(check)),
+  ).sort((a, b) => (a.margin ?? 0) - (b.margin ?? 0))[0];
 }

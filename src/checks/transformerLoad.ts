@@ -3,7 +3,7 @@ import { isOn, nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { angleRemarks } from './distortion.ts';
 import { figure } from './figure.ts';
-import { SolvedCase } from './SolvedCase.ts';
+import type { SolvedCase } from './SolvedCase.ts';
 import { type HarmonicLoss, harmonicLoss, permissibleLoad } from './transformerHeating.ts';
 import type { Source, Verdict, Working } from './types.ts';
 import { judged, keptQuietly, type Row, unknown } from './verdict.ts';
@@ -19,7 +19,7 @@ const NEGLIGIBLE_LOSS_FACTOR = 1.01;
 
 /**
  * Transformer loading with harmonic derating (transformer-load): (I_rms/I_N)/√((1+P_EC)/(1+F_HL·P_EC)) ≤ 1,
- * on the side and phase that is loaded most. Without P_EC-R an overload on rms alone still fails; otherwise
+ * on the side and phase that is heated most. Without P_EC-R an overload on rms alone still fails; otherwise
  * there is no verdict.
  */
 export function transformerLoad(context: CheckContext): Verdict[] {
@@ -36,28 +36,29 @@ interface Side {
   loss: HarmonicLoss;
 }
 
-function sideOf(
-  solved: SolvedCase,
-  part: Transformer,
-  bus: string,
-  ratedV: number,
-  words: string,
-): Side | null {
+function sideOf(solved: SolvedCase, part: Transformer, bus: string, ratedV: number, words: string): Side[] {
   const terminal = solved.terminal(part.id, bus);
-  if (terminal === undefined) return null;
+  if (terminal === undefined) return [];
   const ratedA = (part.ratedKVA * 1000) / (Math.sqrt(3) * ratedV);
-  const phase = SolvedCase.worstPhase((k) => solved.rmsAmperes(terminal, k));
-  const amperes = Array.from({ length: solved.maxOrder }, (_, i) => solved.amperes(terminal, i + 1, phase));
-  const loss = harmonicLoss(amperes, ratedA);
-  return loss ? { words, phase, ratedA, terminal, loss } : null;
+  return [0, 1, 2].flatMap((phase) => {
+    const amperes = Array.from({ length: solved.maxOrder }, (_, i) => solved.amperes(terminal, i + 1, phase));
+    const loss = harmonicLoss(amperes, ratedA);
+    return loss ? [{ words, phase, ratedA, terminal, loss }] : [];
+  });
+}
+
+/** Load over what P_EC-R permits; without the share, the rms load alone. */
+function heat({ loss, ratedA }: Side, share = 0): number {
+  return loss.rmsA / ratedA / permissibleLoad(loss.lossFactor, share);
 }
 
 function heaviestSide(solved: SolvedCase, part: Transformer): Side | null {
   const sides = [
-    sideOf(solved, part, part.to, part.lvV, 'LV side'),
-    sideOf(solved, part, part.from, part.hvV, 'HV side'),
-  ].filter((side) => side !== null);
-  return sides.sort((a, b) => b.loss.rmsA / b.ratedA - a.loss.rmsA / a.ratedA)[0] ?? null;
+    ...sideOf(solved, part, part.to, part.lvV, 'LV side'),
+    ...sideOf(solved, part, part.from, part.hvV, 'HV side'),
+  ];
+  const share = part.eddyLossShare;
+  return sides.sort((a, b) => heat(b, share) - heat(a, share))[0] ?? null;
 }
 
 function atTransformer(context: CheckContext, part: Transformer): Verdict {

@@ -25,6 +25,8 @@ export interface JudgedRow extends Row {
   limit: number;
   reference?: number;
   sense?: Sense;
+  /** Where a check's own rule sets another watch band than the margin of 0.10. */
+  watchBelow?: number;
   /** What would mend it; asked for only when it is no pass. */
   mend?: string | (() => string);
 }
@@ -72,7 +74,7 @@ function build(row: Row, outcome: Outcome): Verdict {
 export function judged(row: JudgedRow): Verdict {
   const { value, limit } = row;
   const marginValue = margin(value, limit, row.reference, row.sense);
-  const verdict = verdictWord(marginValue, row.screening);
+  const verdict = verdictWord(marginValue, row.screening, row.watchBelow);
   const mend = verdict === 'pass' ? undefined : typeof row.mend === 'function' ? row.mend() : row.mend;
   return build(row, { value, limit, margin: marginValue, verdict, remarks: row.remarks ?? [], mend });
 }

@@ -151,7 +151,7 @@ describe('steady voltage', () => {
     expect([95, 105]).toContain(verdict.limit);
   });
 
-  it('is unknown on a busbar without a path to a source', () => {
+  it('is unknown on a busbar without a path to a source, and the one row that says so', () => {
     const study = site({
       study: {
         buses: [
@@ -162,8 +162,7 @@ describe('steady voltage', () => {
       },
     });
     expect(one(verdictsOf(study), 'bus-voltage', 'X')).toMatchObject({ verdict: 'unknown', value: null });
-    expect(one(verdictsOf(study), 'bus-thd', 'X').verdict).toBe('unknown');
-    expect(one(verdictsOf(study), 'bus-order', 'X').verdict).toBe('unknown');
+    expect(verdictsOf(study).filter(({ subject }) => subject.id === 'X')).toHaveLength(1);
   });
 });
 

@@ -1,4 +1,6 @@
 import type { Bank, Study } from '../../study/index.ts';
+import { ansiC84x1 } from './ansic84.ts';
+import { en50160 } from './en50160.ts';
 import { limitSet } from './limitSets.ts';
 import type { LimitSet } from './types.ts';
 
@@ -23,16 +25,15 @@ export function voltageSetFor(study: Study, isPcc: boolean): Choice {
 }
 
 /**
- * Steady voltage band: the study's own choice where that document states one, else EN 50160 ±10 % at
- * 50 Hz and ANSI C84.1 range A ±5 % at 60 Hz.
+ * Steady voltage band: ANSI C84.1 range A ±5 % at 60 Hz; at 50 Hz the study's own choice where that document
+ * states one, else EN 50160 ±10 %. A harmonic set chosen at 60 Hz does not bring the band of 50 Hz systems.
  */
 export function bandSetFor(study: Study, isPcc: boolean): LimitSet {
+  if (study.frequencyHz === 60) return ansiC84x1;
   const chosen = isPcc ? study.limits?.pcc : study.limits?.internal;
   const set = chosen === undefined ? undefined : limitSet(chosen);
   if (set?.band) return set;
-  const fallback = limitSet(study.frequencyHz === 60 ? 'ansi-c84.1' : 'en-50160');
-  if (!fallback) throw new RangeError('the shipped limit sets lack a voltage band');
-  return fallback;
+  return en50160;
 }
 
 /** Current set at the PCC: the study's choice, IEEE 519-2022 at 60 Hz; none by default at 50 Hz. */
