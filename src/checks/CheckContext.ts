@@ -34,6 +34,8 @@ export interface CheckContext {
   solveFundamental(steps: ReadonlyMap<string, number>): CaseSolution;
   /** Fundamental driving-point impedance of a busbar without the correction, ohm; null without a source. */
   networkOhm(bus: string): { re: number; im: number } | null;
+  /** The same with every coupler closed. */
+  coupledOhm(bus: string): { re: number; im: number } | null;
   scan(span: ScanSpan, without?: ReadonlySet<string>, steps?: ReadonlyMap<string, number>): ImpedanceScan;
   /** Largest active power into the site at a PCC over all cases, kW; null when only this case is known. */
   largestKW(bus: string): number | null;

@@ -36,6 +36,10 @@ function networkSide(study: Study, bus: string, sources: readonly (Supply | Gene
   return reached;
 }
 
+/** Busbars on the network's side of a busbar, itself left out. */
+export const networkSideOf = (study: Study, bus: string): ReadonlySet<string> =>
+  networkSide(study, bus, sourcesOf(study));
+
 /** The in-service parts at a busbar through which the network feeds it. */
 function feedersOf(study: Study, bus: string): StudyElement[] {
   const sources = sourcesOf(study);

@@ -8,21 +8,37 @@ import {
 import type { BankStep, CaseChange, Study, StudyCase } from '../study/index.ts';
 import { casesOf, isOn, studyInCase } from '../study/index.ts';
 import { amplification } from './amplification.ts';
+import { backgroundDuty } from './backgroundDuty.ts';
 import { bankDuty } from './bankDuty.ts';
 import { busOrder } from './busOrder.ts';
 import { busThd } from './busThd.ts';
 import { busVoltage } from './busVoltage.ts';
 import { type CheckContext, defaultPresence, type PresenceThresholds } from './CheckContext.ts';
 import { cableLoad } from './cableLoad.ts';
+import { controllerSetting } from './controllerSetting.ts';
+import { deliveredKvar } from './deliveredKvar.ts';
+import { discharge, reconnection } from './discharge.ts';
+import { faultLevel } from './faultLevel.ts';
 import { filterDuty } from './filterDuty.ts';
+import { generatorLeading } from './generatorLeading.ts';
 import { inflowAt } from './inflow.ts';
+import { inrush } from './inrush.ts';
+import { lightLoadRise } from './lightLoadRise.ts';
+import { mixedBank } from './mixedBank.ts';
+import { motorHvf } from './motorHvf.ts';
 import { pccBusesOf } from './pcc.ts';
 import { pccCurrent } from './pccCurrent.ts';
+import { pfCeiling } from './pfCeiling.ts';
+import { reactorDuty } from './reactorDuty.ts';
 import { resonanceDistance } from './resonanceDistance.ts';
+import { rippleSignal } from './rippleSignal.ts';
 import { SolvedCase } from './SolvedCase.ts';
+import { selfExcitation } from './selfExcitation.ts';
+import { stepChange } from './stepChange.ts';
 import { sortByMargin } from './summarise.ts';
 import { targetPF } from './targetPF.ts';
 import { transformerLoad } from './transformerLoad.ts';
+import { tuningOrder } from './tuningOrder.ts';
 import type { Verdict } from './types.ts';
 import { unbalance } from './unbalance.ts';
 
@@ -32,26 +48,41 @@ export type Check = (context: CheckContext) => Verdict[];
 /** Checks that read the solution alone. */
 const direct: readonly Check[] = [
   targetPF,
+  deliveredKvar,
+  pfCeiling,
   busVoltage,
+  lightLoadRise,
+  stepChange,
   unbalance,
   busThd,
   busOrder,
   pccCurrent,
   bankDuty,
+  reactorDuty,
+  tuningOrder,
+  backgroundDuty,
   filterDuty,
   transformerLoad,
   cableLoad,
+  motorHvf,
+  selfExcitation,
+  inrush,
+  discharge,
+  reconnection,
+  controllerSetting,
+  generatorLeading,
+  faultLevel,
 ];
 
-/** Screening rules, which scan the network again and again: the slower half. */
-const scanning: readonly Check[] = [amplification, resonanceDistance];
+/** Rows that scan the network again and again, most of them screening rules: the slower half. */
+const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, rippleSignal];
 
 export interface JudgeOptions {
   /** The same case with every bank and filter out, where the caller has solved it already. */
   withoutCorrection?: CaseSolution;
   /** Solutions of other cases already at hand: they tell the largest case's power. */
   otherCases?: readonly CaseSolution[];
-  /** False leaves the scanning screens (amplification, resonance-distance) out, for a first fast answer. */
+  /** False leaves the scanning screens (amplification, resonance-distance, mixed-bank, ripple-signal) out, for a first fast answer. */
   screening?: boolean;
   presence?: PresenceThresholds;
 }
@@ -100,6 +131,7 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
   const correction = correctionIds(study);
   const solved = new SolvedCase(solution);
   let network: DrivingPoints | undefined;
+  let coupled: DrivingPoints | undefined;
   let without: SolvedCase | null | undefined = correction.size === 0 ? null : undefined;
   const solveWithout = (ids: ReadonlySet<string>): CaseSolution => solveCase(base, caseId, { without: ids });
   return {
@@ -122,11 +154,13 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
     solveWithout,
     solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
     solveFundamental: (steps) => solveCase({ ...withSteps(base, caseId, steps), maxOrder: 1 }, caseId),
-    networkOhm: (bus) => {
+    networkOhm(bus) {
       network ??= drivingPoints(base, caseId, 1, { without: correction });
-      const index = study.buses.findIndex(({ id }) => id === bus);
-      if (network.present[index] !== 1) return null;
-      return { re: network.re[index] ?? 0, im: network.im[index] ?? 0 };
+      return pointAt(study, network, bus);
+    },
+    coupledOhm(bus) {
+      coupled ??= drivingPoints(couplersClosed(base, caseId), caseId, 1, { without: correction });
+      return pointAt(study, coupled, bus);
     },
     scan(span, ids = new Set(), steps = new Map()) {
       const asked = steps.size === 0 ? base : withSteps(base, caseId, steps);
@@ -154,6 +188,20 @@ function silenced(study: Study, caseId: string): Study {
     caseId,
     converters.map(({ id }) => ({ element: id, set: { spectrum: [] } })),
   );
+}
+
+function couplersClosed(study: Study, caseId: string): Study {
+  const couplers = study.elements.filter((part) => part.kind === 'coupler');
+  return withChanges(
+    study,
+    caseId,
+    couplers.map(({ id }) => ({ element: id, set: { on: true } })),
+  );
+}
+
+function pointAt(study: Study, points: DrivingPoints, bus: string): { re: number; im: number } | null {
+  const index = study.buses.findIndex(({ id }) => id === bus);
+  return points.present[index] === 1 ? { re: points.re[index] ?? 0, im: points.im[index] ?? 0 } : null;
 }
 
 function withChanges(study: Study, caseId: string, changes: readonly CaseChange[]): Study {

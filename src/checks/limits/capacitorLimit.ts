@@ -1,5 +1,5 @@
-import { ieee18 } from './capacitorSets.ts';
-import type { CapacitorVoltageRow, LimitSet } from './types.ts';
+import { iec60831x1, ieee18 } from './capacitorSets.ts';
+import type { CapacitorVoltageRow, DischargeRow, LimitSet } from './types.ts';
 import { citation, type Limit } from './voltageLimit.ts';
 
 /**
@@ -35,4 +35,18 @@ export function capacitorKvarLimit(set: LimitSet): Limit | null {
   const own = set.capacitor?.kvarRatio;
   if (own) return { value: own.value, source: citation(set, own) };
   return set === ieee18 || !ieee18.capacitor ? null : capacitorKvarLimit(ieee18);
+}
+
+/** Residual voltage and time after disconnection of a capacitor of this rated voltage; null without limits. */
+export function dischargeLimit(set: LimitSet, ratedV: number): (DischargeRow & Pick<Limit, 'source'>) | null {
+  const discharge = set.capacitor?.discharge;
+  const row = discharge?.rows.find(({ upToV }) => upToV === undefined || ratedV <= upToV);
+  return discharge && row ? { ...row, source: citation(set, discharge) } : null;
+}
+
+/** Peak of the inrush current over I_N. Documents that are silent borrow IEC 60831-1, named in the source. */
+export function inrushLimit(set: LimitSet): Limit | null {
+  const own = set.capacitor?.inrushRatio;
+  if (own) return { value: own.value, source: citation(set, own) };
+  return set === iec60831x1 || !iec60831x1.capacitor ? null : inrushLimit(iec60831x1);
 }

@@ -22,6 +22,12 @@ export const iec60831x1: LimitSet = {
       provenance: 'memory',
       rows: [...shortTime, { upToHours: 8, ratio: 1.1, words: '8 h in 24 h' }, continuous],
     },
+    discharge: {
+      clause: 'discharge devices, 75 V in 3 min',
+      provenance: 'memory',
+      rows: [{ residualV: 75, seconds: 180 }],
+    },
+    inrushRatio: { value: 100, clause: 'switching, guide value of the peak', provenance: 'memory' },
     currentRatio: {
       value: 1.3,
       clause: 'maximum permissible current',
@@ -43,6 +49,12 @@ export const iec60871x1: LimitSet = {
       provenance: 'memory',
       rows: [...shortTime, { upToHours: 12, ratio: 1.1, words: '12 h in 24 h' }, continuous],
     },
+    discharge: {
+      clause: 'discharge devices, 75 V in 10 min',
+      provenance: 'memory',
+      rows: [{ residualV: 75, seconds: 600 }],
+    },
+    inrushRatio: { value: 100, clause: 'switching, guide value of the peak', provenance: 'memory' },
     currentRatio: { value: 1.3, clause: 'maximum permissible current', provenance: 'memory' },
   },
 };
@@ -58,6 +70,15 @@ export const ieee18: LimitSet = {
       clause: 'continuous overload capability',
       provenance: 'memory',
       rows: [{ upToHours: 24, ratio: 1.1, words: '110 % of rated rms voltage, contingency' }],
+    },
+    discharge: {
+      clause: 'discharge, 50 V in 1 min up to 600 V, in 5 min above',
+      provenance: 'memory',
+      note: 'NEC 460 asks the same up to 600 V (second-hand).',
+      rows: [
+        { upToV: 600, residualV: 50, seconds: 60 },
+        { residualV: 50, seconds: 300 },
+      ],
     },
     currentRatio: {
       value: 1.35,

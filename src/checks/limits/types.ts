@@ -89,8 +89,18 @@ export interface CapacitorVoltageRow {
   words: string;
 }
 
+/** Residual voltage allowed so many seconds after disconnection, for rated voltages up to upToV. */
+export interface DischargeRow {
+  upToV?: number;
+  residualV: number;
+  seconds: number;
+}
+
 export interface CapacitorLimits {
   voltage: Cited & { rows: CapacitorVoltageRow[] };
+  discharge: Cited & { rows: DischargeRow[] };
+  /** Peak of the inrush current, multiples of I_N; absent where the document is silent. */
+  inrushRatio?: CitedValue;
   currentRatio: CitedValue;
   peakRatio?: CitedValue;
   kvarRatio?: CitedValue;
