@@ -32,9 +32,9 @@ export interface CheckContext {
   solveBackground(without: ReadonlySet<string>): CaseSolution;
   /** The fundamental alone, with some banks' steps replaced by one of the kvar given (0: none on). */
   solveFundamental(steps: ReadonlyMap<string, number>): CaseSolution;
-  /** Fundamental driving-point impedance of a busbar without the correction, ohm; null without a source. */
+  /** Fundamental impedance of the network alone (sources and series parts) at a busbar, ohm; null without a source. */
   networkOhm(bus: string): { re: number; im: number } | null;
-  /** The same with every coupler closed. */
+  /** The same with loads and motors, every coupler closed; the correction left out. */
   coupledOhm(bus: string): { re: number; im: number } | null;
   scan(span: ScanSpan, without?: ReadonlySet<string>, steps?: ReadonlyMap<string, number>): ImpedanceScan;
   /** Largest active power into the site at a PCC over all cases, kW; null when only this case is known. */

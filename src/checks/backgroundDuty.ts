@@ -14,6 +14,8 @@ import { judged, unknown } from './verdict.ts';
 
 /** The compatibility levels together exceed this THD; as a set they are scaled to it. */
 const THD_PERCENT = 8;
+/** Above the 25th public networks seldom carry enough to count (common practice). */
+const LAST_ORDER = 25;
 
 interface OrderShare {
   h: number;
@@ -42,7 +44,7 @@ export function backgroundShares(
 
 /**
  * Bank current from supply distortion alone (background): each order at its compatibility level
- * (IEC 61000-2-2, above 1 kV -2-12), then all of them scaled to THD 8 %, at the bank's own terminals:
+ * (IEC 61000-2-2, above 1 kV -2-12) to the 25th, then all of them scaled to THD 8 %, at the bank's own terminals:
  * I_h/I_1 = u_h·(1 − p)/|h·p − 1/h|, losses counted. Limit as bank-current. Judged once: it depends on the
  * bank alone. Triplens meet a star-earthed bank only.
  */
@@ -62,7 +64,7 @@ function atBank(context: CheckContext, { bank, bus, p }: LiveBank): Verdict {
   });
   const set = bus.nominalV <= 1000 ? iec61000x2x2 : iec61000x2x12;
   const levels = limitsByOrder(set, bus.nominalV).flatMap((level) =>
-    level && level.h <= context.solved.maxOrder ? [level] : [],
+    level && level.h <= LAST_ORDER ? [level] : [],
   );
   if (!limit || levels.length === 0) {
     const missing = limit

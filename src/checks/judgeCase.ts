@@ -6,7 +6,7 @@ import {
   solveCase,
 } from '../engine/index.ts';
 import type { BankStep, CaseChange, Study, StudyCase } from '../study/index.ts';
-import { casesOf, isOn, studyInCase } from '../study/index.ts';
+import { casesOf, isOn, isSeries, studyInCase } from '../study/index.ts';
 import { amplification } from './amplification.ts';
 import { backgroundDuty } from './backgroundDuty.ts';
 import { bankDuty } from './bankDuty.ts';
@@ -52,7 +52,6 @@ const direct: readonly Check[] = [
   pfCeiling,
   busVoltage,
   lightLoadRise,
-  stepChange,
   unbalance,
   busThd,
   busOrder,
@@ -74,15 +73,18 @@ const direct: readonly Check[] = [
   faultLevel,
 ];
 
-/** Rows that scan the network again and again, most of them screening rules: the slower half. */
-const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, rippleSignal];
+/** Rows that solve or scan the network again and again, most of them screening rules: the slower half. */
+const scanning: readonly Check[] = [stepChange, amplification, resonanceDistance, mixedBank, rippleSignal];
 
 export interface JudgeOptions {
   /** The same case with every bank and filter out, where the caller has solved it already. */
   withoutCorrection?: CaseSolution;
   /** Solutions of other cases already at hand: they tell the largest case's power. */
   otherCases?: readonly CaseSolution[];
-  /** False leaves the scanning screens (amplification, resonance-distance, mixed-bank, ripple-signal) out, for a first fast answer. */
+  /**
+   * False leaves out what solves or scans anew (step-change, amplification, resonance-distance, mixed-bank,
+   * ripple-signal), for a first fast answer.
+   */
   screening?: boolean;
   presence?: PresenceThresholds;
 }
@@ -155,7 +157,7 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
     solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
     solveFundamental: (steps) => solveCase({ ...withSteps(base, caseId, steps), maxOrder: 1 }, caseId),
     networkOhm(bus) {
-      network ??= drivingPoints(base, caseId, 1, { without: correction });
+      network ??= drivingPoints(base, caseId, 1, { without: consumers(study) });
       return pointAt(study, network, bus);
     },
     coupledOhm(bus) {
@@ -187,6 +189,15 @@ function silenced(study: Study, caseId: string): Study {
     study,
     caseId,
     converters.map(({ id }) => ({ element: id, set: { spectrum: [] } })),
+  );
+}
+
+/** All that hangs on the network without feeding it. */
+function consumers(study: Study): Set<string> {
+  return new Set(
+    study.elements
+      .filter((part) => !isSeries(part) && part.kind !== 'supply' && part.kind !== 'generator')
+      .map(({ id }) => id),
   );
 }
 

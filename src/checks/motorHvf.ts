@@ -6,7 +6,7 @@ import { figure } from './figure.ts';
 import { motorLimit } from './limits/motorLimits.ts';
 import { margin, verdictWord } from './margin.ts';
 import { partRow } from './partRow.ts';
-import { SolvedCase } from './SolvedCase.ts';
+import type { SolvedCase } from './SolvedCase.ts';
 import type { Verdict } from './types.ts';
 import { judged, unknown } from './verdict.ts';
 
@@ -40,16 +40,15 @@ function worstFactor(
   oddOnly: boolean,
 ): { value: number; phase: number } {
   const index = solved.bus(busId);
-  const factor = (phase: number): number =>
-    harmonicVoltageFactor(
-      Array.from(
-        { length: solved.maxOrder },
-        (_, i) => solved.volts(index, i + 1, phase) / (nominalV / Math.sqrt(3)),
-      ),
-      oddOnly,
-    );
-  const phase = SolvedCase.worstPhase(factor);
-  return { value: factor(phase), phase };
+  const perUnit = new Array<number>(solved.maxOrder).fill(0);
+  let worst = { value: -1, phase: 0 };
+  for (let phase = 0; phase < 3; phase++) {
+    for (let h = 2; h <= solved.maxOrder; h++)
+      perUnit[h - 1] = (solved.volts(index, h, phase) / nominalV) * Math.sqrt(3);
+    const value = harmonicVoltageFactor(perUnit, oddOnly);
+    if (value > worst.value) worst = { value, phase };
+  }
+  return worst;
 }
 
 function atMotor(context: CheckContext, motor: Motor): Verdict {

@@ -28,7 +28,11 @@ export function contentVolts(solved: SolvedCase, bus: number, h: number, content
 /** Measures presence where the chosen set holds no harmonic limits: an order does not vanish with its limit. */
 const fallback: LimitSet = iec61000x2x4[1] as LimitSet;
 
-function presentByVoltage(context: CheckContext, bus: Bus, content: Content): number[] {
+/**
+ * Orders that count at a busbar whatever hangs there: without the correction U_h ≥ 0.1 × its limit (the share
+ * settable). Ascending. A branch must be tuned below these; a trace that only its current tells does not bind.
+ */
+export function significantOrders(context: CheckContext, bus: Bus, content: Content): number[] {
   const solved = context.without() ?? context.solved;
   const choice = voltageSetFor(context.study, context.pccBuses.has(bus.id));
   if (!solved.energised(bus.id)) return [];
@@ -67,7 +71,7 @@ function presentByCurrent(context: CheckContext, bank: Bank, content: Content): 
 export function presentOrders(context: CheckContext, busId: string, content: Content, bank?: Bank): number[] {
   const bus = busById(context.study, busId);
   if (!bus) throw new RangeError(`the study has no busbar "${busId}"`);
-  const found = new Set(presentByVoltage(context, bus, content));
+  const found = new Set(significantOrders(context, bus, content));
   if (bank) for (const h of presentByCurrent(context, bank, content)) found.add(h);
   return [...found].sort((a, b) => a - b);
 }

@@ -2,6 +2,7 @@ import { nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { angleRemarks } from './distortion.ts';
 import { figure } from './figure.ts';
+import { judgedOnce } from './judgedOnce.ts';
 import { type LiveBank, liveBanks } from './liveBanks.ts';
 import { partRow } from './partRow.ts';
 import { SolvedCase } from './SolvedCase.ts';
@@ -18,7 +19,7 @@ const LINEAR_SHARE = 1.6;
  */
 export function reactorDuty(context: CheckContext): Verdict[] {
   return liveBanks(context).flatMap((live) =>
-    live.p > 0 ? [rms(context, live), linear(context, live)] : [],
+    live.p > 0 ? [...rms(context, live), linear(context, live)] : [],
   );
 }
 
@@ -30,7 +31,7 @@ const scaledRemark = (live: LiveBank): string[] =>
     ? [`Ratings of the whole bank are taken in proportion to the kvar on (${figure(shareOn(live), 3)}).`]
     : [];
 
-function rms(context: CheckContext, live: LiveBank): Verdict {
+function rms(context: CheckContext, live: LiveBank): Verdict[] {
   const { bank, terminal } = live;
   const phase = SolvedCase.worstPhase((k) => context.solved.rmsAmperes(terminal, k));
   const ampere = context.solved.rmsAmperes(terminal, phase);
@@ -41,29 +42,30 @@ function rms(context: CheckContext, live: LiveBank): Verdict {
     part: 'rms',
   });
   if (bank.ratedReactorA === undefined) {
+    if (!judgedOnce(context, bank.id)) return [];
     row.working.push({
       equation: 'I_rms = √(Σ I_h²)',
       numbers: `L${phase + 1}: ${figure(ampere)} A with ${figure(live.kvar)} kvar on`,
     });
-    return unknown(
-      row,
-      `enter the rated reactor current of ${nameOf(bank)}, all steps on; it carries ${figure(ampere)} A here`,
-    );
+    const missing = `enter the rated reactor current of ${nameOf(bank)}, all steps on; it carries ${figure(ampere)} A here`;
+    return [unknown(row, missing)];
   }
   const ratedA = bank.ratedReactorA * shareOn(live);
-  return judged({
-    ...row,
-    value: ampere / ratedA,
-    limit: 1,
-    working: [
-      {
-        equation: 'I_rms / I_rated',
-        numbers: `L${phase + 1}: ${figure(ampere)} A / ${figure(ratedA)} A = ${figure(ampere / ratedA)}`,
-      },
-    ],
-    remarks: [...scaledRemark(live), ...angles(context, live)],
-    mend: 'Order reactors for the current shown with a tenth in hand, or lower the tuning so that the branch takes up less of the lowest order.',
-  });
+  return [
+    judged({
+      ...row,
+      value: ampere / ratedA,
+      limit: 1,
+      working: [
+        {
+          equation: 'I_rms / I_rated',
+          numbers: `L${phase + 1}: ${figure(ampere)} A / ${figure(ratedA)} A = ${figure(ampere / ratedA)}`,
+        },
+      ],
+      remarks: [...scaledRemark(live), ...angles(context, live)],
+      mend: 'Order reactors for the current shown with a tenth in hand, or lower the tuning so that the branch takes up less of the lowest order.',
+    }),
+  ];
 }
 
 function linear(context: CheckContext, live: LiveBank): Verdict {

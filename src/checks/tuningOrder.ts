@@ -3,7 +3,7 @@ import type { CheckContext } from './CheckContext.ts';
 import { figure, ordinal } from './figure.ts';
 import { type LiveBank, liveBanks } from './liveBanks.ts';
 import { partRow } from './partRow.ts';
-import { presentOrders } from './presentOrders.ts';
+import { significantOrders } from './presentOrders.ts';
 import type { Verdict, Working } from './types.ts';
 import { judged, keptQuietly } from './verdict.ts';
 
@@ -28,8 +28,8 @@ export function crossingShare(p: number, h: number): number {
 }
 
 /**
- * Series resonance of each detuned bank over tolerance and ageing against the lowest present order
- * (tuning-order): at or above it fails, within 5 % below is watched. From there the branch is capacitive at
+ * Series resonance of each detuned bank over tolerance and ageing against the lowest significant
+ * order at its busbar (tuning-order): at or above it fails, within 5 % below is watched. From there the branch is capacitive at
  * an order that is present and takes it up or raises it.
  */
 export function tuningOrder(context: CheckContext): Verdict[] {
@@ -58,9 +58,9 @@ function atBank(context: CheckContext, { bank, bus, p }: LiveBank): Verdict {
   });
   const contents =
     full.connection === 'star-earthed' ? (['positive', 'zero'] as const) : (['positive'] as const);
-  const present = contents.flatMap((content) => presentOrders(context, bus.id, content, bank));
+  const present = contents.flatMap((content) => significantOrders(context, bus, content));
   if (present.length === 0)
-    return keptQuietly(row, 'No harmonic order is present at this busbar.', value, null);
+    return keptQuietly(row, 'No harmonic order reaches a tenth of its limit at this busbar.', value, null);
   const lowest = Math.min(...present);
   row.working.push(crossing(p, n, lowest));
   return judged({
@@ -77,11 +77,11 @@ function crossing(p: number, n: number, lowest: number): Working {
   const share = crossingShare(p, lowest);
   const words =
     n >= lowest
-      ? `tuned above the ${ordinal(lowest)} from new`
-      : `met when ${figure((1 - share) * 100, 3)} % of the capacitance is lost`;
+      ? `the branch is tuned above the ${ordinal(lowest)} from new`
+      : `the ${ordinal(lowest)} is met when ${figure((1 - share) * 100, 3)} % of the capacitance is lost`;
   return {
     equation: 'crossing C/C0 = 1/(p · h²)',
-    numbers: `1 / (${figure(p)} · ${lowest}²) = ${figure(share, 3)}: the ${ordinal(lowest)} is ${words}`,
+    numbers: `1 / (${figure(p)} · ${lowest}²) = ${figure(share, 3)}: ${words}`,
   };
 }
 
