@@ -71,7 +71,8 @@ export function followStudy(
     const quick = answered(await computation.verdicts(at, caseId));
     if (!quick) return;
     store.setState(({ answer }) => {
-      const older = answer?.verdicts.filter(({ screening }) => screening) ?? [];
+      const known = new Set(quick.map(({ key }) => key));
+      const older = answer?.verdicts.filter(({ screening, key }) => screening && !known.has(key)) ?? [];
       const verdicts = sortByMargin([...quick, ...older]);
       return { answer: amended(answer, revision, caseId, { verdicts, verdictsRevision: revision }) };
     });

@@ -54,7 +54,7 @@ describe('the session in the worker', () => {
   });
 
   it('leaves out the checks that scan anew when asked to be quick', () => {
-    const scanning = ['step-change', 'amplification', 'resonance-distance', 'mixed-bank', 'ripple-signal'];
+    const scanning = ['amplification', 'resonance-distance', 'mixed-bank'];
     const { send } = behindBoundary();
     const all = good(send({ kind: 'judge', caseId: 'day', screening: true }, 1, site));
     const quick = good(send({ kind: 'judge', caseId: 'day', screening: false }));
