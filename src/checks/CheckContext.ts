@@ -30,8 +30,6 @@ export interface CheckContext {
   solveWithout(without: ReadonlySet<string>): CaseSolution;
   /** The case under the supply's distortion alone: converters keep their power and filters, not their spectra. */
   solveBackground(without: ReadonlySet<string>): CaseSolution;
-  /** The fundamental alone, with some banks' steps replaced by one of the kvar given (0: none on). */
-  solveFundamental(steps: ReadonlyMap<string, number>): CaseSolution;
   /** Fundamental impedance of the network alone (sources and series parts) at a busbar, ohm; null without a source. */
   networkOhm(bus: string): { re: number; im: number } | null;
   /** The same with loads and motors, every coupler closed; the correction left out. */

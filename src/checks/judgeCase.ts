@@ -5,7 +5,7 @@ import {
   scanImpedance,
   solveCase,
 } from '../engine/index.ts';
-import type { BankStep, CaseChange, Study, StudyCase } from '../study/index.ts';
+import type { CaseChange, Study, StudyCase } from '../study/index.ts';
 import { casesOf, isOn, isSeries, studyInCase } from '../study/index.ts';
 import { amplification } from './amplification.ts';
 import { backgroundDuty } from './backgroundDuty.ts';
@@ -45,13 +45,13 @@ import { unbalance } from './unbalance.ts';
 /** A family of checks: every verdict it has to give in one case. */
 export type Check = (context: CheckContext) => Verdict[];
 
-/** Checks that read the solution alone. */
+/** Checks that read the solution, and at most a handful of impedances. */
 const direct: readonly Check[] = [
   targetPF,
   deliveredKvar,
-  pfCeiling,
   busVoltage,
   lightLoadRise,
+  stepChange,
   unbalance,
   busThd,
   busOrder,
@@ -71,20 +71,18 @@ const direct: readonly Check[] = [
   controllerSetting,
   generatorLeading,
   faultLevel,
+  rippleSignal,
 ];
 
-/** Rows that solve or scan the network again and again, most of them screening rules: the slower half. */
-const scanning: readonly Check[] = [stepChange, amplification, resonanceDistance, mixedBank, rippleSignal];
+/** Screening rules, most of which scan the network again and again: the slower half. */
+const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, pfCeiling];
 
 export interface JudgeOptions {
   /** The same case with every bank and filter out, where the caller has solved it already. */
   withoutCorrection?: CaseSolution;
   /** Solutions of other cases already at hand: they tell the largest case's power. */
   otherCases?: readonly CaseSolution[];
-  /**
-   * False leaves out what solves or scans anew (step-change, amplification, resonance-distance, mixed-bank,
-   * ripple-signal), for a first fast answer.
-   */
+  /** False leaves the screening rules (amplification, resonance-distance, mixed-bank, pf-ceiling) out, for a first fast answer. */
   screening?: boolean;
   presence?: PresenceThresholds;
 }
@@ -155,7 +153,6 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
     },
     solveWithout,
     solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
-    solveFundamental: (steps) => solveCase({ ...withSteps(base, caseId, steps), maxOrder: 1 }, caseId),
     networkOhm(bus) {
       network ??= drivingPoints(base, caseId, 1, { without: consumers(study) });
       return pointAt(study, network, bus);
@@ -172,13 +169,12 @@ function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): 
   };
 }
 
-/** The study with some banks' steps replaced, in one case, by a single step of the kvar given; 0: none on. */
+/** The study with some banks' steps replaced, in one case, by a single step of the kvar given. */
 function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
-  const step = (kvar: number): BankStep[] => (kvar > 0 ? [{ kvar }] : [{ kvar: 1, on: false }]);
   return withChanges(
     study,
     caseId,
-    [...steps].map(([element, kvar]) => ({ element, set: { steps: step(kvar) } })),
+    [...steps].map(([element, kvar]) => ({ element, set: { steps: [{ kvar }] } })),
   );
 }
 
