@@ -56,6 +56,28 @@ export {
 } from './spectra/builtIn.ts';
 export { isHarmonicRows, spectrumById, spectrumOf } from './spectra/spectrumOf.ts';
 export type * from './types.ts';
+export { setTypical } from './typical/setTypical.ts';
+export type { Typical } from './typical/Typical.ts';
+export {
+  type CableLaying,
+  type CableValues,
+  type Conductor,
+  cableSizes,
+  typicalCable,
+} from './typical/typicalCable.ts';
+export {
+  type GeneratorBuild,
+  type GeneratorValues,
+  generatorReactances,
+  typicalGenerator,
+} from './typical/typicalGenerator.ts';
+export { type MotorChoice, type MotorValues, typicalMotor } from './typical/typicalMotor.ts';
+export { stepSizes, typicalSteps } from './typical/typicalSteps.ts';
+export {
+  type TransformerChoice,
+  type TransformerValues,
+  typicalTransformer,
+} from './typical/typicalTransformer.ts';
 export {
   editText,
   formatNumber,
