@@ -127,7 +127,10 @@ export class ScriptedComputation implements Computation {
       verdicts: [verdictOf(caseId, 'pass')],
       scan: scanPair(focusBus ?? ''),
       probe: { caseId, order, buses: [], with: points, without: points },
-      judge: [verdictOf(caseId, 'pass'), { ...verdictOf(caseId, 'watch'), screening: true }],
+      judge: [
+        verdictOf(caseId, 'pass'),
+        { ...verdictOf(caseId, 'watch'), key: `amplification|main|${caseId}`, screening: true },
+      ],
     };
     asked.settle({ outcome: 'done', value: values[kind] as never });
     await settled();
