@@ -1,8 +1,8 @@
 import type { Bank } from '../study/index.ts';
-import { isOn, nameOf, withDefaults } from '../study/index.ts';
+import { busById, isOn, nameOf, withDefaults } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { capacitorVerdicts } from './capacitorVerdicts.ts';
-import { bankXc } from './correctionBranch.ts';
+import { bankAdmittance, bankXc, kvarOn } from './correctionBranch.ts';
 import { commonPractice } from './source.ts';
 import type { Verdict } from './types.ts';
 import { unitAmperes } from './unitAmperes.ts';
@@ -25,6 +25,9 @@ function atBank(context: CheckContext, bank: Bank): Verdict[] {
   if (xcOhm === null) return [];
   const terminal = context.solved.terminal(bank.id, bank.bus);
   if (terminal === undefined || !context.solved.energised(bank.bus)) return [dead(context, bank)];
+  const bus = busById(context.study, bank.bus);
+  if (!bus) throw new RangeError(`the study has no busbar "${bank.bus}"`);
+  const branch = bankAdmittance(bank, bus, kvarOn(bank));
   const connection = withDefaults(bank, context.study).connection;
   return capacitorVerdicts(context, context.study, {
     id: bank.id,
@@ -32,7 +35,15 @@ function atBank(context: CheckContext, bank: Bank): Verdict[] {
     checks,
     xcOhm,
     ratedV: bank.ratedV,
-    amperes: unitAmperes(context.solved, terminal, connection),
+    amperes: unitAmperes(context.solved, {
+      terminal,
+      bus: bank.bus,
+      connection,
+      admittance(h) {
+        const { re, im } = branch(h);
+        return Math.hypot(re, im);
+      },
+    }),
     orderCount: context.solved.maxOrder,
   });
 }

@@ -50,3 +50,21 @@ export function bankAdmittance(
     return { re: re / square, im: -im / square };
   };
 }
+
+/**
+ * |Y| of a filter at integer order h, siemens per star-equivalent phase, by the study format's laws of the
+ * single-tuned, high-pass and c-type filter.
+ */
+export function filterAdmittance(filter: Filter, bus: Bus): (h: number) => number {
+  const xc = filterXc(filter, bus);
+  const xl = filterXl(filter, bus);
+  const rc = (withDefaults(filter, bus).lossWPerKvar / 1000) * xc;
+  const { type, tunedOrder: n, qFactor: q } = filter;
+  if (type === 'single-tuned') return (h) => 1 / Math.hypot(rc + (n * xl) / q, h * xl - xc / h);
+  const r = q * n * xl;
+  return (h) => {
+    const x = type === 'high-pass' ? h * xl : h * xl - xl / h;
+    const square = r * r + x * x;
+    return 1 / Math.hypot(rc + (r * x * x) / square, (r * r * x) / square - xc / h);
+  };
+}

@@ -2,7 +2,7 @@ import type { Filter } from '../study/index.ts';
 import { busById, isOn, nameOf, withDefaults } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { capacitorVerdicts } from './capacitorVerdicts.ts';
-import { filterXc, filterXl } from './correctionBranch.ts';
+import { filterAdmittance, filterXc, filterXl } from './correctionBranch.ts';
 import { figure } from './figure.ts';
 import { commonPractice } from './source.ts';
 import type { Verdict, Working } from './types.ts';
@@ -45,7 +45,12 @@ function atFilter(context: CheckContext, filter: Filter): Verdict[] {
     checks,
     xcOhm: filterXc(filter, bus),
     ratedV: filter.ratedV,
-    amperes: unitAmperes(context.solved, terminal, connection),
+    amperes: unitAmperes(context.solved, {
+      terminal,
+      bus: bus.id,
+      connection,
+      admittance: filterAdmittance(filter, bus),
+    }),
     orderCount: context.solved.maxOrder,
   });
   const duty = innerDuty(filter, filterXl(filter, bus), lineAmperes(context, terminal));

@@ -1,8 +1,9 @@
 export { defaultPresence, type PresenceThresholds } from './CheckContext.ts';
 export { type CapacitorDuty, capacitorDuty } from './capacitorDuty.ts';
+export type { JudgeOptions } from './caseContext.ts';
 export { figure, ordinal } from './figure.ts';
 export { type Inflow, inflowAt } from './inflow.ts';
-export { type Check, type JudgeOptions, judgeCase, judgeStudy } from './judgeCase.ts';
+export { type Check, judgeCase, judgeStudy } from './judgeCase.ts';
 export { capacitorCurrentLimit, capacitorVoltageLimit } from './limits/capacitorLimit.ts';
 export {
   bandSetFor,

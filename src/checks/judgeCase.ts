@@ -1,38 +1,32 @@
-import {
-  type CaseSolution,
-  type DrivingPoints,
-  drivingPoints,
-  scanImpedance,
-  solveCase,
-} from '../engine/index.ts';
-import type { CaseChange, Study, StudyCase } from '../study/index.ts';
-import { casesOf, isOn, isSeries, studyInCase } from '../study/index.ts';
+import { type CaseSolution, solveCase } from '../engine/index.ts';
+import type { Study } from '../study/index.ts';
+import { casesOf } from '../study/index.ts';
 import { amplification } from './amplification.ts';
 import { backgroundDuty } from './backgroundDuty.ts';
 import { bankDuty } from './bankDuty.ts';
 import { busOrder } from './busOrder.ts';
 import { busThd } from './busThd.ts';
 import { busVoltage } from './busVoltage.ts';
-import { type CheckContext, defaultPresence, type PresenceThresholds } from './CheckContext.ts';
+import type { CheckContext, PresenceThresholds } from './CheckContext.ts';
 import { cableLoad } from './cableLoad.ts';
+import { caseContext, type JudgeOptions } from './caseContext.ts';
 import { controllerSetting } from './controllerSetting.ts';
 import { deliveredKvar } from './deliveredKvar.ts';
 import { discharge, reconnection } from './discharge.ts';
+import { energising } from './energising.ts';
 import { faultLevel } from './faultLevel.ts';
+import { feeder } from './feeder.ts';
 import { filterDuty } from './filterDuty.ts';
 import { generatorLeading } from './generatorLeading.ts';
-import { inflowAt } from './inflow.ts';
 import { inrush } from './inrush.ts';
 import { lightLoadRise } from './lightLoadRise.ts';
 import { mixedBank } from './mixedBank.ts';
 import { motorHvf } from './motorHvf.ts';
-import { pccBusesOf } from './pcc.ts';
 import { pccCurrent } from './pccCurrent.ts';
 import { pfCeiling } from './pfCeiling.ts';
 import { reactorDuty } from './reactorDuty.ts';
 import { resonanceDistance } from './resonanceDistance.ts';
 import { rippleSignal } from './rippleSignal.ts';
-import { SolvedCase } from './SolvedCase.ts';
 import { selfExcitation } from './selfExcitation.ts';
 import { stepChange } from './stepChange.ts';
 import { sortByMargin } from './summarise.ts';
@@ -66,6 +60,7 @@ const direct: readonly Check[] = [
   motorHvf,
   selfExcitation,
   inrush,
+  feeder,
   discharge,
   reconnection,
   controllerSetting,
@@ -75,17 +70,7 @@ const direct: readonly Check[] = [
 ];
 
 /** Screening rules, most of which scan the network again and again: the slower half. */
-const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, pfCeiling];
-
-export interface JudgeOptions {
-  /** The same case with every bank and filter out, where the caller has solved it already. */
-  withoutCorrection?: CaseSolution;
-  /** Solutions of other cases already at hand: they tell the largest case's power. */
-  otherCases?: readonly CaseSolution[];
-  /** False leaves the screening rules (amplification, resonance-distance, mixed-bank, pf-ceiling) out, for a first fast answer. */
-  screening?: boolean;
-  presence?: PresenceThresholds;
-}
+const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, energising, pfCeiling];
 
 /**
  * All verdicts of one solved case, sorted: fails, watch, unknown, pass, each by margin, ties by key.
@@ -94,7 +79,7 @@ export interface JudgeOptions {
  */
 export function judgeCase(study: Study, solution: CaseSolution, options: JudgeOptions = {}): Verdict[] {
   if (!solution.converged) return [];
-  const context = contextOf(study, solution, options);
+  const context = caseContext(study, solution, options);
   const checks = options.screening === false ? direct : [...direct, ...scanning];
   return sortByMargin(checks.flatMap((check) => check(context)));
 }
@@ -114,135 +99,4 @@ export function judgeStudy(
   return sortByMargin(
     solutions.flatMap((solution) => judgeCase(study, solution, { ...shared, otherCases: solutions })),
   );
-}
-
-function correctionIds(study: Study): Set<string> {
-  return new Set(
-    study.elements
-      .filter((part) => (part.kind === 'bank' || part.kind === 'filter') && isOn(part))
-      .map((part) => part.id),
-  );
-}
-
-function contextOf(base: Study, solution: CaseSolution, options: JudgeOptions): CheckContext {
-  const caseId = solution.caseId;
-  const study = studyInCase(base, caseId);
-  const found = casesOf(base).find(({ id }) => id === caseId);
-  const correction = correctionIds(study);
-  const solved = new SolvedCase(solution);
-  let network: DrivingPoints | undefined;
-  let coupled: DrivingPoints | undefined;
-  let without: SolvedCase | null | undefined = correction.size === 0 ? null : undefined;
-  const solveWithout = (ids: ReadonlySet<string>): CaseSolution => solveCase(base, caseId, { without: ids });
-  return {
-    study,
-    base,
-    caseId,
-    role: found?.role ?? 'load',
-    hoursPerDay: found?.hoursPerDay ?? 24,
-    solved,
-    pccBuses: pccBusesOf(study),
-    correction,
-    presence: options.presence ?? defaultPresence,
-    without() {
-      if (without === undefined) {
-        const bare = options.withoutCorrection ?? solveWithout(correction);
-        without = bare.converged ? new SolvedCase(bare) : null;
-      }
-      return without;
-    },
-    solveWithout,
-    solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
-    networkOhm(bus) {
-      network ??= drivingPoints(base, caseId, 1, { without: consumers(study) });
-      return pointAt(study, network, bus);
-    },
-    coupledOhm(bus) {
-      coupled ??= drivingPoints(couplersClosed(base, caseId), caseId, 1, { without: correction });
-      return pointAt(study, coupled, bus);
-    },
-    scan(span, ids = new Set(), steps = new Map()) {
-      const asked = steps.size === 0 ? base : withSteps(base, caseId, steps);
-      return scanImpedance(asked, caseId, span, { without: ids });
-    },
-    largestKW: (bus) => largestKW(base, solution, bus, options.otherCases),
-  };
-}
-
-/** The study with some banks' steps replaced, in one case, by a single step of the kvar given. */
-function withSteps(study: Study, caseId: string, steps: ReadonlyMap<string, number>): Study {
-  return withChanges(
-    study,
-    caseId,
-    [...steps].map(([element, kvar]) => ({ element, set: { steps: [{ kvar }] } })),
-  );
-}
-
-/** The study with every converter's spectrum emptied in one case. */
-function silenced(study: Study, caseId: string): Study {
-  const converters = study.elements.filter((part) => part.kind === 'converter');
-  return withChanges(
-    study,
-    caseId,
-    converters.map(({ id }) => ({ element: id, set: { spectrum: [] } })),
-  );
-}
-
-/** All that hangs on the network without feeding it. */
-function consumers(study: Study): Set<string> {
-  return new Set(
-    study.elements
-      .filter((part) => !isSeries(part) && part.kind !== 'supply' && part.kind !== 'generator')
-      .map(({ id }) => id),
-  );
-}
-
-function couplersClosed(study: Study, caseId: string): Study {
-  const couplers = study.elements.filter((part) => part.kind === 'coupler');
-  return withChanges(
-    study,
-    caseId,
-    couplers.map(({ id }) => ({ element: id, set: { on: true } })),
-  );
-}
-
-function pointAt(study: Study, points: DrivingPoints, bus: string): { re: number; im: number } | null {
-  const index = study.buses.findIndex(({ id }) => id === bus);
-  return points.present[index] === 1 ? { re: points.re[index] ?? 0, im: points.im[index] ?? 0 } : null;
-}
-
-function withChanges(study: Study, caseId: string, changes: readonly CaseChange[]): Study {
-  const cases: StudyCase[] = casesOf(study).map((item) =>
-    item.id === caseId ? { ...item, changes: [...item.changes, ...changes] } : item,
-  );
-  return { ...study, cases };
-}
-
-const largestKnown = new WeakMap<Study, Map<string, number | null>>();
-
-/**
- * Over every case of the study, kW into the site at the PCC; null for a study with one case. Remembered per
- * study, which is never mutated, so that judging all its cases solves each at most once more.
- */
-function largestKW(
-  study: Study,
-  solution: CaseSolution,
-  bus: string,
-  given: readonly CaseSolution[] = [],
-): number | null {
-  const cases = casesOf(study);
-  if (cases.length < 2) return null;
-  const known = largestKnown.get(study) ?? new Map<string, number | null>();
-  largestKnown.set(study, known);
-  const found = known.get(bus);
-  if (found !== undefined) return found;
-  const solutions = new Map([...given, solution].map((item) => [item.caseId, item]));
-  const powers = cases.flatMap(({ id }) => {
-    const solved = solutions.get(id) ?? solveCase(study, id);
-    const inflow = solved.converged ? inflowAt(studyInCase(study, id), new SolvedCase(solved), bus) : null;
-    return inflow ? [inflow.kW] : [];
-  });
-  const largest = powers.length > 0 ? Math.max(...powers) : null;
-  known.set(bus, largest);
-  return largest;
 }

@@ -1,7 +1,7 @@
-import type { Study } from '../study/index.ts';
-import { elementsAt, isOn, isSeries, nameOf } from '../study/index.ts';
+import { nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure, ordinal } from './figure.ts';
+import { galvanic } from './galvanic.ts';
 import { type LiveBank, liveBanks } from './liveBanks.ts';
 import { closestMeeting } from './parallelPeaks.ts';
 import { partRow } from './partRow.ts';
@@ -42,21 +42,6 @@ function tunedOrders(context: CheckContext, banks: readonly LiveBank[], reach: R
       : [],
   );
   return [...detuned, ...filters].sort((a, b) => a.order - b.order);
-}
-
-/** Busbars joined without a transformer between them. */
-function galvanic(study: Study, start: string): Set<string> {
-  const reached = new Set<string>();
-  const queue = [start];
-  for (let id = queue.pop(); id !== undefined; id = queue.pop()) {
-    if (reached.has(id)) continue;
-    reached.add(id);
-    for (const part of elementsAt(study, id)) {
-      if (isOn(part) && isSeries(part) && part.kind !== 'transformer')
-        queue.push(part.from === id ? part.to : part.from);
-    }
-  }
-  return reached;
 }
 
 function atBank(context: CheckContext, { bank, bus }: LiveBank, tuned: readonly Tuned[]): Verdict {

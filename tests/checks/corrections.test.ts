@@ -1,6 +1,9 @@
 import { describe, expect, it } from 'vitest';
-import { judgeCase, worstMargin } from '../../src/checks/index.ts';
+import { bankAdmittance, filterAdmittance } from '../../src/checks/correctionBranch.ts';
+import { judgeCase, SolvedCase, worstMargin } from '../../src/checks/index.ts';
+import { unitAmperes } from '../../src/checks/unitAmperes.ts';
 import { scanImpedance, solveCase } from '../../src/engine/index.ts';
+import type { Study, StudyElement } from '../../src/study/index.ts';
 import { of, one, site, verdictsOf } from './site.ts';
 
 // Invented studies; each value is recomputed in the test from the solution.
@@ -104,5 +107,61 @@ describe('steady voltage at 60 Hz', () => {
     const verdict = one(verdictsOf(study), 'bus-voltage', 'LV');
     expect(verdict.source.document).toBe('ANSI C84.1');
     expect([95, 105]).toContain(verdict.limit);
+  });
+});
+
+describe('current of a delta unit', () => {
+  const welder = (angles: boolean): Study =>
+    site({
+      drive: {
+        connection: 'L1L2',
+        spectrum: [{ h: 5, percent: 60, ...(angles ? { angleDeg: 0 } : {}) }],
+      },
+      bank: { ratedV: 400, detuningPercent: 0, steps: [{ kvar: 100 }] },
+    });
+  const filters: StudyElement[] = (['single-tuned', 'high-pass', 'c-type'] as const).map((type) => ({
+    id: type,
+    kind: 'filter',
+    bus: 'LV',
+    type,
+    kvar: 50,
+    tunedOrder: 7,
+    qFactor: type === 'single-tuned' ? 40 : 2,
+    ratedV: 500,
+  }));
+
+  it('is |I_k − I_(k+1)|/√3 of the lines as solved, for banks and every type of filter', () => {
+    const base = welder(true);
+    const study = { ...base, elements: [...base.elements, ...filters] };
+    const solution = solveCase(study, 'base');
+    const solved = new SolvedCase(solution);
+    const { current, maxOrder } = solution;
+    for (const part of study.elements) {
+      if (part.kind !== 'bank' && part.kind !== 'filter') continue;
+      const bus = { id: 'LV', nominalV: 400 };
+      const terminal = solved.terminal(part.id, 'LV') ?? -1;
+      const y = part.kind === 'bank' ? bankAdmittance(part, bus, 100) : filterAdmittance(part, bus);
+      const admittance = (h: number): number => {
+        const value = y(h);
+        return typeof value === 'number' ? value : Math.hypot(value.re, value.im);
+      };
+      const units = unitAmperes(solved, { terminal, bus: 'LV', connection: 'delta', admittance });
+      for (const h of [1, 5]) {
+        for (let unit = 0; unit < 3; unit++) {
+          const at = (terminal * maxOrder + h - 1) * 3;
+          const next = (unit + 1) % 3;
+          const re = (current.re[at + unit] ?? 0) - (current.re[at + next] ?? 0);
+          const im = (current.im[at + unit] ?? 0) - (current.im[at + next] ?? 0);
+          const expected = Math.hypot(re, im) / Math.sqrt(3);
+          expect(units[unit]?.[h - 1], `${part.id} ${h} ${unit}`).toBeCloseTo(expected, 6);
+        }
+      }
+    }
+  });
+
+  it('does not fall where the angles are unknown: the unit between the loaded lines carries more than its lines', () => {
+    const known = one(verdictsOf(welder(true)), 'bank-current').value ?? 0;
+    const open = one(verdictsOf(welder(false)), 'bank-current').value ?? 0;
+    expect(open).toBeGreaterThanOrEqual(known * (1 - 1e-9));
   });
 });

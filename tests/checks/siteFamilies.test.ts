@@ -278,3 +278,88 @@ describe('ripple-control signal', () => {
     expect(of(verdictsOf(site({ bank: null })), 'ripple-signal')).toHaveLength(0);
   });
 });
+
+describe('energising a transformer beside correction', () => {
+  const small = (more: StudyElement[] = []): Study['elements'] => [
+    {
+      id: 'T2',
+      kind: 'transformer',
+      from: 'LV',
+      to: 'M',
+      ratedKVA: 100,
+      hvV: 400,
+      lvV: 208,
+      ukPercent: 4,
+      loadLossKW: 1.5,
+      vectorGroup: 'Dyn11',
+    },
+    ...more,
+  ];
+  const withBank = (bank: Parameters<typeof site>[0]): Study =>
+    site({
+      study: { buses: [...buses.slice(0, 2), { id: 'M', nominalV: 208 }] },
+      more: small(),
+      ...bank,
+    });
+
+  it('is watched where the bank resonates between the 2nd and the 4th, met where it lies higher', () => {
+    const low = one(verdictsOf(withBank({ bank: { ratedV: 400, detuningPercent: 7 } })), 'energising', 'T2');
+    expect(low).toMatchObject({ verdict: 'watch', screening: true, limit: 4 });
+    expect(low.order).toBeGreaterThan(2);
+    expect(low.order).toBeLessThan(4);
+    const high = one(
+      verdictsOf(withBank({ bank: { ratedV: 400, detuningPercent: 0, steps: [{ kvar: 300 }] } })),
+      'energising',
+      'T2',
+    );
+    expect(high).toMatchObject({ verdict: 'pass' });
+    expect(high.value).toBeGreaterThan(6.5);
+  });
+
+  it('says nothing of a transformer on a busbar without correction, and is quiet where no peak is near', () => {
+    expect(of(verdictsOf(site()), 'energising')).toHaveLength(0);
+    const tiny = verdictsOf(withBank({ bank: { ratedV: 400, detuningPercent: 0, steps: [{ kvar: 20 }] } }));
+    expect(one(tiny, 'energising', 'T2')).toMatchObject({ verdict: 'pass', value: null });
+  });
+});
+
+describe('cable of a bank', () => {
+  const fed = (ratedA: number | undefined, frequencyHz: 50 | 60): Study =>
+    site({
+      study: { buses, frequencyHz },
+      bank: { bus: 'M', ratedV: 400, steps: [{ kvar: 100 }] },
+      more: [
+        {
+          id: 'K',
+          kind: 'cable',
+          from: 'LV',
+          to: 'M',
+          lengthM: 10,
+          resistanceOhmPerKm: 0.2,
+          reactanceOhmPerKm: 0.08,
+          ...(ratedA === undefined ? {} : { ratedA }),
+        },
+      ],
+    });
+  const ratedA = 100_000 / (Math.sqrt(3) * 400);
+
+  it('needs 1.35 times the rated current at 60 Hz (NEC 460, second-hand), 1.43 times at 50 Hz', () => {
+    const at60 = one(verdictsOf(fed(200, 60)), 'feeder', 'K');
+    expect(at60.value).toBeCloseTo((1.35 * ratedA) / 200, 9);
+    expect(at60).toMatchObject({ verdict: 'pass', source: { document: 'NEC 460' } });
+    expect(one(verdictsOf(fed(200, 50)), 'feeder', 'K').verdict).toBe('fail');
+    expect(one(verdictsOf(fed(undefined, 50)), 'feeder', 'K')).toMatchObject({ verdict: 'unknown' });
+    expect(one(verdictsOf(fed(210, 50)), 'feeder', 'K').remarks[0]).toMatch(/206 to 217 A/);
+  });
+
+  it('a published 20 A capacitor takes a 27 A conductor (NEC 460, second-hand)', () => {
+    const study = fed(27, 60);
+    const kvar = (20 * Math.sqrt(3) * 400) / 1000;
+    const bank = study.elements.map((part) => (part.kind === 'bank' ? { ...part, steps: [{ kvar }] } : part));
+    expect(one(verdictsOf({ ...study, elements: bank }), 'feeder', 'K').value).toBeCloseTo(1, 9);
+  });
+
+  it('says nothing of a bank straight on a board', () => {
+    expect(of(verdictsOf(site()), 'feeder')).toHaveLength(0);
+  });
+});
