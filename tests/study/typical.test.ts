@@ -64,6 +64,7 @@ describe('Typical transformers', () => {
   it('outside the table are refused with the permitted range', () => {
     expect(errorOf(typicalTransformer(5000))).toMatch(/5.000 kVA.*allowed is 25 to 3.150 kVA/);
     expect(errorOf(typicalTransformer(40, { filling: 'dry' }))).toContain('allowed is 50 to');
+    expect(errorOf(typicalTransformer(1000, { hvV: 33_000, lvV: 400 }))).toContain('up to 24 kV');
     expect(errorOf(typicalTransformer(Number.NaN))).toContain('allowed is');
   });
 

@@ -47,6 +47,7 @@ import {
 } from './SlipScope.ts';
 import { shortValue, slipSections, takesOrigin } from './slipFields.ts';
 import { TextInput } from './TextInput.tsx';
+import { TypicalValues } from './TypicalValues.tsx';
 
 export interface PartSlipProps {
   element: StudyElement;
@@ -174,6 +175,7 @@ function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onCl
         <FindingLine key={finding.code} finding={finding} />
       ))}
       {main.map((field) => row(field))}
+      {!writeCase && <TypicalValues element={base} study={study} onEdit={attempt} />}
       {rare.length + groups.length > 0 && (
         <details className="slip-more">
           <summary>more</summary>

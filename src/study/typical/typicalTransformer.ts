@@ -10,6 +10,9 @@ export interface TransformerChoice {
   /** 'liquid' where not said. */
   filling?: 'liquid' | 'dry';
   frequencyHz?: 50 | 60;
+  /** Rated volts, where known: the tables end at 24 kV and 1.1 kV. */
+  hvV?: number;
+  lvV?: number;
 }
 
 export interface TransformerValues {
@@ -34,6 +37,11 @@ export function typicalTransformer(kVA: number, choice: TransformerChoice = {}):
   const { tier = 2, filling = 'liquid', frequencyHz = 50 } = choice;
   const table = filling === 'liquid' ? liquidLosses : dryLosses;
   const kind = filling === 'liquid' ? 'liquid-filled' : 'dry-type';
+  if ((choice.hvV ?? 0) > 24_000 || (choice.lvV ?? 0) > 1100)
+    return {
+      ok: false,
+      error: `${lossSource} is read here for windings up to 24 kV and 1.1 kV; this one stands outside.`,
+    };
   const ukPercent = typicalImpedance(kVA);
   if (!isWithin(table, kVA) || ukPercent === undefined) {
     const [low, high] = rangeOf(table);
