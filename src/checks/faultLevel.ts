@@ -2,6 +2,7 @@ import type { Bus } from '../study/index.ts';
 import { elementsAt, nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
+import { isFirstCase } from './judgedOnce.ts';
 import type { Source, Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
@@ -17,13 +18,14 @@ const voltageFactor = (nominalV: number): number => (nominalV <= 1000 ? 1.05 : 1
 /**
  * Initial symmetrical short-circuit current with every coupler closed against the board's withstand
  * (fault-level): I″k = c·U_n/(√3·|Z|). Boards with a withstand entered are judged; one that a coupler joins
- * and that has none is left open. Nothing is said of other boards.
+ * and that has none is left open, once. Nothing is said of other boards.
  */
 export function faultLevel(context: CheckContext): Verdict[] {
   return context.study.buses.flatMap((bus) => {
     if (!context.solved.energised(bus.id)) return [];
     const coupled = elementsAt(context.study, bus.id).some(({ kind }) => kind === 'coupler');
-    return bus.withstandKA !== undefined || coupled ? atBus(context, bus) : [];
+    const asked = coupled && isFirstCase(context);
+    return bus.withstandKA !== undefined || asked ? atBus(context, bus) : [];
   });
 }
 

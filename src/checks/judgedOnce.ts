@@ -13,6 +13,11 @@ export function judgedOnce(context: CheckContext, element: string): boolean {
   return known.get(element) === context.caseId;
 }
 
+/** Whether this is the study's first case: the one in which what no case changes is asked for. */
+export function isFirstCase({ base, caseId }: CheckContext): boolean {
+  return casesOf(base)[0]?.id === caseId;
+}
+
 function firstCases(base: Study): Map<string, string> {
   const found = new Map<string, string>();
   for (const { id } of casesOf(base)) {

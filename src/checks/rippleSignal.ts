@@ -3,6 +3,7 @@ import { busById, elementsOfKind, isOn, isSeries } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
 import { networkSideOf } from './inflow.ts';
+import { isFirstCase } from './judgedOnce.ts';
 import { commonPractice } from './source.ts';
 import type { Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
@@ -18,14 +19,12 @@ export function rippleSignal(context: CheckContext): Verdict[] {
   const { study } = context;
   const asked = study.criteria?.rippleControlHz !== undefined;
   if (context.correction.size === 0 || !elementsOfKind(study, 'supply').some(isOn)) return [];
-  if (!asked && (study.frequencyHz === 60 || !firstOfStudy(context))) return [];
+  if (!asked && (study.frequencyHz === 60 || !isFirstCase(context))) return [];
   return [...context.pccBuses].flatMap((id) => {
     const bus = busById(study, id);
     return bus && context.solved.energised(id) ? [atPcc(context, bus)] : [];
   });
 }
-
-const firstOfStudy = ({ base, caseId }: CheckContext): boolean => (base.cases?.[0]?.id ?? caseId) === caseId;
 
 interface Ohm {
   re: number;
