@@ -1,7 +1,7 @@
 import { resolve } from 'node:path';
 import { defineConfig } from '@playwright/test';
 
-const port = 4173;
+const port = Number(process.env.PREVIEW_PORT ?? 4173);
 
 export default defineConfig({
   testDir: '.',
