@@ -55,14 +55,64 @@ test('a wrong entry is said at the field and changes nothing; Escape puts the ol
   await type(page, power, '12 bananas');
   await expect(slip.getByRole('alert')).toContainText('kVA');
   await expect(power).toHaveAttribute('aria-invalid', 'true');
+  await expect(power).toBeFocused();
+  await expect(power).toHaveValue('12 bananas');
   await type(page, power, '-5');
   await expect(slip.getByRole('alert')).toContainText('allowed');
   await page.keyboard.press('Escape');
-  await expect(slip.getByRole('alert')).toBeHidden();
+  await expect(slip).toBeHidden();
+  await expect(part(page, /^transformer, T1/)).toBeFocused();
+  await page.keyboard.press('Enter');
   await expect(power).toHaveValue('1000');
   await page.keyboard.press('Escape');
-  await expect(slip).toBeHidden();
   expect(await savedStudy(page)).toEqual(before);
+});
+
+test('Enter goes from essential field to essential field, back with Shift, and past the last to the part', async ({
+  page,
+}) => {
+  const slip = await slipOf(page, /^motor, Compressors/);
+  const stops = ['rated shaft power, each', 'number of motors', 'load', 'power factor cos φ', 'efficiency η'];
+  const stop = (label: string) => slip.getByLabel(label, { exact: true });
+  await expect(stop('rated shaft power, each')).toBeFocused();
+  await page.keyboard.type('75');
+  for (const label of stops.slice(1)) {
+    await page.keyboard.press('Enter');
+    await expect(stop(label)).toBeFocused();
+  }
+  await page.keyboard.press('Shift+Enter');
+  await expect(stop('power factor cos φ')).toBeFocused();
+  await page.keyboard.type('0,86');
+  await page.keyboard.press('Enter');
+  await page.keyboard.press('Enter');
+  await expect(slip).toBeHidden();
+  await expect(part(page, /^motor, Compressors/)).toBeFocused();
+  await settled(page);
+  expect(await elementOf(page, 'comp')).toMatchObject({ ratedKW: 75, powerFactor: 0.86 });
+  await page.keyboard.press('Enter');
+  await expect(stop('rated shaft power, each')).toBeFocused();
+  await page.keyboard.press('Shift+Enter');
+  await expect(slip.getByLabel('Name', { exact: true })).toBeFocused();
+  await page.keyboard.type('Screw compressors');
+  await page.keyboard.press('Control+Enter');
+  await expect(slip).toBeHidden();
+  await expect(part(page, /^motor, Screw compressors/)).toBeFocused();
+});
+
+test('the fold of further data stays as it was left, for that kind of part', async ({ page }) => {
+  const slip = await slipOf(page, /^motor, Compressors/);
+  const ratio = slip.getByLabel(/^starting current ratio/);
+  await expect(ratio).toBeHidden();
+  await slip.getByText('more data').click();
+  await expect(ratio).toBeVisible();
+  await page.keyboard.press('Escape');
+  await page.reload();
+  await openSampleSite(page, 'cold-store');
+  await slipOf(page, /^motor, Compressors/);
+  await expect(ratio).toBeVisible();
+  await page.keyboard.press('Escape');
+  await slipOf(page, /^transformer, T1/);
+  await expect(slip.getByLabel('no-load loss P_0')).toBeHidden();
 });
 
 test('steps are written at once as 6x25 and switched one by one', async ({ page }) => {

@@ -18,7 +18,9 @@ import {
   setOrigin,
   updateBus,
 } from '../../study/index.ts';
+import { busSubject } from '../subject.ts';
 import { FindingLine } from './FieldRow.tsx';
+import { MoreData } from './MoreData.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import { fallbackOf, fieldValue, findingsAt, refusalOf } from './SlipScope.ts';
@@ -53,7 +55,7 @@ function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipPro
   };
   const pin: Pin = { quantity: 'voltage', bus: id };
   const pinned = study.view?.pins?.some((other) => sameData(other, pin)) ?? false;
-  const { main, rare } = slipSections(fieldsOf('bus'));
+  const { essential, more } = slipSections(fieldsOf('bus'));
   const row = (field: Field): ReactNode => (
     <SlipField
       key={`${id} ${field.key}`}
@@ -78,7 +80,7 @@ function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipPro
     <SlipFrame
       label={`Data of busbar ${nameOf(bus)}`}
       kind="busbar"
-      subjectKey={id}
+      subject={busSubject(id)}
       focused={focused}
       onClose={onClose}
       head={
@@ -117,8 +119,8 @@ function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipPro
       {findingsAt(findings, path, null).map((finding) => (
         <FindingLine key={finding.code} finding={finding} />
       ))}
-      {main.map(row)}
-      {rare.map(row)}
+      <div className="slip-essentials">{essential.map(row)}</div>
+      <MoreData kind="bus">{more.map(row)}</MoreData>
     </SlipFrame>
   );
 }

@@ -32,7 +32,9 @@ import {
   setOrigin,
   updateElement,
 } from '../../study/index.ts';
+import { partSubject } from '../subject.ts';
 import { FindingLine } from './FieldRow.tsx';
+import { MoreData } from './MoreData.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import {
@@ -98,7 +100,7 @@ function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onCl
     }
     return attempt(editOf(study, { [key]: value }));
   };
-  const { main, rare, groups } = slipSections(fieldsOf(base.kind));
+  const { essential, more, groups } = slipSections(fieldsOf(base.kind));
   const row = (field: Field, groupKey?: string): ReactNode => {
     const owner = groupKey === undefined ? element : (fieldValue(element, groupKey) ?? {});
     const originKey = groupKey === undefined ? field.key : groupKey;
@@ -136,7 +138,7 @@ function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onCl
     <SlipFrame
       label={`Data of ${fullNameOf(base)}`}
       kind={kindWords[base.kind]}
-      subjectKey={id}
+      subject={partSubject(id)}
       focused={focused}
       onClose={onClose}
       head={
@@ -174,20 +176,17 @@ function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onCl
       {findingsAt(findings, path, null).map((finding) => (
         <FindingLine key={finding.code} finding={finding} />
       ))}
-      {main.map((field) => row(field))}
+      <div className="slip-essentials">{essential.map((field) => row(field))}</div>
       {!writeCase && <TypicalValues element={base} study={study} onEdit={attempt} />}
-      {rare.length + groups.length > 0 && (
-        <details className="slip-more">
-          <summary>more</summary>
-          {rare.map((field) => row(field))}
-          {groups.map((group) => (
-            <fieldset key={group.key} className="slip-group">
-              <legend title={group.help}>{group.label}</legend>
-              {group.fields.map((field) => row(field, group.key))}
-            </fieldset>
-          ))}
-        </details>
-      )}
+      <MoreData kind={base.kind}>
+        {more.map((field) => row(field))}
+        {groups.map((group) => (
+          <fieldset key={group.key} className="slip-group">
+            <legend title={group.help}>{group.label}</legend>
+            {group.fields.map((field) => row(field, group.key))}
+          </fieldset>
+        ))}
+      </MoreData>
     </SlipFrame>
   );
 }

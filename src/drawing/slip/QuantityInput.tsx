@@ -1,6 +1,7 @@
 import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
 import { allowedOf, editText, formatNumber, type NumberField, parseQuantity } from '../../study/index.ts';
 import { isInside, stepValue } from './stepValue.ts';
+import { useDraft } from './useDraft.ts';
 
 export interface QuantityInputProps {
   id: string;
@@ -25,7 +26,7 @@ const arrowPauseMs = 300;
  */
 export function QuantityInput(props: QuantityInputProps) {
   const { id, field, value, fallback, label, describedBy } = props;
-  const [draft, setDraft] = useState<string | null>(null);
+  const [draft, draftNow, setDraft] = useDraft();
   const [error, setError] = useState<string | null>(null);
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
   const standing = value === undefined ? '' : editText(value);
@@ -39,11 +40,13 @@ export function QuantityInput(props: QuantityInputProps) {
     if (editing) input.current?.select();
   }, [editing]);
 
-  const commit = (typed: string) => {
+  /** Whether the text was taken; one that was not stays, with the reason. */
+  const commit = (typed: string): boolean => {
     clearTimeout(timer.current);
     const outcome = typed.trim() === standing ? null : read(typed, field, props.onCommit);
     setError(outcome);
     if (outcome === null) setDraft(null);
+    return outcome === null;
   };
   const stepBy = (direction: 1 | -1, coarse: boolean) => {
     const typed = parseQuantity(text, field.unit);
@@ -55,12 +58,12 @@ export function QuantityInput(props: QuantityInputProps) {
     timer.current = setTimeout(() => commit(next), arrowPauseMs);
   };
   const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
-    if (event.key === 'Enter') commit(text);
-    else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
+    if (event.key === 'Enter') {
+      if (!commit(text)) event.preventDefault();
+    } else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
       event.preventDefault();
       stepBy(event.key === 'ArrowUp' ? 1 : -1, event.shiftKey);
     } else if (event.key === 'Escape' && (draft !== null || error !== null)) {
-      event.preventDefault();
       clearTimeout(timer.current);
       setDraft(null);
       setError(null);
@@ -91,7 +94,7 @@ export function QuantityInput(props: QuantityInputProps) {
         }}
         onBlur={() => {
           setEditing(false);
-          if (draft !== null) commit(text);
+          if (draftNow.current !== null) commit(draftNow.current);
         }}
         onKeyDown={onKeyDown}
       />

@@ -1,6 +1,8 @@
 import { type KeyboardEvent, type ReactNode, useEffect, useRef } from 'react';
 import type { Field } from '../../study/index.ts';
+import type { Subject } from '../subject.ts';
 import { Formula } from './Formula.tsx';
+import { nextStop } from './slipWalk.ts';
 import { useSlipFocus } from './useSlipFocus.ts';
 
 export interface SlipFrameProps {
@@ -8,8 +10,8 @@ export interface SlipFrameProps {
   label: string;
   /** Kind in trade words, above the name. */
   kind: string;
-  /** Changes when the slip shows another part: the focus goes to its first field again. */
-  subjectKey: string;
+  /** Another subject is another slip: the focus goes to its first field again. */
+  subject: Subject;
   head: ReactNode;
   children: ReactNode;
   foot: ReactNode;
@@ -19,21 +21,14 @@ export interface SlipFrameProps {
 }
 
 /**
- * The paper of a data slip. Keys and wheel stay inside, so that arrows step a value instead of the drawing;
- * Escape closes unless a field used it to put its text back; shortcuts with Ctrl or Command pass.
+ * The paper of a data slip. Keys and wheel stay inside, so that arrows step a value instead of the drawing.
+ * Enter takes the value and goes on, Shift+Enter back; past the last essential field, and with Ctrl or
+ * Command at once, it closes the slip. A field that refuses its value keeps the focus. Escape closes, and
+ * what was half typed goes with it; other shortcuts with Ctrl or Command pass.
  */
-export function SlipFrame({
-  label,
-  kind,
-  subjectKey,
-  head,
-  children,
-  foot,
-  focused,
-  onClose,
-}: SlipFrameProps) {
+export function SlipFrame({ label, kind, subject, head, children, foot, focused, onClose }: SlipFrameProps) {
   const paper = useRef<HTMLElement>(null);
-  useSlipFocus(paper, subjectKey);
+  useSlipFocus(paper, subject);
   useEffect(() => {
     const element = paper.current;
     const keepWheel = (event: WheelEvent) => {
@@ -42,8 +37,20 @@ export function SlipFrame({
     element?.addEventListener('wheel', keepWheel, { passive: true });
     return () => element?.removeEventListener('wheel', keepWheel);
   }, []);
+  const goOn = (event: KeyboardEvent, from: Element) => {
+    event.preventDefault();
+    const next =
+      event.ctrlKey || event.metaKey ? 'close' : nextStop(paper.current as HTMLElement, from, event.shiftKey);
+    if (next === 'close') onClose();
+    else next?.focus();
+    if (next instanceof HTMLInputElement && next.type === 'text') next.select();
+  };
   const onKeyDown = (event: KeyboardEvent) => {
-    if (event.ctrlKey || event.metaKey) return;
+    const from = event.target;
+    const inField = from instanceof HTMLInputElement || from instanceof HTMLSelectElement;
+    const enters = event.key === 'Enter' && !event.nativeEvent.isComposing;
+    if (inField && enters && !event.defaultPrevented) goOn(event, from);
+    if (!enters && (event.ctrlKey || event.metaKey)) return;
     event.stopPropagation();
     if (event.key === 'Escape' && !event.defaultPrevented) onClose();
   };
@@ -70,9 +77,7 @@ export function SlipFrame({
         </button>
         {head}
       </header>
-      <div className="slip-body" data-slip={subjectKey}>
-        {children}
-      </div>
+      <div className="slip-body">{children}</div>
       <footer className="slip-foot">
         <p className="slip-help" aria-hidden="true">
           <Formula

@@ -1,4 +1,5 @@
 import { type KeyboardEvent, useState } from 'react';
+import { useDraft } from './useDraft.ts';
 
 export interface TextInputProps {
   id: string;
@@ -16,18 +17,20 @@ export interface TextInputProps {
 /** A line of text, taken on Enter and on leaving, put back by Escape, with suggestions where there are any. */
 export function TextInput(props: TextInputProps) {
   const { id, value, suggestions, describedBy } = props;
-  const [draft, setDraft] = useState<string | null>(null);
+  const [draft, draftNow, setDraft] = useDraft();
   const [error, setError] = useState<string | null>(null);
   const text = draft ?? value;
-  const commit = () => {
+  /** Whether the text was taken; one that was not stays, with the reason. */
+  const commit = (): boolean => {
     const outcome = text.trim() === value ? null : props.onCommit(text.trim());
     setError(outcome);
     if (outcome === null) setDraft(null);
+    return outcome === null;
   };
   const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
-    if (event.key === 'Enter') commit();
-    else if (event.key === 'Escape' && (draft !== null || error !== null)) {
-      event.preventDefault();
+    if (event.key === 'Enter') {
+      if (!commit()) event.preventDefault();
+    } else if (event.key === 'Escape' && (draft !== null || error !== null)) {
       setDraft(null);
       setError(null);
     }
@@ -53,7 +56,7 @@ export function TextInput(props: TextInputProps) {
           setError(null);
         }}
         onFocus={props.onFocus}
-        onBlur={() => draft !== null && commit()}
+        onBlur={() => draftNow.current !== null && commit()}
         onKeyDown={onKeyDown}
       />
       {suggestions && (

@@ -17,22 +17,24 @@ const withOrigin: ReadonlySet<FieldType> = new Set([
 ]);
 
 export interface SlipSections {
-  main: Field[];
-  /** Under "more". */
-  rare: Field[];
+  /** What the result hangs on. */
+  essential: Field[];
+  /** Under "more data": the busbars, which are chosen on the drawing, and what seldom matters. */
+  more: Field[];
   groups: Extract<Field, { type: 'group' }>[];
 }
 
-/** The fields of a record as the slip lays them out, its busbars last; opaque data belongs to other places of the screen. */
+/** The fields of a record as the slip lays them out; opaque data belongs to other places of the screen. */
 export function slipSections(fields: readonly Field[]): SlipSections {
   const shown = fields.filter((field) => !headKeys.has(field.key) && field.type !== 'opaque');
-  const plain = shown.filter((field) => !field.rare && field.type !== 'group');
+  const plain = shown.filter((field) => field.type !== 'group');
+  const isEssential = (field: Field) => !field.rare && field.type !== 'busRef';
   return {
-    main: [
-      ...plain.filter((field) => field.type !== 'busRef'),
+    essential: plain.filter(isEssential),
+    more: [
       ...plain.filter((field) => field.type === 'busRef'),
+      ...plain.filter((field) => field.rare && field.type !== 'busRef'),
     ],
-    rare: shown.filter((field) => field.rare && field.type !== 'group'),
     groups: shown.filter((field): field is Extract<Field, { type: 'group' }> => field.type === 'group'),
   };
 }

@@ -1,26 +1,39 @@
 import { type RefObject, useEffect } from 'react';
+import type { Subject } from '../subject.ts';
 
 /** The slip is placed before it is shown, and what is hidden takes no focus: it is asked for this many frames. */
 const framesToWait = 10;
 
-/** Puts the focus on the slip's first field when it opens, and back where it was when the slip goes. */
-export function useSlipFocus(paper: RefObject<HTMLElement | null>, subjectKey: string): void {
+/**
+ * Puts the focus on the slip's first field when it opens. When it goes, the focus returns to where it was
+ * outside the drawing, else to the part the slip spoke of.
+ */
+export function useSlipFocus(paper: RefObject<HTMLElement | null>, subject: Subject): void {
   useEffect(() => {
     const before = document.activeElement;
+    const pane = paper.current?.closest('.drawing')?.querySelector('[data-drawing-pane]');
     let frame = 0;
     const take = (left: number) => {
-      const body = paper.current?.querySelector<HTMLElement>(`[data-slip="${CSS.escape(subjectKey)}"]`);
-      const first = body?.querySelector<HTMLElement>('input, select, button');
+      const first = firstControl(paper.current);
       first?.focus({ preventScroll: true });
       if (left > 0 && document.activeElement !== first) frame = requestAnimationFrame(() => take(left - 1));
     };
     take(framesToWait);
     return () => {
       cancelAnimationFrame(frame);
-      const lost = document.activeElement === null || document.activeElement === document.body;
-      if (lost && before instanceof HTMLElement && before.isConnected) before.focus({ preventScroll: true });
-      else if (lost && before instanceof SVGElement && before.isConnected)
-        before.focus({ preventScroll: true });
+      if (document.activeElement !== null && document.activeElement !== document.body) return;
+      const part = pane?.querySelector(`[data-subject="${CSS.escape(subject)}"]`);
+      const outside = before?.isConnected && before !== document.body && !pane?.contains(before);
+      const back = outside ? before : (part ?? before);
+      if (back instanceof HTMLElement || back instanceof SVGElement) back.focus({ preventScroll: true });
     };
-  }, [paper, subjectKey]);
+  }, [paper, subject]);
+}
+
+/** The first essential field; where there is none, the name. */
+function firstControl(paper: HTMLElement | null): HTMLElement | null | undefined {
+  return (
+    paper?.querySelector<HTMLElement>('.slip-essentials :is(input, select)') ??
+    paper?.querySelector<HTMLElement>('.slip-name')
+  );
 }

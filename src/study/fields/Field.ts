@@ -14,7 +14,7 @@ interface FieldBase {
   /** The formula it enters, or what it decides, in one line. */
   help: string;
   required: boolean;
-  /** Shown under "more" in the data slip. */
+  /** Under "more data" in the data slip; the others are what the result hangs on. */
   rare: boolean;
   /** A typical value in words, shown as a hint. */
   typical?: string;

@@ -16,6 +16,7 @@ export const generatorFields: readonly Field[] = [
     default: 100,
     above: 0,
     max: 200,
+    rare: true,
   }),
   number('angleDeg', 'angle', '°', 'Absent: the no-load angle of its busbar from the nearest source.', {
     rare: true,

@@ -17,16 +17,16 @@ export const motorFields: readonly Field[] = [
     min: 0,
     max: 200,
   }),
+  number('powerFactor', 'power factor cos φ', '', 'Q = P·tan(arccos cos φ), lagging.', {
+    default: 0.85,
+    above: 0,
+    max: 1,
+  }),
   number('efficiency', 'efficiency η', '', 'P = P_N · number of motors · (load/100)/η.', {
     default: 0.94,
     above: 0,
     max: 1,
     typical: '0.90 to 0.96 from 11 to 200 kW (Regulation (EU) 2019/1781, IE3)',
-  }),
-  number('powerFactor', 'power factor cos φ', '', 'Q = P·tan(arccos cos φ), lagging.', {
-    default: 0.85,
-    above: 0,
-    max: 1,
   }),
   number(
     'lockedRotorRatio',

@@ -59,7 +59,7 @@ export const lossWPerKvar = number(
 );
 
 export function leading(help: string): Field {
-  return boolean('leading', 'leading', help, { default: false });
+  return boolean('leading', 'leading', help, { default: false, rare: true });
 }
 
 /** R(h) = R·((1 − s) + s·h^e). */

@@ -25,6 +25,7 @@ export const supplyFields: readonly Field[] = [
     default: 100,
     above: 0,
     max: 200,
+    rare: true,
   }),
   number('angleDeg', 'angle', '°', 'E stands at this angle to the cosine reference.', {
     default: 0,

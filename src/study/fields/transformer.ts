@@ -16,11 +16,6 @@ export const transformerFields: readonly Field[] = [
     above: 0,
     typical: '100 to 2500 kVA at low voltage',
   }),
-  number('hvV', 'rated high voltage', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', { required: true, above: 0 }),
-  number('lvV', 'rated low voltage, no load', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', {
-    required: true,
-    above: 0,
-  }),
   number('ukPercent', 'impedance voltage u_k', '%', '|Z| = u_k/100 · U_LV²/S.', {
     required: true,
     above: 0,
@@ -36,6 +31,11 @@ export const transformerFields: readonly Field[] = [
     required: true,
     type: 'vectorGroup',
     suggestions: ['Dyn11', 'Dyn5', 'Dyn1', 'Yyn0', 'YNyn0', 'YNd11', 'Yd11', 'Dzn0', 'Yzn11', 'Dd0'],
+  }),
+  number('hvV', 'rated high voltage', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', { required: true, above: 0 }),
+  number('lvV', 'rated low voltage, no load', 'V', 'n = U_HV·(1 + tap/100)/U_LV.', {
+    required: true,
+    above: 0,
   }),
   number(
     'tapPercent',

@@ -137,14 +137,33 @@ describe('The slip', () => {
   it.each(elementKinds)(
     'shows every field of a %s once, but name, service and what other places edit',
     (kind) => {
-      const { main, rare, groups } = slipSections(fieldsOf(kind));
-      const shown = [...main, ...rare, ...groups].map((field) => field.key);
+      const { essential, more, groups } = slipSections(fieldsOf(kind));
+      const shown = [...essential, ...more, ...groups].map((field) => field.key);
       const expected = fieldsOf(kind).filter(
         (field) => field.type !== 'opaque' && field.key !== 'name' && field.key !== 'on',
       );
       expect(shown.toSorted()).toEqual(expected.map((field) => field.key).toSorted());
     },
   );
+
+  it('leads with what the result hangs on, in the order of a nameplate', () => {
+    const keys = (kind: Parameters<typeof fieldsOf>[0]) =>
+      slipSections(fieldsOf(kind)).essential.map((field) => field.key);
+    expect(keys('transformer')).toEqual([
+      'ratedKVA',
+      'ukPercent',
+      'loadLossKW',
+      'vectorGroup',
+      'hvV',
+      'lvV',
+      'tapPercent',
+    ]);
+    expect(keys('load')).toEqual(['kW', 'powerFactor']);
+    expect(keys('motor')).toEqual(['ratedKW', 'count', 'loadPercent', 'powerFactor', 'efficiency']);
+    expect(keys('converter')).toEqual(['kW', 'powerFactor', 'spectrum']);
+    expect(keys('bank')).toEqual(['steps', 'ratedV', 'detuningPercent']);
+    expect(keys('cable')).toEqual(['lengthM', 'resistanceOhmPerKm', 'reactanceOhmPerKm', 'runs', 'ratedA']);
+  });
 
   it('goes round the origins and keeps note and date', () => {
     expect(nextOrigin(undefined)).toEqual({ origin: 'nameplate' });
