@@ -39,9 +39,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict[] {
   const shown = nearestToLimit(spectrum, limits);
   if (shown.length === 0) return [unknown(row, noLimitWords(choice, bus))];
   row.screening = informsOnly(choice, isPcc);
-  const table = listing(spectrum, limits);
-  const silent = silentWords(spectrum, limits);
-  return shown.map((limit) => atOrder(context, bus, row, spectrum, limit, table, silent));
+  return shown.map((limit) => atOrder(context, bus, row, { spectrum, limits, limit }));
 }
 
 /** The limit with the smallest margin first, then those below the watch margin in order of margin. */
@@ -59,21 +57,16 @@ function nearestToLimit(spectrum: BusSpectrum, limits: readonly (OrderLimit | nu
   return near.sort((a, b) => a.margin - b.margin).map(({ limit }) => limit);
 }
 
-function atOrder(
-  context: CheckContext,
-  bus: Bus,
-  row: Row,
-  spectrum: BusSpectrum,
-  limit: OrderLimit,
-  table: Working,
-  silent: readonly string[],
-): Verdict {
+interface NearLimit {
+  spectrum: BusSpectrum;
+  limits: readonly (OrderLimit | null)[];
+  limit: OrderLimit;
+}
+
+function atOrder(context: CheckContext, bus: Bus, row: Row, { spectrum, limits, limit }: NearLimit): Verdict {
   const { h } = limit;
   const percent = spectrum.percent[h - 1] ?? 0;
   const before = beforePercent(context, bus, h);
-  const remarks = angleRemarks(context.solved, context.solved.anglesUnknown(h) ? [h] : []);
-  if (row.screening) remarks.push(informsRemark);
-  remarks.push(...silent);
   return judged({
     ...row,
     title: `${ordinal(h)} harmonic voltage`,
@@ -81,8 +74,15 @@ function atOrder(
     source: limit.source,
     value: percent,
     limit: limit.value,
-    working: [inNumbers(context, bus, h, spectrum.phase[h - 1] ?? 0, percent), table],
-    remarks,
+    working: () => [
+      inNumbers(context, bus, h, spectrum.phase[h - 1] ?? 0, percent),
+      listing(spectrum, limits),
+    ],
+    remarks: () => [
+      ...angleRemarks(context.solved, context.solved.anglesUnknown(h) ? [h] : []),
+      ...(row.screening ? [informsRemark] : []),
+      ...silentWords(spectrum, limits),
+    ],
     mend: () => mendWords(h, percent, before),
     ...(before === null
       ? {}

@@ -59,13 +59,13 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
     value: thd.percent,
     limit: limit.value,
     screening,
-    working: [
+    working: () => [
       {
         equation: `THD = √(Σ U_h²) / U_1, h = 2 to ${toOrder}`,
         numbers: `L${thd.phase + 1}: ${figure(thd.harmonicV)} V / ${figure(thd.fundamentalV)} V = ${figure(thd.percent)} %`,
       },
     ],
-    remarks: [
+    remarks: () => [
       ...angleRemarks(context.solved, unknownAngleOrders(context.solved, bus)),
       ...(screening ? [informsRemark] : []),
     ],

@@ -72,7 +72,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
     limit: worst.limit,
     reference: 100,
     sense: low ? 'lower' : 'upper',
-    working: [
+    working: () => [
       {
         equation: 'U1 / U_n, worst phase',
         numbers: `${phaseNames[worst.phase]}: ${figure(volts / SQRT3)} V / (${figure(bus.nominalV)} V/√3) = ${figure(worst.percent)} %, band ${band.lowPercent} to ${band.highPercent} %`,

@@ -3,7 +3,7 @@ import { isOn, nameOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
 import { SolvedCase } from './SolvedCase.ts';
-import type { Source, Verdict } from './types.ts';
+import type { Source, Verdict, Working } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
 const source: Source = { document: 'IEC 60364-5-52', clause: 'Annex E', provenance: 'memory' };
@@ -58,7 +58,7 @@ function atCable(context: CheckContext, cable: Cable): Verdict {
   // A three-wire run has no neutral conductor to heat; a share without neutral current says so.
   const rule = thirdHarmonicRule(neutralA > 0.01 * phaseA ? sharePercent : 0);
   const designA = (rule.basis === 'phase' ? phaseA : Math.max(neutralA, phaseA)) / rule.factor;
-  const working = [
+  const working = (): Working[] => [
     {
       equation: 'I_phase, I_neutral (rms of all orders)',
       numbers: `L${phase + 1} ${figure(phaseA)} A, N ${figure(neutralA)} A`,
@@ -70,20 +70,21 @@ function atCable(context: CheckContext, cable: Cable): Verdict {
   ];
   if (cable.ratedA === undefined) {
     return unknown(
-      { ...row, working },
+      { ...row, working: working() },
       `enter the rated current of ${nameOf(cable)}; ${figure(designA)} A are needed`,
     );
   }
-  const value = designA / cable.ratedA;
+  const ratedA = cable.ratedA;
+  const value = designA / ratedA;
   return judged({
     ...row,
     value,
     limit: 1,
-    working: [
-      ...working,
+    working: () => [
+      ...working(),
       {
         equation: 'I_design / I_rated',
-        numbers: `${figure(designA)} A / ${figure(cable.ratedA)} A = ${figure(value)}`,
+        numbers: `${figure(designA)} A / ${figure(ratedA)} A = ${figure(value)}`,
       },
     ],
     mend: 'Choose a larger cross-section or another run; where triplens fill the neutral, size by the neutral.',

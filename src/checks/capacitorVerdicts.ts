@@ -14,7 +14,7 @@ import { capacitorSetFor } from './limits/choice.ts';
 import type { LimitSet } from './limits/types.ts';
 import { noLimitSet } from './source.ts';
 import type { Verdict } from './types.ts';
-import { judged, type Row, unknown } from './verdict.ts';
+import { judged, type LazyRow, type Row, unknown } from './verdict.ts';
 
 /** A set of three equal capacitors and the current through each unit, by order. */
 export interface CapacitorUnits {
@@ -47,9 +47,10 @@ function unknownOrders(context: CheckContext, units: CapacitorUnits, ratedA: num
 
 interface Prepared {
   set: LimitSet;
-  row: (check: string, title: string, part?: string) => Row;
+  row: (check: string, title: string, part?: string) => LazyRow;
   duties: CapacitorDuty[];
   raised: CapacitorDuty[];
+  remarks: () => string[];
   supplyRemark: string;
 }
 
@@ -62,12 +63,15 @@ function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): P
     return capacitorDuty(scaled, units.xcOhm, units.ratedV);
   });
   const ratedA = duties[0]?.ratedA ?? 0;
-  const remarks = angleRemarks(context.solved, unknownOrders(context, units, ratedA));
-  if (set.capacitor?.remark) remarks.push(set.capacitor.remark);
+  const remarks = (): string[] => [
+    ...angleRemarks(context.solved, unknownOrders(context, units, ratedA)),
+    ...(set.capacitor?.remark ? [set.capacitor.remark] : []),
+  ];
   return {
     set,
     duties,
     raised,
+    remarks,
     supplyRemark: highest.remark,
     row: (check, title, part) => ({
       check,
@@ -142,7 +146,7 @@ function currentVerdict(units: CapacitorUnits, { set, row, duties }: Prepared): 
     value,
     limit: limit.value,
     source: limit.source,
-    working: [
+    working: () => [
       {
         equation: 'I_N = Q_N / (√3 · U_N)',
         numbers: `${figure(duty.ratedKvar)} kvar / (√3 · ${figure(duty.ratedV)} V) = ${figure(duty.ratedA)} A`,
@@ -159,7 +163,7 @@ function currentVerdict(units: CapacitorUnits, { set, row, duties }: Prepared): 
 function voltageVerdict(
   context: CheckContext,
   units: CapacitorUnits,
-  { set, row, raised, supplyRemark }: Prepared,
+  { set, row, raised, remarks, supplyRemark }: Prepared,
 ): Verdict {
   const check = units.checks.voltage;
   const base = row(check, `${units.words} voltage`, partOf(check, 'voltage'));
@@ -172,7 +176,7 @@ function voltageVerdict(
     value,
     limit: limit.value,
     source: limit.source,
-    working: [
+    working: () => [
       {
         equation: 'U_C,1 = √3 · I_1 · Xc',
         numbers: `${figure(duty.fundamentalV)} V across the capacitor itself (line-to-line equivalent)`,
@@ -182,12 +186,12 @@ function voltageVerdict(
         numbers: `${figure(duty.rmsV)} V / ${figure(duty.ratedV)} V = ${figure(value)}, allowed ${figure(limit.value)} for ${limit.row.words} (this case: ${figure(context.hoursPerDay)} h a day)`,
       },
     ],
-    remarks: [...(base.remarks ?? []), supplyRemark],
+    remarks: () => [...remarks(), supplyRemark],
     mend: () => mendVoltage(duty.rmsV, duty.ratedV, limit.value),
   });
 }
 
-function peakVerdict(units: CapacitorUnits, { set, row, raised, supplyRemark }: Prepared): Verdict {
+function peakVerdict(units: CapacitorUnits, { set, row, raised, remarks, supplyRemark }: Prepared): Verdict {
   const base = row(units.checks.voltage, `${units.words} peak voltage`, 'peak');
   const duty = unitWith(raised, (unit) => unit.peakV);
   const limit = capacitorPeakLimit(set);
@@ -198,14 +202,14 @@ function peakVerdict(units: CapacitorUnits, { set, row, raised, supplyRemark }: 
     value,
     limit: limit.value,
     source: limit.source,
-    working: [
+    working: () => [
       {
         equation: 'Û_C / (√2 · U_N) = Σ U_C,h / U_N',
         numbers: `${figure(duty.peakV)} V / ${figure(duty.ratedV)} V = ${figure(value)}`,
       },
     ],
-    remarks: [
-      ...(base.remarks ?? []),
+    remarks: () => [
+      ...remarks(),
       supplyRemark,
       'The crests of all orders are taken to coincide, the safe side.',
     ],
@@ -225,7 +229,7 @@ function kvarVerdict(units: CapacitorUnits, { set, row, duties }: Prepared): Ver
     value,
     limit: limit.value,
     source: limit.source,
-    working: [
+    working: () => [
       {
         equation: 'Σ √3 · U_C,h · I_h / Q_N',
         numbers: `${figure(duty.kvarSum)} kvar / ${figure(duty.ratedKvar)} kvar = ${figure(value)}`,

@@ -75,13 +75,13 @@ function atMotor(context: CheckContext, motor: Motor): Verdict {
     ...row,
     value,
     limit: rule.value,
-    working: [
+    working: () => [
       {
         equation: `HVF = √Σ(U_h²/h), ${rule.oddOnly ? 'odd orders' : 'all orders'} not divisible by 3`,
         numbers: `L${phase + 1}: ${figure(value)}, allowed ${figure(rule.value)} (${rule.label})`,
       },
     ],
-    remarks: [
+    remarks: () => [
       ...(motor.voltageFactorDesign === undefined ? [`No design is entered; judged as ${rule.label}.`] : []),
       ...angleRemarks(context.solved, unknownAngleOrders(context.solved, bus)),
     ],

@@ -109,24 +109,24 @@ function tdd(context: CheckContext, row: Row, limits: CurrentRowLimits, emission
   const { amperes, before, demandA, ratio } = emission;
   const harmonicA = totalOf(amperes);
   const value = (harmonicA / demandA) * 100;
-  const unknownOrders = amperes.flatMap((ampere, index) =>
-    index > 0 && ampere > 1e-3 * demandA && context.solved.anglesUnknown(index + 1) ? [index + 1] : [],
-  );
-  const angles = angleRemarks(context.solved, unknownOrders);
+  const unknownOrders = (): number[] =>
+    amperes.flatMap((ampere, index) =>
+      index > 0 && ampere > 1e-3 * demandA && context.solved.anglesUnknown(index + 1) ? [index + 1] : [],
+    );
   return judged({
     ...row,
     value,
     limit: limits.tdd.value,
     source: limits.tdd.source,
     ...withoutCorrection(before && (totalOf(before) / demandA) * 100, limits.tdd.value),
-    working: [
+    working: () => [
       ratio,
       {
         equation: 'TDD = √(Σ I_h²) / I_L',
         numbers: `${figure(harmonicA)} A / ${figure(demandA)} A = ${figure(value)} %`,
       },
     ],
-    remarks: [...(row.remarks ?? []), ...angles],
+    remarks: () => [...(row.remarks ?? []), ...angleRemarks(context.solved, unknownOrders())],
     mend: 'Filter the lowest large order, or lower the emission with chokes or a higher pulse number.',
   });
 }
@@ -146,7 +146,7 @@ function orders(context: CheckContext, row: Row, limits: CurrentRowLimits, emiss
   return found
     .filter((order, index) => index === 0 || order.margin < WATCH_MARGIN)
     .map(({ h, percent, limit }) => {
-      const angles = angleRemarks(context.solved, context.solved.anglesUnknown(h) ? [h] : []);
+      const unknownAt = context.solved.anglesUnknown(h) ? [h] : [];
       return judged({
         ...row,
         check: 'pcc-order',
@@ -156,14 +156,14 @@ function orders(context: CheckContext, row: Row, limits: CurrentRowLimits, emiss
         limit: limit.value,
         source: limit.source,
         ...withoutCorrection(before && ((before[h - 1] ?? 0) / demandA) * 100, limit.value),
-        working: [
+        working: () => [
           ratio,
           {
             equation: `I_${h} / I_L`,
             numbers: `${figure((percent * demandA) / 100)} A / ${figure(demandA)} A = ${figure(percent)} %`,
           },
         ],
-        remarks: [...(row.remarks ?? []), ...angles],
+        remarks: () => [...(row.remarks ?? []), ...angleRemarks(context.solved, unknownAt)],
         mend: `Fit a filter tuned just below the ${ordinal(h)}, or lower the emission with chokes or a higher pulse number.`,
       });
     });

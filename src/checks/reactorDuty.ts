@@ -56,13 +56,13 @@ function rms(context: CheckContext, live: LiveBank): Verdict[] {
       ...row,
       value: ampere / ratedA,
       limit: 1,
-      working: [
+      working: () => [
         {
           equation: 'I_rms / I_rated',
           numbers: `L${phase + 1}: ${figure(ampere)} A / ${figure(ratedA)} A = ${figure(ampere / ratedA)}`,
         },
       ],
-      remarks: [...scaledRemark(live), ...angles(context, live)],
+      remarks: () => [...scaledRemark(live), ...angles(context, live)],
       mend: 'Order reactors for the current shown with a tenth in hand, or lower the tuning so that the branch takes up less of the lowest order.',
     }),
   ];
@@ -90,13 +90,13 @@ function linear(context: CheckContext, live: LiveBank): Verdict {
     ...row,
     value: sum / fundamental,
     limit: own ?? LINEAR_SHARE,
-    working: [
+    working: () => [
       {
         equation: '(I1 + Σ I_h) / I1, all crests taken to coincide',
         numbers: `L${phase + 1}: ${figure(sum)} A / ${figure(fundamental)} A = ${figure(sum / fundamental)}`,
       },
     ],
-    remarks: [
+    remarks: () => [
       ...(own === null
         ? ['The linear range is not entered; the customary 1.6 times the fundamental stands in for it.']
         : scaledRemark(live)),

@@ -77,7 +77,8 @@ function atTransformer(context: CheckContext, part: Transformer): Verdict {
   if (!side) return keptQuietly(row, `${nameOf(part)} carries no current in this case.`, 0, 1);
   const { loss, ratedA } = side;
   const load = loss.rmsA / ratedA;
-  const base: Row = { ...row, working: loadWorking(side), remarks: remarksOf(context, side) };
+  const remarks = (): string[] => remarksOf(context, side);
+  const base = { ...row, working: () => loadWorking(side), remarks };
   const mend =
     'Move load to another transformer, choose a larger or K-rated one, or filter the orders that heat it.';
   const share = part.eddyLossShare;
@@ -87,7 +88,7 @@ function atTransformer(context: CheckContext, part: Transformer): Verdict {
       value: load,
       limit: 1,
       mend,
-      remarks: [...(base.remarks ?? []), 'F_HL is near 1: no derating, whatever P_EC-R is.'],
+      remarks: () => [...remarks(), 'F_HL is near 1: no derating, whatever P_EC-R is.'],
     });
   }
   if (share !== undefined) {
@@ -98,7 +99,7 @@ function atTransformer(context: CheckContext, part: Transformer): Verdict {
       value,
       limit: 1,
       mend,
-      working: [...base.working, derating(loss, share, permissible, load)],
+      working: () => [...loadWorking(side), derating(loss, share, permissible, load)],
     });
   }
   const missing = `enter the winding eddy-current loss P_EC-R of ${nameOf(part)}: with F_HL = ${figure(loss.lossFactor)} the rating must be derated`;
@@ -108,10 +109,10 @@ function atTransformer(context: CheckContext, part: Transformer): Verdict {
       value: load,
       limit: 1,
       mend,
-      remarks: [...(base.remarks ?? []), `Overloaded already without derating; ${missing}.`],
+      remarks: () => [...remarks(), `Overloaded already without derating; ${missing}.`],
     });
   }
-  return unknown(base, missing, load, 1);
+  return unknown({ ...row, working: loadWorking(side), remarks: remarks() }, missing, load, 1);
 }
 
 function loadWorking({ words, phase, ratedA, loss }: Side): Working[] {

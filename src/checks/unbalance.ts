@@ -59,7 +59,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
     ...row,
     value,
     limit: cited.value,
-    working: [{ equation: 'U2 / U1 at the fundamental', numbers: `${figure(value)} %` }],
+    working: () => [{ equation: 'U2 / U1 at the fundamental', numbers: `${figure(value)} %` }],
     mend: 'Spread the single-phase loads over the phases, or feed them from a stiffer busbar.',
     ...(before === null
       ? {}

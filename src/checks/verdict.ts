@@ -20,7 +20,15 @@ export interface Row {
   withoutCorrection?: Verdict['withoutCorrection'];
 }
 
-export interface JudgedRow extends Row {
+/** Words that cost time to write are written when they are first read. */
+export type Lazy<T> = T | (() => T);
+
+export interface LazyRow extends Omit<Row, 'working' | 'remarks'> {
+  working: Lazy<Working[]>;
+  remarks?: Lazy<string[]>;
+}
+
+export interface JudgedRow extends LazyRow {
   value: number;
   limit: number;
   reference?: number;
@@ -28,10 +36,10 @@ export interface JudgedRow extends Row {
   /** Where a check's own rule sets another watch band than the margin of 0.10. */
   watchBelow?: number;
   /** What would mend it; asked for only when it is no pass. */
-  mend?: string | (() => string);
+  mend?: Lazy<string>;
 }
 
-function keyOf({ check, subject, part, order }: Row): string {
+function keyOf({ check, subject, part, order }: Pick<Row, 'check' | 'subject' | 'part' | 'order'>): string {
   if (part !== undefined) return `${check}|${subject.id}|${part}`;
   return order !== undefined && Number.isInteger(order)
     ? `${check}|${subject.id}|${order}`
@@ -43,11 +51,17 @@ interface Outcome {
   limit: number | null;
   margin: number | null;
   verdict: VerdictWord;
-  remarks: string[];
-  mend?: string | undefined;
+  remarks: Lazy<string[]>;
+  mend?: Lazy<string> | undefined;
 }
 
-function build(row: Row, outcome: Outcome): Verdict {
+/**
+ * Working, remarks and mend are own accessors, written once at the first reading: a search that only wants
+ * margins never pays for words. Cloning and JSON read them like plain fields.
+ */
+function build(row: LazyRow, outcome: Outcome): Verdict {
+  const working = writtenOnce(row.working);
+  const remarks = writtenOnce(outcome.remarks);
   const verdict: Verdict = {
     key: keyOf(row),
     check: row.check,
@@ -60,14 +74,30 @@ function build(row: Row, outcome: Outcome): Verdict {
     margin: outcome.margin,
     verdict: outcome.verdict,
     screening: row.screening ?? false,
-    working: row.working,
     source: row.source,
-    remarks: outcome.remarks,
+    get working() {
+      return working();
+    },
+    get remarks() {
+      return remarks();
+    },
   };
   if (row.order !== undefined) verdict.order = row.order;
   if (row.withoutCorrection !== undefined) verdict.withoutCorrection = row.withoutCorrection;
-  if (outcome.mend !== undefined) verdict.mend = outcome.mend;
-  return verdict;
+  if (outcome.mend === undefined) return verdict;
+  const get = writtenOnce(outcome.mend);
+  return Object.defineProperty(verdict, 'mend', { get, enumerable: true, configurable: true });
+}
+
+const written = <T extends string | unknown[]>(words: Lazy<T>): T =>
+  typeof words === 'function' ? words() : words;
+
+function writtenOnce<T extends string | unknown[]>(words: Lazy<T>): () => T {
+  let kept: T | undefined;
+  return () => {
+    kept ??= written(words);
+    return kept;
+  };
 }
 
 /** A verdict from a value and its limit. */
@@ -75,19 +105,19 @@ export function judged(row: JudgedRow): Verdict {
   const { value, limit } = row;
   const marginValue = margin(value, limit, row.reference, row.sense);
   const verdict = verdictWord(marginValue, row.screening, row.watchBelow);
-  const mend = verdict === 'pass' ? undefined : typeof row.mend === 'function' ? row.mend() : row.mend;
+  const mend = verdict === 'pass' ? undefined : row.mend;
   return build(row, { value, limit, margin: marginValue, verdict, remarks: row.remarks ?? [], mend });
 }
 
 /** No verdict: `missing`, a sentence without its full stop, says which data would allow one. A known value is still shown. */
 export function unknown(
-  row: Row,
+  row: LazyRow,
   missing: string,
   value: number | null = null,
   limit: number | null = null,
 ): Verdict {
   const mend = sentence(missing);
-  const remarks = [mend, ...(row.remarks ?? [])];
+  const remarks = (): string[] => [mend, ...written(row.remarks ?? [])];
   return build(row, { value, limit, margin: null, verdict: 'unknown', remarks, mend });
 }
 

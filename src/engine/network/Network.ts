@@ -90,7 +90,10 @@ export interface ZeroPaths {
 export interface Network {
   study: Study;
   caseId: string;
+  /** Rated frequency, hertz: reactances of the data hold there. */
   frequencyHz: number;
+  /** Actual over rated frequency. */
+  frequencyFactor: number;
   maxOrder: number;
   summation: 'phasor' | 'alpha';
   buses: readonly Bus[];

@@ -14,25 +14,36 @@ import { findZeroPaths } from './zeroPaths.ts';
 export interface CompileOptions {
   /** Ids of parts taken out of service, e.g. all banks and filters. */
   without?: ReadonlySet<string> | undefined;
+  /** Actual over rated frequency, 1 when absent: orders then count from the actual fundamental. */
+  frequencyFactor?: number | undefined;
 }
 
 const compiled = new WeakMap<Study, Map<string, Network>>();
 
 /**
  * The study in one case as a network: buses with a source become nodes, each part in service gets its
- * admittance law and its place. Remembered per study object, case and `without`; a study is never mutated,
- * so an edited study compiles afresh. Throws RangeError for data no validated study has.
+ * admittance law and its place. Remembered per study object, case and options; a study is never mutated,
+ * so an edited study compiles afresh. Throws RangeError for data no validated study has, or a frequency
+ * factor that is not above 0.
  */
 export function compileNetwork(study: Study, caseId: string, options: CompileOptions = {}): Network {
-  const key = JSON.stringify([caseId, ...[...(options.without ?? [])].sort()]);
+  const factor = options.frequencyFactor ?? 1;
+  if (!(factor > 0 && Number.isFinite(factor)))
+    throw new RangeError(`frequency factor ${factor} must be above 0`);
+  const key = JSON.stringify([caseId, factor, ...[...(options.without ?? [])].sort()]);
   const known = compiled.get(study) ?? new Map<string, Network>();
   compiled.set(study, known);
-  const network = known.get(key) ?? build(study, caseId, options.without);
+  const network = known.get(key) ?? build(study, caseId, factor, options.without);
   known.set(key, network);
   return network;
 }
 
-function build(study: Study, caseId: string, without?: ReadonlySet<string>): Network {
+function build(
+  study: Study,
+  caseId: string,
+  frequencyFactor: number,
+  without?: ReadonlySet<string>,
+): Network {
   const inCase = studyInCase(study, caseId);
   const parts = inCase.elements
     .filter((element) => element.on !== false && !without?.has(element.id))
@@ -55,6 +66,7 @@ function build(study: Study, caseId: string, without?: ReadonlySet<string>): Net
     study: inCase,
     caseId,
     frequencyHz: inCase.frequencyHz,
+    frequencyFactor,
     maxOrder: inCase.maxOrder ?? 50,
     summation: inCase.summation ?? 'phasor',
     buses: inCase.buses,

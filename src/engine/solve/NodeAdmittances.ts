@@ -44,8 +44,10 @@ export class NodeAdmittances {
     return role === 'fundamental' ? this.motors : [];
   }
 
-  evaluate(h: number, role: Role): void {
-    const { values } = this.network;
+  /** At order h of the actual fundamental, which stands `frequencyFactor` times above the rated one. */
+  evaluate(order: number, role: Role): void {
+    const { values, frequencyFactor } = this.network;
+    const h = order * frequencyFactor;
     const diagonal = this.diagonal;
     diagonal.fill(0);
     for (const part of this.unbalanced[role]) part.law?.(h, values, part.at);
