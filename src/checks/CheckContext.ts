@@ -1,5 +1,5 @@
 import type { CaseSolution, ImpedanceScan, ScanSpan } from '../engine/index.ts';
-import type { CaseRole, Study } from '../study/index.ts';
+import type { Bank, CaseRole, Filter, Study } from '../study/index.ts';
 import type { SolvedCase } from './SolvedCase.ts';
 
 /** Presence of an order, both settable: U_h against its limit, I_h against the bank's I_N. */
@@ -12,8 +12,12 @@ export const defaultPresence: PresenceThresholds = { voltageShareOfLimit: 0.1, c
 
 /** Everything one case's checks read. Solutions and scans beyond the given one are computed when asked for. */
 export interface CheckContext {
-  /** The study as it stands in this case. */
+  /** The study as it stands in this case: ratings are read here. */
   study: Study;
+  /** A bank or filter as it really is at the tolerance point judged, for reactances and currents. */
+  actual<T extends Bank | Filter>(part: T): T;
+  /** Actual over rated frequency. */
+  frequencyFactor: number;
   /** The study as the file holds it. */
   base: Study;
   caseId: string;

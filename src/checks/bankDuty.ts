@@ -21,26 +21,29 @@ export function bankDuty(context: CheckContext): Verdict[] {
 }
 
 function atBank(context: CheckContext, bank: Bank): Verdict[] {
-  const xcOhm = bankXc(bank);
+  const real = context.actual(bank);
+  const xcOhm = bankXc(real);
   if (xcOhm === null) return [];
+  const { frequencyFactor } = context;
   const terminal = context.solved.terminal(bank.id, bank.bus);
   if (terminal === undefined || !context.solved.energised(bank.bus)) return [dead(context, bank)];
   const bus = busById(context.study, bank.bus);
   if (!bus) throw new RangeError(`the study has no busbar "${bank.bus}"`);
-  const branch = bankAdmittance(bank, bus, kvarOn(bank));
+  const branch = bankAdmittance(real, bus, kvarOn(real));
   const connection = withDefaults(bank, context.study).connection;
   return capacitorVerdicts(context, context.study, {
     id: bank.id,
     words: 'bank',
     checks,
-    xcOhm,
+    xcOhm: xcOhm / frequencyFactor,
+    ratedKvar: kvarOn(bank),
     ratedV: bank.ratedV,
     amperes: unitAmperes(context.solved, {
       terminal,
       bus: bank.bus,
       connection,
       admittance(h) {
-        const { re, im } = branch(h);
+        const { re, im } = branch(h * frequencyFactor);
         return Math.hypot(re, im);
       },
     }),

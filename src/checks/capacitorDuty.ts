@@ -17,13 +17,19 @@ export interface CapacitorDuty {
 }
 
 /**
- * Duty from the branch current: U_C,h = √3·I_h·Xc/h (line-to-line equivalent), I_N = U_N/(√3·Xc),
- * Q_N = U_N²/Xc. amperes[h − 1] rms in the line (or √3 times the delta branch); xcOhm per star-equivalent
- * phase at the fundamental. Holds behind a detuning reactor too, as the branch's own current is used.
+ * Duty from the branch current: U_C,h = √3·I_h·Xc/h (line-to-line equivalent), I_N = Q_N/(√3·U_N).
+ * amperes[h − 1] rms in the line (or √3 times the delta branch); xcOhm per star-equivalent phase at the
+ * fundamental, as it really is: with tolerance, ageing and frequency. `ratedKvar` is the nameplate's; left
+ * out, U_N²/Xc. Holds behind a detuning reactor too, as the branch's own current is used.
  */
-export function capacitorDuty(amperes: ArrayLike<number>, xcOhm: number, ratedV: number): CapacitorDuty {
-  if (!(xcOhm > 0) || !(ratedV > 0))
-    throw new RangeError(`Xc ${xcOhm} Ω, U_N ${ratedV} V: both must be above 0`);
+export function capacitorDuty(
+  amperes: ArrayLike<number>,
+  xcOhm: number,
+  ratedV: number,
+  ratedKvar = ratedV ** 2 / xcOhm / 1000,
+): CapacitorDuty {
+  if (!(xcOhm > 0 && ratedV > 0 && ratedKvar > 0))
+    throw new RangeError(`Xc ${xcOhm} Ω, U_N ${ratedV} V, Q_N ${ratedKvar} kvar: all must be above 0`);
   const root3 = Math.sqrt(3);
   let squaresA = 0;
   let squaresV = 0;
@@ -38,7 +44,7 @@ export function capacitorDuty(amperes: ArrayLike<number>, xcOhm: number, ratedV:
     kvarSum += (root3 * v * a) / 1000;
   }
   return {
-    ratedA: ratedV / (root3 * xcOhm),
+    ratedA: (ratedKvar * 1000) / (root3 * ratedV),
     rmsA: Math.sqrt(squaresA),
     rmsV: Math.sqrt(squaresV),
     peakV,
@@ -46,6 +52,6 @@ export function capacitorDuty(amperes: ArrayLike<number>, xcOhm: number, ratedV:
     ratedV,
     kvarSum,
     kvarProduct: (root3 * Math.sqrt(squaresV) * Math.sqrt(squaresA)) / 1000,
-    ratedKvar: ratedV ** 2 / xcOhm / 1000,
+    ratedKvar,
   };
 }

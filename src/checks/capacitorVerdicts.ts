@@ -23,8 +23,11 @@ export interface CapacitorUnits {
   words: string;
   /** Check ids; a filter's rows all belong to filter-duty. */
   checks: { current: string; voltage: string; kvar: string };
+  /** As it really is in the state judged. */
   xcOhm: number;
   ratedV: number;
+  /** Of the nameplate, three-phase. */
+  ratedKvar: number;
   amperes: readonly (readonly number[])[];
   orderCount: number;
 }
@@ -55,12 +58,12 @@ interface Prepared {
 }
 
 function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): Prepared {
-  const duties = units.amperes.map((unit) => capacitorDuty(unit, units.xcOhm, units.ratedV));
+  const duties = units.amperes.map((unit) => capacitorDuty(unit, units.xcOhm, units.ratedV, units.ratedKvar));
   const highest = highestSupply(context.study);
   const raised = units.amperes.map((unit) => {
     const scaled = [...unit];
     scaled[0] = (scaled[0] ?? 0) * highest.factor;
-    return capacitorDuty(scaled, units.xcOhm, units.ratedV);
+    return capacitorDuty(scaled, units.xcOhm, units.ratedV, units.ratedKvar);
   });
   const ratedA = duties[0]?.ratedA ?? 0;
   const remarks = (): string[] => [

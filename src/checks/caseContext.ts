@@ -5,7 +5,7 @@ import {
   scanImpedance,
   solveCase,
 } from '../engine/index.ts';
-import type { CaseChange, Study, StudyCase } from '../study/index.ts';
+import type { Bank, CaseChange, Filter, Study, StudyCase } from '../study/index.ts';
 import { casesOf, isOn, isSeries, studyInCase } from '../study/index.ts';
 import { type CheckContext, defaultPresence, type PresenceThresholds } from './CheckContext.ts';
 import { inflowAt } from './inflow.ts';
@@ -20,6 +20,12 @@ export interface JudgeOptions {
   /** False leaves the screening rules out, most of which scan anew, for a first fast answer. */
   screening?: boolean;
   presence?: PresenceThresholds;
+  /** The study with its parts as they are at a tolerance point, where that is not the study itself. */
+  actual?: Study;
+  /** Actual over rated frequency, 1 when absent; the given solution is at the same. */
+  frequencyFactor?: number;
+  /** False leaves out what the same case gives without the correction: half the work of a search. */
+  comparison?: boolean;
 }
 
 function correctionIds(study: Study): Set<string> {
@@ -37,15 +43,22 @@ function correctionIds(study: Study): Set<string> {
 export function caseContext(base: Study, solution: CaseSolution, options: JudgeOptions): CheckContext {
   const caseId = solution.caseId;
   const study = studyInCase(base, caseId);
+  const real = options.actual ?? base;
+  const frequencyFactor = options.frequencyFactor ?? 1;
+  const realParts = new Map(studyInCase(real, caseId).elements.map((part) => [part.id, part]));
   const found = casesOf(base).find(({ id }) => id === caseId);
   const correction = correctionIds(study);
   const solved = new SolvedCase(solution);
   let network: DrivingPoints | undefined;
   let coupled: DrivingPoints | undefined;
-  let without: SolvedCase | null | undefined = correction.size === 0 ? null : undefined;
-  const solveWithout = (ids: ReadonlySet<string>): CaseSolution => solveCase(base, caseId, { without: ids });
+  let without: SolvedCase | null | undefined =
+    correction.size === 0 || options.comparison === false ? null : undefined;
+  const solveWithout = (ids: ReadonlySet<string>): CaseSolution =>
+    solveCase(real, caseId, { without: ids, frequencyFactor });
   return {
     study,
+    actual: <T extends Bank | Filter>(part: T): T => (realParts.get(part.id) as T | undefined) ?? part,
+    frequencyFactor,
     base,
     caseId,
     role: found?.role ?? 'load',
@@ -62,18 +75,21 @@ export function caseContext(base: Study, solution: CaseSolution, options: JudgeO
       return without;
     },
     solveWithout,
-    solveBackground: (ids) => solveCase(silenced(base, caseId), caseId, { without: ids }),
+    solveBackground: (ids) => solveCase(silenced(real, caseId), caseId, { without: ids, frequencyFactor }),
     networkOhm(bus) {
-      network ??= drivingPoints(base, caseId, 1, { without: consumers(study) });
+      network ??= drivingPoints(real, caseId, 1, { without: consumers(study), frequencyFactor });
       return pointAt(study, network, bus);
     },
     coupledOhm(bus) {
-      coupled ??= drivingPoints(couplersClosed(base, caseId), caseId, 1, { without: correction });
+      coupled ??= drivingPoints(couplersClosed(real, caseId), caseId, 1, {
+        without: correction,
+        frequencyFactor,
+      });
       return pointAt(study, coupled, bus);
     },
     scan(span, ids = new Set(), steps = new Map()) {
-      const asked = steps.size === 0 ? base : withSteps(base, caseId, steps);
-      return scanImpedance(asked, caseId, span, { without: ids });
+      const asked = steps.size === 0 ? real : withSteps(real, caseId, steps);
+      return scanImpedance(asked, caseId, span, { without: ids, frequencyFactor });
     },
     largestKW: (bus) => largestKW(base, solution, bus, options.otherCases),
   };

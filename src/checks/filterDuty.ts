@@ -38,22 +38,26 @@ function atFilter(context: CheckContext, filter: Filter): Verdict[] {
   if (!bus || terminal === undefined || !context.solved.energised(filter.bus)) {
     return [unknown(row, `the busbar of ${nameOf(filter)} has no path to a source in this case`)];
   }
+  const real = context.actual(filter);
+  const { frequencyFactor } = context;
+  const admittance = filterAdmittance(real, bus);
   const connection = withDefaults(filter, context.study).connection;
   const capacitor = capacitorVerdicts(context, context.study, {
     id: filter.id,
     words: 'filter capacitor',
     checks,
-    xcOhm: filterXc(filter, bus),
+    xcOhm: filterXc(real, bus) / frequencyFactor,
     ratedV: filter.ratedV,
+    ratedKvar: filter.ratedV ** 2 / filterXc(filter, bus) / 1000,
     amperes: unitAmperes(context.solved, {
       terminal,
       bus: bus.id,
       connection,
-      admittance: filterAdmittance(filter, bus),
+      admittance: (h) => admittance(h * frequencyFactor),
     }),
     orderCount: context.solved.maxOrder,
   });
-  const duty = innerDuty(filter, filterXl(filter, bus), lineAmperes(context, terminal));
+  const duty = innerDuty(real, filterXl(real, bus), lineAmperes(context, terminal));
   const missing = `the study holds no rating for the reactor${filter.type === 'single-tuned' ? '' : ' and the resistor'}${filter.type === 'c-type' ? ' or the auxiliary capacitor' : ''} of ${nameOf(filter)}: order to the duty shown`;
   return [...capacitor, unknown({ ...row, working: duty.working }, missing, duty.reactorA)];
 }

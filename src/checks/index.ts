@@ -3,7 +3,7 @@ export { type CapacitorDuty, capacitorDuty } from './capacitorDuty.ts';
 export type { JudgeOptions } from './caseContext.ts';
 export { figure, ordinal } from './figure.ts';
 export { type Inflow, inflowAt } from './inflow.ts';
-export { type Check, judgeCase, judgeStudy } from './judgeCase.ts';
+export { type Check, judgeCase, judgeDuties, judgeStudy } from './judgeCase.ts';
 export { capacitorCurrentLimit, capacitorVoltageLimit } from './limits/capacitorLimit.ts';
 export {
   bandSetFor,

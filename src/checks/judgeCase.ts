@@ -69,6 +69,22 @@ const direct: readonly Check[] = [
   rippleSignal,
 ];
 
+/** Checks that decide over tolerances: all follow from the solution alone. */
+const deciding: readonly Check[] = [
+  targetPF,
+  busVoltage,
+  unbalance,
+  busThd,
+  busOrder,
+  pccCurrent,
+  bankDuty,
+  reactorDuty,
+  filterDuty,
+  transformerLoad,
+  cableLoad,
+  motorHvf,
+];
+
 /** Screening rules, most of which scan the network again and again: the slower half. */
 const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, energising, pfCeiling];
 
@@ -82,6 +98,16 @@ export function judgeCase(study: Study, solution: CaseSolution, options: JudgeOp
   const context = caseContext(study, solution, options);
   const checks = options.screening === false ? direct : [...direct, ...scanning];
   return sortByMargin(checks.flatMap((check) => check(context)));
+}
+
+/**
+ * The verdicts that decide over tolerances, unsorted, of a case solved at a tolerance point: `actual` and
+ * `frequencyFactor` of the options say which. Words are only written when read, so margins come cheaply.
+ */
+export function judgeDuties(study: Study, solution: CaseSolution, options: JudgeOptions = {}): Verdict[] {
+  if (!solution.converged) return [];
+  const context = caseContext(study, solution, options);
+  return deciding.flatMap((check) => check(context));
 }
 
 /** All verdicts of all cases, sorted as one list; cases are solved unless their solutions are given. */
