@@ -34,6 +34,34 @@ export function cableLoad(context: CheckContext): Verdict[] {
   );
 }
 
+interface CableDesign {
+  phase: number;
+  phaseA: number;
+  neutralA: number;
+  sharePercent: number;
+  rule: ThirdHarmonicRule;
+  /** The current the cross-section is chosen for. */
+  designA: number;
+}
+
+/** Design current of a cable at its heavier end; null out of service. */
+export function cableDesignAmperes(solved: SolvedCase, cable: Cable): CableDesign | null {
+  const ends = [cable.from, cable.to]
+    .map((bus) => solved.terminal(cable.id, bus))
+    .filter((t) => t !== undefined);
+  const terminal = ends.sort((a, b) => largestPhase(solved, b) - largestPhase(solved, a))[0];
+  if (terminal === undefined) return null;
+  const phase = SolvedCase.worstPhase((k) => solved.rmsAmperes(terminal, k));
+  const phaseA = solved.rmsAmperes(terminal, phase);
+  const neutralA = neutralRms(solved, terminal);
+  const sharePercent =
+    phaseA > 0 && solved.maxOrder >= 3 ? (solved.amperes(terminal, 3, phase) / phaseA) * 100 : 0;
+  // A three-wire run has no neutral conductor to heat; a share without neutral current says so.
+  const rule = thirdHarmonicRule(neutralA > 0.01 * phaseA ? sharePercent : 0);
+  const designA = (rule.basis === 'phase' ? phaseA : Math.max(neutralA, phaseA)) / rule.factor;
+  return { phase, phaseA, neutralA, sharePercent, rule, designA };
+}
+
 function atCable(context: CheckContext, cable: Cable): Verdict {
   const { solved } = context;
   const row: Row = {
@@ -45,19 +73,9 @@ function atCable(context: CheckContext, cable: Cable): Verdict {
     source,
     working: [],
   };
-  const ends = [cable.from, cable.to]
-    .map((bus) => solved.terminal(cable.id, bus))
-    .filter((t) => t !== undefined);
-  const terminal = ends.sort((a, b) => largestPhase(solved, b) - largestPhase(solved, a))[0];
-  if (terminal === undefined) return unknown(row, `${nameOf(cable)} carries no current in this case`);
-  const phase = SolvedCase.worstPhase((k) => solved.rmsAmperes(terminal, k));
-  const phaseA = solved.rmsAmperes(terminal, phase);
-  const neutralA = neutralRms(solved, terminal);
-  const sharePercent =
-    phaseA > 0 && solved.maxOrder >= 3 ? (solved.amperes(terminal, 3, phase) / phaseA) * 100 : 0;
-  // A three-wire run has no neutral conductor to heat; a share without neutral current says so.
-  const rule = thirdHarmonicRule(neutralA > 0.01 * phaseA ? sharePercent : 0);
-  const designA = (rule.basis === 'phase' ? phaseA : Math.max(neutralA, phaseA)) / rule.factor;
+  const design = cableDesignAmperes(solved, cable);
+  if (!design) return unknown(row, `${nameOf(cable)} carries no current in this case`);
+  const { phase, phaseA, neutralA, sharePercent, rule, designA } = design;
   const working = (): Working[] => [
     {
       equation: 'I_phase, I_neutral (rms of all orders)',

@@ -18,6 +18,8 @@ export { type LimitUse, limitChoices, limitSet, limitSets } from './limits/limit
 export type { LimitSet } from './limits/types.ts';
 export { type Limit, thdLimit, voltageLimit } from './limits/voltageLimit.ts';
 export { margin, verdictWord, WATCH_MARGIN } from './margin.ts';
+export { DutyMargins } from './margins/DutyMargins.ts';
+export { type Measure, NOT_FORMED } from './margins/Gauge.ts';
 export { type OrderRow, orderTable } from './orderTable.ts';
 export { pccBusesOf } from './pcc.ts';
 export { SolvedCase } from './SolvedCase.ts';

@@ -33,7 +33,8 @@ export function motorHvf(context: CheckContext): Verdict[] {
   );
 }
 
-function worstFactor(
+/** The factor of the phase where it is largest. */
+export function worstVoltageFactor(
   solved: SolvedCase,
   busId: string,
   nominalV: number,
@@ -66,10 +67,10 @@ function atMotor(context: CheckContext, motor: Motor): Verdict {
       `the study stops at order ${context.solved.maxOrder}: solve to the 13th at least to form the factor`,
     );
   }
-  const { value, phase } = worstFactor(context.solved, bus.id, bus.nominalV, rule.oddOnly);
+  const { value, phase } = worstVoltageFactor(context.solved, bus.id, bus.nominalV, rule.oddOnly);
   const without = context.without();
   const before = without?.energised(bus.id)
-    ? worstFactor(without, bus.id, bus.nominalV, rule.oddOnly).value
+    ? worstVoltageFactor(without, bus.id, bus.nominalV, rule.oddOnly).value
     : null;
   return judged({
     ...row,

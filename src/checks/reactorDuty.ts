@@ -23,7 +23,8 @@ export function reactorDuty(context: CheckContext): Verdict[] {
   );
 }
 
-const shareOn = ({ bank, kvar }: LiveBank): number =>
+/** Share of the bank's kvar that is on. */
+export const shareOn = ({ bank, kvar }: LiveBank): number =>
   kvar / bank.steps.reduce((sum, step) => sum + step.kvar, 0);
 
 const scaledRemark = (live: LiveBank): string[] =>
@@ -68,6 +69,12 @@ function rms(context: CheckContext, live: LiveBank): Verdict[] {
   ];
 }
 
+/** Linear range over the fundamental: the entered one, or the customary 1.6 times. */
+export function linearLimitOf(live: LiveBank, fundamentalA: number): number {
+  const entered = live.bank.reactorLinearA;
+  return entered === undefined ? LINEAR_SHARE : (entered * shareOn(live)) / fundamentalA;
+}
+
 function linear(context: CheckContext, live: LiveBank): Verdict {
   const { bank, terminal } = live;
   const { solved } = context;
@@ -79,7 +86,6 @@ function linear(context: CheckContext, live: LiveBank): Verdict {
   const phase = sums.indexOf(Math.max(...sums));
   const fundamental = solved.amperes(terminal, 1, phase);
   const sum = sums[phase] ?? 0;
-  const own = bank.reactorLinearA === undefined ? null : (bank.reactorLinearA * shareOn(live)) / fundamental;
   const row = partRow(context, bank.id, {
     check: 'reactor-duty',
     title: 'reactor linear range',
@@ -89,7 +95,7 @@ function linear(context: CheckContext, live: LiveBank): Verdict {
   return judged({
     ...row,
     value: sum / fundamental,
-    limit: own ?? LINEAR_SHARE,
+    limit: linearLimitOf(live, fundamental),
     working: () => [
       {
         equation: '(I1 + Σ I_h) / I1, all crests taken to coincide',
@@ -97,7 +103,7 @@ function linear(context: CheckContext, live: LiveBank): Verdict {
       },
     ],
     remarks: () => [
-      ...(own === null
+      ...(bank.reactorLinearA === undefined
         ? ['The linear range is not entered; the customary 1.6 times the fundamental stands in for it.']
         : scaledRemark(live)),
       ...angles(context, live),

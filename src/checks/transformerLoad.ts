@@ -61,6 +61,19 @@ function heaviestSide(solved: SolvedCase, part: Transformer): Side | null {
   return sides.sort((a, b) => heat(b, share) - heat(a, share))[0] ?? null;
 }
 
+/**
+ * Load over what is permitted, as the verdict judges it: null without current, and where only P_EC-R would
+ * tell (the rms load alone is below the rating).
+ */
+export function transformerUse(solved: SolvedCase, part: Transformer): number | null {
+  const side = heaviestSide(solved, part);
+  if (!side || !solved.energised(part.to)) return null;
+  const load = side.loss.rmsA / side.ratedA;
+  if (part.eddyLossShare !== undefined)
+    return load / permissibleLoad(side.loss.lossFactor, part.eddyLossShare);
+  return side.loss.lossFactor < NEGLIGIBLE_LOSS_FACTOR || load > 1 ? load : null;
+}
+
 function atTransformer(context: CheckContext, part: Transformer): Verdict {
   const side = heaviestSide(context.solved, part);
   const row: Row = {

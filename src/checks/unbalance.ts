@@ -1,4 +1,4 @@
-import type { Bus } from '../study/index.ts';
+import type { Bus, Study } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
 import { bandSetFor } from './limits/choice.ts';
@@ -18,8 +18,9 @@ export function unbalance(context: CheckContext): Verdict[] {
   );
 }
 
-function limitAt(context: CheckContext, isPcc: boolean): { set: LimitSet; cited: CitedValue } {
-  const set = bandSetFor(context.study, isPcc);
+/** The limit of unbalance and the set it stands in; IEC 61000-2-2 where the chosen set has none. */
+export function unbalanceLimit(study: Study, isPcc: boolean): { set: LimitSet; cited: CitedValue } {
+  const set = bandSetFor(study, isPcc);
   if (set.unbalancePercent) return { set, cited: set.unbalancePercent };
   const cited = iec61000x2x2.unbalancePercent;
   if (!cited) throw new RangeError('IEC 61000-2-2 lacks its limit of unbalance');
@@ -27,7 +28,7 @@ function limitAt(context: CheckContext, isPcc: boolean): { set: LimitSet; cited:
 }
 
 /** |V2|/|V1| in per cent at the fundamental; null without positive-sequence voltage. */
-function unbalancePercent(solved: SolvedCase, bus: Bus): number | null {
+export function unbalancePercent(solved: SolvedCase, bus: Bus): number | null {
   const { voltage, maxOrder } = solved.solution;
   const at = solved.bus(bus.id) * maxOrder * 3;
   const phases: Rectangular[] = [0, 1, 2].map((k) => ({
@@ -41,7 +42,7 @@ function unbalancePercent(solved: SolvedCase, bus: Bus): number | null {
 }
 
 function atBus(context: CheckContext, bus: Bus): Verdict {
-  const { set, cited } = limitAt(context, context.pccBuses.has(bus.id));
+  const { set, cited } = unbalanceLimit(context.study, context.pccBuses.has(bus.id));
   const row: Row = {
     check: 'unbalance',
     title: 'voltage unbalance',
