@@ -1,13 +1,32 @@
+export { type Items, withBelow } from './below.ts';
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
 export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
+export { counted, countedTogether } from './counted.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
-export { addPin, type End, moveEnd, removePin, reorderAlong, setPins } from './edits/arrange.ts';
+export { addPin, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
 export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } from './edits/copyParts.ts';
 export { makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter, joinEdits } from './edits/errorsAfter.ts';
+export {
+  alongWith,
+  busesLosingFeed,
+  type End,
+  type Move,
+  moveEnd,
+  moveObstacle,
+  moveParts,
+} from './edits/moveParts.ts';
 export { originOf, originPath, originsOf, setOrigin } from './edits/origins.ts';
-export { removeBus, removeParts } from './edits/removeParts.ts';
+export {
+  type Chosen,
+  type Removal,
+  removalOf,
+  removalWords,
+  removeBus,
+  removeItems,
+  removeParts,
+} from './edits/removeParts.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {
   resetInCase,

@@ -178,7 +178,7 @@ describe('Changing a part', () => {
 describe('Removing', () => {
   it('a transformer takes what hangs below it when nothing else feeds it', () => {
     const edit = removeParts(detuned, ['t1']);
-    expect(edit.words).toBe('remove transformer t1 and 6 parts below');
+    expect(edit.words).toBe('remove transformer t1 with 6 parts and 2 busbars below');
     const after = edit.apply(detuned);
     expect(after.buses.map((bus) => bus.id)).toEqual(['in']);
     expect(after.elements.map((element) => element.id)).toEqual(['grid']);

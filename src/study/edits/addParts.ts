@@ -118,6 +118,11 @@ function broughtBus(study: Study, kind: ElementKind, values: Patch, upper: Bus):
   return { id, name: `${volts.replace('\u2009', ' ')} busbar ${counterOf(id)}`, nominalV };
 }
 
+/** Whether a busbar's name is the one it got when a series part brought it. */
+export function isBroughtName(name: string | undefined): boolean {
+  return name !== undefined && /^[\d.\s]+k?V busbar \d+$/.test(name);
+}
+
 function typicalOrigins(id: string, typical: Patch, given: ReadonlySet<string>): Record<string, DataOrigin> {
   const keys = Object.keys(typical).filter((key) => !given.has(key) && !placeKeys.has(key));
   return Object.fromEntries(keys.map((key) => [originPath('elements', id, key), { origin: 'typical' }]));

@@ -1,53 +1,20 @@
-import { busById, elementById, isSeries } from '../lookup.ts';
+import { counted } from '../counted.ts';
+import { elementById } from '../lookup.ts';
 import { busName, fullNameOf } from '../names.ts';
-import type { Edit, Pin, Study, StudyElement, StudyView } from '../types.ts';
-import { makeEdit, mapById, patched, sameData, withField } from './edit.ts';
+import type { Edit, Pin, Study } from '../types.ts';
+import { makeEdit, patched, sameData } from './edit.ts';
 
-export type End = 'bus' | 'from' | 'to';
-
-/**
- * Moves one end of a part to another busbar. An end the part does not have, an unknown busbar, or both ends
- * at one busbar change nothing: the same study comes back.
- */
-export function moveEnd(study: Study, id: string, end: End, busId: string): Edit {
-  const element = elementById(study, id);
-  const words = `move ${element ? fullNameOf(element) : id} to ${busName(study, busId)}`;
-  return makeEdit('part.move', words, (current) => {
-    if (!busById(current, busId)) return current;
-    const elements = mapById(current.elements, id, (item) => movedEnd(item, end, busId));
-    if (elements === current.elements) return current;
-    const next = { ...current, elements };
-    return current.view ? withField(next, 'view', viewAfterMove(current.view, id, elements)) : next;
-  });
-}
-
-function movedEnd(element: StudyElement, end: End, busId: string): StudyElement {
-  if (isSeries(element) ? end === 'bus' : end !== 'bus') return element;
-  if (isSeries(element) && (end === 'from' ? element.to : element.from) === busId) return element;
-  return patched(element, { [end]: busId });
-}
-
-/** A current pin looks at a terminal; where the terminal moved away the pin follows it. */
-function viewAfterMove(view: StudyView, id: string, elements: readonly StudyElement[]): StudyView {
-  const element = elements.find((item) => item.id === id);
-  if (!element) return view;
-  const ends = isSeries(element) ? [element.from, element.to] : [element.bus];
-  const pins = view.pins?.map((pin): Pin => {
-    if (pin.quantity !== 'current' || pin.element !== id || ends.includes(pin.bus)) return pin;
-    return { ...pin, bus: ends.at(-1) ?? pin.bus };
-  });
-  const order =
-    view.orderAlong &&
-    Object.entries(view.orderAlong).map(([bus, ids]) => [
-      bus,
-      ends.includes(bus) ? ids : ids.filter((item) => item !== id),
-    ]);
-  return { ...view, ...(pins ? { pins } : {}), ...(order ? { orderAlong: Object.fromEntries(order) } : {}) };
-}
-
-/** Sets the order of parts along a busbar, from left to right. */
-export function reorderAlong(study: Study, busId: string, elementIds: readonly string[]): Edit {
-  return makeEdit('drawing.reorder', `reorder the parts along ${busName(study, busId)}`, (current) => {
+/** Sets the order of parts along a busbar, from left to right; `moved` are those whose place it is about. */
+export function reorderAlong(
+  study: Study,
+  busId: string,
+  elementIds: readonly string[],
+  moved: readonly string[] = [],
+): Edit {
+  const [first] = moved.flatMap((id) => elementById(study, id) ?? []);
+  const what = moved.length === 1 && first ? fullNameOf(first) : counted(moved.length, 'part');
+  const words = `${moved.length === 0 ? 'reorder the parts' : `move ${what}`} along ${busName(study, busId)}`;
+  return makeEdit('drawing.reorder', words, (current) => {
     const before = current.view?.orderAlong ?? {};
     const after = patched(before, { [busId]: [...elementIds] });
     return after === before ? current : { ...current, view: { ...current.view, orderAlong: after } };

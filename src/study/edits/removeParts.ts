@@ -1,11 +1,19 @@
-import { elementById, isSeries } from '../lookup.ts';
-import { busName, fullNameOf } from '../names.ts';
-import type { CaseChange, Edit, Study, StudyElement, StudyView } from '../types.ts';
+import { type Items, withBelow } from '../below.ts';
+import { countedTogether } from '../counted.ts';
+import { busById, elementById, elementsAt } from '../lookup.ts';
+import { fullNameOf, nameOf } from '../names.ts';
+import type { CaseChange, Edit, Study, StudyView } from '../types.ts';
 import { makeEdit } from './edit.ts';
 
-interface Doomed {
-  elements: Set<string>;
-  buses: Set<string>;
+/** Chosen parts and busbars, by id. */
+export interface Chosen {
+  parts: readonly string[];
+  buses: readonly string[];
+}
+
+/** Everything a removal takes, and how much of it was not chosen itself. */
+export interface Removal extends Items {
+  below: { parts: number; buses: number };
 }
 
 /**
@@ -13,67 +21,56 @@ interface Doomed {
  * to the busbar above feeds it. References in cases, scans, view and origins go too.
  */
 export function removeParts(study: Study, ids: readonly string[]): Edit {
-  const doomed = doomedWith(study, ids);
-  const first = ids.length === 1 ? elementById(study, ids[0] ?? '') : undefined;
-  const below = doomed.elements.size - ids.length;
-  const what = first ? fullNameOf(first) : `${ids.length} parts`;
-  const words = `remove ${what}${below > 0 ? ` and ${below} ${below === 1 ? 'part' : 'parts'} below` : ''}`;
-  return makeEdit('parts.remove', words, (current) => without(current, doomedWith(current, ids)));
+  return removeItems(study, { parts: ids, buses: [] });
 }
 
 /** Removes a busbar, the parts with an end at it, and what hangs below them alone. */
 export function removeBus(study: Study, id: string): Edit {
-  return makeEdit('bus.remove', `remove busbar ${busName(study, id)} and its parts`, (current) => {
-    const touching = current.elements.filter((element) =>
-      isSeries(element) ? element.from === id || element.to === id : element.bus === id,
-    );
-    const doomed = doomedWith(
-      current,
-      touching.map((element) => element.id),
-      id,
-    );
-    doomed.buses.add(id);
-    return without(current, doomed);
-  });
+  return removeItems(study, { parts: [], buses: [id] });
 }
 
-/** What removeParts would take: the parts themselves, and the busbars and parts left without a feed. */
-function doomedWith(study: Study, ids: readonly string[], gone?: string): Doomed {
-  const elements = new Set(ids.filter((id) => elementById(study, id)));
-  const buses = new Set<string>();
-  const left = study.elements.filter((element) => !elements.has(element.id));
-  const sourceBuses = new Set(
-    left.flatMap((element) =>
-      element.kind === 'supply' || element.kind === 'generator' ? [element.bus] : [],
-    ),
+/** Removes chosen parts and busbars as one edit, with what hangs from them alone. */
+export function removeItems(study: Study, chosen: Chosen): Edit {
+  const label = chosen.parts.length === 0 ? 'bus.remove' : 'parts.remove';
+  return makeEdit(label, `remove ${removalWords(study, chosen)}`, (current) =>
+    without(current, removalOf(current, chosen)),
   );
-  for (const id of elements) {
-    const element = elementById(study, id);
-    if (!element || !isSeries(element) || element.to === gone) continue;
-    const island = islandOf(element.to, left);
-    if (island.has(element.from) || [...island].some((bus) => sourceBuses.has(bus))) continue;
-    for (const bus of island) buses.add(bus);
-  }
-  for (const element of left) {
-    const ends = isSeries(element) ? [element.from, element.to] : [element.bus];
-    if (ends.some((bus) => buses.has(bus))) elements.add(element.id);
-  }
-  return { elements, buses };
 }
 
-function islandOf(start: string, elements: readonly StudyElement[]): Set<string> {
-  const neighbours = new Map<string, string[]>();
-  for (const element of elements) {
-    if (!isSeries(element)) continue;
-    neighbours.set(element.from, [...(neighbours.get(element.from) ?? []), element.to]);
-    neighbours.set(element.to, [...(neighbours.get(element.to) ?? []), element.from]);
-  }
-  const island = new Set([start]);
-  for (const bus of island) for (const next of neighbours.get(bus) ?? []) island.add(next);
-  return island;
+/** What a removal is of, in words: "cable W2 with 3 parts and 1 busbar below". */
+export function removalWords(study: Study, chosen: Chosen): string {
+  const { below } = removalOf(study, chosen);
+  const further = countedTogether([
+    [below.parts, 'part'],
+    [below.buses, 'busbar'],
+  ]);
+  return `${chosenWords(study, chosen)}${further ? ` with ${further} below` : ''}`;
 }
 
-function without(study: Study, { elements, buses }: Doomed): Study {
+function chosenWords(study: Study, { parts, buses }: Chosen): string {
+  const [part, bus] = [elementById(study, parts[0] ?? ''), busById(study, buses[0] ?? '')];
+  if (parts.length === 1 && buses.length === 0 && part) return fullNameOf(part);
+  if (parts.length === 0 && buses.length === 1 && bus) return `busbar ${nameOf(bus)}`;
+  return countedTogether([
+    [parts.length, 'part'],
+    [buses.length, 'busbar'],
+  ]);
+}
+
+/** What removeItems would take: the chosen, the parts at chosen busbars, and all that is left without a feed. */
+export function removalOf(study: Study, { parts, buses }: Chosen): Removal {
+  const doomed = new Set(parts.filter((id) => elementById(study, id)));
+  const gone = new Set(buses.filter((id) => busById(study, id)));
+  const touching = [...gone].flatMap((bus) => elementsAt(study, bus).map((element) => element.id));
+  const taken = withBelow(study, [...doomed, ...touching], gone);
+  for (const bus of gone) taken.buses.add(bus);
+  return {
+    ...taken,
+    below: { parts: taken.elements.size - doomed.size, buses: taken.buses.size - gone.size },
+  };
+}
+
+function without(study: Study, { elements, buses }: Items): Study {
   if (elements.size === 0 && buses.size === 0) return study;
   const next: Study = {
     ...study,
