@@ -1,11 +1,15 @@
 export { type Items, withBelow } from './below.ts';
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
 export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
+export { clipItems } from './clip/clipItems.ts';
+export { clipText, type PartsClip } from './clip/PartsClip.ts';
+export { type PasteEdit, pasteClip } from './clip/pasteClip.ts';
+export { type ClipOutcome, readClip } from './clip/readClip.ts';
 export { counted, countedTogether } from './counted.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
 export { addPin, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
-export { type CopyEdit, clipParts, duplicateParts, type PartsClip, pasteParts } from './edits/copyParts.ts';
+export { type CopyEdit, duplicateParts } from './edits/copyParts.ts';
 export { makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter, joinEdits } from './edits/errorsAfter.ts';
 export {
@@ -27,6 +31,7 @@ export {
   removeItems,
   removeParts,
 } from './edits/removeParts.ts';
+export { replaceObstacle, replacePart } from './edits/replacePart.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {
   resetInCase,
@@ -63,7 +68,7 @@ export {
   isOn,
   isSeries,
 } from './lookup.ts';
-export { busName, elementName, fullNameOf, kindWords, nameOf } from './names.ts';
+export { busName, elementName, fullNameOf, kindWords, nameOf, shortKindWords } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
 export { siteFindings } from './siteFindings.ts';

@@ -18,6 +18,14 @@ export const kindWords: Readonly<Record<ElementKind, string>> = {
   shunt: 'R-L-C, to neutral',
 };
 
+/** The kind in one short word, as the tray and the reader's ear have it. */
+export const shortKindWords: Readonly<Record<ElementKind, string>> = {
+  ...kindWords,
+  coupler: 'coupler',
+  converter: 'drive',
+  bank: 'bank',
+};
+
 /** Display name of a busbar, part, spectrum or case: its name, or its id where it has none. */
 export function nameOf(named: { id: string; name?: string }): string {
   const name = named.name?.trim();

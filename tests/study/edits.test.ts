@@ -7,22 +7,25 @@ import {
   addPin,
   addSpectrum,
   checkStudy,
-  clipParts,
+  clipItems,
   duplicateCase,
   duplicateParts,
   type Edit,
   elementById,
   elementKinds,
   moveEnd,
+  moveParts,
   newStudy,
   originOf,
-  pasteParts,
+  pasteClip,
   removeBus,
   removeCase,
+  removeItems,
   removeParts,
   removePin,
   removeSpectrum,
   reorderAlong,
+  replacePart,
   resetInCase,
   type Study,
   sameData,
@@ -270,14 +273,6 @@ describe('Moving, copying, arranging', () => {
     expect(originOf(after, elementById(after, 'converter1')!, 'kW')).toMatchObject({ origin: 'measured' });
   });
 
-  it('parts are pasted into another study with the spectrum they need', () => {
-    const source = exampleStudy('2-four-wire-480v');
-    const clip = clipParts(source, ['it', 'ac', 'ta']);
-    const after = pasteParts(detuned, clip, 'hall').apply(detuned);
-    expect(after.elements).toHaveLength(detuned.elements.length + 2);
-    expect(errorsOf(after)).toEqual([]);
-  });
-
   it('a pin is set once and taken away', () => {
     const pin = { quantity: 'voltage', bus: 'hall' } as const;
     const pinned = addPin(detuned, pin).apply(detuned);
@@ -336,7 +331,16 @@ function someEdit(study: Study, which: number, a: number, b: number): Edit {
     () => removeParts(study, [id]),
     () => (b % 7 === 0 ? removeBus(study, bus) : removeParts(study, [id])),
     () => duplicateParts(study, [id]),
-    () => pasteParts(study, clipParts(study, [id]), bus),
+    () => pasteClip(study, clipItems(study, { parts: [id], buses: [] }), bus),
+    () => pasteClip(study, clipItems(study, { parts: [id], buses: [otherBus] }), null),
+    () => replacePart(study, id, elementKinds[b % elementKinds.length]!),
+    () => removeItems(study, { parts: [id], buses: b % 5 === 0 ? [bus, otherBus] : [] }),
+    () =>
+      moveParts(
+        study,
+        study.elements.slice(a % 3, 4).map((item) => ({ id: item.id, end: 'from' in item ? 'from' : 'bus' })),
+        otherBus,
+      ),
     () => moveEnd(study, id, end, otherBus),
     () =>
       reorderAlong(

@@ -1,4 +1,4 @@
-import { type ElementKind, seriesKinds } from '../../study/index.ts';
+import { type ElementKind, seriesKinds, shortKindWords } from '../../study/index.ts';
 
 /** What the tray offers: every kind of part, and a busbar to begin with. */
 export type TrayKind = ElementKind | 'bus';
@@ -8,19 +8,4 @@ export function isSeriesKind(kind: TrayKind): boolean {
 }
 
 /** Names on the tray. */
-export const trayNames: Record<TrayKind, string> = {
-  supply: 'supply',
-  generator: 'generator',
-  transformer: 'transformer',
-  cable: 'cable',
-  reactor: 'reactor',
-  coupler: 'coupler',
-  motor: 'motor',
-  converter: 'drive',
-  load: 'load',
-  bank: 'bank',
-  filter: 'filter',
-  branch: 'R-L-C, series',
-  shunt: 'R-L-C, to neutral',
-  bus: 'busbar',
-};
+export const trayNames: Record<TrayKind, string> = { ...shortKindWords, bus: 'busbar' };

@@ -1,6 +1,6 @@
-import { elementById, isSeries } from '../lookup.ts';
+import { elementById } from '../lookup.ts';
 import { fullNameOf, nameOf } from '../names.ts';
-import type { CaseChange, DataOrigin, Edit, Spectrum, Study, StudyElement } from '../types.ts';
+import type { CaseChange, DataOrigin, Edit, Study, StudyElement } from '../types.ts';
 import { freshId, makeEdit } from './edit.ts';
 import { originPath, originsOf, putOrigins } from './origins.ts';
 
@@ -44,7 +44,7 @@ function twinsOf(study: Study, originals: readonly StudyElement[]): Twin[] {
 }
 
 /** "Bank 1" becomes "Bank 2", or the next number nobody has. */
-function freshName(taken: readonly StudyElement[], name: string): string {
+export function freshName(taken: readonly { id: string; name?: string }[], name: string): string {
   const names = new Set(taken.map(nameOf));
   const match = /^(.*?)(\d+)$/.exec(name);
   const stem = match?.[1] ?? `${name} `;
@@ -72,62 +72,4 @@ function copiedOrigins(study: Study, twins: readonly Twin[]): Record<string, Dat
       ]),
     ),
   );
-}
-
-/** Hanging parts taken out of a study, with the spectra and origins they need in another one. */
-export interface PartsClip {
-  format: 'varwright-parts';
-  elements: StudyElement[];
-  spectra: Spectrum[];
-  origins: Record<string, Record<string, DataOrigin>>;
-}
-
-/** Copies hanging parts for another study or busbar; series parts need two busbars and stay out. */
-export function clipParts(study: Study, ids: readonly string[]): PartsClip {
-  const elements = ids.flatMap((id) => elementById(study, id) ?? []).filter((element) => !isSeries(element));
-  const used = new Set(
-    elements.flatMap((element) =>
-      element.kind === 'converter' && typeof element.spectrum === 'string' ? [element.spectrum] : [],
-    ),
-  );
-  return {
-    format: 'varwright-parts',
-    elements,
-    spectra: (study.spectra ?? []).filter((spectrum) => used.has(spectrum.id)),
-    origins: Object.fromEntries(
-      elements.map((element) => [element.id, originsOf(study, 'elements', element.id)]),
-    ),
-  };
-}
-
-/** Hangs copied parts at a busbar under fresh ids. A spectrum this study lacks, or has otherwise, comes as rows. */
-export function pasteParts(study: Study, clip: PartsClip, busId: string): CopyEdit {
-  const twins = twinsOf(study, clip.elements).map(({ original, copy }) => {
-    const named = study.elements.some((element) => nameOf(element) === nameOf(original))
-      ? copy
-      : { ...copy, name: nameOf(original) };
-    return { original, copy: withOwnRows({ ...named, bus: busId } as StudyElement, study, clip) };
-  });
-  const words = `paste ${twins.length === 1 && twins[0] ? fullNameOf(twins[0].copy) : `${twins.length} parts`}`;
-  const edit = makeEdit('parts.paste', words, (current) => {
-    if (twins.length === 0) return current;
-    const origins = twins.flatMap(({ original, copy }) =>
-      Object.entries(clip.origins[original.id] ?? {}).map(
-        ([field, origin]) => [originPath('elements', copy.id, field), origin] as const,
-      ),
-    );
-    return putOrigins(
-      { ...current, elements: [...current.elements, ...twins.map((twin) => twin.copy)] },
-      Object.fromEntries(origins),
-    );
-  });
-  return { ...edit, elementIds: twins.map((twin) => twin.copy.id) };
-}
-
-function withOwnRows(element: StudyElement, study: Study, clip: PartsClip): StudyElement {
-  if (element.kind !== 'converter' || typeof element.spectrum !== 'string') return element;
-  const carried = clip.spectra.find((spectrum) => spectrum.id === element.spectrum);
-  const here = study.spectra?.find((spectrum) => spectrum.id === element.spectrum);
-  const same = carried && here && JSON.stringify(carried.orders) === JSON.stringify(here.orders);
-  return carried && !same ? { ...element, spectrum: carried.orders } : element;
 }
