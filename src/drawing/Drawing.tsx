@@ -176,11 +176,13 @@ export function Drawing(props: DrawingProps) {
         </svg>
       </div>
       {empty && !hand && <EmptyHint>{props.children}</EmptyHint>}
-      <ReadingModeChoice
-        mode={readingMode}
-        order={readOrder(order, solution?.maxOrder ?? study.maxOrder ?? 50)}
-        onReadingMode={props.onReadingMode}
-      />
+      {!empty && (
+        <ReadingModeChoice
+          mode={readingMode}
+          order={readOrder(order, solution?.maxOrder ?? study.maxOrder ?? 50)}
+          onReadingMode={props.onReadingMode}
+        />
+      )}
       {props.stale && <span className="solving">solving</span>}
       {solution?.converged === false && !props.stale && (
         <p className="no-solution" role="alert">
@@ -190,7 +192,7 @@ export function Drawing(props: DrawingProps) {
       <output className="plan" aria-live="polite">
         {plan?.words ?? ''}
       </output>
-      <ZoomTools controls={controls} />
+      {!empty && <ZoomTools controls={controls} />}
       {slip && !hand && (
         <SlipHolder key={slip} subject={slip} layout={layout} figures={figures} controls={controls}>
           {props.renderSlip(slip)}

@@ -1,3 +1,4 @@
+export { type Assumption, assumptionsOf } from './assumptionsOf.ts';
 export { type Items, withBelow } from './below.ts';
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
 export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
@@ -71,6 +72,14 @@ export {
 export { busName, elementName, fullNameOf, kindWords, nameOf, shortKindWords } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
+export { type AnswerKey, answerFields } from './quickStart/answerFields.ts';
+export { type AnswerIssue, answerIssues } from './quickStart/answerIssues.ts';
+export { type DrawnSite, drawSite } from './quickStart/drawSite.ts';
+export { type DriveKind, driveKinds } from './quickStart/driveKinds.ts';
+export { quickStartEdit } from './quickStart/quickStartEdit.ts';
+export { figuresOf, type SiteAnswers, type SiteFigures } from './quickStart/SiteAnswers.ts';
+export { type SystemId, siteSystems } from './quickStart/siteSystems.ts';
+export { withTyped } from './quickStart/withTyped.ts';
 export { siteFindings } from './siteFindings.ts';
 export {
   type BuiltInSpectrum,

@@ -5,6 +5,7 @@ import { caseCommands } from '../cases/caseCommands.ts';
 import { leaveStudy } from '../files/leaveStudy.ts';
 import { openSample } from '../files/openSample.ts';
 import { samples } from '../files/samples.ts';
+import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
 import type { Command } from './command.ts';
 
 function fileCommands(study: Study | null): Command[] {
@@ -107,6 +108,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys' | 'case') =>
         enabled: study !== null,
         run: () => openDialog('details'),
       },
+      ...quickStartCommands(study),
       ...viewCommands(),
       ...(study ? caseCommands(study, caseId, () => openDialog('case')) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },

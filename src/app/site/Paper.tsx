@@ -3,6 +3,7 @@ import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/ind
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { type Study, studyInCase } from '../../study/index.ts';
 import { Samples } from '../files/Samples.tsx';
+import { QuickStart } from '../quickstart/QuickStart.tsx';
 import { SlipConnection } from './SlipConnection.tsx';
 
 const noVerdicts: never[] = [];
@@ -43,7 +44,7 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
   );
   return (
     <section className="paper" aria-label="Drawing">
-      {outlined ? (
+      {outlined && study.buses.length > 0 ? (
         <div className="outline-place">
           <Outline
             study={studyInCase(study, view.caseId)}
@@ -81,17 +82,20 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
           onHover={onHover}
           renderSlip={renderSlip}
         >
+          <QuickStart />
           <Samples />
         </Drawing>
       )}
-      <button
-        type="button"
-        className="outline-toggle"
-        aria-pressed={outlined}
-        onClick={() => setOutlined(!outlined)}
-      >
-        {outlined ? 'as a drawing' : 'as a list'}
-      </button>
+      {study.buses.length > 0 && (
+        <button
+          type="button"
+          className="outline-toggle"
+          aria-pressed={outlined}
+          onClick={() => setOutlined(!outlined)}
+        >
+          {outlined ? 'as a drawing' : 'as a list'}
+        </button>
+      )}
     </section>
   );
 }

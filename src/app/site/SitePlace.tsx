@@ -2,6 +2,7 @@ import { useCallback, useState } from 'react';
 import type { NoteSubject } from '../../charts/index.ts';
 import { readSubject, type Subject, Tray, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench } from '../../store/index.ts';
+import { Assumptions } from '../quickstart/Assumptions.tsx';
 import { Leader } from './Leader.tsx';
 import { Notes } from './Notes.tsx';
 import { Paper } from './Paper.tsx';
@@ -40,6 +41,7 @@ export function SitePlace() {
         onArm={setArmedKind}
         onHover={setHovered}
       />
+      <Assumptions study={study} />
       <Notes
         study={study}
         letters={letters}

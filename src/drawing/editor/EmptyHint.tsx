@@ -8,20 +8,22 @@ const STEPS = [
   { kind: 'load', title: 'Hang loads', words: 'motors, drives, loads, and the bank beside them' },
 ] as const;
 
-/** What an empty paper says: three steps, and room for the samples the app offers. */
+/** What an empty paper says: three steps, and room for the other beginnings the app offers. */
 export function EmptyHint({ children }: { children?: ReactNode }) {
   return (
     <div className="empty-hint">
       <ol>
         {STEPS.map(({ kind, title, words }, at) => (
           <li key={kind}>
-            <svg width={56} height={60} viewBox="-28 -30 56 60" aria-hidden="true">
+            <svg width={40} height={44} viewBox="-28 -30 56 60" aria-hidden="true">
               <SymbolGlyph shape={symbolPaths(kind)} ink="currentColor" />
             </svg>
-            <strong>
-              {at + 1}. {title}
-            </strong>
-            <span>{words}</span>
+            <div>
+              <strong>
+                {at + 1}. {title}
+              </strong>
+              <span>{words}</span>
+            </div>
           </li>
         ))}
       </ol>

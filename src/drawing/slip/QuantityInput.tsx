@@ -3,18 +3,24 @@ import { allowedOf, editText, formatNumber, type NumberField, parseQuantity } fr
 import { isInside, stepValue } from './stepValue.ts';
 import { useDraft } from './useDraft.ts';
 
-export interface QuantityInputProps {
-  id: string;
+/** A quantity a line takes, and who takes its value. */
+interface Reading {
   field: NumberField;
+  /** Takes the value, or undefined to fall back; returns why it cannot, as a sentence. */
+  onCommit(value: number | undefined): string | null;
+}
+
+export interface QuantityInputProps extends Reading {
+  id: string;
   value: number | undefined;
   /** Shown as placeholder and taken as the start of the arrow keys where the value is absent. */
   fallback?: number | undefined;
   /** Accessible name where no visible label points here. */
   label?: string;
   describedBy?: string;
+  /** Another quantity the same line takes, told apart by the unit typed: a peak in kW, or hours in h. */
+  alternative?: Reading;
   onFocus?(): void;
-  /** Takes the value, or undefined to fall back; returns why it cannot, as a sentence. */
-  onCommit(value: number | undefined): string | null;
 }
 
 /** Arrow presses in a row make one edit: it is made when they pause this long. */
@@ -43,7 +49,7 @@ export function QuantityInput(props: QuantityInputProps) {
   /** Whether the text was taken; one that was not stays, with the reason. */
   const commit = (typed: string): boolean => {
     clearTimeout(timer.current);
-    const outcome = typed.trim() === standing ? null : read(typed, field, props.onCommit);
+    const outcome = typed.trim() === standing ? null : read(typed, props, props.alternative);
     setError(outcome);
     if (outcome === null) setDraft(null);
     return outcome === null;
@@ -112,16 +118,15 @@ export function QuantityInput(props: QuantityInputProps) {
   );
 }
 
-function read(
-  typed: string,
-  field: NumberField,
-  onCommit: (value: number | undefined) => string | null,
-): string | null {
+function read(typed: string, { field, onCommit }: Reading, alternative?: Reading): string | null {
   if (typed.trim() === '') {
     return field.required ? `A value is needed: ${allowedOf(field)}.` : onCommit(undefined);
   }
   const parsed = parseQuantity(typed, field.unit);
-  if (!parsed.ok) return parsed.error;
+  if (!parsed.ok) {
+    const other = alternative && parseQuantity(typed, alternative.field.unit);
+    return alternative && other?.ok ? read(typed, alternative) : parsed.error;
+  }
   if (field.type === 'integer' && !Number.isInteger(parsed.value)) return `Allowed is ${allowedOf(field)}.`;
   if (!isInside(parsed.value, field))
     return `${formatNumber(parsed.value)} is out of range; allowed is ${allowedOf(field)}.`;

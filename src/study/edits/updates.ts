@@ -13,10 +13,13 @@ export interface UpdateOptions {
 
 const identity = ['id', 'kind'] as const;
 
+/** Origins that speak of a value nobody has given; undefined is none. */
+const guesses: ReadonlySet<string | undefined> = new Set(['typical', 'assumed']);
+
 /**
  * Sets fields of a part; undefined or null removes one. With `caseId` of a case that is not the plain base,
  * the case's change is written: a value equal to the base study's takes the change away again. An edited
- * value is no longer "typical", so that mark falls off.
+ * value is no longer the typical or assumed one, so that mark falls off.
  */
 export function updateElement(study: Study, id: string, patch: Patch, options: UpdateOptions = {}): Edit {
   const element = elementById(study, id);
@@ -33,14 +36,14 @@ export function updateElement(study: Study, id: string, patch: Patch, options: U
     if (inCase) return updateInCase(current, inCase.id, id, patch);
     const elements = mapById(current.elements, id, (item) => patched<StudyElement>(item, patch, identity));
     if (elements === current.elements) return current;
-    return withoutTypicalMarks({ ...current, elements }, 'elements', id, patch);
+    return withoutGuessMarks({ ...current, elements }, 'elements', id, patch);
   });
 }
 
-function withoutTypicalMarks(study: Study, list: 'elements' | 'buses', id: string, patch: Patch): Study {
+function withoutGuessMarks(study: Study, list: 'elements' | 'buses', id: string, patch: Patch): Study {
   const stale = Object.keys(patch)
     .map((key) => originPath(list, id, key))
-    .filter((path) => study.origins?.[path]?.origin === 'typical');
+    .filter((path) => guesses.has(study.origins?.[path]?.origin));
   return putOrigins(study, Object.fromEntries(stale.map((path) => [path, null])));
 }
 
@@ -99,7 +102,7 @@ export function updateBus(study: Study, id: string, patch: Patch): Edit {
   const words = patchWords('bus', busName(study, id), patch);
   return makeEdit('bus.set', words, (current) => {
     const buses = mapById(current.buses, id, (bus) => patched<Bus>(bus, patch, ['id']));
-    return buses === current.buses ? current : withoutTypicalMarks({ ...current, buses }, 'buses', id, patch);
+    return buses === current.buses ? current : withoutGuessMarks({ ...current, buses }, 'buses', id, patch);
   });
 }
 

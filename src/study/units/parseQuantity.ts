@@ -234,6 +234,8 @@ const examples: Partial<Record<Unit, string>> = {
   kVA: '1000, 1 MVA',
   kW: '55, 3*55, 0.4 MW',
   kvar: '50, 6*25',
+  kWh: '180 000, 180 MWh',
+  kvarh: '110 000, 110 Mvarh',
   'Ω/km': '0.12, 12.5 mΩ/km',
 };
 

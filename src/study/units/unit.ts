@@ -10,6 +10,8 @@ export type Unit =
   | 'kVA'
   | 'MVA'
   | 'kvar'
+  | 'kWh'
+  | 'kvarh'
   | 'W/kvar'
   | 'Ω'
   | 'mΩ'

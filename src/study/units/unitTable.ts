@@ -13,6 +13,8 @@ const bases: readonly [string, BaseUnit][] = [
   ['W', { dimension: 'W', factor: 1, prefixed: true }],
   ['VA', { dimension: 'VA', factor: 1, prefixed: true }],
   ['var', { dimension: 'var', factor: 1, prefixed: true }],
+  ['Wh', { dimension: 'Wh', factor: 1, prefixed: true }],
+  ['varh', { dimension: 'varh', factor: 1, prefixed: true }],
   // The mechanical horsepower of 550 ft·lbf/s, common on 60 Hz nameplates.
   ['hp', { dimension: 'W', factor: 745.6998715822702, prefixed: false }],
   ['Ω', { dimension: 'Ω', factor: 1, prefixed: true }],
@@ -34,6 +36,8 @@ const bases: readonly [string, BaseUnit][] = [
 const spellings: readonly [RegExp, string][] = [
   [/^(ohms?|R)$/i, 'Ω'],
   [/^(var|VAr|VAR)$/, 'var'],
+  [/^(wh)$/i, 'Wh'],
+  [/^(varh)$/i, 'varh'],
   [/^(va)$/i, 'VA'],
   [/^(v)$/i, 'V'],
   [/^(w)$/i, 'W'],
@@ -70,7 +74,7 @@ function baseOf(text: string): BaseUnit | undefined {
   return spelling ? table.get(spelling[1]) : undefined;
 }
 
-const powers = new Set(['W', 'VA', 'var']);
+const powers = new Set(['W', 'VA', 'var', 'Wh', 'varh']);
 
 function simpleUnit(text: string): BaseUnit | string | undefined {
   const whole = baseOf(text);
