@@ -14,6 +14,8 @@ export const defaultPresence: PresenceThresholds = { voltageShareOfLimit: 0.1, c
 export interface CheckContext {
   /** The study as it stands in this case: ratings are read here. */
   study: Study;
+  /** The same with its parts as they really are at the tolerance point judged. */
+  actualStudy: Study;
   /** A bank or filter as it really is at the tolerance point judged, for reactances and currents. */
   actual<T extends Bank | Filter>(part: T): T;
   /** Actual over rated frequency. */

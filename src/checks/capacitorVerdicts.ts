@@ -59,7 +59,7 @@ interface Prepared {
 
 function prepare(context: CheckContext, units: CapacitorUnits, set: LimitSet): Prepared {
   const duties = units.amperes.map((unit) => capacitorDuty(unit, units.xcOhm, units.ratedV, units.ratedKvar));
-  const highest = highestSupply(context.study);
+  const highest = highestSupply(context.actualStudy);
   const raised = units.amperes.map((unit) => {
     const scaled = [...unit];
     scaled[0] = (scaled[0] ?? 0) * highest.factor;

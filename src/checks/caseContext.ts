@@ -45,7 +45,8 @@ export function caseContext(base: Study, solution: CaseSolution, options: JudgeO
   const study = studyInCase(base, caseId);
   const real = options.actual ?? base;
   const frequencyFactor = options.frequencyFactor ?? 1;
-  const realParts = new Map(studyInCase(real, caseId).elements.map((part) => [part.id, part]));
+  const actualStudy = studyInCase(real, caseId);
+  const realParts = new Map(actualStudy.elements.map((part) => [part.id, part]));
   const found = casesOf(base).find(({ id }) => id === caseId);
   const correction = correctionIds(study);
   const solved = new SolvedCase(solution);
@@ -57,6 +58,7 @@ export function caseContext(base: Study, solution: CaseSolution, options: JudgeO
     solveCase(real, caseId, { without: ids, frequencyFactor });
   return {
     study,
+    actualStudy,
     actual: <T extends Bank | Filter>(part: T): T => (realParts.get(part.id) as T | undefined) ?? part,
     frequencyFactor,
     base,

@@ -22,6 +22,7 @@ export { DutyMargins } from './margins/DutyMargins.ts';
 export { type Measure, NOT_FORMED } from './margins/Gauge.ts';
 export { type OrderRow, orderTable } from './orderTable.ts';
 export { pccBusesOf } from './pcc.ts';
+export { type PresentOrders, presentAtCorrection } from './presentAtCorrection.ts';
 export { SolvedCase } from './SolvedCase.ts';
 export { sourceText } from './source.ts';
 export { sortByMargin, summarise, worstMargin } from './summarise.ts';

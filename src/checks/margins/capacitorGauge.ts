@@ -2,7 +2,7 @@ import type { Bank, Bus, Filter, StarDelta, Study, StudyElement } from '../../st
 import { busById, isOn, withDefaults } from '../../study/index.ts';
 import type { CheckContext } from '../CheckContext.ts';
 import { bankAdmittance, bankXc, filterAdmittance, filterXc, kvarOn } from '../correctionBranch.ts';
-import { highestSupply } from '../highestSupply.ts';
+import { supplyRaise } from '../highestSupply.ts';
 import {
   capacitorCurrentLimit,
   capacitorKvarLimit,
@@ -28,8 +28,7 @@ export function capacitorGauges(context: CheckContext, part: Bank | Filter): Gau
     capacitorKvarLimit(choice.set),
   ].map((limit) => limit?.value ?? Number.POSITIVE_INFINITY);
   const connection = withDefaults(part, context.study).connection;
-  const raised = highestSupply(context.study).factor;
-  const place = { part, bus, connection, raised, ratedKvar };
+  const place = { part, bus, connection, ratedKvar };
   return [
     {
       measures: measuresOf(part),
@@ -57,18 +56,13 @@ interface Place {
   part: Bank | Filter;
   bus: Bus;
   connection: StarDelta;
-  /** How far the fundamental is raised to the highest supply voltage. */
-  raised: number;
   ratedKvar: number;
 }
 
 const duty = new Float64Array(4);
 
 /** I_rms/I_N, U_C/U_N, Σ U_C,h/U_N and Σ √3·U_C,h·I_h/Q_N, each of its worst unit; see capacitorDuty. */
-function worstDuty(
-  state: GaugedState,
-  { part, bus, connection, raised, ratedKvar }: Place,
-): Float64Array | null {
+function worstDuty(state: GaugedState, { part, bus, connection, ratedKvar }: Place): Float64Array | null {
   const { solved, frequencyFactor } = state;
   const terminal = solved.terminal(part.id, part.bus);
   const real = partIn(state.actual, part.id);
@@ -77,6 +71,8 @@ function worstDuty(
   if (!laws) return null;
   const ratedA = (ratedKvar * 1000) / (Math.sqrt(3) * part.ratedV);
   const index = solved.bus(bus.id);
+  // The fundamental is raised to the highest supply voltage.
+  const raised = supplyRaise(state.actual);
   duty.fill(0);
   for (let unit = 0; unit < 3; unit++) {
     let [squaresA, squaresV, peakV, kvar] = [0, 0, 0, 0];

@@ -9,16 +9,21 @@ import { type Gauge, type GaugedState, NOT_FORMED } from './Gauge.ts';
 
 /**
  * Displacement power factor where the site is metered. `judgedPF` names the busbars at which the case's own
- * verdict is a power factor: light load, export and generators are judged otherwise, and stay with that.
+ * verdict is a power factor: light load, export and generators are judged otherwise, and stay with that. A
+ * point at which motors stand still is another load, not the case's power factor.
  */
 export function powerFactorGauges(context: CheckContext, judgedPF: ReadonlySet<string>): Gauge[] {
   const target = context.study.criteria?.targetPF ?? 0.95;
+  const motors = context.study.elements
+    .filter((part) => part.kind === 'motor' && isOn(part))
+    .map(({ id }) => id);
   return meteredBusesOf(context.study, context.pccBuses)
     .filter((bus) => judgedPF.has(`target-pf|${bus}`))
     .map((bus) => ({
       measures: [{ key: `target-pf|${bus}`, check: 'target-pf', subject: { kind: 'bus' as const, id: bus } }],
       read({ solved, actual }, out, at) {
-        const factor = inflowAt(actual, solved, bus)?.displacementPF ?? null;
+        const running = motors.every((id) => actual.elements.some((part) => part.id === id && isOn(part)));
+        const factor = running ? (inflowAt(actual, solved, bus)?.displacementPF ?? null) : null;
         out[at] = factor === null ? NOT_FORMED : (factor - target) / (1 - target);
       },
     }));
