@@ -1,6 +1,14 @@
 export { type Assumption, assumptionsOf } from './assumptionsOf.ts';
 export { type Items, withBelow } from './below.ts';
 export { canonicalJson, canonicalValue } from './canonicalJson.ts';
+export { type CaseDifference, caseDifferences, differencesBetween } from './caseDifferences.ts';
+export {
+  addCaseByRecipe,
+  type CaseRecipe,
+  caseRecipes,
+  type RecipeGroup,
+  usualLightPercent,
+} from './caseRecipes.ts';
 export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
 export { clipItems } from './clip/clipItems.ts';
 export { clipText, type PartsClip } from './clip/PartsClip.ts';
@@ -9,10 +17,18 @@ export { type ClipOutcome, readClip } from './clip/readClip.ts';
 export { counted, countedTogether } from './counted.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
 export { addPin, removePin, reorderAlong, setPins } from './edits/arrange.ts';
-export { type AddCaseEdit, addCase, duplicateCase, removeCase, updateCase } from './edits/caseEdits.ts';
+export {
+  type AddCaseEdit,
+  addCase,
+  duplicateCase,
+  moveCase,
+  removeCase,
+  resetCase,
+  updateCase,
+} from './edits/caseEdits.ts';
 export { type CopyEdit, duplicateParts } from './edits/copyParts.ts';
-export { makeEdit, type Patch, sameData } from './edits/edit.ts';
-export { errorsAfter, joinEdits } from './edits/errorsAfter.ts';
+export { joinEdits, makeEdit, type Patch, sameData } from './edits/edit.ts';
+export { errorsAfter } from './edits/errorsAfter.ts';
 export {
   alongWith,
   busesLosingFeed,
@@ -58,6 +74,8 @@ export type {
   TextField,
 } from './fields/Field.ts';
 export { elementKinds, type FieldOwner, fieldOf, fieldsOf, seriesKinds } from './fields/fieldsOf.ts';
+export { valueWords } from './fields/valueWords.ts';
+export { siteFindings } from './findings/siteFindings.ts';
 export { fingerprint } from './fingerprint.ts';
 export {
   busById,
@@ -80,7 +98,6 @@ export { quickStartEdit } from './quickStart/quickStartEdit.ts';
 export { figuresOf, type SiteAnswers, type SiteFigures } from './quickStart/SiteAnswers.ts';
 export { type SystemId, siteSystems } from './quickStart/siteSystems.ts';
 export { withTyped } from './quickStart/withTyped.ts';
-export { siteFindings } from './siteFindings.ts';
 export {
   type BuiltInSpectrum,
   builtInSpectra,

@@ -164,6 +164,10 @@ export interface Converter extends ShuntPart {
   connection?: Connection;
   spectrum: string | HarmonicRow[];
   filterCapacitanceUF?: number;
+  /** Injects between whole orders, too. Said as a finding; no part in the solution. An extension of the first format. */
+  interharmonics?: boolean;
+  /** The spectrum was measured with capacitors in. Said as a finding. An extension of the first format. */
+  spectrumWithBank?: boolean;
 }
 
 export interface BankStep {
@@ -234,6 +238,8 @@ export type CaseRole = 'load' | 'light' | 'export' | 'generator';
 export interface StudyCase {
   id: string;
   name?: string;
+  /** What the state is and why it is looked at. An extension of the first format. */
+  description?: string;
   role?: CaseRole;
   hoursPerDay?: number;
   changes: CaseChange[];
@@ -315,13 +321,37 @@ export interface Study {
 export interface Finding {
   /** Dotted kind of finding, e.g. "range", "dangling-id", "unknown-field". */
   code: string;
-  severity: 'error' | 'warning';
+  /** A note is worth knowing; a warning puts a result in doubt; an error makes it worthless or refuses the study. */
+  severity: 'error' | 'warning' | 'note';
   /** JSON path, e.g. "$.elements[3].ukPercent". */
   path: string;
   /** The offending value, as JSON text, where there is one. */
   value?: string;
-  /** One sentence: part, quantity, value, unit, what is allowed, next step. */
+  /** One sentence: part, quantity, value, unit, what is allowed. */
   message: string;
+  /** What would mend it, as a sentence; absent where the message says it. */
+  mend?: string;
+}
+
+/** The part or busbar a finding speaks of. */
+export interface FindingSubject {
+  kind: 'element' | 'bus';
+  id: string;
+}
+
+/** A finding about a study that can be opened, with the way to its part and, where only one is meant, the mend itself. */
+export interface SiteFinding extends Finding {
+  /** Tells findings apart and stays over edits elsewhere. */
+  key: string;
+  mend: string;
+  /** null where it speaks of the study as a whole. */
+  subject: FindingSubject | null;
+  /** Field of the part or busbar, or null. */
+  field: string | null;
+  /** Ids of the cases it holds in; empty where it holds whatever the case. */
+  cases: readonly string[];
+  /** One undoable edit after which the finding is gone. */
+  repair?: Edit;
 }
 
 /** A change of the study: a pure function with a dotted label and the words undo shows. */

@@ -13,6 +13,7 @@ import {
   type Edit,
   elementById,
   elementKinds,
+  moveCase,
   moveEnd,
   moveParts,
   newStudy,
@@ -26,6 +27,7 @@ import {
   removeSpectrum,
   reorderAlong,
   replacePart,
+  resetCase,
   resetInCase,
   type Study,
   sameData,
@@ -287,6 +289,25 @@ describe('Cases and spectra', () => {
     const edit = addCase(bare, { name: 'Night', role: 'light' });
     expect(edit.apply(bare).cases?.map((item) => item.id)).toEqual(['base', 'case1']);
   });
+  it('a case is moved along the list, stopping at both ends, and put back to the base study', () => {
+    const order = (study: Study) => study.cases?.map((item) => item.id);
+    const [first, , last] = order(detuned) ?? [];
+    const up = moveCase(detuned, last!, -2);
+    expect(up.words).toBe('move case Night up');
+    expect(order(up.apply(detuned))?.[0]).toBe(last);
+    expect(moveCase(detuned, first!, -1).apply(detuned)).toBe(detuned);
+    expect(moveCase(detuned, last!, 1).apply(detuned)).toBe(detuned);
+    expect(
+      sameData(
+        moveCase(detuned, first!, 1).apply(moveCase(detuned, first!, 1).apply(detuned)).cases?.[2],
+        detuned.cases![0],
+      ),
+    ).toBe(true);
+    const bare = resetCase(detuned, 'night');
+    expect(bare.words).toBe('put case Night back to the base study');
+    expect(bare.apply(detuned).cases?.[2]?.changes).toEqual([]);
+    expect(bare.apply(bare.apply(detuned))).toEqual(bare.apply(detuned));
+  });
   it('a case is duplicated with its changes, renamed and removed', () => {
     const edit = duplicateCase(detuned, 'night');
     const copied = edit.apply(detuned);
@@ -353,6 +374,8 @@ function someEdit(study: Study, which: number, a: number, b: number): Edit {
     () => addCase(study, { name: `case ${b}` }),
     () => (study.cases ? duplicateCase(study, caseId) : addCase(study)),
     () => removeCase(study, caseId),
+    () => moveCase(study, caseId, (b % 3) - 1),
+    () => resetCase(study, caseId),
     () => addSpectrum(study, { orders: [{ h: 5, percent: b }] }),
     () => removeSpectrum(study, study.spectra?.[0]?.id ?? 'none'),
     () => (element ? setOrigin(study, element, 'name', { origin: 'assumed' }) : addBus(study)),

@@ -109,7 +109,7 @@ describe('A mutated study', () => {
       ),
       { seed: 31, numRuns: 1500 },
     );
-  });
+  }, 60_000);
 
   it('as cut or spliced text is read or refused in words', () => {
     const cut = fc.tuple(fc.constantFrom(...studyFiles), fc.nat(), fc.nat(40), fc.string({ maxLength: 4 }));

@@ -11,7 +11,13 @@ interface Props {
 /** The data slip of the part or busbar that is open. */
 export function SlipConnection({ study, subject }: Props) {
   const caseId = useWorkbench((state) => state.view.caseId);
-  const findings = useMemo(() => siteFindings(study), [study]);
+  const findings = useMemo(
+    () =>
+      siteFindings(study).filter(
+        ({ severity, cases }) => severity !== 'note' && (cases.length === 0 || cases.includes(caseId)),
+      ),
+    [study, caseId],
+  );
   const read = readSubject(subject);
   const { edit, closeSlip } = workbench.getState();
   if (read?.kind === 'bus') {

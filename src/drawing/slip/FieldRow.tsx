@@ -52,6 +52,7 @@ export function FindingLine({ finding }: { finding: Finding }) {
     <p className="slip-finding" data-severity={finding.severity}>
       <span aria-hidden="true">{finding.severity === 'error' ? '✕' : '!'}</span>{' '}
       {text.charAt(0).toUpperCase() + text.slice(1)}
+      {finding.mend && ` ${finding.mend}`}
     </p>
   );
 }

@@ -11,9 +11,9 @@ function writtenCases(study: Study): StudyCase[] {
   return study.cases && study.cases.length > 0 ? study.cases : [{ id: 'base', name: 'Base', changes: [] }];
 }
 
-/** Adds an operating state without changes. */
-export function addCase(study: Study, values: Partial<Omit<StudyCase, 'id' | 'changes'>> = {}): AddCaseEdit {
-  return insertCase(study, { ...values, changes: [] }, 'case.add', 'add');
+/** Adds an operating state; without changes it is the base study under another name. */
+export function addCase(study: Study, values: Partial<Omit<StudyCase, 'id'>> = {}): AddCaseEdit {
+  return insertCase(study, { ...values, changes: values.changes ?? [] }, 'case.add', 'add');
 }
 
 /** Adds a copy of a case, with its changes. Throws RangeError for a case the study does not have. */
@@ -60,5 +60,29 @@ export function removeCase(study: Study, id: string): Edit {
     if (current.view?.caseId !== id) return next;
     const { caseId: _caseId, ...view } = current.view;
     return withField(next, 'view', view);
+  });
+}
+
+/** Moves a case up (negative) or down in the list; it stops at both ends. */
+export function moveCase(study: Study, id: string, by: number): Edit {
+  const name = casesOf(study).find((item) => item.id === id)?.name ?? id;
+  return makeEdit('case.move', `move case ${name} ${by < 0 ? 'up' : 'down'}`, (current) => {
+    const before = current.cases ?? [];
+    const at = before.findIndex((item) => item.id === id);
+    const moved = before[at];
+    const to = Math.max(0, Math.min(before.length - 1, at + by));
+    if (!moved || to === at) return current;
+    return { ...current, cases: before.toSpliced(at, 1).toSpliced(to, 0, moved) };
+  });
+}
+
+/** Takes every change of a case away, so that it is the base study again. */
+export function resetCase(study: Study, id: string): Edit {
+  const name = casesOf(study).find((item) => item.id === id)?.name ?? id;
+  return makeEdit('case.resetAll', `put case ${name} back to the base study`, (current) => {
+    const cases =
+      current.cases &&
+      mapById(current.cases, id, (item) => (item.changes.length === 0 ? item : { ...item, changes: [] }));
+    return !cases || cases === current.cases ? current : { ...current, cases };
   });
 }

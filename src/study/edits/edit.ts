@@ -4,6 +4,15 @@ export function makeEdit(label: string, words: string, apply: (study: Study) => 
   return { label, words, apply };
 }
 
+/** Several edits as one step of undo: each is made on the study the earlier ones left. */
+export function joinEdits(label: string, words: string, makers: readonly ((study: Study) => Edit)[]): Edit {
+  return {
+    label,
+    words,
+    apply: (study) => makers.reduce((current, make) => make(current).apply(current), study),
+  };
+}
+
 /** Whether two plain values are the same data, whatever the order of their keys. */
 export function sameData(a: unknown, b: unknown): boolean {
   if (Object.is(a, b)) return true;

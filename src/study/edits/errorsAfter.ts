@@ -10,12 +10,3 @@ export function errorsAfter(study: Study, edit: Edit): Finding[] {
   if (after === study) return [];
   return checkStudy(after).findings.filter((finding) => finding.severity === 'error');
 }
-
-/** Several edits as one step of undo: each is made on the study the earlier ones left. */
-export function joinEdits(label: string, words: string, makers: readonly ((study: Study) => Edit)[]): Edit {
-  return {
-    label,
-    words,
-    apply: (study) => makers.reduce((current, make) => make(current).apply(current), study),
-  };
-}

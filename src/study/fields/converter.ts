@@ -1,4 +1,4 @@
-import { choice, list, number } from './build.ts';
+import { boolean, choice, list, number } from './build.ts';
 import type { Field } from './Field.ts';
 import { connection, leading, shuntFields } from './partFields.ts';
 
@@ -48,5 +48,17 @@ export const converterFields: readonly Field[] = [
       min: 0,
       rare: true,
     },
+  ),
+  boolean(
+    'spectrumWithBank',
+    'spectrum measured with capacitors in',
+    'A bank takes up or raises what the bridge injects: the reading is then of both.',
+    { rare: true },
+  ),
+  boolean(
+    'interharmonics',
+    'injects interharmonics',
+    'Cycloconverter, arc furnace, sub-synchronous cascade: currents between the whole orders.',
+    { rare: true },
   ),
 ];

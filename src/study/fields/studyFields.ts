@@ -43,6 +43,7 @@ export const spectrumFields: readonly Field[] = [
 
 export const caseFields: readonly Field[] = [
   text('name', 'name', 'What the operating state is called.'),
+  text('description', 'description', 'What the state is and why it is looked at; printed with the cases.'),
   choice(
     'role',
     'role',

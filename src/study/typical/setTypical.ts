@@ -1,5 +1,4 @@
-import { makeEdit } from '../edits/edit.ts';
-import { joinEdits } from '../edits/errorsAfter.ts';
+import { joinEdits, makeEdit } from '../edits/edit.ts';
 import { originPath, putOrigins } from '../edits/origins.ts';
 import { updateElement } from '../edits/updates.ts';
 import { elementById } from '../lookup.ts';

@@ -1,6 +1,6 @@
 import { migrate } from '../migrate.ts';
 import { builtInSpectra } from '../spectra/builtIn.ts';
-import type { Bus, Finding, Study, StudyElement } from '../types.ts';
+import type { Finding, Study, StudyElement } from '../types.ts';
 import { caseFindings } from './caseFindings.ts';
 import { duplicateIds, idSet } from './duplicateIds.ts';
 import { elementIssues, type Surroundings } from './elementIssues.ts';
@@ -41,8 +41,9 @@ export function checkStudy(value: unknown): ReadOutcome {
   findings.push(...scanFindings(scans, surroundings.busIds));
   findings.push(...unknownFieldWarnings(raw));
   if (findings.some((finding) => finding.severity === 'error')) return { study: null, findings };
-  findings.push(...networkWarnings(elements as StudyElement[], buses as Bus[]));
-  return { study: withChangeLists(raw as unknown as Study), findings };
+  const study = withChangeLists(raw as unknown as Study);
+  findings.push(...networkWarnings(study));
+  return { study, findings };
 }
 
 function partFindings(elements: readonly unknown[], surroundings: Surroundings): Finding[] {
