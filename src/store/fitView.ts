@@ -1,5 +1,5 @@
-import { casesOf, type Study } from '../study/index.ts';
-import type { View } from './types.ts';
+import { baseStateId, casesOf, type Study } from '../study/index.ts';
+import type { ComparedCases, View } from './types.ts';
 
 const firstView: View = {
   place: 'site',
@@ -12,6 +12,9 @@ const firstView: View = {
   theme: 'system',
   timeCursor: 0,
   waveOrders: 'all',
+  margin: null,
+  verdictScope: 'case',
+  compared: null,
 };
 
 /** The view of a workbench without a study. */
@@ -26,6 +29,7 @@ export function openingView(study: Study, before: View): View {
     theme: before.theme,
     place: before.place,
     readingMode: before.readingMode,
+    margin: before.margin,
     caseId: study.view?.caseId ?? '',
     focusBus: study.view?.focusBus ?? '',
   };
@@ -43,9 +47,16 @@ export function fitView(view: View, study: Study): View {
     focusBus: study.buses.some((bus) => bus.id === view.focusBus) ? view.focusBus : telltaleBus(study),
     selection: selection.length === view.selection.length ? view.selection : selection,
     openSlip: view.openSlip !== null && items.has(view.openSlip) ? view.openSlip : null,
+    compared: view.compared && areComparable(study, view.compared) ? view.compared : null,
   };
   const same = (Object.keys(fitted) as (keyof View)[]).every((key) => fitted[key] === view[key]);
   return same ? view : fitted;
+}
+
+/** Whether both are cases of the study, or its base state. */
+export function areComparable(study: Study, { a, b }: ComparedCases): boolean {
+  const known = new Set([baseStateId, ...casesOf(study).map(({ id }) => id)]);
+  return known.has(a) && known.has(b);
 }
 
 function itemsOf(study: Study): Set<string> {

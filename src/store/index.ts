@@ -20,6 +20,8 @@ export { samePin } from './togglePinEdit.ts';
 export type {
   AllVerdicts,
   Answer,
+  ComparedCases,
+  Margin,
   Notice,
   Place,
   ProbeAnswer,

@@ -11,6 +11,14 @@ export type Theme = 'system' | 'light' | 'dark';
 /** The fundamental alone, every order, or the orders up to a number. */
 export type WaveOrders = 'fundamental' | 'all' | number;
 
+/** What the drawing's left margin lists; null where it is put away. */
+export type Margin = 'cases' | 'findings' | null;
+/** Two operating states side by side: ids of cases, or of the base study. */
+export interface ComparedCases {
+  a: string;
+  b: string;
+}
+
 /** How the study is looked at. Changes here never re-solve, except case and busbar. */
 export interface View {
   place: Place;
@@ -28,6 +36,11 @@ export interface View {
   /** Fraction 0…1 of the period at which the phasors stand. */
   timeCursor: number;
   waveOrders: WaveOrders;
+  margin: Margin;
+  /** Whether the notes list the verdicts of the case on screen or of every case. */
+  verdictScope: 'case' | 'all';
+  /** null where none are compared. */
+  compared: ComparedCases | null;
 }
 
 /** The latest numbers of one case. Stale when its revision or case is not the one on screen. */
@@ -130,6 +143,10 @@ export interface WorkbenchActions {
   setTheme(theme: Theme): void;
   setTimeCursor(fraction: number): void;
   setWaveOrders(orders: WaveOrders): void;
+  setMargin(margin: Margin): void;
+  setVerdictScope(scope: View['verdictScope']): void;
+  /** Throws RangeError for a case the study does not have. */
+  compareCases(cases: ComparedCases | null): void;
   select(items: readonly string[]): void;
   openSlip(item: string): void;
   closeSlip(): void;

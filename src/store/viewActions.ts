@@ -1,4 +1,5 @@
 import { casesOf } from '../study/index.ts';
+import { areComparable } from './fitView.ts';
 import type { View, Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
 
 type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
@@ -12,6 +13,9 @@ type ViewActions = Pick<
   | 'setTheme'
   | 'setTimeCursor'
   | 'setWaveOrders'
+  | 'setMargin'
+  | 'setVerdictScope'
+  | 'compareCases'
   | 'select'
   | 'openSlip'
   | 'closeSlip'
@@ -36,6 +40,12 @@ function focusChange(state: Workbench, focusBus: string): Partial<WorkbenchState
   return changed(state, { focusBus });
 }
 
+function comparison(state: Workbench, compared: View['compared']): Partial<WorkbenchState> {
+  if (compared && !(state.study && areComparable(state.study, compared)))
+    throw new RangeError(`no cases "${compared.a}" and "${compared.b}" in the study`);
+  return changed(state, { compared });
+}
+
 export function viewActions(set: Set): ViewActions {
   const change = (part: Partial<View>): void => set((state) => changed(state, part));
   return {
@@ -50,6 +60,9 @@ export function viewActions(set: Set): ViewActions {
     setTheme: (theme) => change({ theme }),
     setTimeCursor: (fraction) => change({ timeCursor: ((fraction % 1) + 1) % 1 }),
     setWaveOrders: (waveOrders) => change({ waveOrders }),
+    setMargin: (margin) => change({ margin }),
+    setVerdictScope: (verdictScope) => change({ verdictScope }),
+    compareCases: (compared) => set((state) => comparison(state, compared)),
     select: (selection) => change({ selection }),
     openSlip: (openSlip) => change({ openSlip }),
     closeSlip: () => change({ openSlip: null }),

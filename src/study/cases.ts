@@ -75,3 +75,22 @@ export function isBaseCase(study: Study, caseId: string): boolean {
   const listed = study.cases?.find((item) => item.id === caseId);
   return caseId === 'base' && (listed === undefined || listed.changes.length === 0);
 }
+
+/** Names the base study as a state beside the cases, also where no case is in it. No case has such an id. */
+export const baseStateId = '\u0000base';
+
+/**
+ * The study with its base state as a further case, so that it can be solved and judged like one. It comes
+ * last: what is asked of the first case alone stays there.
+ */
+export function withBaseState(study: Study): Study {
+  const known = basedStudies.get(study);
+  if (known) return known;
+  const cases =
+    study.cases && study.cases.length > 0 ? study.cases : [{ id: 'base', name: 'Base', changes: [] }];
+  const based = { ...study, cases: [...cases, { id: baseStateId, name: 'Base study', changes: [] }] };
+  basedStudies.set(study, based);
+  return based;
+}
+
+const basedStudies = new WeakMap<Study, Study>();

@@ -9,7 +9,7 @@ export {
   type RecipeGroup,
   usualLightPercent,
 } from './caseRecipes.ts';
-export { casesOf, isBaseCase, type ResolvedCase, studyInCase } from './cases.ts';
+export { baseStateId, casesOf, isBaseCase, type ResolvedCase, studyInCase, withBaseState } from './cases.ts';
 export { clipItems } from './clip/clipItems.ts';
 export { clipText, type PartsClip } from './clip/PartsClip.ts';
 export { type PasteEdit, pasteClip } from './clip/pasteClip.ts';

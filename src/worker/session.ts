@@ -1,6 +1,6 @@
 import type { Verdict } from '../checks/index.ts';
 import { type CaseSolution, solveCase } from '../engine/index.ts';
-import { casesOf, type Study } from '../study/index.ts';
+import { baseStateId, casesOf, type Study, withBaseState } from '../study/index.ts';
 import { judgeNumbers, probeOrder, resultsOf, scanPair, solveNumbers } from './compute.ts';
 import type {
   CaseDossier,
@@ -91,8 +91,10 @@ function judgeKept(held: Held, caseId: string, screening: boolean): Verdict[] {
   });
 }
 
+/** The base study is no case of its own; for a dossier it stands as one. */
 function dossierOf(held: Held, caseId: string, buses: readonly string[]): CaseDossier {
-  const { solution, without } = solveAndKeep(held, caseId);
-  const scans = buses.map((bus) => scanPair(held.study, caseId, bus));
-  return { caseId, solution, without, scans, verdicts: judgeKept(held, caseId, true) };
+  const at = caseId === baseStateId ? { ...held, study: withBaseState(held.study) } : held;
+  const { solution, without } = solveAndKeep(at, caseId);
+  const scans = buses.map((bus) => scanPair(at.study, caseId, bus));
+  return { caseId, solution, without, scans, verdicts: judgeKept(at, caseId, true) };
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { judgeCase } from '../../src/checks/index.ts';
 import { type CaseSolution, correctionParts, solveCase, solveStudy } from '../../src/engine/index.ts';
-import { casesOf, type Study } from '../../src/study/index.ts';
+import { baseStateId, casesOf, type Study } from '../../src/study/index.ts';
 import type { Job, Replies, ReplyMessage } from '../../src/worker/protocol.ts';
 import { createSession } from '../../src/worker/session.ts';
 import { transferables } from '../../src/worker/transferables.ts';
@@ -106,6 +106,21 @@ describe('the session in the worker', () => {
     expect(dossier.scans.map(({ bus }) => bus)).toEqual(['in', 'main']);
     expect(dossier.solution).toEqual(solveCase(site, 'night'));
     expect(dossier.verdicts.every(({ caseId }) => caseId === 'night')).toBe(true);
+  });
+
+  it('gives a dossier of the base study although no case is in its state', () => {
+    const { send } = behindBoundary();
+    const cases = casesOf(site).filter(({ changes }) => changes.length > 0);
+    const study: Study = { ...site, cases };
+    const dossier = good(send({ kind: 'dossier', caseId: baseStateId, buses: ['main'] }, 1, study));
+    expect(dossier.solution.converged).toBe(true);
+    expect(dossier.solution.voltage).toEqual(solveCase(site, 'day').voltage);
+    expect(dossier.verdicts.length).toBeGreaterThan(0);
+    expect(dossier.verdicts.every(({ caseId }) => caseId === baseStateId)).toBe(true);
+    const known = cases[0]?.id ?? '';
+    expect(good(send({ kind: 'judge', caseId: known, screening: true }))).toEqual(
+      judgeCase(study, solveCase(study, known), { otherCases: cases.map(({ id }) => solveCase(study, id)) }),
+    );
   });
 
   it('warms up on its own site without a study', () => {

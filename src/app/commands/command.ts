@@ -3,14 +3,18 @@ export interface Command {
   id: string;
   /** Trade words, as the command list shows them. */
   words: string;
-  /** Keys as shown and matched, e.g. "Mod+S", "Shift+P", "?"; Mod is Ctrl, or ⌘ on a Mac. */
+  /** Keys as shown and matched, e.g. "Mod+S", "Shift+P", "?", "] or F8"; Mod is Ctrl, or ⌘ on a Mac. */
   keys?: string;
   enabled?: boolean;
   run(): void;
 }
 
-/** Whether a keyboard event is the given key combination. */
+/** Whether a keyboard event is the given key combination, or one of those joined by "or". */
 export function matchesKeys(keys: string, event: KeyboardEvent): boolean {
+  return keys.split(' or ').some((one) => matchesOne(one, event));
+}
+
+function matchesOne(keys: string, event: KeyboardEvent): boolean {
   const parts = keys.split('+');
   const key = parts.at(-1) as string;
   const mod = parts.includes('Mod');
