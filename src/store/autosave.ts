@@ -1,7 +1,8 @@
 import type { WorkbenchStore } from './createWorkbench.ts';
 import { type History, tailOf } from './history.ts';
+import { later } from './later.ts';
 import type { KeptStudy, Shelf } from './shelf.ts';
-import type { Workbench } from './types.ts';
+import type { Notice, Workbench } from './types.ts';
 
 const historyKept = 50;
 
@@ -34,8 +35,11 @@ export function autosave(store: WorkbenchStore, shelf: Shelf, options: AutosaveO
     try {
       await write();
       toldOfFailure = false;
+      if (store.getState().keptProblem !== null) store.setState({ keptProblem: null });
     } catch (error) {
-      if (!toldOfFailure) store.getState().setNotice(failureNotice(error));
+      const problem = problemOf(error);
+      store.setState({ keptProblem: problem });
+      if (!toldOfFailure) store.getState().setNotice(failureNotice(problem));
       toldOfFailure = true;
     }
   }
@@ -72,42 +76,22 @@ export function autosave(store: WorkbenchStore, shelf: Shelf, options: AutosaveO
   };
 }
 
-/** One timer that calls once however often it is asked, and not later than the first asking demands. */
-function later(delayMs: number, work: () => void) {
-  let timer: ReturnType<typeof setTimeout> | undefined;
-  const cancel = (): void => {
-    clearTimeout(timer);
-    timer = undefined;
-  };
-  const run = (): void => {
-    cancel();
-    work();
-  };
-  return {
-    soon: () => {
-      timer ??= setTimeout(run, delayMs);
-    },
-    now: () => {
-      if (timer !== undefined) run();
-    },
-    cancel,
-  };
-}
-
 function studyChanged(after: Workbench, before: Workbench): boolean {
   return (
     (after.beforePreview ?? after.study) !== (before.beforePreview ?? before.study) ||
     after.history !== before.history ||
     after.documentId !== before.documentId ||
     after.fileName !== before.fileName ||
-    after.savedStudy !== before.savedStudy
+    after.savedStudy !== before.savedStudy ||
+    after.readOnly !== before.readOnly
   );
 }
 
-function keptStudy(state: Workbench, slot: string, keptAt: number): KeptStudy | null {
+/** The workbench as it is kept; null where there is nothing, or where another tab keeps it. */
+export function keptStudy(state: Workbench, slot: string, keptAt: number): KeptStudy | null {
   const { documentId, history, lastEdit, fileName, fileHandle, savedStudy, importWarnings } = state;
   const study = state.beforePreview ?? state.study;
-  if (!study) return null;
+  if (!study || state.readOnly) return null;
   const tail: History = tailOf(history, historyKept);
   return {
     slot,
@@ -123,12 +107,18 @@ function keptStudy(state: Workbench, slot: string, keptAt: number): KeptStudy | 
   };
 }
 
-function failureNotice(error: unknown) {
-  const full = error instanceof Error && error.name === 'QuotaExceededError';
-  const reason = full ? 'its storage is full' : error instanceof Error ? error.message : String(error);
+function problemOf(error: unknown): string {
+  const { name, message } = error instanceof Error ? error : { name: '', message: String(error) };
+  if (name === 'QuotaExceededError') return 'its storage is full';
+  if (name === 'SecurityError' || name === 'InvalidStateError') return 'its storage is closed to this page';
+  return message;
+}
+
+function failureNotice(problem: string): Notice {
   return {
-    severity: 'warning' as const,
-    title: `The study could not be kept in this browser (${reason}). Save it to a file.`,
+    severity: 'warning',
+    title: `The study could not be kept in this browser (${problem}). Work goes on; save it to a file.`,
     findings: [],
+    offer: 'save',
   };
 }

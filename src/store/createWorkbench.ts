@@ -20,6 +20,8 @@ const emptyTable: WorkbenchState = {
   fileHandle: null,
   savedStudy: null,
   importWarnings: [],
+  readOnly: false,
+  keptProblem: null,
   view: emptyView(),
   answer: null,
   probe: null,

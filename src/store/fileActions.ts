@@ -39,6 +39,15 @@ function failure(title: string, error: unknown): Notice {
   return { severity: 'error', title: `${title}: ${reason}`, findings: [] };
 }
 
+/** The tab that works on a study is the one that writes its file; a file of its own may be saved anywhere. */
+function notSaved(name: string): Notice {
+  return {
+    severity: 'info',
+    title: `${name} was not saved: another tab works on this study. Save it under another name, or work here.`,
+    findings: [],
+  };
+}
+
 /** The study as the file keeps it: with the case and busbar last looked at. */
 export function studyToSave(study: Study, view: Workbench['view']): Study {
   const { caseId, focusBus } = view;
@@ -74,6 +83,10 @@ export function fileActions(set: Set, get: Get, files: Files): FileActions {
     const { study, beforePreview, view } = get();
     const settled = beforePreview ?? study;
     if (!settled) return;
+    if (get().readOnly && toHandle) {
+      set(() => ({ notice: notSaved(toName) }));
+      return;
+    }
     try {
       const saved = await files.save(writeStudy(studyToSave(settled, view)), toName, toHandle);
       if (saved) set(() => ({ fileName: saved.name, fileHandle: saved.handle, savedStudy: settled }));

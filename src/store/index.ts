@@ -1,8 +1,11 @@
+export type { Archive, KeptDocument, KeptRevision } from './archive.ts';
 export { type Autosave, type AutosaveOptions, autosave } from './autosave.ts';
 export { createWorkbench, type WorkbenchStore } from './createWorkbench.ts';
 export type { Files, OpenedFile } from './fileActions.ts';
 export { type FollowOptions, followStudy } from './followStudy.ts';
 export type { History, Revision } from './history.ts';
+export { type KeepRevisionsOptions, keepRevisions, type RevisionKeeper } from './keepRevisions.ts';
+export { openRecent as openRecentOf } from './openRecent.ts';
 export { restore } from './restore.ts';
 export {
   countVerdicts,
@@ -16,6 +19,7 @@ export {
   undoWords,
 } from './selectors.ts';
 export type { KeptStudy, KeptView, Shelf } from './shelf.ts';
+export { revisionsToDrop } from './thinRevisions.ts';
 export { samePin } from './togglePinEdit.ts';
 export type {
   AllVerdicts,
@@ -35,5 +39,15 @@ export type {
   WorkbenchActions,
   WorkbenchState,
 } from './types.ts';
-export { pageComputation, startWorkbench, useWorkbench, workbench } from './useWorkbench.ts';
-export { type TabChannel, type TabMessage, type TabOptions, watchTabs } from './watchTabs.ts';
+export {
+  archive,
+  archiveNow,
+  keepStateAs,
+  openRecent,
+  pageComputation,
+  startWorkbench,
+  useWorkbench,
+  workbench,
+  workHere,
+} from './useWorkbench.ts';
+export { type TabChannel, type TabMessage, type TabOptions, type TabWatch, watchTabs } from './watchTabs.ts';

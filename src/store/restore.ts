@@ -5,6 +5,8 @@ import { type History, noHistory, type Revision } from './history.ts';
 import type { KeptStudy, Shelf } from './shelf.ts';
 import type { View } from './types.ts';
 
+const answerWithinMs = 4000;
+
 /**
  * Puts the kept workbench back on the table, once its study has passed the same reading as a file. The
  * history follows step by step behind it, each study read likewise, back to the first that does not pass.
@@ -17,7 +19,7 @@ export async function restore(
 ): Promise<{ restored: boolean; history: Promise<void> }> {
   const nothing = { restored: false, history: Promise.resolve() };
   try {
-    const kept = await shelf.get(slot);
+    const kept = await inTime(shelf.get(slot));
     if (!kept) return nothing;
     const { study, findings } = checkStudy(kept.study.study);
     if (!study) {
@@ -25,7 +27,7 @@ export async function restore(
       store.setState({ notice: { severity: 'error', title, findings } });
       return nothing;
     }
-    putBack(store, kept.study, kept.view);
+    putKept(store, kept.study, kept.view);
     return { restored: true, history: putHistoryBack(store, kept.study) };
   } catch (error) {
     const reason = error instanceof Error ? error.message : String(error);
@@ -35,11 +37,11 @@ export async function restore(
   }
 }
 
-function putBack(store: WorkbenchStore, kept: KeptStudy, view: View | null): void {
+/** Puts a kept study on the table under its own document, with the view it is to be looked at with. */
+export function putKept(store: WorkbenchStore, kept: KeptStudy, view: View | null): void {
   const { study, documentId, lastEdit, fileName, fileHandle, savedStudy, importWarnings } = kept;
-  store.getState().openStudy(study, fileName);
+  store.getState().openStudy(study, fileName, documentId);
   store.setState((state) => ({
-    documentId,
     lastEdit,
     fileHandle,
     savedStudy,
@@ -49,7 +51,8 @@ function putBack(store: WorkbenchStore, kept: KeptStudy, view: View | null): voi
   }));
 }
 
-async function putHistoryBack(store: WorkbenchStore, { history, study }: KeptStudy): Promise<void> {
+/** Puts the kept history behind a study that putKept has put on the table. */
+export async function putHistoryBack(store: WorkbenchStore, { history, study }: KeptStudy): Promise<void> {
   const { openedRevision } = store.getState();
   const past = await readable(history.past);
   const future = await readable(history.future);
@@ -78,6 +81,19 @@ async function readable(revisions: readonly Revision[]): Promise<Revision[]> {
 
 function isReadable(study: Study): boolean {
   return checkStudy(study).study !== null;
+}
+
+/** Storage that never answers must not keep the page from starting. */
+async function inTime<T>(work: Promise<T>): Promise<T> {
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  const tooLate = new Promise<never>((_resolve, reject) => {
+    timer = setTimeout(() => reject(new Error('its storage does not answer')), answerWithinMs);
+  });
+  try {
+    return await Promise.race([work, tooLate]);
+  } finally {
+    clearTimeout(timer);
+  }
 }
 
 /** Lets the page paint and answer between two readings. */

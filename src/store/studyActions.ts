@@ -3,14 +3,16 @@ import { fitView, openingView } from './fitView.ts';
 import { freshId } from './freshId.ts';
 import { noHistory, record, stepBack, stepForward } from './history.ts';
 import { togglePinEdit } from './togglePinEdit.ts';
-import type { Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
+import type { Notice, Workbench, WorkbenchActions, WorkbenchState } from './types.ts';
 
 type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
 type Get = () => Workbench;
 type StudyActions = Pick<
   WorkbenchActions,
-  'openStudy' | 'edit' | 'preview' | 'cancelPreview' | 'undo' | 'redo' | 'togglePin'
+  'openStudy' | 'makeCopy' | 'edit' | 'preview' | 'cancelPreview' | 'undo' | 'redo' | 'togglePin'
 >;
+
+type Change = (state: WorkbenchState) => Partial<WorkbenchState>;
 
 /** What changes together whenever the study does: every door to the study goes through here. */
 function withStudy(state: WorkbenchState, study: Study): Partial<WorkbenchState> {
@@ -59,31 +61,57 @@ function stepped(state: WorkbenchState, step: typeof stepBack): Partial<Workbenc
   };
 }
 
+/** A change of the study, or the words that it cannot be changed here while another tab works on it. */
+function unlessReadOnly(change: Change): Change {
+  return (state) => (state.readOnly ? { notice: onlyLooking } : change(state));
+}
+
+const onlyLooking: Notice = {
+  severity: 'info',
+  title: 'Nothing was changed: another tab works on this study, and this one only looks at it.',
+  findings: [],
+};
+
+function opened(
+  state: WorkbenchState,
+  study: Study,
+  fileName: string | null,
+  documentId = freshId(),
+): Partial<WorkbenchState> {
+  return {
+    study,
+    revision: state.revision + 1,
+    openedRevision: state.revision + 1,
+    documentId,
+    lastEdit: null,
+    history: noHistory,
+    beforePreview: null,
+    fileName,
+    fileHandle: null,
+    savedStudy: fileName === null ? null : study,
+    importWarnings: [],
+    readOnly: false,
+    view: openingView(study, state.view),
+    answer: null,
+    probe: null,
+    allVerdicts: null,
+  };
+}
+
 export function studyActions(set: Set, get: Get): StudyActions {
   return {
-    openStudy: (study, fileName = null) =>
-      set((state) => ({
-        study,
-        revision: state.revision + 1,
-        openedRevision: state.revision + 1,
-        documentId: freshId(),
-        lastEdit: null,
-        history: noHistory,
-        beforePreview: null,
-        fileName,
-        fileHandle: null,
-        savedStudy: fileName === null ? null : study,
-        importWarnings: [],
-        view: openingView(study, state.view),
-        answer: null,
-        probe: null,
-        allVerdicts: null,
-      })),
-    edit: (edit) => set((state) => editOf(state, edit)),
-    preview: (edit) => set((state) => previewOf(state, edit)),
+    openStudy: (study, fileName = null, documentId) =>
+      set((state) => opened(state, study, fileName, documentId)),
+    makeCopy: () =>
+      set((state) => {
+        const study = state.beforePreview ?? state.study;
+        return study ? opened(state, { ...study, title: `${study.title}, copy` }, null) : {};
+      }),
+    edit: (edit) => set(unlessReadOnly((state) => editOf(state, edit))),
+    preview: (edit) => set((state) => (state.readOnly ? {} : previewOf(state, edit))),
     cancelPreview: () => set(cancelled),
-    undo: () => set((state) => stepped(state, stepBack)),
-    redo: () => set((state) => stepped(state, stepForward)),
+    undo: () => set(unlessReadOnly((state) => stepped(state, stepBack))),
+    redo: () => set(unlessReadOnly((state) => stepped(state, stepForward))),
     togglePin: (pin) => {
       const { study, edit } = get();
       if (study) edit(togglePinEdit(study, pin));

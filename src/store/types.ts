@@ -81,6 +81,8 @@ export interface Notice {
   /** One sentence. */
   title: string;
   findings: Finding[];
+  /** A way out offered beside the words. */
+  offer?: 'save';
 }
 
 export interface Status {
@@ -108,6 +110,10 @@ export interface WorkbenchState {
   savedStudy: Study | null;
   /** Warnings of the file the study came from. */
   importWarnings: Finding[];
+  /** Another tab works on this study: here it is only looked at, and nothing of it is kept from here. */
+  readOnly: boolean;
+  /** Why the study is not being kept in this browser, in a few words; null while it is. */
+  keptProblem: string | null;
   view: View;
   answer: Answer | null;
   probe: ProbeAnswer | null;
@@ -117,13 +123,18 @@ export interface WorkbenchState {
 }
 
 export interface WorkbenchActions {
-  /** Puts a valid study on the table; history starts anew. Without a name it counts as never saved. */
-  openStudy(study: Study, fileName?: string | null): void;
+  /**
+   * Puts a valid study on the table; history starts anew. Without a name it counts as never saved. A document
+   * that this browser knows keeps its id; any other gets one.
+   */
+  openStudy(study: Study, fileName?: string | null, documentId?: string): void;
   /** Reads a study's text. A broken one leaves the open study alone and says why in `notice`. */
   openText(text: string, name: string, handle?: FileSystemFileHandle): boolean;
   openFile(): Promise<void>;
   saveFile(): Promise<void>;
   saveFileAs(): Promise<void>;
+  /** Goes on with a study of its own under another title, in no file: the way out of a study open twice. */
+  makeCopy(): void;
 
   edit(edit: Edit): void;
   /** Shows an edit while a gesture lasts: always applied to the study before the gesture, no history. */

@@ -18,6 +18,13 @@ export class MemoryShelf implements Shelf {
     this.views.set(kept.slot, structuredClone(kept));
   };
 
+  newestOf = async (documentId: string): Promise<KeptStudy | null> => {
+    if (this.refuse) throw this.refuse;
+    const own = [...this.studies.values()].filter((kept) => kept.documentId === documentId);
+    const newest = own.sort((a, b) => b.keptAt - a.keptAt)[0];
+    return newest ? structuredClone(newest) : null;
+  };
+
   get = async (slot: string): Promise<{ study: KeptStudy; view: View | null } | null> => {
     if (this.refuse) throw this.refuse;
     const newest = [...this.studies.values()].sort((a, b) => b.keptAt - a.keptAt)[0];
