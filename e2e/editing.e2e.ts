@@ -59,7 +59,7 @@ test('Escape ends a drop, a move and an end in the hand without a trace', async 
   const drives = part(page, /^busbar, Drives board/);
 
   await carryFromTray(page, 'bank', await under(main, 0.7));
-  await expect(page.locator('output.plan')).toHaveText('bank hanging from Main board');
+  await expect(page.locator('output.plan')).toHaveText('hang bank on Main board');
   await page.keyboard.press('Escape');
   await expect(page.locator('output.plan')).toHaveText('');
   await page.mouse.up();
@@ -73,7 +73,7 @@ test('Escape ends a drop, a move and an end in the hand without a trace', async 
     ),
     await under(drives, 0.5),
   );
-  await expect(page.locator('output.plan')).toHaveText('Bank C1 hangs from Drives board');
+  await expect(page.locator('output.plan')).toHaveText('hang Bank C1 on Drives board');
   await page.keyboard.press('Escape');
   await page.mouse.up();
 
@@ -86,7 +86,7 @@ test('Escape ends a drop, a move and an end in the hand without a trace', async 
     await middle(page.locator('[data-end="drives"]')),
     await under(part(page, /^busbar, Intake/), 0.2),
   );
-  await expect(page.locator('output.plan')).toHaveText('W2 joins Main board and Intake');
+  await expect(page.locator('output.plan')).toContainText('join Main board and Intake by W2');
   await page.keyboard.press('Escape');
   await page.mouse.up();
 
@@ -131,7 +131,7 @@ test('a second transformer with its foot dragged over runs in parallel', async (
     await middle(page.locator(`[data-end="${added.to}"]`)),
     await under(part(page, /^busbar, Main board/), 0.8),
   );
-  await expect(page.locator('output.plan')).toHaveText(/joins Intake and Main board$/);
+  await expect(page.locator('output.plan')).toContainText(/^join Intake and Main board by T/);
   await page.mouse.up();
   await settled(page);
   const last = (await savedStudy(page)).elements.at(-1);
@@ -211,14 +211,14 @@ test('by keyboard alone an empty page becomes a site, and a part moves to anothe
   await settled(page);
   const hung = (await savedStudy(page)).elements.at(-1);
   expect(hung).toMatchObject({ kind: 'motor', bus: 'bus2' });
-  await page.keyboard.press('m');
-  await expect(page.locator('output.plan')).toContainText('stays at');
+  await page.keyboard.press('h');
+  await expect(page.locator('output.plan')).toContainText('stays where it is');
   await page.keyboard.press('ArrowUp');
-  await expect(page.locator('output.plan')).toContainText('hangs from Intake');
+  await expect(page.locator('output.plan')).toContainText('on Intake');
   await page.keyboard.press('Escape');
   await expect(page.locator('output.plan')).toHaveText('');
   expect((await savedStudy(page)).elements.at(-1)).toEqual(hung);
-  await page.keyboard.press('m');
+  await page.keyboard.press('h');
   await page.keyboard.press('ArrowUp');
   await page.keyboard.press('Enter');
   await settled(page);

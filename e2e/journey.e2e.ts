@@ -106,7 +106,9 @@ test('by keyboard alone: the same job', async ({ page }) => {
   await settled(page);
   const before = await savedStudy(page);
 
-  await tabTo(page, '[data-tray="bank"]');
+  await tabTo(page, '[data-tray]');
+  for (let presses = 0; presses < 9; presses += 1) await page.keyboard.press('ArrowDown');
+  await expect(page.locator('[data-tray="bank"]')).toBeFocused();
   await page.keyboard.press('Enter');
   const plan = page.locator('output.plan');
   await expect(plan).toContainText('Main board');

@@ -1,22 +1,24 @@
-import { type ReactNode, useCallback, useEffect, useId, useMemo, useRef, useState } from 'react';
+import { type ReactNode, useId, useMemo, useRef } from 'react';
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution } from '../engine/index.ts';
-import { type Edit, type Study, studyInCase } from '../study/index.ts';
+import { type Chosen, countedTogether, type Edit, type Study, studyInCase } from '../study/index.ts';
 import { DrawingContents } from './editor/DrawingContents.tsx';
 import { EmptyHint } from './editor/EmptyHint.tsx';
-import { HandOverlay } from './editor/HandOverlay.tsx';
+import { HandOverlay, PlaceMark } from './editor/HandOverlay.tsx';
+import { HandTag, KeyLine } from './editor/HandTag.tsx';
 import { ReadingModeChoice, ZoomTools } from './editor/PaneTools.tsx';
 import { SlipHolder } from './editor/SlipHolder.tsx';
-import { dropPlan, type Held } from './gestures/dropPlan.ts';
 import type { TrayKind } from './gestures/TrayKind.ts';
-import { useGestures } from './gestures/useGestures.ts';
+import type { Band } from './gestures/useGestures.ts';
 import { Hatch } from './glyphs/Hatch.tsx';
-import { useDrawingKeys } from './keyboard/useDrawingKeys.ts';
+import { useClipboard } from './keyboard/useClipboard.ts';
+import { useHandling } from './keyboard/useHandling.ts';
+import { useRovingFocus } from './keyboard/useRovingFocus.ts';
 import { keepPlaces, type Layout, layoutStudy } from './layout/index.ts';
 import type { ImpedanceProbe } from './readings/busReading.ts';
 import { figuresOf } from './readings/figures.ts';
 import { type ReadingMode, readOrder } from './readings/ReadingMode.ts';
-import { busSubject, readSubject, type Subject } from './subject.ts';
+import { type Subject, selectedIds } from './subject.ts';
 import { usePaneView } from './view/usePaneView.ts';
 
 export interface DrawingProps {
@@ -48,6 +50,12 @@ export interface DrawingProps {
   onFocusBus(bus: string): void;
   onOpenSlip(subject: Subject | null): void;
   onEdit(edit: Edit): void;
+  /** Takes chosen parts and busbars away; whoever holds the study asks first where more hangs from them. */
+  onRemove(chosen: Chosen): void;
+  /** Something the person should read once, beside the drawing. */
+  onSay(words: string): void;
+  /** What was said last; null for nothing. */
+  said?: string | null;
   onReadingMode(mode: ReadingMode): void;
   onArm(kind: TrayKind | null): void;
   onHover?(subject: Subject | null): void;
@@ -71,72 +79,21 @@ export function Drawing(props: DrawingProps) {
     [inCase, solution, verdicts, readingMode, handle, handleProbe],
   );
   const controls = usePaneView(paneRef, layout, props.fitKey ?? '');
-  const [current, setCurrent] = useRovingFocus(paneRef, layout, selection, controls.panBy);
-  const [moved, setMoved] = useState<Held | null>(null);
-  // The armed kind is in the hand from the very press that armed it.
-  const carried: Held | null = armedKind ? { what: 'new', kind: armedKind } : moved;
-  const [aimed, setAimed] = useState<string | undefined>();
-  const stands = (id: string | undefined) => layout.buses.some((bus) => bus.id === id);
-  const target = [aimed, props.focusBus, layout.buses[0]?.id].find(stands);
-
-  const onDrop = (edit: Edit, select: Subject | undefined) => {
-    props.onEdit(edit);
-    if (select) props.onSelect([select]);
-    if (select) setCurrent(select);
-  };
-  const onPress = (subject: Subject | undefined, adding: boolean) => {
-    if (!subject) {
-      props.onSelect([]);
-      props.onOpenSlip(null);
-      return;
-    }
-    setCurrent(subject);
-    const again = selection.length === 1 && selection[0] === subject;
-    if (adding) {
-      const without = selection.filter((item) => item !== subject);
-      props.onSelect(without.length < selection.length ? without : [...selection, subject]);
-      return;
-    }
-    props.onSelect([subject]);
-    const read = readSubject(subject);
-    if (read?.kind === 'bus') props.onFocusBus(read.id);
-    if (again) props.onOpenSlip(subject);
-    else if (props.openSlip !== null && props.openSlip !== subject) props.onOpenSlip(null);
-  };
-  const gestures = useGestures(paneRef, {
-    study,
+  const roving = useRovingFocus(paneRef, layout, selection, controls);
+  const [current] = roving;
+  const { hand, band, handlers, act, plan, held, keyHints } = useHandling(
+    paneRef,
+    props,
     layout,
     controls,
-    armedKind,
-    onArm: props.onArm,
-    onDrop,
-    onPress,
-  });
-  const onKeyDown = useDrawingKeys({
-    ...props,
-    layout,
-    controls,
-    current,
-    carried,
-    targetBus: target,
-    setCurrent,
-    setCarried: setMoved,
-    setTarget: setAimed,
-    cancelGesture: gestures.cancel,
-    focusPane: () => paneRef.current?.focus({ preventScroll: true }),
-    onDrop,
-  });
+    roving,
+  );
+  const shownSelection = useMemo(
+    () => (band ? [...new Set([...selection, ...band.picks])] : selection),
+    [selection, band],
+  );
+  useClipboard(paneRef, { ...props, layout, current });
 
-  useEffect(() => {
-    setMoved(null);
-    if (!armedKind) return;
-    paneRef.current?.focus({ preventScroll: true });
-  }, [armedKind]);
-
-  const { hand } = gestures;
-  const plan =
-    hand?.plan ??
-    (carried ? dropPlan(study, layout, carried, target ? { bus: target } : OFF_PAPER) : undefined);
   const empty = study.buses.length === 0 && study.elements.length === 0;
   const far = controls.view.scale < 0.45;
   const { scale, x, y } = controls.view;
@@ -149,12 +106,12 @@ export function Drawing(props: DrawingProps) {
         className="pane"
         data-drawing-pane=""
         role="application"
-        aria-label="Single-line diagram: arrows move along it, Enter opens a part's data, M moves a part, F fits"
+        aria-label="Single-line diagram: arrows move along it, Enter opens a part's data, letters add parts, ? shows the keys"
         tabIndex={current ? -1 : 0}
-        onKeyDown={onKeyDown}
+        onKeyDown={act}
         onPointerOver={(event) => props.onHover?.(subjectOf(event.target))}
         onPointerLeave={() => props.onHover?.(null)}
-        {...gestures.handlers}
+        {...handlers}
       >
         <svg width="100%" height="100%" role="presentation">
           <Hatch id={hatchId} ink="var(--ink-2)" />
@@ -163,15 +120,17 @@ export function Drawing(props: DrawingProps) {
               layout={layout}
               figures={figures}
               letters={props.letters}
-              selection={selection}
+              selection={shownSelection}
               current={current}
               lit={props.lit ?? null}
-              held={hand?.held.what === 'part' ? hand.held.id : undefined}
-              targetBus={hand ? hand.plan.bus : carried ? target : undefined}
+              held={held}
+              targetBus={plan?.bus}
               focusBus={props.focusBus}
               hatchId={hatchId}
             />
+            {plan && <PlaceMark plan={plan} layout={layout} />}
             {hand && <HandOverlay hand={hand} layout={layout} study={study} />}
+            {band && <rect className="band" {...band.box} />}
           </g>
         </svg>
       </div>
@@ -189,9 +148,11 @@ export function Drawing(props: DrawingProps) {
           No solution in this case: {solution.error ?? 'the iteration did not settle'}
         </p>
       )}
-      <output className="plan" aria-live="polite">
-        {plan?.words ?? ''}
+      <output className={plan ? 'plan at-hand' : 'plan'} aria-live="polite">
+        {plan?.words ?? bandWords(band) ?? props.said ?? ''}
       </output>
+      {plan && <HandTag plan={plan} at={hand?.at} {...{ layout, controls }} />}
+      <KeyLine hints={hand ? [] : keyHints} />
       {!empty && <ZoomTools controls={controls} />}
       {slip && !hand && (
         <SlipHolder key={slip} subject={slip} layout={layout} figures={figures} controls={controls}>
@@ -201,9 +162,6 @@ export function Drawing(props: DrawingProps) {
     </section>
   );
 }
-
-/** Where a carried part is while the study has no busbar to choose. */
-const OFF_PAPER = { x: Number.NaN, y: Number.NaN };
 
 function subjectOf(target: EventTarget): Subject | null {
   const found = target instanceof Element ? target.closest('[data-subject]') : null;
@@ -220,42 +178,14 @@ function useSteadyLayout(study: Study, given: Layout | undefined): Layout {
   }, [study, given]);
 }
 
-/**
- * The part or busbar holding the drawing's one tab stop. It follows the selection made elsewhere, and takes
- * the keyboard focus along while the drawing has it.
- */
-function useRovingFocus(
-  paneRef: React.RefObject<HTMLElement | null>,
-  layout: Layout,
-  selection: readonly Subject[],
-  panBy: (dx: number, dy: number) => void,
-): [Subject | undefined, (subject: Subject) => void] {
-  const [wished, setWished] = useState<Subject | undefined>();
-  const known = (subject: Subject | undefined) => {
-    const read = subject ? readSubject(subject) : undefined;
-    const list = read?.kind === 'bus' ? layout.buses : layout.parts;
-    return read !== undefined && list.some((place) => place.id === read.id);
-  };
-  const last = selection.at(-1);
-  const [followed, setFollowed] = useState(last);
-  if (followed !== last) {
-    setFollowed(last);
-    if (last) setWished(last);
-  }
-  const top = layout.buses[0];
-  const current = known(wished) ? wished : top && busSubject(top.id);
-  useEffect(() => {
-    const pane = paneRef.current;
-    if (!pane || !current || !pane.contains(document.activeElement)) return;
-    const element = pane.querySelector<SVGGElement>(`[data-subject="${CSS.escape(current)}"]`);
-    if (!element) return;
-    element.focus({ preventScroll: true });
-    const [seen, room] = [element.getBoundingClientRect(), pane.getBoundingClientRect()];
-    const outside = (least: number, most: number, from: number, to: number) =>
-      least < from ? from - least + 24 : most > to ? Math.max(to - most - 24, from - least + 24) : 0;
-    const dx = seen.width > room.width ? 0 : outside(seen.left, seen.right, room.left, room.right);
-    const dy = outside(seen.top, seen.bottom, room.top, room.bottom);
-    if (dx !== 0 || dy !== 0) panBy(dx, dy);
-  }, [current, paneRef, panBy]);
-  return [current, useCallback((subject: Subject) => setWished(subject), [])];
+/** How much a rubber band holds. */
+function bandWords(band: Band | null): string | undefined {
+  if (!band) return undefined;
+  const { parts, buses } = selectedIds(band.picks);
+  return (
+    countedTogether([
+      [parts.length, 'part'],
+      [buses.length, 'busbar'],
+    ]) || 'nothing in the band yet'
+  );
 }

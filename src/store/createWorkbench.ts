@@ -28,6 +28,7 @@ const emptyTable: WorkbenchState = {
   allVerdicts: null,
   status: { solving: false, workerMessage: null },
   notice: null,
+  said: null,
 };
 
 /** A workbench without a study. It computes nothing by itself: followStudy does, autosave keeps it. */

@@ -29,6 +29,7 @@ function editOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
   if (after === before) return settled;
   return {
     ...settled,
+    said: null,
     lastEdit: edit.words,
     history: record(state.history, before, edit.label, edit.words),
   };
@@ -49,12 +50,15 @@ function cancelled(state: WorkbenchState): Partial<WorkbenchState> {
 }
 
 function stepped(state: WorkbenchState, step: typeof stepBack): Partial<WorkbenchState> {
+  const undoing = step === stepBack;
   const settled = { ...state, ...cancelled(state) };
   const { study } = settled;
   const moved = study && step(settled.history, study);
   if (!moved) return cancelled(state);
+  const words = (undoing ? settled.history.past : settled.history.future).at(-1)?.words ?? '';
   return {
     ...withStudy(settled, moved.study),
+    said: `${undoing ? 'Undone' : 'Done again'}: ${words}`,
     beforePreview: null,
     history: moved.history,
     lastEdit: moved.history.past.at(-1)?.words ?? null,
@@ -84,6 +88,7 @@ function opened(
     openedRevision: state.revision + 1,
     documentId,
     lastEdit: null,
+    said: null,
     history: noHistory,
     beforePreview: null,
     fileName,

@@ -120,6 +120,8 @@ export interface WorkbenchState {
   allVerdicts: AllVerdicts | null;
   status: Status;
   notice: Notice | null;
+  /** What was said last beside the drawing: what was undone, pasted or refused. The next edit ends it. */
+  said: string | null;
 }
 
 export interface WorkbenchActions {
@@ -161,6 +163,7 @@ export interface WorkbenchActions {
   select(items: readonly string[]): void;
   openSlip(item: string): void;
   closeSlip(): void;
+  say(words: string): void;
   setNotice(notice: Notice): void;
   dismissNotice(): void;
 }

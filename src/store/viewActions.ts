@@ -19,6 +19,7 @@ type ViewActions = Pick<
   | 'select'
   | 'openSlip'
   | 'closeSlip'
+  | 'say'
   | 'setNotice'
   | 'dismissNotice'
 >;
@@ -66,6 +67,7 @@ export function viewActions(set: Set): ViewActions {
     select: (selection) => change({ selection }),
     openSlip: (openSlip) => change({ openSlip }),
     closeSlip: () => change({ openSlip: null }),
+    say: (said) => set(() => ({ said })),
     setNotice: (notice) => set(() => ({ notice })),
     dismissNotice: () => set(() => ({ notice: null })),
   };

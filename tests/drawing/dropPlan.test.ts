@@ -2,7 +2,6 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { dropPlan } from '../../src/drawing/gestures/dropPlan.ts';
 import { neighbour } from '../../src/drawing/keyboard/neighbour.ts';
-import { removeSelection } from '../../src/drawing/keyboard/useDrawingKeys.ts';
 import { layoutStudy, siteOutline } from '../../src/drawing/layout/index.ts';
 import { elementById, elementKinds, type Study } from '../../src/study/index.ts';
 import { anyStudy, part, study } from './randomStudy.ts';
@@ -52,7 +51,12 @@ describe('what letting go would do', () => {
   });
 
   it('moves a part to the busbar it is dropped under, and its end alone by its handle', () => {
-    const moved = dropPlan(plant, layout, { what: 'part', id: 'c' }, under('sub', place('l').x + 20));
+    const moved = dropPlan(
+      plant,
+      layout,
+      { what: 'parts', ids: ['c'], grip: 'c' },
+      under('sub', place('l').x + 20),
+    );
     expect(elementById(moved.edit?.apply(plant) ?? plant, 'c')).toMatchObject({ bus: 'sub' });
     const end = dropPlan(plant, layout, { what: 'end', id: 't1', end: 'to' }, under('sub', place('l').x));
     expect(elementById(end.edit?.apply(plant) ?? plant, 't1')).toMatchObject({ from: 'in', to: 'sub' });
@@ -68,11 +72,16 @@ describe('what letting go would do', () => {
   });
 
   it('changes the order along a busbar, and nothing when a part is put back', () => {
-    const swap = dropPlan(plant, layout, { what: 'part', id: 'c' }, under('main', place('m').x - 10));
+    const swap = dropPlan(
+      plant,
+      layout,
+      { what: 'parts', ids: ['c'], grip: 'c' },
+      under('main', place('m').x - 10),
+    );
     const after = swap.edit?.apply(plant) ?? plant;
     expect(after.view?.orderAlong?.main?.slice(0, 2)).toEqual(['c', 'm']);
     expect(
-      dropPlan(plant, layout, { what: 'part', id: 'c' }, under('main', place('c').x)).edit,
+      dropPlan(plant, layout, { what: 'parts', ids: ['c'], grip: 'c' }, under('main', place('c').x)).edit,
     ).toBeUndefined();
   });
 
@@ -95,7 +104,8 @@ describe('what letting go would do', () => {
         const places = layoutStudy(site);
         const plan = dropPlan(site, places, { what: 'new', kind }, at);
         if (plan.edit) layoutStudy(plan.edit.apply(site));
-        for (const { id } of site.elements) dropPlan(site, places, { what: 'part', id }, at);
+        for (const { id } of site.elements)
+          dropPlan(site, places, { what: 'parts', ids: [id], grip: id }, at);
         expect(site).toEqual(before);
       }),
       { seed: 21, numRuns: 60 },
@@ -113,13 +123,6 @@ describe('keyboard along the drawing', () => {
       }
     }
     expect(seen.size).toBe(plant.buses.length + plant.elements.length);
-  });
-
-  it('removes a mixed selection in one edit', () => {
-    const after = removeSelection(plant, ['element:c', 'bus:sub'])?.apply(plant);
-    expect(after?.elements.map((e) => e.id)).toEqual(['grid', 't1', 'm']);
-    expect(after?.buses.map((b) => b.id)).toEqual(['in', 'main']);
-    expect(removeSelection(plant, [])).toBeUndefined();
   });
 });
 

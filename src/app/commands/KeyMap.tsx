@@ -1,4 +1,5 @@
 import { Button, Dialog, Heading, Modal, ModalOverlay } from 'react-aria-components';
+import { drawingKeys, trayKeys } from '../../drawing/index.ts';
 import { type Command, shownKeys } from './command.ts';
 
 interface Props {
@@ -7,26 +8,9 @@ interface Props {
   onClose(): void;
 }
 
-const placesKeys: readonly { place: string; keys: readonly [string, string][] }[] = [
-  {
-    place: 'On the drawing',
-    keys: [
-      ['←  →  ↑  ↓', 'move along parts and busbars'],
-      ['Shift + ←  →', 'select further parts'],
-      ['Space', 'select; on a busbar, move the rail there'],
-      ['Enter', 'open the data of the part'],
-      ['M', 'move the part: arrows choose the busbar, Enter drops it'],
-      ['Alt + ←  →', 'move it along its busbar'],
-      ['Delete', 'delete what is selected'],
-      ['Mod+D', 'duplicate'],
-      ['F  +  −', 'fit, enlarge, reduce'],
-      ['Escape', 'close, or cancel the gesture'],
-    ],
-  },
-  {
-    place: 'In the tray',
-    keys: [['Enter', 'take the part; arrows choose the busbar, Enter drops it']],
-  },
+const placesKeys: readonly { place: string; keys: readonly (readonly [string, string])[] }[] = [
+  { place: 'On the drawing', keys: drawingKeys },
+  { place: 'On the drawing: add a part', keys: trayKeys },
   {
     place: 'On the rail',
     keys: [

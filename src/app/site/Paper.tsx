@@ -4,6 +4,8 @@ import { useWorkbench, workbench } from '../../store/index.ts';
 import { type Study, studyInCase } from '../../study/index.ts';
 import { Samples } from '../files/Samples.tsx';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
+import { RemovalDialog } from './RemovalDialog.tsx';
+import { removeChosen } from './removal.ts';
 import { SlipConnection } from './SlipConnection.tsx';
 
 const noVerdicts: never[] = [];
@@ -34,7 +36,8 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
   const stale = useWorkbench((state) => state.answer?.revision !== state.revision);
   const probe = useWorkbench((state) => (state.probe?.revision === state.revision ? state.probe : null));
   const openedRevision = useWorkbench((state) => state.openedRevision);
-  const { edit, setFocusBus, setReadingMode } = workbench.getState();
+  const said = useWorkbench((state) => state.said);
+  const { edit, say, setFocusBus, setReadingMode } = workbench.getState();
   const [outlined, setOutlined] = useState(false);
   const verdicts = answer?.verdicts ?? noVerdicts;
   const ofCase = answer?.caseId === view.caseId;
@@ -77,6 +80,9 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
           onFocusBus={setFocusBus}
           onOpenSlip={openSlip}
           onEdit={edit}
+          onRemove={removeChosen}
+          onSay={say}
+          said={said}
           onReadingMode={setReadingMode}
           onArm={onArm}
           onHover={onHover}
@@ -96,6 +102,7 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
           {outlined ? 'as a drawing' : 'as a list'}
         </button>
       )}
+      <RemovalDialog />
     </section>
   );
 }

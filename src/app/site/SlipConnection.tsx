@@ -2,6 +2,7 @@ import { useMemo } from 'react';
 import { BusSlip, PartSlip, readSubject, type Subject } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { busById, elementById, type Study, siteFindings } from '../../study/index.ts';
+import { removeChosen } from './removal.ts';
 
 interface Props {
   study: Study;
@@ -29,6 +30,7 @@ export function SlipConnection({ study, subject }: Props) {
         caseId={caseId}
         findings={findings}
         onEdit={edit}
+        onRemove={() => removeChosen({ parts: [], buses: [bus.id] })}
         onClose={closeSlip}
       />
     ) : null;
@@ -41,6 +43,7 @@ export function SlipConnection({ study, subject }: Props) {
       caseId={caseId}
       findings={findings}
       onEdit={edit}
+      onRemove={() => removeChosen({ parts: [element.id], buses: [] })}
       onClose={closeSlip}
     />
   ) : null;

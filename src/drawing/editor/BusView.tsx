@@ -15,6 +15,8 @@ export interface BusViewProps {
   current: boolean;
   /** Spoken of by a note under the pointer. */
   lit: boolean;
+  /** Comes along with a part in the hand. */
+  held: boolean;
   /** Under a part in the hand. */
   target: boolean;
   /** The rail stands here. */
@@ -49,6 +51,7 @@ function sameProps(a: BusViewProps, b: BusViewProps): boolean {
     a.selected === b.selected &&
     a.current === b.current &&
     a.lit === b.lit &&
+    a.held === b.held &&
     a.target === b.target &&
     a.focus === b.focus &&
     sameFigure(a.figure, b.figure)
@@ -57,7 +60,7 @@ function sameProps(a: BusViewProps, b: BusViewProps): boolean {
 
 /** One busbar on the drawing with its hit areas. */
 export const BusView = memo(function BusView(props: BusViewProps) {
-  const { place, figure, letters, selected, current, lit, target, focus, hatchId } = props;
+  const { place, figure, letters, selected, current, lit, held, target, focus, hatchId } = props;
   const width = place.x2 - place.x1;
   const mark = figure.mark ? verdictWords[figure.mark] : '';
   const spoken = [
@@ -71,9 +74,14 @@ export const BusView = memo(function BusView(props: BusViewProps) {
   ]
     .filter(Boolean)
     .join(', ');
-  const classes = ['bus', selected && 'selected', lit && 'lit', target && 'target', focus && 'focus'].filter(
-    Boolean,
-  );
+  const classes = [
+    'bus',
+    selected && 'selected',
+    lit && 'lit',
+    held && 'held',
+    target && 'target',
+    focus && 'focus',
+  ].filter(Boolean);
   return (
     <g
       className={classes.join(' ')}

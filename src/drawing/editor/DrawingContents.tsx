@@ -15,7 +15,8 @@ export interface DrawingContentsProps {
   current: Subject | undefined;
   /** Lit by a hovered note. */
   lit: Subject | null;
-  held: string | undefined;
+  /** Subjects in the hand. */
+  held: ReadonlySet<Subject>;
   targetBus: string | undefined;
   focusBus: string;
   hatchId: string;
@@ -39,7 +40,7 @@ export const DrawingContents = memo(function DrawingContents(props: DrawingConte
             selected={selected.has(subject)}
             current={current === subject}
             lit={lit === subject}
-            held={props.held === place.id}
+            held={props.held.has(subject)}
             hatchId={hatchId}
           />
         ) : null;
@@ -56,6 +57,7 @@ export const DrawingContents = memo(function DrawingContents(props: DrawingConte
             selected={selected.has(subject)}
             current={current === subject}
             lit={lit === subject}
+            held={props.held.has(subject)}
             target={props.targetBus === place.id}
             focus={props.focusBus === place.id}
             hatchId={hatchId}

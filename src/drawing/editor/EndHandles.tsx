@@ -8,9 +8,11 @@ export function EndHandles({ place }: { place: PartPlace }) {
       {place.ends.map((end) => {
         const touch = end.path[0];
         return touch ? (
-          <circle key={end.bus} className="handle" data-end={end.bus} cx={touch.x} cy={touch.y} r={6}>
-            <title>drag this end to another busbar</title>
-          </circle>
+          <g key={end.bus} data-end={end.bus}>
+            <circle className="hit" cx={touch.x} cy={touch.y} r={12} />
+            <circle className="handle" cx={touch.x} cy={touch.y} r={6} />
+            <title>Drag this end to another busbar</title>
+          </g>
         ) : null;
       })}
     </g>

@@ -74,7 +74,9 @@ export function SlipHolder({ subject, layout, figures, controls, children }: Sli
   }, [panX, subject, size, controls]);
 
   if (!box) return null;
-  const style = place ? { left: place.x, top: place.y } : { visibility: 'hidden' as const };
+  // Before its place is known the slip is out of sight, not hidden: what is hidden takes no focus, and what
+  // is typed at once would be lost.
+  const style = place ? { left: place.x, top: place.y } : { left: 0, top: 0, opacity: 0 };
   return (
     <div ref={holder} className="slip-holder" style={{ ...style, maxHeight: pane.height - 16 }}>
       {children}

@@ -1,4 +1,4 @@
-import type { BusPlace, Layout, Point } from '../layout/index.ts';
+import type { BusPlace, Layout, PartPlace, Point } from '../layout/index.ts';
 
 const ABOVE = 44;
 const BELOW = 150;
@@ -22,6 +22,16 @@ export function busAt(layout: Layout, point: Point): BusPlace | undefined {
     }
   }
   return nearest;
+}
+
+/** Half the side of the square over a symbol in which a drop means the part itself. */
+const ON_SYMBOL = 17;
+
+/** The part whose symbol is under a point. */
+export function partAt(layout: Layout, point: Point): PartPlace | undefined {
+  return layout.parts.find(
+    (part) => Math.abs(part.x - point.x) <= ON_SYMBOL && Math.abs(part.y - point.y) <= ON_SYMBOL,
+  );
 }
 
 /** Parts hanging from a busbar or leading down from it, left to right as drawn. */

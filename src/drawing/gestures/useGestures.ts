@@ -6,66 +6,75 @@ import {
   useRef,
   useState,
 } from 'react';
-import { type Edit, elementById, isSeries, type Study } from '../../study/index.ts';
-import type { Layout, Point } from '../layout/index.ts';
-import { readSubject, type Subject } from '../subject.ts';
+import type { Edit, Study } from '../../study/index.ts';
+import type { Box, Layout, Point } from '../layout/index.ts';
+import type { Subject } from '../subject.ts';
 import { toDrawing } from '../view/paneView.ts';
 import type { PaneControls } from '../view/usePaneView.ts';
-import { type DropPlan, dropPlan, type Held } from './dropPlan.ts';
+import { bandPicks, boxBetween } from './bandPicks.ts';
+import type { DropOutcome } from './DropOutcome.ts';
+import { dropPlan } from './dropPlan.ts';
+import type { Held } from './Held.ts';
+import { type Pressed, pressedOn } from './pressedOn.ts';
 import type { TrayKind } from './TrayKind.ts';
+import { useAbandon } from './useAbandon.ts';
+import { useEdgePan } from './useEdgePan.ts';
 
 /** A part or end in the hand: where, and what letting go would do. */
 export interface Hand {
   held: Held;
   /** Drawing px. */
   at: Point;
-  plan: DropPlan;
+  plan: DropOutcome;
+}
+
+/** A rubber band: its box in drawing px, and what it picks. */
+export interface Band {
+  box: Box;
+  picks: readonly Subject[];
 }
 
 export interface GestureContext {
   study: Study;
   layout: Layout;
   controls: PaneControls;
+  selection: readonly Subject[];
   armedKind: TrayKind | null;
   onArm(kind: TrayKind | null): void;
-  onDrop(edit: Edit, select: Subject | undefined): void;
+  onDrop(edit: Edit, select: readonly Subject[] | undefined): void;
   /** A press and release on a part or busbar, or on the paper (undefined). */
   onPress(subject: Subject | undefined, adding: boolean): void;
+  /** A rubber band let go. */
+  onBand(picks: readonly Subject[]): void;
 }
 
 type Gesture =
-  | { state: 'pressing'; subject: Subject | undefined; held: Held | undefined; from: Point; adding: boolean }
+  | ({ state: 'pressing'; from: Point; adding: boolean } & Pressed)
   | { state: 'holding'; held: Held }
+  | { state: 'banding'; from: Point }
   | { state: 'panning'; last: Point }
   | { state: 'pinching'; apart: number };
 
 const START_PX = 4;
 
-function pressed(event: ReactPointerEvent, study: Study): { subject?: Subject; held?: Held } {
-  if (!(event.target instanceof Element)) return {};
-  const subject = event.target.closest('[data-subject]')?.getAttribute('data-subject') ?? undefined;
-  const read = subject ? readSubject(subject) : undefined;
-  if (!subject || read?.kind !== 'element') return subject ? { subject } : {};
-  const endBus = event.target.closest('[data-end]')?.getAttribute('data-end');
-  if (!endBus) return { subject, held: { what: 'part', id: read.id } };
-  const part = elementById(study, read.id);
-  const end = part && isSeries(part) && part.from === endBus ? 'from' : 'to';
-  return { subject, held: { what: 'end', id: read.id, end } };
-}
-
 /**
- * Pointer gestures on the drawing. A gesture lives in local state; one edit leaves it on release, none on
- * Escape.
+ * Pointer gestures on the drawing. A gesture lives in local state; one edit leaves it on release, none when
+ * it is given up: by Escape, the right button, a cancelled pointer, or the loss of the window.
  *
- *   idle ── press on paper ──► pressing ── move ──► panning ── release ──► idle
- *        ── press on a part ─► pressing ── move ──► holding ── release ──► drop ──► idle
- *        ── tray armed ──────► holding (new) ────── release over the paper ► drop ─► idle
- *        ── second touch ────► pinching ─ release ► idle
+ *   idle ── press on paper ───► pressing ── move ──► panning ── release ──► idle
+ *        ── the same, Shift ──► pressing ── move ──► banding ── release ──► select ► idle
+ *        ── press on a part ──► pressing ── move ──► holding ── release ──► drop ──► idle
+ *        ── tray armed ───────► holding (new) ────── release over the paper ► drop ─► idle
+ *        ── second touch ─────► pinching ─ release ► idle
  */
 export function useGestures(paneRef: RefObject<HTMLElement | null>, context: GestureContext) {
   const [hand, setHand] = useState<Hand | null>(null);
+  const [band, setBand] = useState<Band | null>(null);
+  const [active, setActive] = useState(false);
   const gesture = useRef<Gesture | null>(null);
   const touches = useRef(new Map<number, Point>());
+  /** Repeats the latest move: the drawing may have moved under a pointer that rests. */
+  const again = useRef<(() => void) | null>(null);
   const latest = useRef(context);
   latest.current = context;
 
@@ -81,15 +90,27 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
     const { study, layout, controls } = latest.current;
     const at = toDrawing(controls.view, screen);
     setHand({ held, at, plan: dropPlan(study, layout, held, at) });
+    again.current = () => hold(held, screen);
+  }, []);
+
+  const stretch = useCallback((from: Point, screen: Point) => {
+    const { layout, controls } = latest.current;
+    const box = boxBetween(from, toDrawing(controls.view, screen));
+    setBand({ box, picks: bandPicks(layout, box) });
+    again.current = () => stretch(from, screen);
+  }, []);
+
+  const enter = useCallback((next: Gesture | null) => {
+    gesture.current = next;
+    setActive(next !== null);
+    if (next?.state !== 'holding') setHand(null);
+    if (next?.state !== 'banding') setBand(null);
   }, []);
 
   const cancel = useCallback(() => {
-    const under = gesture.current !== null;
-    gesture.current = null;
     touches.current.clear();
-    setHand(null);
-    return under;
-  }, []);
+    enter(null);
+  }, [enter]);
 
   const drop = useCallback((held: Held, screen: Point) => {
     const { study, layout, controls, onDrop } = latest.current;
@@ -103,17 +124,17 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
       const at = inPane(event);
       if (event.pointerType === 'touch') touches.current.set(event.pointerId, at);
       if (touches.current.size === 2) {
-        setHand(null);
-        gesture.current = { state: 'pinching', apart: apart(touches.current) };
+        enter({ state: 'pinching', apart: apart(touches.current) });
         return;
       }
-      if (latest.current.armedKind) return;
-      const { subject, held } = event.button === 0 ? pressed(event, latest.current.study) : {};
+      const { armedKind, study, selection } = latest.current;
+      if (armedKind) return;
+      const pressed = event.button === 0 ? pressedOn(event, study, selection) : {};
       const adding = event.shiftKey || event.ctrlKey || event.metaKey;
-      gesture.current = { state: 'pressing', subject, held, from: at, adding };
+      enter({ state: 'pressing', ...pressed, from: at, adding });
       paneRef.current?.setPointerCapture(event.pointerId);
     },
-    [inPane, paneRef],
+    [enter, inPane, paneRef],
   );
 
   const onPointerMove = useCallback(
@@ -131,25 +152,28 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
         now.last = at;
       } else if (now.state === 'holding') {
         hold(now.held, at);
+      } else if (now.state === 'banding') {
+        stretch(now.from, at);
       } else if (Math.hypot(at.x - now.from.x, at.y - now.from.y) > START_PX) {
-        gesture.current = now.held
-          ? { state: 'holding', held: now.held }
-          : { state: 'panning', last: now.from };
+        enter(begun(now, toDrawing(latest.current.controls.view, now.from)));
       }
     },
-    [hold, inPane],
+    [enter, hold, stretch, inPane],
   );
 
   const onPointerUp = useCallback(
     (event: ReactPointerEvent) => {
       touches.current.delete(event.pointerId);
       const now = gesture.current;
-      gesture.current = null;
-      setHand(null);
-      if (now?.state === 'holding') drop(now.held, inPane(event));
-      else if (now?.state === 'pressing') latest.current.onPress(now.subject, now.adding);
+      enter(null);
+      const { layout, controls, onBand, onPress } = latest.current;
+      const at = inPane(event);
+      if (now?.state === 'holding') drop(now.held, at);
+      else if (now?.state === 'banding')
+        onBand(bandPicks(layout, boxBetween(now.from, toDrawing(controls.view, at))));
+      else if (now?.state === 'pressing') onPress(now.subject, now.adding);
     },
-    [drop, inPane],
+    [drop, enter, inPane],
   );
 
   const { armedKind } = context;
@@ -163,7 +187,7 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
       event.target instanceof Node && (paneRef.current?.contains(event.target) ?? false);
     const onMove = (event: PointerEvent) => (over(event) ? hold(held, inPane(event)) : setHand(null));
     const onUp = (event: PointerEvent) => {
-      if (!over(event)) return;
+      if (!over(event) || event.button !== 0) return;
       drop(held, inPane(event));
       latest.current.onArm(null);
     };
@@ -175,7 +199,34 @@ export function useGestures(paneRef: RefObject<HTMLElement | null>, context: Ges
     };
   }, [armedKind, drop, hold, inPane, paneRef]);
 
-  return { hand, cancel, handlers: { onPointerDown, onPointerMove, onPointerUp, onPointerCancel: cancel } };
+  useAbandon(active || armedKind !== null, () => {
+    cancel();
+    if (armedKind) latest.current.onArm(null);
+  });
+  const carrying = hand !== null || band !== null;
+  useEdgePan(paneRef, carrying, context.controls);
+  const { view } = context.controls;
+  useEffect(() => {
+    if (carrying && view) again.current?.();
+  }, [view, carrying]);
+
+  const onLostPointerCapture = useCallback(() => {
+    if (gesture.current && gesture.current.state !== 'pinching') cancel();
+  }, [cancel]);
+  const handlers = {
+    onPointerDown,
+    onPointerMove,
+    onPointerUp,
+    onPointerCancel: cancel,
+    onLostPointerCapture,
+  };
+  return { hand, band, handlers };
+}
+
+/** What a press becomes once it moves; `from` in drawing px. */
+function begun(press: Extract<Gesture, { state: 'pressing' }>, from: Point): Gesture {
+  if (press.held) return { state: 'holding', held: press.held };
+  return press.adding ? { state: 'banding', from } : { state: 'panning', last: press.from };
 }
 
 function apart(touches: Map<number, Point>): number {

@@ -11,7 +11,6 @@ import {
   nameOf,
   originOf,
   type Pin,
-  removeBus,
   removePin,
   type Study,
   sameData,
@@ -34,6 +33,8 @@ export interface BusSlipProps {
   caseId?: string;
   findings: readonly Finding[];
   onEdit(edit: Edit): void;
+  /** Takes the busbar away with its parts. */
+  onRemove(): void;
   onClose(): void;
 }
 
@@ -42,7 +43,7 @@ export function BusSlip(props: BusSlipProps) {
   return <Nameplate key={props.bus.id} {...props} />;
 }
 
-function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipProps) {
+function Nameplate({ bus: { id }, study, findings, onEdit, onRemove, onClose }: BusSlipProps) {
   const prefix = useId();
   const [focused, setFocused] = useState<Field | null>(null);
   const bus = busById(study, id);
@@ -108,7 +109,7 @@ function Nameplate({ bus: { id }, study, findings, onEdit, onClose }: BusSlipPro
             className="slip-small"
             onClick={() => {
               onClose();
-              onEdit(removeBus(study, id));
+              onRemove();
             }}
           >
             Remove with its parts

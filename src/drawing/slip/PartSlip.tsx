@@ -22,7 +22,6 @@ import {
   originOf,
   type Patch,
   type Pin,
-  removeParts,
   removePin,
   resetInCase,
   type Study,
@@ -61,6 +60,8 @@ export interface PartSlipProps {
   /** Of this study: of reading it, and of the site. */
   findings: readonly Finding[];
   onEdit(edit: Edit): void;
+  /** Takes the part away. */
+  onRemove(): void;
   onClose(): void;
 }
 
@@ -70,7 +71,16 @@ export function PartSlip(props: PartSlipProps) {
   return <Nameplate key={`${props.element.id} ${props.caseId}`} {...props} />;
 }
 
-function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onClose }: PartSlipProps) {
+function Nameplate({
+  element: { id },
+  bus,
+  study,
+  caseId,
+  findings,
+  onEdit,
+  onRemove,
+  onClose,
+}: PartSlipProps) {
   const prefix = useId();
   const variant = variantCase(study, caseId);
   const [caseOnly, setCaseOnly] = useState(variant !== undefined && hasChanges(variant, id));
@@ -171,7 +181,7 @@ function Nameplate({ element: { id }, bus, study, caseId, findings, onEdit, onCl
           )}
         </>
       }
-      foot={<PartActions {...{ study, base, onEdit, onClose }} />}
+      foot={<PartActions {...{ study, base, onEdit, onRemove, onClose }} />}
     >
       {findingsAt(findings, path, null).map((finding) => (
         <FindingLine key={finding.code} finding={finding} />
@@ -233,10 +243,11 @@ interface PartActionsProps {
   study: Study;
   base: StudyElement;
   onEdit(edit: Edit): void;
+  onRemove(): void;
   onClose(): void;
 }
 
-function PartActions({ study, base, onEdit, onClose }: PartActionsProps) {
+function PartActions({ study, base, onEdit, onRemove, onClose }: PartActionsProps) {
   const buses = busesOf(base);
   return (
     <>
@@ -264,7 +275,7 @@ function PartActions({ study, base, onEdit, onClose }: PartActionsProps) {
         className="slip-small"
         onClick={() => {
           onClose();
-          onEdit(removeParts(study, [base.id]));
+          onRemove();
         }}
       >
         Remove

@@ -1,9 +1,11 @@
 import type { PointerEvent as ReactPointerEvent } from 'react';
 import { type TrayKind, trayNames } from '../gestures/TrayKind.ts';
 import { SymbolGlyph } from '../glyphs/SymbolGlyph.tsx';
+import { aroundKey, kindKeys } from '../keyboard/kindKeys.ts';
 import { symbolPaths } from '../symbols/symbolShape.ts';
-import { type TrayEntry, trayEntries } from './trayEntries.ts';
+import { trayEntries } from './trayEntries.ts';
 import { useTrayDrag } from './useTrayDrag.ts';
+import { useTrayStops } from './useTrayStops.ts';
 
 export interface TrayProps {
   armedKind: TrayKind | null;
@@ -16,52 +18,82 @@ export interface TrayProps {
  */
 export function Tray({ armedKind, onArm }: TrayProps) {
   const { ghost, press } = useTrayDrag(armedKind, onArm);
+  const { list, stop, setStop, onKeyDown } = useTrayStops();
   const arm = (kind: TrayKind) => onArm(armedKind === kind ? null : kind);
   return (
-    <nav className="tray" aria-label="Tray of parts" data-drawing-tray="">
+    <div
+      ref={list}
+      className="tray"
+      role="toolbar"
+      aria-orientation="vertical"
+      aria-label="Tray of parts"
+      data-drawing-tray=""
+      onKeyDown={onKeyDown}
+    >
       {trayEntries.map((entry) => (
-        <TrayRow key={entry.name} entry={entry} armedKind={armedKind} onPress={press} onArm={arm} />
+        <div key={entry.name} className="tray-row">
+          {entry.kinds.map((kind, at) => (
+            <TrayItem
+              key={kind}
+              kind={kind}
+              model={entry.model}
+              name={at === 0 ? trayNames[kind] : trayNames[kind].replace('R-L-C, ', '')}
+              symbol={at === 0}
+              armed={armedKind === kind}
+              stop={stop === kind}
+              onPress={press}
+              onArm={arm}
+              onFocus={setStop}
+            />
+          ))}
+        </div>
       ))}
       {ghost && (
         <div className="tray-ghost" style={{ left: ghost.x, top: ghost.y }}>
           <TraySymbol kind={ghost.kind} />
         </div>
       )}
-    </nav>
+    </div>
   );
 }
 
-interface TrayRowProps {
-  entry: TrayEntry;
-  armedKind: TrayKind | null;
+interface TrayItemProps {
+  kind: TrayKind;
+  name: string;
+  model: string;
+  symbol: boolean;
+  armed: boolean;
+  /** Holds the tray's one tab stop. */
+  stop: boolean;
   onPress(kind: TrayKind, event: ReactPointerEvent): void;
   onArm(kind: TrayKind): void;
+  onFocus(kind: TrayKind): void;
 }
 
-/** One symbol; an entry of two places has a button for each under its name. */
-function TrayRow({ entry, armedKind, onPress, onArm }: TrayRowProps) {
-  const [first, ...more] = entry.kinds;
-  const buttonProps = (kind: TrayKind) => ({
-    type: 'button' as const,
-    title: entry.model,
-    'data-tray': kind,
-    'aria-pressed': armedKind === kind,
-    onPointerDown: (event: ReactPointerEvent) => onPress(kind, event),
-    // A pointer arms by its press; a click without one is the keyboard's.
-    onClick: (event: { detail: number }) => event.detail === 0 && onArm(kind),
-  });
+/** A kind with its symbol; its letter on the drawing is underlined in its name. */
+function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFocus }: TrayItemProps) {
+  const [before, letter, after] = aroundKey(kind, name);
   return (
-    <div className="tray-row">
-      <button className="tray-item" {...buttonProps(first)}>
-        <TraySymbol kind={first} />
-        <span>{more.length > 0 ? trayNames[first] : entry.name}</span>
-      </button>
-      {more.map((kind) => (
-        <button key={kind} className="tray-item" {...buttonProps(kind)}>
-          <span>{trayNames[kind].replace('R-L-C, ', '')}</span>
-        </button>
-      ))}
-    </div>
+    <button
+      type="button"
+      className="tray-item"
+      title={`${model}\n${kindKeys[kind]} on the drawing adds it to the busbar in focus`}
+      data-tray={kind}
+      tabIndex={stop ? 0 : -1}
+      aria-pressed={armed}
+      aria-keyshortcuts={kindKeys[kind]}
+      onPointerDown={(event) => onPress(kind, event)}
+      // A pointer arms by its press; a click without one is the keyboard's.
+      onClick={(event) => event.detail === 0 && onArm(kind)}
+      onFocus={() => onFocus(kind)}
+    >
+      {symbol && <TraySymbol kind={kind} />}
+      <span>
+        {before}
+        <span className="tray-letter">{letter}</span>
+        {after}
+      </span>
+    </button>
   );
 }
 

@@ -18,8 +18,8 @@ const START_PX = 4;
 
 /**
  * A press on the tray arms the kind at once, so that the drawing follows the pointer. Released where it
- * began it stays armed (a click); released on the drawing the drawing drops it; released elsewhere, or
- * Escape, disarms it.
+ * began it stays armed (a click); released on the drawing the drawing drops it; released elsewhere it is
+ * disarmed.
  */
 export function useTrayDrag(armedKind: TrayKind | null, onArm: (kind: TrayKind | null) => void) {
   const [ghost, setGhost] = useState<Ghost | null>(null);
@@ -61,21 +61,20 @@ export function useTrayDrag(armedKind: TrayKind | null, onArm: (kind: TrayKind |
       const onPane = event.target instanceof Element && event.target.closest('[data-drawing-pane]') !== null;
       if ((now.moved && !onPane) || (!now.moved && now.wasArmed)) armRef.current(null);
     };
-    const onKey = (event: KeyboardEvent) => {
-      if (event.key !== 'Escape') return;
-      if (pressRef.current) armRef.current(null);
-      pressRef.current = null;
-      setGhost(null);
-    };
     window.addEventListener('pointermove', onMove);
     window.addEventListener('pointerup', onUp);
-    window.addEventListener('keydown', onKey);
     return () => {
       window.removeEventListener('pointermove', onMove);
       window.removeEventListener('pointerup', onUp);
-      window.removeEventListener('keydown', onKey);
     };
   }, []);
+
+  useEffect(() => {
+    // What was given up elsewhere, by Escape or the right button, leaves the hand here as well.
+    if (armedKind !== null) return;
+    pressRef.current = null;
+    setGhost(null);
+  }, [armedKind]);
 
   return { ghost, press };
 }

@@ -16,6 +16,7 @@ function partMarkup(name: (typeof studyFiles)[number], id: string, caseId = 'bas
       caseId={caseId}
       findings={siteFindings(study)}
       onEdit={nothing}
+      onRemove={nothing}
       onClose={nothing}
     />,
   );
@@ -65,6 +66,7 @@ describe('A data slip', () => {
         study={{ ...study, buses: [study.buses[0]!, bus, study.buses[2]!] }}
         findings={[]}
         onEdit={nothing}
+        onRemove={nothing}
         onClose={nothing}
       />,
     );
