@@ -25,6 +25,7 @@ export { pccBusesOf } from './pcc.ts';
 export { type PresentOrders, presentAtCorrection } from './presentAtCorrection.ts';
 export { SolvedCase } from './SolvedCase.ts';
 export { sourceText } from './source.ts';
+export { type StepSums, stepSums } from './stepSums.ts';
 export { sortByMargin, summarise, worstMargin } from './summarise.ts';
 export { harmonicLoss, permissibleLoad } from './transformerHeating.ts';
 export type * from './types.ts';

@@ -21,6 +21,8 @@ export class PointJudge {
   readonly worst: Float64Array;
   /** Where, by measure. */
   readonly worstAt: Point[];
+  /** Susceptance over the axes at each busbar and order where a peak can stand: the ridges the worst lies on. */
+  ridges: readonly Float64Array[] = [];
   /** Points solved. */
   visited = 0;
   /** Points at which the case has no solution: each is a failure of its own. */

@@ -37,10 +37,10 @@ const MOST_POLISHED = 8;
  */
 export function searchTolerances(judge: PointJudge, thorough = true): ToleranceSearch {
   visitEnds(judge);
-  const ridges = visitCrossings(judge);
+  judge.ridges = visitCrossings(judge);
   visitCorners(judge);
   let bound = 0;
-  if (thorough) for (const k of governing(judge)) bound = Math.max(bound, polish(judge, k, ridges));
+  if (thorough) for (const k of governing(judge)) bound = Math.max(bound, polish(judge, k, judge.ridges));
   return {
     worst: judge.duties.measures.map((measure, k) => ({
       measure,
