@@ -1,4 +1,5 @@
 import { createStore, type StoreApi } from 'zustand/vanilla';
+import { defaultFamilies, defaultTolerances } from '../sizing/index.ts';
 import { type Files, fileActions } from './fileActions.ts';
 import { emptyView } from './fitView.ts';
 import { noHistory } from './history.ts';
@@ -26,6 +27,8 @@ const emptyTable: WorkbenchState = {
   answer: null,
   probe: null,
   allVerdicts: null,
+  worstQuestion: { families: defaultFamilies, tolerances: defaultTolerances },
+  worst: null,
   status: { solving: false, workerMessage: null },
   notice: null,
   said: null,

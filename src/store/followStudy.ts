@@ -1,4 +1,5 @@
 import { sortByMargin } from '../checks/index.ts';
+import type { WorstProgress, WorstResult } from '../sizing/index.ts';
 import { casesOf } from '../study/index.ts';
 import type { CaseNumbers, Computation, Settled, StudyAt } from '../worker/index.ts';
 import type { WorkbenchStore } from './createWorkbench.ts';
@@ -17,6 +18,7 @@ export interface FollowOptions {
  *
  *   study or case changed ──► solve ──► answer ─┬─► verdicts ──► judge (with screening) ──► judge all cases
  *                                               └─► scan ──► answer.scan
+ *   all cases judged, or another question ─► worst over states and tolerances
  *   busbar changed ─────────► scan ───► answer.scan
  *   any of these, or order ─► probe, once a frame
  *
@@ -102,6 +104,26 @@ export function followStudy(
         }),
       ),
     );
+    await judgeWorst(at);
+  }
+
+  /** Over states and tolerances: the longest of all, begun last and ended by the next edit. */
+  async function judgeWorst(at: StudyAt): Promise<void> {
+    const { worstQuestion: question, worst, revision, beforePreview } = store.getState();
+    if (revision !== at.revision || beforePreview) return;
+    if (worst?.revision === revision && worst.question === question && worst.result) return;
+    const put = (progress: WorstProgress, result: WorstResult | null, tooMany: number | null): void =>
+      store.setState((now) =>
+        now.revision === revision && now.worstQuestion === question
+          ? { worst: { revision, question, progress, result, tooMany } }
+          : {},
+      );
+    const end = answered(await computation.worst(at, question, (progress) => put(progress, null, null)));
+    if (end?.state === 'too-many') put({ done: 0, total: end.count, points: 0 }, null, end.count);
+    if (end?.state === 'done') {
+      const { states: total, points } = end.result;
+      put({ done: total, total, points }, end.result, null);
+    }
   }
 
   async function rescan(at: StudyAt, { caseId, focusBus }: Workbench['view']): Promise<void> {
@@ -140,6 +162,7 @@ export function followStudy(
     if (moved || caseChanged) void solve(at, view.caseId);
     else if (busChanged) void rescan(at, view);
     if (moved || caseChanged || view.order !== before.view.order) probeSoon();
+    if (!moved && now.worstQuestion !== before.worstQuestion) void judgeWorst(at);
   }
 
   const { study, revision, view } = store.getState();

@@ -11,12 +11,14 @@ export {
   countVerdicts,
   freshAnswer,
   freshVerdicts,
+  freshWorst,
   isScanStale,
   isScreened,
   isStale,
   isUnsaved,
   redoWords,
   undoWords,
+  worstByKey,
 } from './selectors.ts';
 export type { KeptStudy, KeptView, Shelf } from './shelf.ts';
 export { revisionsToDrop } from './thinRevisions.ts';
@@ -38,6 +40,7 @@ export type {
   Workbench,
   WorkbenchActions,
   WorkbenchState,
+  WorstAnswer,
 } from './types.ts';
 export {
   archive,

@@ -1,4 +1,5 @@
 import type { Verdict, VerdictWord } from '../checks/index.ts';
+import type { WorstResult, WorstVerdict } from '../sizing/index.ts';
 import type { Answer, Workbench } from './types.ts';
 
 /** Words for "Undo …"; null where there is nothing to undo. */
@@ -63,4 +64,18 @@ export function countVerdicts(word: VerdictWord, scope: 'case' | 'all'): (state:
       .flat()
       .filter(({ verdict }) => verdict === word).length;
   };
+}
+
+/** The worst over states and tolerances, where it was computed from the study on screen. */
+export function freshWorst({ worst, revision, worstQuestion }: Workbench): WorstResult | null {
+  return worst?.revision === revision && worst.question === worstQuestion ? worst.result : null;
+}
+
+const byKey = new WeakMap<WorstResult, ReadonlyMap<string, WorstVerdict>>();
+
+/** The worst of each verdict by its key. */
+export function worstByKey(result: WorstResult): ReadonlyMap<string, WorstVerdict> {
+  const known = byKey.get(result) ?? new Map(result.verdicts.map((verdict) => [verdict.key, verdict]));
+  byKey.set(result, known);
+  return known;
 }

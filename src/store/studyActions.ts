@@ -100,6 +100,7 @@ function opened(
     answer: null,
     probe: null,
     allVerdicts: null,
+    worst: null,
   };
 }
 

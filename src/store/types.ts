@@ -1,8 +1,9 @@
 /** State and actions of the workbench: the one source of truth of the page. */
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution } from '../engine/index.ts';
+import type { WorstProgress, WorstResult } from '../sizing/index.ts';
 import type { Edit, Finding, Pin, Study } from '../study/index.ts';
-import type { Probe, ScanPair } from '../worker/index.ts';
+import type { Probe, ScanPair, WorstQuestion } from '../worker/index.ts';
 import type { History } from './history.ts';
 
 export type Place = 'site' | 'correction' | 'sheet';
@@ -75,6 +76,17 @@ export interface AllVerdicts {
   complete: boolean;
 }
 
+/** The worst over states and tolerances, of the revision and question it names. */
+export interface WorstAnswer {
+  revision: number;
+  question: WorstQuestion;
+  progress: WorstProgress;
+  /** Null while the run is under way, and where there are too many states. */
+  result: WorstResult | null;
+  /** More states than are solved at once; null where they are not too many. */
+  tooMany: number | null;
+}
+
 /** Something the user must read: a refused file, a failed autosave, a study open twice. */
 export interface Notice {
   severity: 'error' | 'warning' | 'info';
@@ -118,6 +130,9 @@ export interface WorkbenchState {
   answer: Answer | null;
   probe: ProbeAnswer | null;
   allVerdicts: AllVerdicts | null;
+  /** Which states and tolerances the worst is looked for in. */
+  worstQuestion: WorstQuestion;
+  worst: WorstAnswer | null;
   status: Status;
   notice: Notice | null;
   /** What was said last beside the drawing: what was undone, pasted or refused. The next edit ends it. */
@@ -161,6 +176,7 @@ export interface WorkbenchActions {
   /** Throws RangeError for a case the study does not have. */
   compareCases(cases: ComparedCases | null): void;
   select(items: readonly string[]): void;
+  askWorst(question: WorstQuestion): void;
   openSlip(item: string): void;
   closeSlip(): void;
   say(words: string): void;

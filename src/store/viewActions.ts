@@ -16,6 +16,7 @@ type ViewActions = Pick<
   | 'setMargin'
   | 'setVerdictScope'
   | 'compareCases'
+  | 'askWorst'
   | 'select'
   | 'openSlip'
   | 'closeSlip'
@@ -64,6 +65,7 @@ export function viewActions(set: Set): ViewActions {
     setMargin: (margin) => change({ margin }),
     setVerdictScope: (verdictScope) => change({ verdictScope }),
     compareCases: (compared) => set((state) => comparison(state, compared)),
+    askWorst: (worstQuestion) => set(() => ({ worstQuestion })),
     select: (selection) => change({ selection }),
     openSlip: (openSlip) => change({ openSlip }),
     closeSlip: () => change({ openSlip: null }),

@@ -1,7 +1,16 @@
 import type { Verdict } from '../checks/index.ts';
 import type { ResultsFile } from '../engine/index.ts';
+import type { WorstProgress } from '../sizing/index.ts';
 import { type ComputationOptions, Dispatcher, type Lane, type StudyAt } from './dispatcher.ts';
-import type { CaseDossier, CaseNumbers, Probe, ScanPair, Settled } from './protocol.ts';
+import type {
+  CaseDossier,
+  CaseNumbers,
+  Probe,
+  ScanPair,
+  Settled,
+  WorstEnd,
+  WorstQuestion,
+} from './protocol.ts';
 
 /**
  * The computation as the page sees it. Every promise settles: done, failed, cancelled or superseded; none
@@ -25,6 +34,15 @@ export interface Computation {
     caseIds: readonly string[],
     onCase: (caseId: string, verdicts: Verdict[]) => void,
   ): Promise<Settled<Verdict[][]>>;
+  /**
+   * The worst of every check over states and tolerances, slice by slice, `onProgress` after each; any other
+   * request goes first in between. A newer question or revision ends it as superseded.
+   */
+  worst(
+    at: StudyAt,
+    question: WorstQuestion,
+    onProgress: (progress: WorstProgress) => void,
+  ): Promise<Settled<WorstEnd>>;
   results(at: StudyAt): Promise<Settled<ResultsFile>>;
   /** What a printed study needs, case by case, with the impedance curves of the busbars named. */
   dossiers(
@@ -75,6 +93,22 @@ export function createComputation(options: ComputationOptions): Computation {
     return { outcome: 'done', value: values };
   }
 
+  async function worst(
+    at: StudyAt,
+    question: WorstQuestion,
+    onProgress: (progress: WorstProgress) => void,
+  ): Promise<Settled<WorstEnd>> {
+    const own = {};
+    newestRound.set('worst', own);
+    for (;;) {
+      const slice = await patient.ask('worst', { kind: 'worst', question }, at);
+      if (newestRound.get('worst') !== own) return { outcome: 'superseded' };
+      if (slice.outcome !== 'done') return slice;
+      if (slice.value.state !== 'running') return { outcome: 'done', value: slice.value };
+      onProgress(slice.value.progress);
+    }
+  }
+
   return {
     warm,
     solve: (at, caseId) => live.ask('solve', { kind: 'solve', caseId }, at),
@@ -96,6 +130,7 @@ export function createComputation(options: ComputationOptions): Computation {
         (caseId) => patient.ask('dossiers', { kind: 'dossier', caseId, buses }, at),
         (_, dossier, done) => onCase(dossier, done),
       ),
+    worst,
     results: (at) => patient.ask('results', { kind: 'results' }, at),
     cancel: (lane) => {
       for (const dispatcher of [live, patient]) dispatcher.cancel(lane);

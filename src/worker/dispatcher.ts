@@ -26,6 +26,7 @@ const lanes = [
   'results',
   'dossiers',
   'judgeAll',
+  'worst',
   'warm',
 ] as const;
 export type Lane = (typeof lanes)[number];

@@ -8,5 +8,7 @@ export type {
   RequestMessage,
   ScanPair,
   Settled,
+  WorstEnd,
+  WorstQuestion,
 } from './protocol.ts';
 export { spawnWorker } from './spawnWorker.ts';

@@ -8,6 +8,7 @@
  */
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution, DrivingPoints, ImpedanceScan, ResultsFile } from '../engine/index.ts';
+import type { StateFamilies, ToleranceSettings, WorstProgress, WorstResult } from '../sizing/index.ts';
 import type { Study } from '../study/index.ts';
 
 /** Positive-sequence driving-point impedance of one busbar with and without the correction, on one axis. */
@@ -46,6 +47,22 @@ export interface CaseDossier {
   verdicts: Verdict[];
 }
 
+/** Which states and tolerances the worst is looked for in; null leaves the parts at their rated values. */
+export interface WorstQuestion {
+  families: StateFamilies;
+  tolerances: ToleranceSettings | null;
+}
+
+/** One slice of a worst-case run: it goes on with the next request of the same question. */
+export type WorstSlice =
+  | { state: 'running'; progress: WorstProgress }
+  | { state: 'done'; result: WorstResult }
+  /** More states than are solved at once: the families are to be narrowed. */
+  | { state: 'too-many'; count: number };
+
+/** How a worst-case run ended. */
+export type WorstEnd = Exclude<WorstSlice, { state: 'running' }>;
+
 export type Job =
   | { kind: 'warm' }
   | { kind: 'solve'; caseId: string }
@@ -54,6 +71,7 @@ export type Job =
   /** Without the screening rows, which scan the network again and again, it is a matter of milliseconds. */
   | { kind: 'judge'; caseId: string; screening: boolean }
   | { kind: 'dossier'; caseId: string; buses: readonly string[] }
+  | { kind: 'worst'; question: WorstQuestion }
   | { kind: 'results' };
 
 export type JobKind = Job['kind'];
@@ -67,6 +85,7 @@ export interface Replies {
   probe: Probe;
   judge: Verdict[];
   dossier: CaseDossier;
+  worst: WorstSlice;
   results: ResultsFile;
 }
 

@@ -10,7 +10,10 @@ import type {
   Replies,
   ReplyMessage,
   RequestMessage,
+  WorstQuestion,
+  WorstSlice,
 } from './protocol.ts';
+import { WorstRun } from './WorstRun.ts';
 import { createWarmUp } from './warmUp.ts';
 
 /** What the worker remembers between messages, and what it answers to each. */
@@ -25,6 +28,7 @@ interface Held {
   study: Study;
   solutions: Map<string, CaseSolution>;
   without: Map<string, CaseSolution>;
+  worst?: WorstRun;
 }
 
 export function createSession(): Session {
@@ -50,6 +54,8 @@ export function createSession(): Session {
         return judgeKept(now, job.caseId, job.screening);
       case 'dossier':
         return dossierOf(now, job.caseId, job.buses);
+      case 'worst':
+        return worstSlice(now, job.question);
       case 'results':
         return resultsOf(now.study);
     }
@@ -97,4 +103,10 @@ function dossierOf(held: Held, caseId: string, buses: readonly string[]): CaseDo
   const { solution, without } = solveAndKeep(at, caseId);
   const scans = buses.map((bus) => scanPair(at.study, caseId, bus));
   return { caseId, solution, without, scans, verdicts: judgeKept(at, caseId, true) };
+}
+
+/** Goes on with the run under way, or begins another where a different question is asked. */
+function worstSlice(held: Held, question: WorstQuestion): WorstSlice {
+  if (!held.worst?.answers(question)) held.worst = new WorstRun(held.study, question);
+  return held.worst.slice();
 }

@@ -1,6 +1,14 @@
 import type { Verdict } from '../../src/checks/index.ts';
 import type { CaseSolution, ImpedanceScan } from '../../src/engine/index.ts';
-import type { CaseNumbers, Computation, Probe, ScanPair, Settled, StudyAt } from '../../src/worker/index.ts';
+import type {
+  CaseNumbers,
+  Computation,
+  Probe,
+  ScanPair,
+  Settled,
+  StudyAt,
+  WorstQuestion,
+} from '../../src/worker/index.ts';
 
 interface Asked {
   kind: 'solve' | 'scan' | 'probe' | 'verdicts' | 'judge';
@@ -96,6 +104,13 @@ export class ScriptedComputation implements Computation {
   judge = (at: StudyAt, caseId: string) => this.ask<Verdict[]>({ kind: 'judge', at, caseId });
   results = () => Promise.resolve({ outcome: 'cancelled' } as const);
   dossiers = () => Promise.resolve({ outcome: 'cancelled' } as const);
+  readonly worstAsked: { at: StudyAt; question: WorstQuestion }[] = [];
+  worst: Computation['worst'] = async (at, question, onProgress) => {
+    this.worstAsked.push({ at, question });
+    onProgress({ done: 1, total: 2, points: 7 });
+    const result = { verdicts: [], states: 2, points: 9, bound: 0, unsolved: [] };
+    return { outcome: 'done', value: { state: 'done', result } };
+  };
   cancel = (): void => {};
   close = (): void => {};
 

@@ -4,6 +4,7 @@ import {
   createWorkbench,
   followStudy,
   freshVerdicts,
+  freshWorst,
   isScanStale,
   isScreened,
   isStale,
@@ -262,5 +263,49 @@ describe('judging all cases', () => {
     state().edit(retitle('A'));
     await solveAndJudge();
     expect(computation.allRounds).toHaveLength(1);
+  });
+});
+
+describe('the worst over states and tolerances', () => {
+  async function judgedAll(): Promise<void> {
+    for (const kind of ['solve', 'verdicts', 'scan', 'judge'] as const) await computation.answer(kind);
+    await new Promise((resolve) => setTimeout(resolve, 5));
+    await settled();
+  }
+
+  it('is looked for once all cases are judged, and belongs to the study on screen', async () => {
+    state().openStudy(site);
+    await computation.answer('solve');
+    expect(computation.worstAsked).toHaveLength(0);
+    await computation.answer('verdicts');
+    await computation.answer('judge');
+    await new Promise((resolve) => setTimeout(resolve, 5));
+    await settled();
+    expect(computation.worstAsked).toHaveLength(1);
+    expect(freshWorst(state())?.points).toBe(9);
+    expect(state().worst?.progress).toEqual({ done: 2, total: 2, points: 9 });
+    state().edit(retitle('A'));
+    expect(freshWorst(state())).toBeNull();
+  });
+
+  it('is asked again for other states alone, without solving anything else', async () => {
+    state().openStudy(site);
+    await judgedAll();
+    const solves = computation.count('solve');
+    const { families } = state().worstQuestion;
+    state().askWorst({ families: { ...families, couplers: true }, tolerances: null });
+    expect(freshWorst(state())).toBeNull();
+    await settled();
+    expect(computation.worstAsked.at(-1)?.question.families.couplers).toBe(true);
+    expect(freshWorst(state())?.states).toBe(2);
+    expect(computation.count('solve')).toBe(solves);
+  });
+
+  it('is not asked twice for what is known', async () => {
+    state().openStudy(site);
+    await judgedAll();
+    state().setCase('night');
+    await judgedAll();
+    expect(computation.worstAsked).toHaveLength(1);
   });
 });

@@ -1,4 +1,5 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import { defaultFamilies } from '../../src/sizing/index.ts';
 import type { Study } from '../../src/study/index.ts';
 import { createComputation, type StudyAt } from '../../src/worker/index.ts';
 import { ScriptedWorker } from './ScriptedWorker.ts';
@@ -154,6 +155,30 @@ describe('the computation client', () => {
     worker().reply([]);
     expect(await newer).toEqual({ outcome: 'done', value: [[]] });
     expect(judged).toEqual(['newer']);
+  });
+
+  it('asks slice after slice for the worst and reports each, until it is there', async () => {
+    const progress = { done: 1, total: 3, points: 20 };
+    const result = { verdicts: [], states: 3, points: 60, bound: 0, unsolved: [] };
+    const question = { families: defaultFamilies, tolerances: null };
+    const seen: number[] = [];
+    const { computation, worker } = setUp();
+    const asked = computation.worst(at(1), question, ({ done }) => seen.push(done));
+    worker().reply({ state: 'running', progress });
+    await vi.waitFor(() => expect(seen).toEqual([1]));
+    worker().reply({ state: 'done', result });
+    expect(await asked).toEqual({ outcome: 'done', value: { state: 'done', result } });
+  });
+
+  it('ends a run for the worst when another question is asked', async () => {
+    const question = { families: defaultFamilies, tolerances: null };
+    const { computation, worker } = setUp();
+    const older = computation.worst(at(1), question, () => {});
+    const newer = computation.worst(at(1), { ...question }, () => {});
+    worker().reply({ state: 'running', progress: { done: 1, total: 3, points: 20 } });
+    expect(await older).toEqual({ outcome: 'superseded' });
+    worker().reply({ state: 'too-many', count: 4096 });
+    expect(await newer).toEqual({ outcome: 'done', value: { state: 'too-many', count: 4096 } });
   });
 
   it('cancels what waits and what runs, and ignores the late answer', async () => {

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { judgeCase } from '../../src/checks/index.ts';
 import { type CaseSolution, correctionParts, solveCase, solveStudy } from '../../src/engine/index.ts';
+import { defaultFamilies, defaultTolerances, statesOf, worstOver } from '../../src/sizing/index.ts';
 import { baseStateId, casesOf, type Study } from '../../src/study/index.ts';
 import type { Job, Replies, ReplyMessage } from '../../src/worker/protocol.ts';
 import { createSession } from '../../src/worker/session.ts';
@@ -51,6 +52,39 @@ describe('the session in the worker', () => {
     send({ kind: 'solve', caseId: 'day' });
     expect(good(send({ kind: 'judge', caseId: 'day', screening: true }))).toEqual(expected);
     expect(expected.length).toBeGreaterThan(0);
+  });
+
+  it('looks for the worst slice by slice, other requests in between, and ends as in one go', () => {
+    const { send } = behindBoundary();
+    const question = { families: defaultFamilies, tolerances: defaultTolerances };
+    let slice = good(send({ kind: 'worst', question }, 1, site));
+    let slices = 1;
+    while (slice.state === 'running') {
+      expect(slice.progress.done).toBeLessThanOrEqual(slice.progress.total);
+      good(send({ kind: 'solve', caseId: 'day' }));
+      slice = good(send({ kind: 'worst', question }));
+      slices += 1;
+    }
+    const states = statesOf(site, defaultFamilies).states ?? [];
+    const whole = worstOver(site, { states, tolerances: defaultTolerances });
+    let next = whole.next();
+    while (!next.done) next = whole.next();
+    expect(slice).toEqual({ state: 'done', result: next.value });
+    expect(slices).toBeGreaterThan(1);
+  });
+
+  it('counts states that are too many instead of solving some of them', () => {
+    const { send } = behindBoundary();
+    const bank = site.elements.find((part) => part.kind === 'bank');
+    const steps = Array.from({ length: 12 }, (_, k) => ({ kvar: 2 ** k }));
+    const many = {
+      ...site,
+      elements: site.elements.map((part) => (part === bank ? { ...part, steps } : part)),
+    };
+    const question = { families: defaultFamilies, tolerances: null };
+    const slice = good(send({ kind: 'worst', question }, 1, many as Study));
+    expect(slice.state).toBe('too-many');
+    expect(slice.state === 'too-many' && slice.count).toBeGreaterThan(2000);
   });
 
   it('judges all but the screening rows when asked to be quick', () => {

@@ -9,18 +9,19 @@ const RIDGE_AXES = 4;
 
 /**
  * Follows one measure from the worst point known to a point where no step of a thousandth of any axis lowers
- * its margin any more; returns by how much the last round of steps twice that size still did. Steps go along
- * each axis, and along pairs of axes in the proportion that leaves a peak where it is (`ridges`: changes of
- * susceptance over the axes): the worst lies on such a ridge, where a step of one axis alone only falls.
+ * its margin any more, yielding after each round; returns by how much the last round of steps twice that size still did. Steps go along
+ * each axis, and along pairs of axes in the proportion that leaves a peak where it is (the judge's ridges):
+ * the worst lies on such a ridge, where a step of one axis alone only falls.
  */
-export function polish(judge: PointJudge, measure: number, ridges: readonly Float64Array[]): number {
-  const steps = directions(judge, ridges);
+export function* polish(judge: PointJudge, measure: number): Generator<void, number> {
+  const steps = directions(judge);
   let at = judge.worstAt[measure]!;
   let step = FIRST_STEP;
   let gained = 0;
   while (step >= SMALLEST_STEP) {
     const before = judge.worst[measure]!;
     for (const direction of steps) judge.judge(stepped(judge, at, direction, step));
+    yield;
     gained = before - judge.worst[measure]!;
     if (gained > 0) at = judge.worstAt[measure]!;
     else step /= 2;
@@ -31,11 +32,11 @@ export function polish(judge: PointJudge, measure: number, ridges: readonly Floa
 type Direction = readonly { k: number; share: number }[];
 
 /** Shares of each axis' width, the largest being 1; every direction with its opposite. */
-function directions(judge: PointJudge, ridges: readonly Float64Array[]): Direction[] {
+function directions(judge: PointJudge): Direction[] {
   const axes: Direction[] = [...judge.dimensions.keys()].flatMap((k) =>
     isSwitch(judge.dimensions[k]!) ? [] : [[{ k, share: 1 }], [{ k, share: -1 }]],
   );
-  return [...axes, ...ridges.flatMap((change) => alongRidge(judge, change))];
+  return [...axes, ...judge.ridges.flatMap((change) => alongRidge(judge, change))];
 }
 
 function alongRidge(judge: PointJudge, change: Float64Array): Direction[] {

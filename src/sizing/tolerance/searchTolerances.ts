@@ -40,7 +40,7 @@ export function searchTolerances(judge: PointJudge, thorough = true): ToleranceS
   judge.ridges = visitCrossings(judge);
   visitCorners(judge);
   let bound = 0;
-  if (thorough) for (const k of governing(judge)) bound = Math.max(bound, polish(judge, k, judge.ridges));
+  if (thorough) for (const k of governing(judge)) bound = Math.max(bound, polished(judge, k));
   return {
     worst: judge.duties.measures.map((measure, k) => ({
       measure,
@@ -51,6 +51,11 @@ export function searchTolerances(judge: PointJudge, thorough = true): ToleranceS
     bound,
     unsolved: judge.unsolved,
   };
+}
+
+function polished(judge: PointJudge, measure: number): number {
+  const rounds = polish(judge, measure);
+  for (let next = rounds.next(); ; next = rounds.next()) if (next.done) return next.value;
 }
 
 function visitEnds(judge: PointJudge): void {

@@ -122,10 +122,14 @@ function* followed(
     const k = judge?.duties.measures.findIndex((measure) => measure.key === key) ?? -1;
     if (!judge || k < 0) continue;
     const before = judge.visited;
-    gained = Math.max(gained, polish(judge, k, judge.ridges));
+    const rounds = polish(judge, k);
+    for (let next = rounds.next(); ; next = rounds.next()) {
+      if (next.done) gained = Math.max(gained, next.value);
+      if (next.done) break;
+      yield { ...progress, points: progress.points + points + judge.visited - before };
+    }
     points += judge.visited - before;
     takeSearched(run, records);
-    yield { ...progress, points: progress.points + points };
   }
   return { gained, points };
 }
