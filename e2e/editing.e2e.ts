@@ -233,6 +233,8 @@ test('a case is made, named, copied and removed, and undo brings it back', async
     await page.getByRole('menuitem', { name: words }).click();
   };
   await choose(/^New case/);
+  await expect(page.getByRole('radio', { name: /No changes yet/ })).toBeFocused();
+  await page.keyboard.press('Enter');
   await expect(page.getByRole('textbox', { name: 'name' })).toBeFocused();
   await page.keyboard.press('Control+a');
   await page.keyboard.type('Sunday');
@@ -259,15 +261,14 @@ test('a finding leads to the part it speaks of', async ({ page }) => {
   await page.goto('/');
   await carryFromTray(page, 'bus', { x: 600, y: 300 });
   await page.mouse.up();
-  await page.getByRole('button', { name: /finding/ }).click();
-  await expect(page.getByRole('menuitem', { name: /nothing feeds the site/i })).toBeVisible();
-  await page.keyboard.press('Escape');
+  await page.getByRole('button', { name: /found about the data/ }).click();
+  const margin = page.getByRole('complementary', { name: 'Margin' });
+  await expect(margin.getByRole('button', { name: /nothing feeds the site/i })).toBeVisible();
   await carryFromTray(page, 'supply', await under(part(page, /^busbar/), 0.5));
   await page.mouse.up();
   await carryFromTray(page, 'bus', { x: 600, y: 300 });
   await page.mouse.up();
-  await page.getByRole('button', { name: /finding/ }).click();
-  await page.getByRole('menuitem', { name: /Busbar 2/ }).click();
+  await margin.getByRole('button', { name: /Busbar 2/ }).click();
   await expect(page.getByRole('dialog', { name: 'Data of busbar Busbar 2' })).toBeVisible();
 });
 

@@ -15,7 +15,7 @@ import { RailConnection } from './site/RailConnection.tsx';
 import { SitePlace } from './site/SitePlace.tsx';
 import { useTheme } from './theme/useTheme.ts';
 
-type OpenDialog = 'commands' | 'keys' | 'details' | 'case' | null;
+type OpenDialog = 'commands' | 'keys' | 'details' | null;
 
 /** The shell: header, the place looked at, the rail, and what may lie above them. */
 export function App() {
@@ -23,29 +23,30 @@ export function App() {
   const place = useWorkbench((state) => state.view.place);
   const [dialog, setDialog] = useState<OpenDialog>(null);
   const openList = useCallback(() => setDialog('commands'), []);
-  const openDetails = useCallback(() => setDialog('details'), []);
-  const close = useCallback(() => setDialog(null), []);
+  const [detailsField, setDetailsField] = useState<string | null>(null);
+  const openDetails = useCallback((field: string | null) => {
+    setDetailsField(field);
+    setDialog('details');
+  }, []);
+  const close = useCallback(() => {
+    setDialog(null);
+    setDetailsField(null);
+  }, []);
   const commands = useCommands(setDialog);
   useCommandKeys(commands, openList);
   return (
     <div className="workbench" data-place={place}>
-      <Header
-        commands={commands}
-        caseFormOpen={dialog === 'case'}
-        onCaseFormClose={close}
-        onDetails={openDetails}
-        onCommandList={openList}
-      />
+      <Header commands={commands} onCommandList={openList} />
       <NoticeLine />
       <main className="place">
-        {place === 'site' && <SitePlace />}
+        {place === 'site' && <SitePlace onDetails={openDetails} />}
         {place === 'correction' && <CorrectionPlace />}
         {place === 'sheet' && <SheetConnection />}
       </main>
       {place !== 'sheet' && <RailConnection />}
       <CommandList commands={commands} open={dialog === 'commands'} onOpenChange={close} />
       <KeyMap commands={commands} open={dialog === 'keys'} onClose={close} />
-      {dialog === 'details' && <StudyDetails onClose={close} />}
+      {dialog === 'details' && <StudyDetails firstField={detailsField} onClose={close} />}
       <LeaveDialog />
       <NoticeDialog />
       <DropTarget />

@@ -11,83 +11,122 @@ import {
   Text,
 } from 'react-aria-components';
 import { useWorkbench } from '../../store/index.ts';
-import { casesOf, nameOf } from '../../study/index.ts';
+import { caseDifferences, casesOf, nameOf, type Study } from '../../study/index.ts';
 import { type Command, shownKeys } from '../commands/command.ts';
 import { CaseForm } from './CaseForm.tsx';
+import { closeCaseMenu, setCaseForm, useCaseForm } from './caseForms.ts';
+import { NewCaseForm } from './NewCaseForm.tsx';
 import { roleWords } from './roleWords.ts';
+import { showNthCase } from './showNthCase.ts';
 import './cases.css';
 
-interface Props {
-  commands: readonly Command[];
-  formOpen: boolean;
-  onFormClose(): void;
-}
-
-const actions = ['case.new', 'case.duplicate', 'case.form', 'case.remove', 'case.next'];
+const actions = [
+  ['case.next', 'case.previous', 'case.list', 'case.compare'],
+  ['case.new', 'case.duplicate', 'case.form', 'case.up', 'case.down', 'case.remove'],
+];
 
 /** The case on screen, the way to another, and what can be done with it. */
-export function CaseMenu({ commands, formOpen, onFormClose }: Props) {
+export function CaseMenu({ commands }: { commands: readonly Command[] }) {
   const study = useWorkbench((state) => state.study);
   const caseId = useWorkbench((state) => state.view.caseId);
-  const setCase = useWorkbench((state) => state.setCase);
+  const form = useCaseForm();
   const buttonRef = useRef<HTMLButtonElement>(null);
   if (!study) return null;
-  const cases = casesOf(study);
-  const current = cases.find((one) => one.id === caseId);
-  const byId = new Map(commands.map((command) => [command.id, command]));
+  const current = casesOf(study).find((one) => one.id === caseId);
+  const close = () => setCaseForm(null);
   return (
     <div className="case-menu">
       <span className="quiet">Case</span>
-      <MenuTrigger>
+      <MenuTrigger
+        isOpen={form === 'menu'}
+        onOpenChange={(open) => (open ? setCaseForm('menu') : closeCaseMenu())}
+      >
         <Button ref={buttonRef} className="menu-button case-name">
           <span className="clipped">{current ? nameOf(current) : caseId}</span>{' '}
           <span aria-hidden="true">▾</span>
         </Button>
         <Popover className="popover">
-          <Menu aria-label="Cases" onAction={(id) => byId.get(String(id))?.run()}>
-            <MenuSection
-              aria-label="Show a case"
-              selectionMode="single"
-              selectedKeys={[caseId]}
-              onSelectionChange={(keys) => {
-                const [id] = [...keys];
-                if (id !== undefined) setCase(String(id));
-              }}
-            >
-              {cases.map((one) => (
-                <MenuItem key={one.id} id={one.id} textValue={nameOf(one)}>
-                  <Text slot="label">{nameOf(one)}</Text>
-                  <Text slot="description" className="quiet">
-                    {roleWords(one.role)}, {one.hoursPerDay} h a day
-                  </Text>
-                </MenuItem>
-              ))}
-            </MenuSection>
-            <Separator />
-            <MenuSection aria-label="Change the cases">
-              {actions.flatMap((id) => {
-                const command = byId.get(id);
-                if (!command) return [];
-                return (
-                  <MenuItem key={id} id={id} textValue={command.words} isDisabled={command.enabled === false}>
-                    <Text slot="label">{command.words}</Text>
-                    {command.keys && <Keyboard>{shownKeys(command.keys)}</Keyboard>}
-                  </MenuItem>
-                );
-              })}
-            </MenuSection>
-          </Menu>
+          <CaseChoice study={study} caseId={caseId} commands={commands} />
         </Popover>
       </MenuTrigger>
       <Popover
         className="popover"
         triggerRef={buttonRef}
         placement="bottom start"
-        isOpen={formOpen}
-        onOpenChange={(open) => !open && onFormClose()}
+        isOpen={form === 'details' || form === 'new'}
+        onOpenChange={(open) => !open && close()}
       >
-        <CaseForm study={study} caseId={caseId} onClose={onFormClose} />
+        {form === 'new' ? (
+          <NewCaseForm study={study} caseId={caseId} />
+        ) : (
+          <CaseForm study={study} caseId={caseId} onClose={close} />
+        )}
       </Popover>
     </div>
   );
+}
+
+interface ChoiceProps {
+  study: Study;
+  caseId: string;
+  commands: readonly Command[];
+}
+
+/** The cases by number, name and what differs; a digit shows its case at once. */
+function CaseChoice({ study, caseId, commands }: ChoiceProps) {
+  const setCase = useWorkbench((state) => state.setCase);
+  const byId = new Map(commands.map((command) => [command.id, command]));
+  const onDigit = (event: React.KeyboardEvent) => {
+    if (!showNthCase(event)) return;
+    event.preventDefault();
+    event.stopPropagation();
+    setCaseForm(null);
+  };
+  return (
+    <div onKeyDownCapture={onDigit} role="presentation">
+      <Menu aria-label="Cases" onAction={(id) => byId.get(String(id))?.run()}>
+        <MenuSection
+          aria-label="Show a case"
+          selectionMode="single"
+          selectedKeys={[caseId]}
+          onSelectionChange={(keys) => {
+            const [id] = [...keys];
+            if (id !== undefined) setCase(String(id));
+          }}
+        >
+          {casesOf(study).map((one, index) => (
+            <MenuItem key={one.id} id={one.id} textValue={nameOf(one)}>
+              <Text slot="label">
+                <span className="case-digit">{index < 9 ? index + 1 : ''}</span>
+                {nameOf(one)}
+              </Text>
+              <Text slot="description" className="quiet">
+                {roleWords(one.role)}, {one.hoursPerDay} h a day{differenceWords(study, one.id)}
+              </Text>
+            </MenuItem>
+          ))}
+        </MenuSection>
+        {actions.flatMap((group) => [
+          <Separator key={group[0]} />,
+          <MenuSection key={`${group[0]} section`} aria-label="Change the cases">
+            {group.flatMap((id) => {
+              const command = byId.get(id);
+              if (!command) return [];
+              return (
+                <MenuItem key={id} id={id} textValue={command.words} isDisabled={command.enabled === false}>
+                  <Text slot="label">{command.words}</Text>
+                  {command.keys && <Keyboard>{shownKeys(command.keys)}</Keyboard>}
+                </MenuItem>
+              );
+            })}
+          </MenuSection>,
+        ])}
+      </Menu>
+    </div>
+  );
+}
+
+function differenceWords(study: Study, caseId: string): string {
+  const { length } = caseDifferences(study, caseId);
+  return length === 0 ? '' : ` · Δ ${length}`;
 }

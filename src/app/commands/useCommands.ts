@@ -92,7 +92,7 @@ function viewCommands(): Command[] {
 }
 
 /** Every command of the page in its present state. */
-export function useCommands(openDialog: (dialog: 'details' | 'keys' | 'case') => void): Command[] {
+export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): Command[] {
   const study = useWorkbench((state: Workbench) => state.study);
   const caseId = useWorkbench((state: Workbench) => state.view.caseId);
   const undoing = useWorkbench(undoWords);
@@ -110,7 +110,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys' | 'case') =>
       },
       ...quickStartCommands(study),
       ...viewCommands(),
-      ...(study ? caseCommands(study, caseId, () => openDialog('case')) : []),
+      ...(study ? caseCommands(study, caseId) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
     [study, caseId, undoing, redoing, openDialog],

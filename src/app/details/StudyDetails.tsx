@@ -49,12 +49,18 @@ function change(study: Study, owner: Owner, key: string, value: unknown): Edit {
     : updateGroup(study, owner, { [key]: value });
 }
 
+interface Props {
+  /** Owner and key of the field to begin with, e.g. "criteria-demandCurrentA"; null for the title. */
+  firstField: string | null;
+  onClose(): void;
+}
+
 /** Title block, criteria and limits of the study. */
-export function StudyDetails({ onClose }: { onClose(): void }) {
+export function StudyDetails({ firstField, onClose }: Props) {
   const study = useWorkbench((state) => state.study);
   const edit = useWorkbench((state) => state.edit);
   const [focused, setFocused] = useState<Field | null>(null);
-  useFocusField('details-study-title');
+  useFocusField(`details-${firstField ?? 'study-title'}`);
   const findings = useMemo(() => (study ? siteFindings(study) : []), [study]);
   if (!study) return null;
   const attempt = (next: Edit): string | null => {

@@ -1,28 +1,24 @@
 import { CaseMenu } from '../cases/CaseMenu.tsx';
 import { type Command, shownKeys } from '../commands/command.ts';
-import { FindingsMenu } from '../findings/FindingsMenu.tsx';
+import { FindingsCount } from '../findings/FindingsCount.tsx';
 import { PlaceTabs } from './PlaceTabs.tsx';
 import { StudyMenu } from './StudyMenu.tsx';
 import { VerdictCounts } from './VerdictCounts.tsx';
 
 interface Props {
   commands: readonly Command[];
-  caseFormOpen: boolean;
-  onCaseFormClose(): void;
-  onDetails(): void;
   onCommandList(): void;
 }
 
 /** One quiet line: study, case, places, verdict counts. */
-export function Header(props: Props) {
-  const { commands, onCommandList } = props;
+export function Header({ commands, onCommandList }: Props) {
   return (
     <header className="header">
       <h1>Varwright</h1>
       <StudyMenu commands={commands} />
-      <CaseMenu commands={commands} formOpen={props.caseFormOpen} onFormClose={props.onCaseFormClose} />
+      <CaseMenu commands={commands} />
       <PlaceTabs />
-      <FindingsMenu onDetails={props.onDetails} />
+      <FindingsCount />
       <VerdictCounts />
       <button type="button" className="command-key" onClick={onCommandList} aria-label="Command list">
         {shownKeys('Mod+K')}

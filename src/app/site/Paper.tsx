@@ -3,6 +3,7 @@ import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/ind
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { type Study, studyInCase } from '../../study/index.ts';
 import { Samples } from '../files/Samples.tsx';
+import { Margin } from '../margin/Margin.tsx';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
 import { RemovalDialog } from './RemovalDialog.tsx';
 import { removeChosen } from './removal.ts';
@@ -17,6 +18,8 @@ interface Props {
   armedKind: TrayKind | null;
   onArm(kind: TrayKind | null): void;
   onHover(subject: Subject | null): void;
+  /** Opens the study's details at a field. */
+  onDetails(field: string | null): void;
 }
 
 function select(items: readonly Subject[]): void {
@@ -30,7 +33,8 @@ function openSlip(subject: Subject | null): void {
 }
 
 /** The drawing, or the same site as an outline. */
-export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props) {
+export function Paper(props: Props) {
+  const { study, letters, lit, armedKind, onArm, onHover } = props;
   const view = useWorkbench((state) => state.view);
   const answer = useWorkbench((state) => state.answer);
   const stale = useWorkbench((state) => state.answer?.revision !== state.revision);
@@ -47,6 +51,7 @@ export function Paper({ study, letters, lit, armedKind, onArm, onHover }: Props)
   );
   return (
     <section className="paper" aria-label="Drawing">
+      <Margin study={study} onDetails={props.onDetails} />
       {outlined && study.buses.length > 0 ? (
         <div className="outline-place">
           <Outline

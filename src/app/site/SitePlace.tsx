@@ -17,7 +17,7 @@ interface Spoken {
 }
 
 /** Draw, watch, judge: tray, drawing and notes column. */
-export function SitePlace() {
+export function SitePlace({ onDetails }: { onDetails(field: string | null): void }) {
   const study = useWorkbench((state) => state.study);
   const verdicts = useWorkbench((state) => state.answer?.verdicts ?? none);
   const selection = useWorkbench((state) => state.view.selection);
@@ -40,6 +40,7 @@ export function SitePlace() {
         armedKind={armedKind}
         onArm={setArmedKind}
         onHover={setHovered}
+        onDetails={onDetails}
       />
       <Assumptions study={study} />
       <Notes
