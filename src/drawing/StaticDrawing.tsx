@@ -1,9 +1,8 @@
-import { useId, useMemo } from 'react';
+import { useMemo } from 'react';
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution } from '../engine/index.ts';
 import { type Study, studyInCase } from '../study/index.ts';
 import { BusGlyph } from './glyphs/BusGlyph.tsx';
-import { Hatch } from './glyphs/Hatch.tsx';
 import { type Palette, printPalette } from './glyphs/Palette.ts';
 import { PartGlyph } from './glyphs/PartGlyph.tsx';
 import { type Layout, layoutStudy } from './layout/index.ts';
@@ -34,7 +33,6 @@ export function StaticDrawing(props: StaticDrawingProps) {
   const inCase = useMemo(() => studyInCase(study, caseId), [study, caseId]);
   const layout = useMemo(() => props.layout ?? layoutStudy(study), [props.layout, study]);
   const figures = figuresOf(inCase, solution, verdicts, props.readingMode ?? 'fundamental', props.order ?? 1);
-  const hatchId = `hatch${useId().replaceAll(':', '')}`;
   return (
     <svg
       xmlns="http://www.w3.org/2000/svg"
@@ -45,7 +43,6 @@ export function StaticDrawing(props: StaticDrawingProps) {
       role="img"
       aria-label={props.title ?? `Single-line diagram of ${study.title}`}
     >
-      <Hatch id={hatchId} ink={palette.ink} />
       {layout.parts.map((place) => {
         const figure = figures.parts.get(place.id);
         if (!figure) return null;
@@ -60,7 +57,7 @@ export function StaticDrawing(props: StaticDrawingProps) {
         if (!figure) return null;
         return (
           <g key={place.id} transform={`translate(${place.x1} ${place.y})`}>
-            <BusGlyph place={place} figure={figure} palette={palette} hatchId={hatchId} />
+            <BusGlyph place={place} figure={figure} palette={palette} />
           </g>
         );
       })}

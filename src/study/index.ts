@@ -15,6 +15,7 @@ export { clipText, type PartsClip } from './clip/PartsClip.ts';
 export { type PasteEdit, pasteClip } from './clip/pasteClip.ts';
 export { type ClipOutcome, readClip } from './clip/readClip.ts';
 export { counted, countedTogether } from './counted.ts';
+export { drawnItems, drawnOf, symbolSetOf, symbolSets } from './drawn.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
 export { addPin, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export {
@@ -27,6 +28,7 @@ export {
   updateCase,
 } from './edits/caseEdits.ts';
 export { type CopyEdit, duplicateParts } from './edits/copyParts.ts';
+export { setDrawn, setSymbols } from './edits/drawnEdits.ts';
 export { joinEdits, makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter } from './edits/errorsAfter.ts';
 export {

@@ -281,11 +281,29 @@ export type Pin =
   | { quantity: 'voltage'; bus: string }
   | { quantity: 'current'; element: string; bus: string };
 
+/** The standard whose shapes the drawing's symbols follow. */
+export type SymbolSet = 'iec60617' | 'ieee315';
+
+/** A kind of figure the drawing can show beside its symbols. */
+export type DrawnItem =
+  | 'current'
+  | 'power'
+  | 'powerFactor'
+  | 'voltages'
+  | 'nameplates'
+  | 'dials'
+  | 'direction'
+  | 'widths';
+
 /** How the study was last looked at. Travels with the file; never part of the fingerprint. */
 export interface StudyView {
   pins?: Pin[];
   /** Element ids from left to right, by busbar id. */
   orderAlong?: Record<string, string[]>;
+  /** Absent: IEC 60617. */
+  symbols?: SymbolSet;
+  /** What the drawing leaves out; absent: it shows everything. */
+  hidden?: DrawnItem[];
   focusBus?: string;
   caseId?: string;
 }

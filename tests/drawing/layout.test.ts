@@ -1,9 +1,19 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { type Box, type Layout, layoutStudy, type Point } from '../../src/drawing/layout/index.ts';
+import {
+  type Box,
+  DENSITIES,
+  type Layout,
+  layoutStudy,
+  type PartPlace,
+  type Point,
+  textWidth,
+} from '../../src/drawing/layout/index.ts';
 import { symbolShape } from '../../src/drawing/symbols/symbolShape.ts';
-import type { Study } from '../../src/study/index.ts';
+import { type Study, symbolSetOf } from '../../src/study/index.ts';
 import { anyStudy, part, study } from './randomStudy.ts';
+
+const anyDensity = fc.constantFrom(...DENSITIES);
 
 const overlap = (a: Box, b: Box) =>
   a.x < b.x + b.width - 0.01 &&
@@ -11,24 +21,51 @@ const overlap = (a: Box, b: Box) =>
   a.y < b.y + b.height - 0.01 &&
   b.y < a.y + a.height - 0.01;
 
+/** The mark's disc and the word below or beside it; left of a conductor both end at it. */
+function markBoxes({ mark, hang, x }: PartPlace): Box[] {
+  if (hang === 'across') return [mark];
+  const left = mark.x + mark.width < x;
+  const disc = { x: left ? mark.x + mark.width - 16 : mark.x, y: mark.y, width: 16, height: 16 };
+  return [disc, { ...mark, y: mark.y + 16, height: mark.height - 16 }];
+}
+
 /** Everything that must not cover anything else: texts, symbols, bars, dials. */
 function solids(layout: Layout, site: Study): { what: string; box: Box }[] {
   const data = new Map(site.elements.map((e) => [e.id, e]));
   return [
     ...layout.buses.flatMap((bus) => [
-      { what: `name of ${bus.id}`, box: bus.label },
-      { what: `mark of ${bus.id}`, box: bus.mark },
+      {
+        what: `name of ${bus.id}`,
+        box: { ...bus.label, width: textWidth(bus.name, undefined, true), height: 14 },
+      },
+      { what: `volts of ${bus.id}`, box: { ...bus.label, y: bus.label.y + 15, height: 13 } },
+      {
+        what: `letters of ${bus.id}`,
+        box: { x: bus.mark.x + bus.mark.width, y: bus.mark.y, width: 20, height: 14 },
+      },
+      { what: `mark of ${bus.id}`, box: { ...bus.mark, height: 14 } },
       { what: `bar ${bus.id}`, box: { x: bus.x1, y: bus.y - 2, width: bus.x2 - bus.x1, height: 4 } },
-      { what: `dial of ${bus.id}`, box: { x: bus.dial.x - 16, y: bus.dial.y - 16, width: 32, height: 32 } },
+      ...(bus.dial
+        ? [
+            {
+              what: `dial of ${bus.id}`,
+              box: { x: bus.dial.x - 15, y: bus.dial.y - 15, width: 30, height: 30 },
+            },
+          ]
+        : []),
     ]),
     ...layout.parts.flatMap((p) => {
       const element = data.get(p.id);
-      const shape = symbolShape(element ?? { kind: p.kind });
+      const shape = symbolShape(element ?? { kind: p.kind }, symbolSetOf(site));
       const [along, across] = [shape.reach * 2, shape.width];
       const [width, height] = p.hang === 'across' ? [along, across] : [across, along];
       return [
         { what: `text of ${p.id}`, box: p.label },
-        { what: `mark of ${p.id}`, box: p.mark },
+        ...markBoxes(p).map((box) => ({ what: `mark of ${p.id}`, box })),
+        {
+          what: `letters of ${p.id}`,
+          box: { x: p.letters.x - 14, y: p.letters.y - 11, width: 14, height: 13 },
+        },
         { what: `symbol ${p.id}`, box: { x: p.x - width / 2, y: p.y - height / 2, width, height } },
       ];
     }),
@@ -44,8 +81,8 @@ function segments(layout: Layout): { part: string; a: Point; b: Point }[] {
 describe('layout of the single-line diagram', () => {
   it('never lets a text, symbol, bar or dial cover another, on any site', () => {
     fc.assert(
-      fc.property(anyStudy, (site) => {
-        const all = solids(layoutStudy(site), site);
+      fc.property(anyStudy, anyDensity, (site, density) => {
+        const all = solids(layoutStudy(site, [density]), site);
         all.forEach((one, at) => {
           for (const other of all.slice(at + 1)) {
             if (overlap(one.box, other.box)) throw new Error(`${one.what} covers ${other.what}`);
@@ -58,8 +95,8 @@ describe('layout of the single-line diagram', () => {
 
   it('leads no conductor through a text or a symbol, on any site', () => {
     fc.assert(
-      fc.property(anyStudy, (site) => {
-        const layout = layoutStudy(site);
+      fc.property(anyStudy, anyDensity, (site, density) => {
+        const layout = layoutStudy(site, [density]);
         const boxes = solids(layout, site).filter(({ what }) => !what.startsWith('bar'));
         for (const { part: id, a, b } of segments(layout)) {
           const line: Box = {
@@ -80,8 +117,8 @@ describe('layout of the single-line diagram', () => {
 
   it('lays no two conductors on each other, and meets every busbar on its bar', () => {
     fc.assert(
-      fc.property(anyStudy, (site) => {
-        const layout = layoutStudy(site);
+      fc.property(anyStudy, anyDensity, (site, density) => {
+        const layout = layoutStudy(site, [density]);
         const lines = segments(layout);
         lines.forEach((one, at) => {
           for (const other of lines.slice(at + 1)) {
@@ -118,8 +155,8 @@ describe('layout of the single-line diagram', () => {
 
   it('places every busbar and every part that touches known busbars', () => {
     fc.assert(
-      fc.property(anyStudy, (site) => {
-        const layout = layoutStudy(site);
+      fc.property(anyStudy, anyDensity, (site, density) => {
+        const layout = layoutStudy(site, [density]);
         expect(layout.buses.map((b) => b.id)).toEqual(site.buses.map((b) => b.id));
         const drawable = site.elements.filter((e) => !('from' in e) || e.from !== e.to).map((e) => e.id);
         expect(layout.parts.map((p) => p.id)).toEqual(drawable);

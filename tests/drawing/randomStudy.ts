@@ -1,5 +1,11 @@
 import fc from 'fast-check';
-import type { ElementKind, Study, StudyElement } from '../../src/study/index.ts';
+import {
+  drawnItems,
+  type ElementKind,
+  type Study,
+  type StudyElement,
+  symbolSets,
+} from '../../src/study/index.ts';
 
 const SERIES: ElementKind[] = ['transformer', 'cable', 'reactor', 'coupler', 'branch'];
 const HANGING: ElementKind[] = [
@@ -55,6 +61,14 @@ export function study(buses: [string, number][], elements: StudyElement[]): Stud
   };
 }
 
+const NAMES = [
+  '',
+  'Fans',
+  'Compressors 1 to 4',
+  'Lighting, sockets and trace heating of the north hall',
+  'Umrichterantriebstechnikverteilung',
+];
+
 /** Any site: islands, rings, ties, parallel parts, several supplies, parts in any order. */
 export const anyStudy = fc
   .record({
@@ -62,16 +76,25 @@ export const anyStudy = fc
     series: fc.array(fc.tuple(fc.constantFrom(...SERIES), fc.nat(), fc.nat()), { maxLength: 14 }),
     hanging: fc.array(fc.tuple(fc.constantFrom(...HANGING), fc.nat()), { maxLength: 24 }),
     mix: fc.nat({ max: 1000 }),
+    names: fc.array(fc.constantFrom(...NAMES), { minLength: 1, maxLength: 7 }),
+    hidden: fc.subarray([...drawnItems]),
+    symbols: fc.constantFrom(...symbolSets),
   })
-  .map(({ volts, series, hanging, mix }) => {
+  .map(({ volts, series, hanging, mix, names, hidden, symbols }) => {
     const count = volts.length;
     const parts = [
       ...series.map(([kind, a, b], i) => part(kind, `s${i}`, `b${a % (count || 1)}`, `b${b % (count || 1)}`)),
       ...hanging.map(([kind, a], i) => part(kind, `h${i}`, `b${a % (count || 1)}`, '')),
     ];
     const turned = parts.map((_, i) => parts[(i + mix) % parts.length]).filter((p) => p !== undefined);
-    return study(
+    const named = <T extends { name?: string }>(list: T[]): T[] =>
+      list.map((item, i) => {
+        const name = names[i % names.length];
+        return name ? { ...item, name } : item;
+      });
+    const site = study(
       volts.map((v, i) => [`b${i}`, v]),
-      count > 0 ? turned : [],
+      count > 0 ? named(turned) : [],
     );
+    return { ...site, buses: named(site.buses), view: { hidden, symbols } };
   });

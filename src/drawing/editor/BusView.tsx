@@ -21,7 +21,6 @@ export interface BusViewProps {
   target: boolean;
   /** The rail stands here. */
   focus: boolean;
-  hatchId: string;
 }
 
 function sameFigure(a: BusFigure, b: BusFigure): boolean {
@@ -60,7 +59,7 @@ function sameProps(a: BusViewProps, b: BusViewProps): boolean {
 
 /** One busbar on the drawing with its hit areas. */
 export const BusView = memo(function BusView(props: BusViewProps) {
-  const { place, figure, letters, selected, current, lit, held, target, focus, hatchId } = props;
+  const { place, figure, letters, selected, current, lit, held, target, focus } = props;
   const width = place.x2 - place.x1;
   const mark = figure.mark ? verdictWords[figure.mark] : '';
   const spoken = [
@@ -92,16 +91,23 @@ export const BusView = memo(function BusView(props: BusViewProps) {
       style={{ transform: `translate(${place.x1}px, ${place.y}px)` }}
     >
       <rect className="halo" x={-6} y={-6} width={width + 12} height={12} rx={6} />
-      <BusGlyph place={place} figure={figure} palette={screenPalette} letters={letters} hatchId={hatchId} />
+      <BusGlyph place={place} figure={figure} palette={screenPalette} letters={letters} />
       <rect className="hit" x={-6} y={-9} width={width + 12} height={18} />
       <rect
         className="hit"
-        x={0}
+        x={place.label.x - place.x1}
         y={place.label.y - place.y}
         width={place.label.width}
-        height={measures.BUS_LABEL_HEIGHT}
+        height={place.label.height}
       />
-      <circle className="hit" cx={place.dial.x - place.x1} cy={place.dial.y - place.y} r={18} />
+      {place.dial && (
+        <circle
+          className="hit"
+          cx={place.dial.x - place.x1}
+          cy={place.dial.y - place.y}
+          r={measures.DIAL_RADIUS + 1}
+        />
+      )}
     </g>
   );
 }, sameProps);

@@ -60,7 +60,6 @@ export const DrawingContents = memo(function DrawingContents(props: DrawingConte
             held={props.held.has(subject)}
             target={props.targetBus === place.id}
             focus={props.focusBus === place.id}
-            hatchId={hatchId}
           />
         ) : null;
       })}

@@ -2,8 +2,8 @@ import { memo } from 'react';
 import { trayNames } from '../gestures/TrayKind.ts';
 import { screenPalette } from '../glyphs/Palette.ts';
 import { PartGlyph } from '../glyphs/PartGlyph.tsx';
-import { measures, type PartPlace, textWidth } from '../layout/index.ts';
-import { type PartFigure, readingLines } from '../readings/figures.ts';
+import { measures, type PartPlace } from '../layout/index.ts';
+import type { PartFigure } from '../readings/figures.ts';
 import { verdictWords } from '../readings/worstVerdict.ts';
 import { partSubject } from '../subject.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
@@ -31,8 +31,11 @@ function sameFigure(a: PartFigure, b: PartFigure): boolean {
     a.mark === b.mark &&
     a.off === b.off &&
     a.dead === b.dead &&
-    a.lines.length === b.lines.length &&
-    a.lines.every((line, at) => line === b.lines[at]) &&
+    a.flow === b.flow &&
+    a.words === b.words &&
+    a.symbols === b.symbols &&
+    a.cells.length === b.cells.length &&
+    a.cells.every(({ value, unit }, at) => value === b.cells[at]?.value && unit === b.cells[at]?.unit) &&
     Object.entries(a.widths).every(([bus, width]) => b.widths[bus] === width)
   );
 }
@@ -51,7 +54,7 @@ function sameProps(a: PartViewProps, b: PartViewProps): boolean {
 
 /** Symbol box and text box of a part, around its symbol's centre. */
 export function partBoxes(place: PartPlace, figure: PartFigure) {
-  const shape = symbolShape(figure.element);
+  const shape = symbolShape(figure.element, figure.symbols);
   const [w, h] = place.hang === 'across' ? [shape.reach * 2, shape.width] : [shape.width, shape.reach * 2];
   const symbol = { x: -w / 2 - 5, y: -h / 2 - 5, width: w + 10, height: h + 10 };
   const text = { ...place.label, x: place.label.x - place.x, y: place.label.y - place.y };
@@ -59,10 +62,13 @@ export function partBoxes(place: PartPlace, figure: PartFigure) {
 }
 
 function spoken(figure: PartFigure, letters: string): string {
-  const { element, name, plate, lines, mark } = figure;
+  const { element, name, plate, cells, words, mark, off } = figure;
+  const readings = cells.map(({ value, unit, spoken }) => spoken ?? `${value} ${unit}`);
   const verdict = mark ? verdictWords[mark] : '';
   const notes = letters ? `notes ${letters}` : '';
-  return [trayNames[element.kind], name, plate, ...lines, verdict, notes].filter(Boolean).join(', ');
+  return [trayNames[element.kind], name, plate, off ? 'out of service' : words, ...readings, verdict, notes]
+    .filter(Boolean)
+    .join(', ');
 }
 
 /** One part on the drawing, with its hit areas, selection frame and foot handles. */
@@ -97,19 +103,18 @@ export const PartView = memo(function PartView(props: PartViewProps) {
 
 /** Shown while the readings are older than the drawing. */
 function ReadingHatch({ place, figure, hatchId }: Pick<PartViewProps, 'place' | 'figure' | 'hatchId'>) {
-  if (figure.lines.length === 0 || figure.off) return null;
-  const lines = readingLines(figure, place.align);
-  const width = Math.max(...lines.map((line) => textWidth(line)));
-  const middle = place.align === 'middle';
-  const x = (middle ? place.label.x + (place.label.width - width) / 2 : place.label.x) - place.x;
-  const y = place.label.y - place.y + (place.oneLine ? 1 : 2) * measures.LINE_PX;
+  if (figure.cells.length === 0) return null;
+  const { text, label } = place;
+  const width = text.columns * (measures.CELL_WIDTH + measures.CELL_GAP);
+  const x = (text.align === 'middle' ? label.x + (label.width - width) / 2 : label.x) - place.x;
+  const above = (text.name.length + text.plateLines) * measures.LINE_PX;
   return (
     <rect
       className="reading-hatch"
       x={x}
-      y={y}
+      y={label.y - place.y + above}
       width={width}
-      height={lines.length * measures.LINE_PX}
+      height={Math.ceil(figure.cells.length / text.columns) * measures.LINE_PX}
       fill={`url(#${hatchId})`}
     />
   );

@@ -1,7 +1,6 @@
 import type { BusPlace, Layout, PartPlace, Point } from '../layout/index.ts';
 
 const ABOVE = 44;
-const BELOW = 150;
 const BESIDE = 28;
 
 /**
@@ -14,7 +13,7 @@ export function busAt(layout: Layout, point: Point): BusPlace | undefined {
   for (const bar of layout.buses) {
     if (point.x < bar.x1 - BESIDE || point.x > bar.x2 + BESIDE) continue;
     const below = point.y - bar.y;
-    if (below > BELOW || below < -ABOVE) continue;
+    if (below > bar.depth || below < -ABOVE) continue;
     const distance = below >= 0 ? below : -below * 1.5;
     if (distance < least) {
       least = distance;

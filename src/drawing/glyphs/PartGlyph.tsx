@@ -1,10 +1,11 @@
-import { measures, type PartPlace, type Point, textWidth } from '../layout/index.ts';
-import { type PartFigure, readingLines } from '../readings/figures.ts';
-import { verdictWords } from '../readings/worstVerdict.ts';
+import type { PartPlace, Point } from '../layout/index.ts';
+import type { PartFigure } from '../readings/figures.ts';
 import { symbolShape } from '../symbols/symbolShape.ts';
+import { FlowArrow } from './FlowArrow.tsx';
+import { MarkAndLetters } from './MarkAndLetters.tsx';
 import type { Palette } from './Palette.ts';
+import { PartText } from './PartText.tsx';
 import { SymbolGlyph } from './SymbolGlyph.tsx';
-import { VerdictMark } from './VerdictMark.tsx';
 
 export interface PartGlyphProps {
   place: PartPlace;
@@ -14,8 +15,6 @@ export interface PartGlyphProps {
   letters?: string;
 }
 
-/** Lines are told apart by their place. */
-const PLACES = ['first', 'second', 'third'];
 const REACTIVE = new Set(['bank', 'filter']);
 
 function turnOf(place: PartPlace): number {
@@ -23,111 +22,60 @@ function turnOf(place: PartPlace): number {
   return place.kind === 'supply' && place.hang === 'below' ? 180 : 0;
 }
 
-function relative(points: Point[], to: Point): string {
+/** A conductor as path data, in px from `to`. */
+export function conductor(points: Point[], to: Point): string {
   return points.map(({ x, y }, at) => `${at === 0 ? 'M' : 'L'}${x - to.x},${y - to.y}`).join(' ');
 }
 
 /** Ink of symbol and conductors: in trouble, reactive, or plain. */
 function inkOf(figure: PartFigure, palette: Palette): string {
-  if (figure.mark === 'fail' && !figure.off) return palette.fail;
-  return REACTIVE.has(figure.element.kind) && !figure.off ? palette.reactive : palette.ink;
+  if (figure.off) return palette.ink2;
+  if (figure.mark === 'fail') return palette.fail;
+  return REACTIVE.has(figure.element.kind) ? palette.reactive : palette.ink;
+}
+
+/** Dashed out of service, dotted without voltage: told apart without colour. */
+function dashOf(figure: PartFigure): string | undefined {
+  if (figure.off) return '4 3';
+  return figure.dead ? '1.5 2.5' : undefined;
 }
 
 /** A part around its symbol's centre: conductors, symbol, name, nameplate, readings, mark and letters. */
 export function PartGlyph({ place, figure, palette, letters }: PartGlyphProps) {
-  const { element } = figure;
   const ink = inkOf(figure, palette);
+  const [first] = place.ends;
   return (
     <g>
       {place.ends.map((end) => (
         <path
           key={end.bus}
-          d={relative(end.path, place)}
+          className="conductor"
+          d={conductor(end.path, place)}
           fill="none"
           stroke={ink}
           strokeWidth={figure.widths[end.bus] ?? 1.5}
-          strokeDasharray={figure.off ? '4 3' : undefined}
-          strokeOpacity={figure.dead ? 0.45 : undefined}
+          strokeDasharray={dashOf(figure)}
           strokeLinejoin="round"
         />
       ))}
-      <SymbolGlyph shape={symbolShape(element)} ink={ink} faint={figure.off} turn={turnOf(place)} />
+      {first && figure.flow !== 0 && (
+        <FlowArrow
+          end={first}
+          centre={place}
+          into={figure.flow > 0}
+          width={figure.widths[first.bus] ?? 1.5}
+          ink={ink}
+          paper={palette.sheet}
+        />
+      )}
+      <SymbolGlyph
+        shape={symbolShape(figure.element, figure.symbols)}
+        ink={ink}
+        dash={figure.off ? '3 2.5' : undefined}
+        turn={turnOf(place)}
+      />
       <PartText place={place} figure={figure} palette={palette} />
       <MarkAndLetters place={place} figure={figure} palette={palette} letters={letters ?? ''} />
-    </g>
-  );
-}
-
-function PartText({ place, figure, palette }: Omit<PartGlyphProps, 'letters'>) {
-  const { name, plate } = figure;
-  const middle = place.align === 'middle';
-  const x = (middle ? place.label.x + place.label.width / 2 : place.label.x) - place.x;
-  const top = place.label.y - place.y + 11;
-  const line = measures.LINE_PX;
-  const readingInk = figure.mark === 'fail' && !figure.off ? palette.fail : palette.current;
-  const firstReading = place.oneLine ? 1 : 2;
-  return (
-    <g textAnchor={middle ? 'middle' : 'start'} fontSize={measures.FONT_PX}>
-      <text x={x} y={top} fontWeight={600} fill={palette.ink}>
-        {name}
-        {place.oneLine && (
-          <tspan className="plate" dx={8} fontWeight={400} fill={palette.ink2}>
-            {plate}
-          </tspan>
-        )}
-      </text>
-      {!place.oneLine && (
-        <text className="plate" x={x} y={top + line} fill={palette.ink2}>
-          {plate}
-        </text>
-      )}
-      {readingLines(figure, place.align).map((text, at) => (
-        <text
-          key={PLACES[at]}
-          className="reading"
-          x={x}
-          y={top + (firstReading + at) * line}
-          fill={figure.off ? palette.ink2 : readingInk}
-          fontWeight={figure.mark === 'fail' && at === 0 ? 600 : 400}
-          fontStyle={figure.off ? 'italic' : undefined}
-        >
-          {text}
-        </text>
-      ))}
-    </g>
-  );
-}
-
-interface MarkProps {
-  place: PartPlace;
-  figure: PartFigure;
-  palette: Palette;
-  letters: string;
-}
-
-/** Beside a hanging symbol the word stands under the mark; elsewhere mark, word and letters share a row. */
-function MarkAndLetters({ place, figure, palette, letters }: MarkProps) {
-  const shown = figure.mark !== undefined && figure.mark !== 'pass';
-  if (!shown && letters === '') return null;
-  const stacked = place.hang === 'below';
-  const [x, y] = [place.mark.x - place.x + 8, place.mark.y - place.y + 8];
-  const word = figure.mark ? verdictWords[figure.mark] : '';
-  const lettersX = !shown ? -8 : stacked ? 12 : 18 + textWidth(word, 11);
-  return (
-    <g>
-      {shown && figure.mark && (
-        <VerdictMark verdict={figure.mark} palette={palette} x={x} y={y} stacked={stacked} />
-      )}
-      <text
-        className="letters"
-        x={x + lettersX}
-        y={y + 4}
-        fontSize={12}
-        fontWeight={600}
-        fill={figure.mark === 'fail' ? palette.fail : palette.ink2}
-      >
-        {letters}
-      </text>
     </g>
   );
 }

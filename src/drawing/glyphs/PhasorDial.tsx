@@ -1,3 +1,4 @@
+import { measures } from '../layout/index.ts';
 import type { Palette } from './Palette.ts';
 
 export interface PhasorDialProps {
@@ -8,7 +9,7 @@ export interface PhasorDialProps {
   palette: Palette;
 }
 
-const RADIUS = 16;
+const RADIUS = measures.DIAL_RADIUS;
 const PHASES = [
   { phase: 'L1', dash: undefined },
   { phase: 'L2', dash: '4 2' },
@@ -24,7 +25,10 @@ export function PhasorDial({ phasors, x, y, palette }: PhasorDialProps) {
         const [re, im] = phasors?.[at] ?? [0, 0];
         const length = Math.min(Math.hypot(re, im), 1.12) || 0;
         const angle = Math.atan2(im, re);
-        const [px, py] = [length * 13.5 * Math.cos(angle), -length * 13.5 * Math.sin(angle)];
+        const [px, py] = [
+          length * (RADIUS - 2.5) * Math.cos(angle),
+          -length * (RADIUS - 2.5) * Math.sin(angle),
+        ];
         return (
           <line
             key={phase}

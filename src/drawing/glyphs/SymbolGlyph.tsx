@@ -3,22 +3,22 @@ import type { SymbolShape } from '../symbols/primitives.ts';
 export interface SymbolGlyphProps {
   shape: SymbolShape;
   ink: string;
-  /** Out of service. */
-  faint?: boolean;
+  /** Out of service: the outline is dashed. */
+  dash?: string | undefined;
   /** Degrees, clockwise. */
   turn?: number;
   strokePx?: number;
 }
 
 /** A part's symbol around (0, 0), from the plain list of its shapes. */
-export function SymbolGlyph({ shape, ink, faint = false, turn = 0, strokePx = 1.5 }: SymbolGlyphProps) {
+export function SymbolGlyph({ shape, ink, dash, turn = 0, strokePx = 1.5 }: SymbolGlyphProps) {
   return (
     <g
       transform={turn === 0 ? undefined : `rotate(${turn})`}
       fill="none"
       stroke={ink}
       strokeWidth={strokePx}
-      strokeOpacity={faint ? 0.55 : undefined}
+      strokeDasharray={dash}
       strokeLinejoin="round"
     >
       {shape.primitives.map((primitive, at) => {

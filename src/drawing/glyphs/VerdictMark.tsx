@@ -7,15 +7,21 @@ export interface VerdictMarkProps {
   palette: Palette;
   x: number;
   y: number;
-  /** The word stands below the mark instead of beside it. */
-  stacked?: boolean;
+  /** Where the word stands: beside the mark, below it, or below it and ending with it. */
+  word?: 'beside' | 'below' | 'below-left';
 }
+
+const WORD_PLACES = {
+  beside: { x: 11, y: 4, textAnchor: 'start' },
+  below: { x: -8, y: 19, textAnchor: 'start' },
+  'below-left': { x: 8, y: 19, textAnchor: 'end' },
+} as const;
 
 /**
  * A verdict's mark and word around (x, y): a disc with a cross fails, a triangle watches, an open ring with a
  * question mark has no verdict, a bare tick passes. Each shape is told apart without colour.
  */
-export function VerdictMark({ verdict, palette, x, y, stacked = false }: VerdictMarkProps) {
+export function VerdictMark({ verdict, palette, x, y, word = 'beside' }: VerdictMarkProps) {
   const ink = { fail: palette.fail, watch: palette.watch, pass: palette.pass, unknown: palette.ink2 }[
     verdict
   ];
@@ -29,8 +35,8 @@ export function VerdictMark({ verdict, palette, x, y, stacked = false }: Verdict
       )}
       {verdict === 'watch' && (
         <>
-          <path d="M0,-8 L8.5,6.5 H-8.5 Z" fill={ink} strokeLinejoin="round" stroke={ink} />
-          <path d="M0,-3.5 V1.5 M0,3.2 V5" stroke={palette.sheet} strokeWidth={1.8} />
+          <path d="M0,-7 L7.5,6 H-7.5 Z" fill={ink} strokeLinejoin="round" stroke={ink} />
+          <path d="M0,-3 V1.5 M0,3 V4.8" stroke={palette.sheet} strokeWidth={1.8} />
         </>
       )}
       {verdict === 'unknown' && (
@@ -42,9 +48,9 @@ export function VerdictMark({ verdict, palette, x, y, stacked = false }: Verdict
         </>
       )}
       {verdict === 'pass' && <path d="M-5,0 L-1.5,4 L5,-4.5" fill="none" stroke={ink} strokeWidth={1.8} />}
-      {/* Stacked there is room for the short words only; the ring with its mark stands alone. */}
-      {!(stacked && verdict === 'unknown') && (
-        <text x={stacked ? -8 : 12} y={stacked ? 20 : 4} fontSize={11} fill={ink}>
+      {/* The drawing has room for short words only; the ring with its question mark stands alone. */}
+      {verdict !== 'unknown' && (
+        <text {...WORD_PLACES[word]} fontSize={11} fill={ink}>
           {verdictWords[verdict]}
         </text>
       )}

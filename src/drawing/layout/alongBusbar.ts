@@ -32,8 +32,14 @@ export interface Arrangement {
   fromBelow: SeriesElement[][];
 }
 
-/** Puts every part in its slot: order along the busbar from the study's view, else file order. */
-export function arrange(graph: SiteGraph, storeys: Storeys): Arrangement {
+/** All parts touching each busbar in drawing order: that of the study's view, else of the file. */
+export function orderAlong(graph: SiteGraph): StudyElement[][] {
+  const fileOrder = new Map(graph.study.elements.map((part, index) => [part.id, index]));
+  return graph.study.buses.map((_, bus) => partsAlong(graph, bus, fileOrder));
+}
+
+/** Puts every part in its slot. */
+export function arrange(graph: SiteGraph, storeys: Storeys, order = orderAlong(graph)): Arrangement {
   const buses = graph.study.buses;
   const list = <T>() => buses.map((): T[] => []);
   const result: Arrangement = {
@@ -47,27 +53,25 @@ export function arrange(graph: SiteGraph, storeys: Storeys): Arrangement {
   storeys.beside.forEach((left, bus) => {
     if (left >= 0) result.beside[left]?.push(bus);
   });
-  const hangingOrder = buses.map((_, bus) => partsAlong(graph, bus));
-  result.ties = endTies(graph, storeys, result, hangingOrder);
+  result.ties = endTies(graph, storeys, result, order);
   const tied = new Set<SeriesElement>(result.ties.map((tie) => tie.part));
-  const sequence = drawnSequence(graph, storeys, result, hangingOrder).position;
+  const sequence = drawnSequence(graph, storeys, result, order).position;
   buses.forEach((_, bus) => {
-    fillSlots(graph, storeys, bus, hangingOrder[bus] ?? [], tied, sequence, result);
+    fillSlots(graph, storeys, bus, order[bus] ?? [], tied, sequence, result);
   });
   return result;
 }
 
-/** All parts touching a busbar in drawing order; the order list may be partial or stale. */
-function partsAlong(graph: SiteGraph, bus: number): StudyElement[] {
+/** The order list of the view may be partial or stale. */
+function partsAlong(graph: SiteGraph, bus: number, fileOrder: ReadonlyMap<string, number>): StudyElement[] {
   const touching = [...(graph.hanging[bus] ?? []), ...(graph.joins[bus] ?? []).map((join) => join.part)];
-  const fileOrder = new Map(graph.study.elements.map((part, index) => [part.id, index]));
   const order = graph.study.view?.orderAlong?.[graph.study.buses[bus]?.id ?? ''] ?? [];
   const wished = new Map(order.map((id, index) => [id, index]));
   const rank = (part: StudyElement) => wished.get(part.id) ?? order.length + (fileOrder.get(part.id) ?? 0);
   return touching.sort((a, b) => rank(a) - rank(b));
 }
 
-function otherEnd(graph: SiteGraph, bus: number, part: StudyElement): number {
+export function otherEnd(graph: SiteGraph, bus: number, part: StudyElement): number {
   return graph.joins[bus]?.find((join) => join.part === part)?.other ?? -1;
 }
 
@@ -90,11 +94,10 @@ function drawnSequence(graph: SiteGraph, storeys: Storeys, into: Arrangement, or
     for (const part of order[bus] ?? []) {
       const other = otherEnd(graph, bus, part);
       if (other < 0 || seen.has(other)) continue;
+      for (let between = storey + 1; between < (storeys.storey[other] ?? 0); between++) put(between, -1);
       if (storeys.above[other] === bus) {
         seen.add(other);
         visit(other);
-      } else {
-        for (let between = storey + 1; between < (storeys.storey[other] ?? 0); between++) put(between, -1);
       }
     }
     for (const right of into.beside[bus] ?? []) visit(right);
@@ -155,4 +158,17 @@ function fillSlots(
       into.fromAbove[other]?.push(part);
     }
   }
+}
+
+/** Parts leading on from busbars that have hanging parts as well. */
+export function leadsAmongLeaves(arrangement: Arrangement): Set<StudyElement> {
+  const found = new Set<StudyElement>();
+  for (const slots of arrangement.slots) {
+    if (!slots.some(({ kind }) => kind === 'leaf')) continue;
+    for (const slot of slots) {
+      if (slot.kind === 'column') found.add(slot.part);
+      if (slot.kind === 'lead') for (const part of slot.parts) found.add(part);
+    }
+  }
+  return found;
 }

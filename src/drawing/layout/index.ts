@@ -1,8 +1,10 @@
 export { keepPlaces } from './keepPlaces.ts';
-export { layoutStudy } from './layoutStudy.ts';
+export { DENSITIES, type Density, layoutStudy } from './layoutStudy.ts';
 export * as measures from './measures.ts';
 export { nameplate, nominalVoltage } from './nameplate.ts';
+export { hasPowerFactor, hasRatedCurrent, reactiveKinds, readingRoom } from './readingRoom.ts';
 export { type OutlineNode, outlineWords, siteOutline } from './siteOutline.ts';
 export { textWidth } from './textWidth.ts';
 export { tradeNumber, tradeVolts } from './tradeNumber.ts';
-export type { Box, BusPlace, Hang, Layout, PartEnd, PartPlace, Point } from './types.ts';
+export type { Box, BusPlace, Hang, Layout, PartEnd, PartPlace, PartText, Point } from './types.ts';
+export { wrapWords } from './wrapWords.ts';

@@ -1,91 +1,94 @@
 import type { Arrangement } from './alongBusbar.ts';
-import type { ArrivalX, Block } from './block.ts';
+import type { BlockContent } from './block.ts';
+import type { Lane } from './lanes.ts';
 import {
-  BARE_ZONE,
-  BUS_LABEL_BAND,
+  BARE_DEPTH,
   LANE_PITCH,
-  LEAF_ZONE,
-  MARGIN,
-  SOURCE_ZONE,
-  TIE_ZONE,
-  TRUNK_ZONE,
+  LEAF_TEXT_DEPTH,
+  ROW_GAP,
+  SIDE_TEXT_DEPTH,
+  STOREY_BAND,
+  TIE_MARK_HEIGHT,
+  TIE_TEXT_DEPTH,
+  TRUNK_DEPTH,
 } from './measures.ts';
-import type { SiteGraph } from './siteGraph.ts';
-import type { Storeys } from './storeys.ts';
+import type { Packing } from './packing.ts';
 
-/** The horizontal run of a column from its symbol to the busbar it arrives at. */
-export interface Lane {
-  arrival: ArrivalX;
-  /** The storey below whose busbars' zone it runs, and its track there (0 uppermost). */
-  storey: number;
-  track: number;
-  fromX: number;
-}
-
-/** Heights of one island: bar y and the y of the first lane below it, by storey. */
+/** Heights of one island by storey: of its bars, of the rows below them and of the first lane below those. */
 export interface IslandDepths {
   barY: number[];
+  rowY: number[][];
+  /** Depth of all rows of a storey together. */
+  depth: number[];
   laneY: number[];
   bottom: number;
 }
 
-/** Lanes that overlap sideways get tracks of their own, so two runs never lie on each other. */
-export function assignLanes(block: Block, storeys: Storeys): Lane[] {
-  const symbolX = new Map(block.symbols.map((symbol) => [symbol.part.id, symbol.x]));
-  const lanes = block.arrivals.map((arrival): Lane => {
-    const storey = storeys.storey[arrival.bus] ?? 0;
-    return {
-      arrival,
-      storey: arrival.from === 'above' ? storey - 1 : storey,
-      track: 0,
-      fromX: symbolX.get(arrival.part.id) ?? arrival.x,
-    };
-  });
-  const extent = (lane: Lane) => [Math.min(lane.fromX, lane.arrival.x), Math.max(lane.fromX, lane.arrival.x)];
-  lanes.sort((a, b) => (extent(a)[0] ?? 0) - (extent(b)[0] ?? 0));
-  const taken = new Map<number, number[]>();
-  for (const lane of lanes) {
-    const ends = taken.get(lane.storey) ?? [];
-    const [left = 0, right = 0] = extent(lane);
-    const free = ends.findIndex((end) => end + LANE_PITCH < left);
-    lane.track = free >= 0 ? free : ends.length;
-    ends[lane.track] = right;
-    taken.set(lane.storey, ends);
-  }
-  return lanes;
-}
-
-/** Storey heights of an island from what hangs in each. */
+/** Heights of an island from what hangs in each row; its uppermost bars stand at `topY`. */
 export function islandDepths(
-  graph: SiteGraph,
-  storeys: Storeys,
-  arrangement: Arrangement,
-  island: number[],
+  packing: Packing,
+  content: BlockContent,
   lanes: Lane[],
+  topY: number,
 ): IslandDepths {
-  const zones: number[] = [];
-  const tiedLeft = new Set(arrangement.ties.map((tie) => tie.left));
-  for (const bus of island) {
-    const storey = storeys.storey[bus] ?? 0;
-    let zone = Math.max(zones[storey] ?? 0, tiedLeft.has(bus) ? TIE_ZONE : BARE_ZONE);
-    for (const slot of arrangement.slots[bus] ?? []) {
-      zone = Math.max(zone, slot.kind === 'leaf' ? LEAF_ZONE : TRUNK_ZONE);
-    }
-    zones[storey] = zone;
-  }
-  const own = new Set(island.map((bus) => graph.study.buses[bus]?.id));
-  const tracks = (storey: number) =>
-    lanes
-      .filter((lane) => lane.storey === storey && own.has(graph.study.buses[lane.arrival.bus]?.id))
-      .reduce((most, lane) => Math.max(most, lane.track + 1), 0);
-  const depths: IslandDepths = { barY: [], laneY: [], bottom: 0 };
-  let y = MARGIN + SOURCE_ZONE;
-  zones.forEach((zone, storey) => {
+  const rows = rowDepths(packing, content);
+  const depths: IslandDepths = { barY: [], rowY: [], depth: [], laneY: [], bottom: topY };
+  let y = topY;
+  rows.forEach((heights, storey) => {
     depths.barY.push(y);
-    depths.laneY.push(y + zone + LANE_PITCH / 2);
-    const lanesHeight = tracks(storey) * LANE_PITCH;
-    depths.bottom = y + zone + lanesHeight;
-    y += zone + lanesHeight + BUS_LABEL_BAND;
+    let depth = 0;
+    depths.rowY.push(
+      heights.map((height) => {
+        const top = y + depth;
+        depth += height;
+        return top;
+      }),
+    );
+    depths.depth.push(depth);
+    depths.laneY.push(y + depth + LANE_PITCH / 2);
+    const tracks = lanes.filter((lane) => lane.storey === storey).map(({ track }) => track + 1);
+    depths.bottom = y + depth + Math.max(0, ...tracks) * LANE_PITCH;
+    y = depths.bottom + STOREY_BAND;
   });
   return depths;
+}
+
+/** Depth of every row of every storey the island has. */
+function rowDepths(packing: Packing, content: BlockContent): number[][] {
+  const { storeys, texts } = packing;
+  const depths: number[][] = [];
+  const reach = (storey: number, row: number, depth: number) => {
+    const own = depths[storey] ?? [];
+    depths[storey] = own;
+    for (let at = own.length; at <= row; at++) own.push(0);
+    own[row] = Math.max(own[row] ?? 0, depth);
+  };
+  const storeyOf = homeStoreys(packing.arrangement, storeys.storey);
+  for (const { bus } of content.bars) reach(storeys.storey[bus] ?? 0, 0, BARE_DEPTH);
+  for (const { part, hang, row } of content.symbols) {
+    const storey = storeyOf.get(part) ?? 0;
+    if (hang === 'below') reach(storey, row, LEAF_TEXT_DEPTH + texts.under(part).height + ROW_GAP);
+    if (hang === 'leads-on')
+      reach(storey, 0, Math.max(TRUNK_DEPTH, SIDE_TEXT_DEPTH + texts.beside(part).height + ROW_GAP));
+  }
+  const stands = new Set(content.bars.map(({ bus }) => bus));
+  for (const { part, left } of packing.arrangement.ties) {
+    if (stands.has(left))
+      reach(
+        storeys.storey[left] ?? 0,
+        0,
+        TIE_TEXT_DEPTH + TIE_MARK_HEIGHT + texts.under(part).height + ROW_GAP,
+      );
+  }
+  return depths;
+}
+
+function homeStoreys(arrangement: Arrangement, storey: readonly number[]) {
+  const home = new Map<unknown, number>();
+  arrangement.slots.forEach((slots, bus) => {
+    for (const slot of slots) {
+      for (const part of slot.kind === 'lead' ? slot.parts : [slot.part]) home.set(part, storey[bus] ?? 0);
+    }
+  });
+  return home;
 }

@@ -1,38 +1,53 @@
-import type { SeriesElement, ShuntElement, Study } from '../../study/index.ts';
-import { symbolShape } from '../symbols/symbolShape.ts';
+import { type SeriesElement, type ShuntElement, symbolSetOf } from '../../study/index.ts';
+import { type SymbolShape, symbolShape } from '../symbols/symbolShape.ts';
 import type { SymbolX } from './block.ts';
-import type { Lane } from './islandDepths.ts';
-import { leafLabelWidth, sideLabel } from './labels.ts';
+import type { IslandDepths } from './islandDepths.ts';
+import type { TextPlan, TextPlans } from './labels.ts';
 import {
+  BASELINE,
+  BUS_MARK_ROOM,
+  LEAD,
   LEAF_TEXT_DEPTH,
-  LINE_PX,
   MARK_HEIGHT,
+  MARK_OFFSET,
   MARK_WIDTH,
+  SIDE_TEXT_DEPTH,
   SIDE_TEXT_OFFSET,
-  SOURCE_HEIGHT,
-  STACKED_MARK_WIDTH,
+  SOURCE_HALF,
   SYMBOL_DEPTH,
+  TIE_MARK_HEIGHT,
+  TIE_TEXT_DEPTH,
 } from './measures.ts';
-import type { Box, BusPlace, PartEnd, PartPlace, Point } from './types.ts';
+import type { Packing } from './packing.ts';
+import type { BusPlace, PartEnd, PartPlace, PartText, Point } from './types.ts';
 
+type Part = SeriesElement | ShuntElement;
+
+/** Top of a row to the top of the mark beside a conductor. */
+const MARK_DEPTH = 4;
+/** The mark itself and a gap. */
+const MARK_DISC = 19;
+/** Foot of a source's text above its busbar. */
+const SOURCE_LIFT = 7;
+/** Height a source's symbol and conductor need. */
+const LEAST_SOURCE = 56;
+
+/** Where a bent conductor runs along and meets its second busbar. */
 export interface Route {
-  lane: Lane;
+  x: number;
   y: number;
 }
 
-/** Name, plate and two lines of readings beside a symbol, three below it. */
-const SIDE_LINES = 4;
-const LEAF_LINES = 5;
-
-function endsOf(part: SeriesElement | ShuntElement): [string, string] {
+function endsOf(part: Part): [string, string] {
   return 'from' in part ? [part.from, part.to] : [part.bus, part.bus];
 }
 
 /** The place of a part standing at x: symbol, conductors to its busbars, box of its text. */
 export function placePart(
-  study: Study,
+  packing: Packing,
   symbol: SymbolX,
   bars: Map<string, BusPlace>,
+  depths: IslandDepths,
   route: Route | undefined,
 ): PartPlace {
   const { part, x } = symbol;
@@ -41,11 +56,12 @@ export function placePart(
     .filter((bar) => bar !== undefined);
   const upper = upperOf(known, x);
   if (!upper) throw new RangeError(`part ${part.id} is placed without a busbar`);
-  if (symbol.hang === 'leads-on' && 'from' in part) {
+  if (symbol.hang === 'leads-on') {
     const lower = known.find((bar) => bar !== upper) ?? upper;
-    return placeLead(study, part, x, upper, lower, route);
+    return placeLead(packing, part, x, upper, lower, route);
   }
-  return symbol.hang === 'above' ? placeFeed(study, part, x, upper) : placeLeaf(study, part, x, upper);
+  if (symbol.hang === 'above') return placeFeed(packing, part, x, upper);
+  return placeLeaf(packing, part, x, upper, depths.rowY[upper.storey]?.[symbol.row] ?? upper.y);
 }
 
 /** Of two busbars the one in the higher storey; in one storey the one the part stands under. */
@@ -56,142 +72,143 @@ function upperOf(bars: BusPlace[], x: number): BusPlace | undefined {
   return x >= a.x1 && x <= a.x2 ? a : b;
 }
 
-function common(part: SeriesElement | ShuntElement, bus: string, centre: Point) {
-  return { id: part.id, kind: part.kind, bus, x: centre.x, y: centre.y };
+function shapeOf({ study }: Packing, part: Part): SymbolShape {
+  return symbolShape(part, symbolSetOf(study));
 }
 
-function placeLeaf(study: Study, part: SeriesElement | ShuntElement, x: number, bar: BusPlace): PartPlace {
-  const shape = symbolShape(part);
-  const centre = { x, y: bar.y + SYMBOL_DEPTH };
-  const width = leafLabelWidth(part, study);
+function textOf({ align, name, plateLines, readings, columns }: TextPlan): PartText {
+  return { align, name, plateLines, readings, columns };
+}
+
+function straight(bus: string, x: number, from: number, to: number): PartEnd {
   return {
-    ...common(part, bar.id, centre),
+    bus,
+    path: [
+      { x, y: from },
+      { x, y: to },
+    ],
+  };
+}
+
+function placeLeaf(packing: Packing, part: Part, x: number, bar: BusPlace, rowY: number): PartPlace {
+  const plan = packing.texts.under(part);
+  const y = rowY + SYMBOL_DEPTH;
+  return {
+    id: part.id,
+    kind: part.kind,
+    bus: bar.id,
+    x,
+    y,
     hang: 'below',
     top: { x, y: bar.y },
-    ends: [
-      {
-        bus: bar.id,
-        path: [
-          { x, y: bar.y },
-          { x, y: centre.y - shape.reach },
-        ],
-      },
-    ],
-    label: { x: x - width / 2, y: bar.y + LEAF_TEXT_DEPTH, width, height: LEAF_LINES * LINE_PX },
-    align: 'middle',
-    oneLine: false,
-    mark: {
-      x: x + SIDE_TEXT_OFFSET,
-      y: centre.y - MARK_HEIGHT,
-      width: STACKED_MARK_WIDTH,
-      height: 2 * MARK_HEIGHT,
-    },
+    ends: [straight(bar.id, x, bar.y, y - shapeOf(packing, part).reach)],
+    text: textOf(plan),
+    label: { x: x - plan.width / 2, y: rowY + LEAF_TEXT_DEPTH, width: plan.width, height: plan.height },
+    mark: { x: x + MARK_OFFSET, y: rowY + MARK_DEPTH, width: MARK_WIDTH, height: MARK_HEIGHT },
+    letters: { x: x - MARK_OFFSET, y: rowY + MARK_DEPTH + BASELINE },
   };
 }
 
-function sideBox(
-  study: Study,
-  part: SeriesElement | ShuntElement,
-  centre: Point,
-): { label: Box; mark: Box; oneLine: boolean } {
-  const { width, oneLine } = sideLabel(part, study);
-  const height = (oneLine ? SIDE_LINES - 1 : SIDE_LINES) * LINE_PX;
-  return {
-    label: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y - height / 2, width, height },
-    mark: { x: centre.x + SIDE_TEXT_OFFSET, y: centre.y + 31, width: MARK_WIDTH, height: MARK_HEIGHT },
-    oneLine,
-  };
+/** Depth of the text of a source above its busbar. */
+export function sourceDepth(texts: TextPlans, part: Part): number {
+  return Math.max(texts.beside(part).height, LEAST_SOURCE) + SOURCE_LIFT + MARK_DEPTH + 4;
 }
 
-function placeFeed(study: Study, part: SeriesElement | ShuntElement, x: number, bar: BusPlace): PartPlace {
-  const shape = symbolShape(part);
-  const centre = { x, y: bar.y - SOURCE_HEIGHT };
+function placeFeed(packing: Packing, part: Part, x: number, bar: BusPlace): PartPlace {
+  const plan = packing.texts.beside(part);
+  const top = bar.y - SOURCE_LIFT - Math.max(plan.height, LEAST_SOURCE);
+  const y = top + LEAD - 6;
   return {
-    ...common(part, bar.id, centre),
+    id: part.id,
+    kind: part.kind,
+    bus: bar.id,
+    x,
+    y,
     hang: 'above',
     top: { x, y: bar.y },
-    ends: [
-      {
-        bus: bar.id,
-        path: [
-          { x, y: bar.y },
-          { x, y: centre.y + shape.reach },
-        ],
-      },
-    ],
-    ...sideBox(study, part, centre),
-    align: 'start',
+    ends: [straight(bar.id, x, bar.y, y + shapeOf(packing, part).reach)],
+    text: textOf(plan),
+    label: { x: x + SIDE_TEXT_OFFSET, y: top, width: plan.width, height: plan.height },
+    ...markLeft(x - MARK_OFFSET - SOURCE_HALF, top - 4),
+  };
+}
+
+/** Room for mark and letters left of a conductor or symbol. */
+function markLeft(right: number, top: number): Pick<PartPlace, 'mark' | 'letters'> {
+  return {
+    mark: { x: right - MARK_WIDTH, y: top, width: MARK_WIDTH, height: MARK_HEIGHT },
+    letters: { x: right - MARK_DISC, y: top + BASELINE + 1 },
   };
 }
 
 function placeLead(
-  study: Study,
-  part: SeriesElement,
+  packing: Packing,
+  part: Part,
   x: number,
   upper: BusPlace,
   lower: BusPlace,
   route: Route | undefined,
 ): PartPlace {
-  const reach = symbolShape(part).reach;
-  const centre = { x, y: upper.y + SYMBOL_DEPTH };
-  const foot = { x: route ? route.lane.arrival.x : x, y: lower.y };
-  const bends =
+  const plan = packing.texts.beside(part);
+  const { reach } = shapeOf(packing, part);
+  const y = upper.y + SYMBOL_DEPTH;
+  const foot = { x: route?.x ?? x, y: lower.y };
+  const bends: Point[] =
     route && foot.x !== x
       ? [
           { x: foot.x, y: route.y },
           { x, y: route.y },
         ]
       : [];
-  const ends: PartEnd[] = [
-    {
-      bus: upper.id,
-      path: [
-        { x, y: upper.y },
-        { x, y: centre.y - reach },
-      ],
-    },
-    { bus: lower.id, path: [foot, ...bends, { x, y: centre.y + reach }] },
-  ];
   return {
-    ...common(part, upper.id, centre),
+    id: part.id,
+    kind: part.kind,
+    bus: upper.id,
+    x,
+    y,
     hang: 'leads-on',
     top: { x, y: upper.y },
     foot: { ...foot, bus: lower.id },
-    ends,
-    ...sideBox(study, part, centre),
-    align: 'start',
+    ends: [
+      straight(upper.id, x, upper.y, y - reach),
+      { bus: lower.id, path: [foot, ...bends, { x, y: y + reach }] },
+    ],
+    text: textOf(plan),
+    label: { x: x + SIDE_TEXT_OFFSET, y: upper.y + SIDE_TEXT_DEPTH, width: plan.width, height: plan.height },
+    ...markLeft(x - MARK_OFFSET, upper.y + MARK_DEPTH),
   };
 }
 
-/** A tie lies on its side between the ends of two bars, its text centred below. */
-export function placeTie(study: Study, part: SeriesElement, left: BusPlace, right: BusPlace): PartPlace {
-  const reach = symbolShape(part).reach;
-  const centre = { x: (left.x2 + right.x1) / 2, y: left.y };
-  const width = leafLabelWidth(part, study);
-  return {
-    ...common(part, left.id, centre),
-    hang: 'across',
-    top: { x: left.x2, y: left.y },
-    foot: { x: right.x1, y: right.y, bus: right.id },
-    ends: [
-      {
-        bus: left.id,
-        path: [
-          { x: left.x2, y: left.y },
-          { x: centre.x - reach, y: left.y },
-        ],
-      },
-      {
-        bus: right.id,
-        path: [
-          { x: right.x1, y: right.y },
-          { x: centre.x + reach, y: right.y },
-        ],
-      },
+/** A tie lies on its side between the ends of two bars, mark, letters and text below it. */
+export function placeTie(packing: Packing, part: SeriesElement, left: BusPlace, right: BusPlace): PartPlace {
+  const plan = packing.texts.under(part);
+  const { reach } = shapeOf(packing, part);
+  const [x, y] = [(left.x2 + right.x1) / 2, left.y];
+  const along = (bar: BusPlace, from: number, to: number): PartEnd => ({
+    bus: bar.id,
+    path: [
+      { x: from, y },
+      { x: to, y },
     ],
-    label: { x: centre.x - width / 2, y: centre.y + 26, width, height: LEAF_LINES * LINE_PX },
-    align: 'middle',
-    oneLine: false,
-    mark: { x: centre.x - 50, y: centre.y - 26 - MARK_HEIGHT, width: MARK_WIDTH, height: MARK_HEIGHT },
+  });
+  return {
+    id: part.id,
+    kind: part.kind,
+    bus: left.id,
+    x,
+    y,
+    hang: 'across',
+    top: { x: left.x2, y },
+    foot: { x: right.x1, y, bus: right.id },
+    ends: [along(left, left.x2, x - reach), along(right, right.x1, x + reach)],
+    text: textOf(plan),
+    label: {
+      x: x - plan.width / 2,
+      y: y + TIE_TEXT_DEPTH + TIE_MARK_HEIGHT,
+      width: plan.width,
+      height: plan.height,
+    },
+    mark: { x: x - 18, y: y + TIE_TEXT_DEPTH, width: BUS_MARK_ROOM, height: TIE_MARK_HEIGHT },
+    letters: { x: x - 22, y: y + TIE_TEXT_DEPTH + BASELINE },
   };
 }

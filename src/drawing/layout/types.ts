@@ -19,11 +19,15 @@ export interface BusPlace {
   x1: number;
   x2: number;
   y: number;
-  /** Name, nominal voltage and live volts stand here, left-aligned, on one line. */
+  /** Depth below the bar down to which its parts hang. */
+  depth: number;
+  /** The name as printed, shortened where it is very long. */
+  name: string;
+  /** Two lines: the name, and below it nominal voltage and live volts. */
   label: Box;
-  /** Centre of the three-phasor dial. */
-  dial: Point;
-  /** Room for the verdict's mark and word. */
+  /** Centre of the three-phasor dial, left of the two lines; absent where dials are not shown. */
+  dial?: Point;
+  /** Room for the verdict's mark and word, right of the name; the letters of its notes follow. */
   mark: Box;
   /** 0 is the topmost. */
   storey: number;
@@ -58,13 +62,25 @@ export interface PartPlace {
   /** Where it touches its second busbar. */
   foot?: Point & { bus: string };
   ends: PartEnd[];
-  /** Name, nameplate and readings; `align` says where the lines start. */
+  text: PartText;
+  /** The text's box: name, nameplate and readings below each other. */
   label: Box;
-  align: 'middle' | 'start';
-  /** Room for the verdict's mark, its word and the letters of notes: stacked in two rows or in one. */
+  /** Room for the verdict's mark, its word below it. */
   mark: Box;
-  /** Name and nameplate share the first line. */
-  oneLine: boolean;
+  /** The letters of its notes end here, left of the part. */
+  letters: Point;
+}
+
+/** The lines of a part's text, wrapped to the width of its box. */
+export interface PartText {
+  align: 'middle' | 'start';
+  /** The name, shortened where two lines do not hold it. */
+  name: string[];
+  /** Lines kept for the nameplate. */
+  plateLines: number;
+  /** Cells kept for live readings, filled row by row in so many columns. */
+  readings: number;
+  columns: 1 | 2;
 }
 
 export interface Layout {

@@ -1,10 +1,19 @@
 import type { Verdict, VerdictWord } from '../../checks/index.ts';
 import type { CaseSolution } from '../../engine/index.ts';
-import { busesOf, nameOf, type Study, type StudyElement, withDefaults } from '../../study/index.ts';
+import {
+  busesOf,
+  drawnOf,
+  nameOf,
+  type Study,
+  type StudyElement,
+  type SymbolSet,
+  symbolSetOf,
+  withDefaults,
+} from '../../study/index.ts';
 import { nameplate, nominalVoltage } from '../layout/index.ts';
 import { type BusReading, busReading, type ImpedanceProbe } from './busReading.ts';
 import { lineWidth } from './lineWidth.ts';
-import { partReading } from './partReading.ts';
+import { partReading, type ReadingCell } from './partReading.ts';
 import type { ReadingMode } from './ReadingMode.ts';
 import { isDeenergised } from './solutionView.ts';
 import { worstVerdicts } from './worstVerdict.ts';
@@ -14,11 +23,17 @@ export interface PartFigure {
   element: StudyElement;
   name: string;
   plate: string;
-  /** Live readings, one figure or two to a line. */
-  lines: string[];
+  /** Live figures, each with its own place in the part's text. */
+  cells: ReadingCell[];
+  /** Said instead of figures: off, no step on. */
+  words: string;
+  /** Active power flows from its (first) busbar into the part, out of it, or not to speak of. */
+  flow: -1 | 0 | 1;
   /** Conductor width by busbar id, px. */
   widths: Record<string, number>;
   mark: VerdictWord | undefined;
+  /** The standard its symbol follows. */
+  symbols: SymbolSet;
   /** Out of service. */
   off: boolean;
   /** In service at a busbar without voltage. */
@@ -53,40 +68,40 @@ export function figuresOf(
   probe: ImpedanceProbe | null = null,
 ): Figures {
   const worst = worstVerdicts(verdicts);
-  const readings = study.elements.map((part) => partReading(part, solution, mode, handle));
+  const drawn = drawnOf(study);
+  const symbols = symbolSetOf(study);
+  const readings = study.elements.map((part) => partReading(part, solution, mode, handle, drawn));
   const largest = Math.max(0, ...readings.flatMap((reading) => Object.values(reading.amperes)));
   const parts = new Map<string, PartFigure>();
   study.elements.forEach((part, at) => {
-    const reading = readings[at] ?? { lines: [], amperes: {} };
+    const reading = readings[at] ?? { cells: [], words: '', amperes: {}, flow: 0 as const };
     const ends = busesOf(part);
+    const ampere = (bus: string) => (drawn.has('widths') ? (reading.amperes[bus] ?? null) : null);
     parts.set(part.id, {
       element: symbolData(part, study),
       name: nameOf(part),
-      plate: nameplate(part, study),
-      lines: reading.lines,
-      widths: Object.fromEntries(
-        busesOf(part).map((bus) => [bus, lineWidth(reading.amperes[bus] ?? null, largest)]),
-      ),
+      plate: drawn.has('nameplates') ? nameplate(part, study) : '',
+      cells: reading.cells,
+      words: reading.words,
+      flow: drawn.has('direction') ? reading.flow : 0,
+      widths: Object.fromEntries(ends.map((bus) => [bus, lineWidth(ampere(bus), largest)])),
       mark: worst.get(`element:${part.id}`),
+      symbols,
       off: part.on === false,
       dead: part.on !== false && solution !== null && ends.every((bus) => isDeenergised(solution, bus)),
     });
   });
   const buses = new Map<string, BusFigure>();
   for (const bus of study.buses) {
+    const reading = busReading(bus, solution, mode, handle, probe);
     buses.set(bus.id, {
       name: nameOf(bus),
       plate: nominalVoltage(bus.nominalV),
-      ...busReading(bus, solution, mode, handle, probe),
+      ...reading,
+      // A busbar without voltage says so whatever is shown.
+      ...(drawn.has('voltages') || reading.deenergised ? {} : { text: '', more: '' }),
       mark: worst.get(`bus:${bus.id}`),
     });
   }
   return { parts, buses };
-}
-
-/** The readings as they stand in the part's text: three short lines below a symbol, two beside it. */
-export function readingLines(figure: PartFigure, align: 'middle' | 'start'): string[] {
-  const [first, ...rest] = figure.lines;
-  if (align === 'middle' || first === undefined || rest.length < 2) return figure.lines;
-  return [first, rest.join(' · ')];
 }

@@ -15,15 +15,15 @@ export function liveQuantity(value: number, unit: string): string {
   return `${liveNumber(value)}\u00a0${unit}`;
 }
 
-/** kW, kvar or kVA, in the mega unit from ten thousand. */
-export function livePower(kilo: number, unit: 'W' | 'var' | 'VA'): string {
-  return Math.abs(kilo) >= 10_000 ? liveQuantity(kilo / 1000, `M${unit}`) : liveQuantity(kilo, `k${unit}`);
-}
-
 export function liveVolts(volts: number): string {
   if (!Number.isFinite(volts)) return '–';
   if (volts >= 1000) return `${formatNumber(volts / 1000, { decimals: volts >= 99_950 ? 1 : 2 })}\u00a0kV`;
   return `${formatNumber(volts, { decimals: volts >= 9.995 ? 1 : 2 })}\u00a0V`;
+}
+
+/** A share in per cent, without the sign. */
+export function liveShare(perUnit: number): string {
+  return liveNumber(perUnit * 100);
 }
 
 export function livePercent(perUnit: number): string {

@@ -103,18 +103,23 @@ export function voltageShare(solution: CaseSolution, bus: number, h: number): nu
   return most;
 }
 
-/** Fundamental P and Q into the part at a terminal, kW and kvar, Q > 0 lagging. */
-export function powerInto(solution: CaseSolution, terminal: number): { kW: number; kvar: number } {
+/** Active and apparent power into the part at a terminal at one order: Σ Re(V·I*) and Σ |V|·|I| of the phases. */
+export function powerAt(
+  solution: CaseSolution,
+  terminal: number,
+  h: number,
+): { watts: number; voltAmperes: number } {
+  const { voltage, current, maxOrder } = solution;
   const bus = busOf(solution, solution.terminals[terminal]?.bus ?? '') ?? 0;
-  const [v, i] = [bus * solution.maxOrder * 3, terminal * solution.maxOrder * 3];
-  let [p, q] = [0, 0];
+  const [v, i] = [(bus * maxOrder + h - 1) * 3, (terminal * maxOrder + h - 1) * 3];
+  let [watts, voltAmperes] = [0, 0];
   for (let k = 0; k < 3; k++) {
-    const [vr, vi] = [solution.voltage.re[v + k] ?? 0, solution.voltage.im[v + k] ?? 0];
-    const [ir, ii] = [solution.current.re[i + k] ?? 0, solution.current.im[i + k] ?? 0];
-    p += vr * ir + vi * ii;
-    q += vi * ir - vr * ii;
+    const [vr, vi] = [voltage.re[v + k] ?? 0, voltage.im[v + k] ?? 0];
+    const [ir, ii] = [current.re[i + k] ?? 0, current.im[i + k] ?? 0];
+    watts += vr * ir + vi * ii;
+    voltAmperes += Math.hypot(vr, vi) * Math.hypot(ir, ii);
   }
-  return { kW: p / 1000, kvar: q / 1000 };
+  return { watts, voltAmperes };
 }
 
 /** The three phase-to-neutral voltages at order h as [re, im] volts. */

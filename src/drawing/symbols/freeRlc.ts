@@ -1,4 +1,5 @@
-import { box, type Primitive, path, plates, type SymbolShape, winding } from './primitives.ts';
+import type { Elementary } from './elementary.ts';
+import { earth, type Primitive, path, type SymbolShape } from './primitives.ts';
 
 export interface FreeRlcData {
   resistanceOhm?: number | undefined;
@@ -21,18 +22,18 @@ function members(data: FreeRlcData): Member[] {
   return present.length > 0 ? present : ['R', 'L', 'C'];
 }
 
-function drawMember(member: Member, x: number, y: number): Primitive {
-  if (member === 'R') return box(x - 4, y, 8, LENGTH.R);
-  if (member === 'L') return winding(x, y, 2, LENGTH.L / 4);
-  return plates(x, y, 8, LENGTH.C);
+function drawMember(elements: Elementary, member: Member, x: number, y: number): Primitive {
+  if (member === 'R') return elements.resistor(x, y, LENGTH.R);
+  if (member === 'L') return elements.winding(x, y, 2, LENGTH.L / 4);
+  return elements.capacitor(x, y, 8, LENGTH.C);
 }
 
-function inSeries(list: Member[], top: number, bottom: number): Primitive[] {
+function inSeries(elements: Elementary, list: Member[], top: number, bottom: number): Primitive[] {
   const length = list.reduce((sum, member) => sum + LENGTH[member] + LEAD, -LEAD);
   let y = (top + bottom - length) / 2;
   const drawn: Primitive[] = [path(`M0,${top} V${y}`)];
   list.forEach((member, at) => {
-    drawn.push(drawMember(member, 0, y));
+    drawn.push(drawMember(elements, member, 0, y));
     y += LENGTH[member];
     if (at < list.length - 1) drawn.push(path(`M0,${y} v${LEAD}`));
     y += LEAD;
@@ -41,7 +42,7 @@ function inSeries(list: Member[], top: number, bottom: number): Primitive[] {
   return drawn;
 }
 
-function inParallel(list: Member[], top: number, bottom: number): Primitive[] {
+function inParallel(elements: Elementary, list: Member[], top: number, bottom: number): Primitive[] {
   const [upper, lower] = [top + 5, bottom - 5];
   const pitch = 18;
   const left = (-(list.length - 1) * pitch) / 2;
@@ -53,23 +54,24 @@ function inParallel(list: Member[], top: number, bottom: number): Primitive[] {
   list.forEach((member, at) => {
     const x = left + at * pitch;
     const y = (upper + lower - LENGTH[member]) / 2;
-    drawn.push(path(`M${x},${upper} V${y} M${x},${y + LENGTH[member]} V${lower}`), drawMember(member, x, y));
+    drawn.push(path(`M${x},${upper} V${y} M${x},${y + LENGTH[member]} V${lower}`));
+    drawn.push(drawMember(elements, member, x, y));
   });
   return drawn;
 }
 
-function free(data: FreeRlcData, top: number, bottom: number): Primitive[] {
-  const list = members(data);
-  return data.arrangement === 'parallel' ? inParallel(list, top, bottom) : inSeries(list, top, bottom);
+function free(elements: Elementary, data: FreeRlcData, top: number, bottom: number): Primitive[] {
+  const draw = data.arrangement === 'parallel' ? inParallel : inSeries;
+  return draw(elements, members(data), top, bottom);
 }
 
 /** R-L-C between two busbars. */
-export function freeRlcBranch(data: FreeRlcData): SymbolShape {
-  return { reach: 24, width: 44, primitives: free(data, -24, 24) };
+export function freeRlcBranch(elements: Elementary, data: FreeRlcData): SymbolShape {
+  return { reach: 24, width: 44, primitives: free(elements, data, -24, 24) };
 }
 
 /** R-L-C to neutral: earthed at the foot, or ending in a star point that is not connected. */
-export function freeRlcShunt(data: FreeRlcData, earth: (x: number, y: number) => Primitive): SymbolShape {
+export function freeRlcShunt(elements: Elementary, data: FreeRlcData): SymbolShape {
   const end: Primitive = data.neutral === false ? path('M0,20 l-6,6 M0,20 l6,6') : earth(0, 21);
-  return { reach: 24, width: 44, primitives: [...free(data, -24, 21), end] };
+  return { reach: 24, width: 44, primitives: [...free(elements, data, -24, 21), end] };
 }

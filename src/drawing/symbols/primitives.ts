@@ -32,3 +32,7 @@ export function box(x: number, y: number, width: number, height: number): Primit
 export function earth(x: number, y: number): Primitive {
   return path(`M${x - 8},${y} h16 M${x - 5},${y + 3.5} h10 M${x - 2},${y + 7} h4`);
 }
+
+export function shape(reach: number, width: number, ...primitives: Primitive[]): SymbolShape {
+  return { reach, width, primitives };
+}

@@ -1,3 +1,4 @@
+import { drawnItems, symbolSets } from '../drawn.ts';
 import { builtInSpectrum } from '../spectra/builtIn.ts';
 import type { Finding, HarmonicRow } from '../types.ts';
 import { duplicateIds } from './duplicateIds.ts';
@@ -198,6 +199,13 @@ function viewFindings(view: unknown): Finding[] {
       'a list of pins',
     ],
     ['orderAlong', view.orderAlong === undefined || isOrder(view.orderAlong), 'lists of part ids by busbar'],
+    // A set or an item this version does not know is drawn as by default, never refused.
+    ['symbols', view.symbols === undefined || typeof view.symbols === 'string', symbolSets.join(' or ')],
+    [
+      'hidden',
+      view.hidden === undefined || isTexts(view.hidden),
+      `a list of what the drawing leaves out: ${drawnItems.join(', ')}`,
+    ],
     ['focusBus', view.focusBus === undefined || typeof view.focusBus === 'string', 'the id of a busbar'],
     ['caseId', view.caseId === undefined || typeof view.caseId === 'string', 'the id of a case'],
   ];
@@ -222,9 +230,10 @@ function isPin(pin: unknown): boolean {
   return pin.quantity === 'voltage' || (pin.quantity === 'current' && typeof pin.element === 'string');
 }
 
+function isTexts(list: unknown): boolean {
+  return Array.isArray(list) && list.every((item) => typeof item === 'string');
+}
+
 function isOrder(order: unknown): boolean {
-  return (
-    isRecord(order) &&
-    Object.values(order).every((ids) => Array.isArray(ids) && ids.every((id) => typeof id === 'string'))
-  );
+  return isRecord(order) && Object.values(order).every(isTexts);
 }
