@@ -9,6 +9,7 @@ import { busThd } from './busThd.ts';
 import { busVoltage } from './busVoltage.ts';
 import type { CheckContext, PresenceThresholds } from './CheckContext.ts';
 import { cableLoad } from './cableLoad.ts';
+import { capacitorTemperature } from './capacitorTemperature.ts';
 import { caseContext, type JudgeOptions } from './caseContext.ts';
 import { controllerSetting } from './controllerSetting.ts';
 import { deliveredKvar } from './deliveredKvar.ts';
@@ -20,6 +21,8 @@ import { filterDuty } from './filterDuty.ts';
 import { generatorLeading } from './generatorLeading.ts';
 import { inrush } from './inrush.ts';
 import { lightLoadRise } from './lightLoadRise.ts';
+import { lostUnit } from './lostUnit.ts';
+import { magnification } from './magnification.ts';
 import { mixedBank } from './mixedBank.ts';
 import { motorHvf } from './motorHvf.ts';
 import { pccCurrent } from './pccCurrent.ts';
@@ -67,6 +70,8 @@ const direct: readonly Check[] = [
   generatorLeading,
   faultLevel,
   rippleSignal,
+  lostUnit,
+  capacitorTemperature,
 ];
 
 /** Checks that decide over tolerances: all follow from the solution alone. */
@@ -86,7 +91,14 @@ const deciding: readonly Check[] = [
 ];
 
 /** Screening rules, most of which scan the network again and again: the slower half. */
-const scanning: readonly Check[] = [amplification, resonanceDistance, mixedBank, energising, pfCeiling];
+const scanning: readonly Check[] = [
+  amplification,
+  resonanceDistance,
+  mixedBank,
+  energising,
+  pfCeiling,
+  magnification,
+];
 
 /**
  * All verdicts of one solved case, sorted: fails, watch, unknown, pass, each by margin, ties by key.

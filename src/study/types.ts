@@ -203,6 +203,10 @@ export interface Bank extends ShuntPart {
   regulator?: unknown;
   ageingPercent?: number;
   switchMakingA?: number;
+  unitsPerPhase?: number;
+  temperatureClass?: 'A' | 'B' | 'C' | 'D';
+  /** °C, with all steps on, on the hottest day. */
+  cubicleAirC?: number;
 }
 
 export interface Filter extends ShuntPart {

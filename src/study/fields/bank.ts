@@ -1,4 +1,4 @@
-import { boolean, group, list, number, opaque, pair } from './build.ts';
+import { boolean, choice, group, integer, list, number, opaque, pair } from './build.ts';
 import type { Field } from './Field.ts';
 import { lossWPerKvar, shuntFields, skin, starDelta } from './partFields.ts';
 
@@ -87,6 +87,30 @@ export const bankFields: readonly Field[] = [
   number('dischargeOhm', 'discharge resistor', 'Ω', 'R ≤ t/(C·ln(√2·U_N/U_r)).', { above: 0, rare: true }),
   number('switchMakingA', 'making current of the switch, peak', 'A', 'Inrush peak against the switch.', {
     above: 0,
+    rare: true,
+  }),
+  integer(
+    'unitsPerPhase',
+    'capacitor units in parallel',
+    '',
+    'Per phase (star) or branch (delta); one out leaves (n − 1)/n there. Left out: one a step.',
+    { min: 1, rare: true },
+  ),
+  choice(
+    'temperatureClass',
+    'temperature class of the capacitors',
+    'Highest air by IEC 60831-1: A 40, B 45, C 50, D 55 °C.',
+    [
+      { value: 'A', label: 'A, 40 °C' },
+      { value: 'B', label: 'B, 45 °C' },
+      { value: 'C', label: 'C, 50 °C' },
+      { value: 'D', label: 'D, 55 °C' },
+    ],
+    { rare: true },
+  ),
+  number('cubicleAirC', 'hottest air in the cubicle', '°C', 'With all steps on, on the hottest day.', {
+    min: -40,
+    max: 120,
     rare: true,
   }),
   group('controller', 'controller', 'Settings of the power-factor regulator.', controllerFields),

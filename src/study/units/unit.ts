@@ -3,6 +3,7 @@ export type Unit =
   | ''
   | '%'
   | '°'
+  | '°C'
   | 'V'
   | 'A'
   | 'kA'
