@@ -112,7 +112,7 @@ test('the fold of further data stays as it was left, for that kind of part', asy
   await expect(ratio).toBeVisible();
   await page.keyboard.press('Escape');
   await slipOf(page, /^transformer, T1/);
-  await expect(slip.getByLabel('no-load loss P_0')).toBeHidden();
+  await expect(slip.getByLabel('no-load loss P_0', { exact: true })).toBeHidden();
 });
 
 test('steps are written at once as 6x25 and switched one by one', async ({ page }) => {
@@ -171,12 +171,56 @@ test('a change for one case leaves the base study alone and can be taken back', 
   );
 });
 
-test('the origin of a value goes round from nameplate to assumed', async ({ page }) => {
+test('the origin of a value is set by mouse or by its first letter, with a date and a note', async ({
+  page,
+}) => {
   const slip = await slipOf(page, /^transformer, T1/);
-  await slip.getByRole('button', { name: 'Origin of rated power: not stated' }).click();
-  await expect(slip.getByRole('button', { name: 'Origin of rated power: nameplate' })).toHaveText('N');
-  await slip.getByRole('button', { name: 'Origin of rated power: nameplate' }).click();
-  await expect(slip.getByRole('button', { name: 'Origin of rated power: measured' })).toHaveText('M');
+  const power = slip.getByLabel('rated power', { exact: true });
+  const mark = slip.getByRole('combobox', { name: 'Origin of rated power' });
+  await expect(mark).toHaveValue('');
+  await mark.focus();
+  await mark.selectOption('nameplate');
+  await expect(slip.getByLabel('Date of rated power')).toBeVisible();
+  await power.focus();
+  await page.keyboard.press('Tab');
+  await expect(mark).toBeFocused();
+  await page.keyboard.press('m');
+  await expect(mark).toHaveValue('measured');
+  await page.keyboard.press('Tab');
+  await expect(slip.getByLabel('Date of rated power')).toBeFocused();
+  await page.keyboard.type('31.01.2026');
+  await page.keyboard.press('Enter');
+  await expect(slip.getByRole('alert')).toContainText('"31.01.2026" is no date');
+  await slip.getByLabel('Date of rated power').fill('2026-01-31');
+  await page.keyboard.press('Enter');
+  await expect(slip.getByLabel('Note on rated power')).toBeFocused();
+  await page.keyboard.type('photo of the plate');
+  await page.keyboard.press('Enter');
+  await expect(slip.getByLabel(/^impedance voltage/)).toBeFocused();
+  await settled(page);
+  expect((await savedStudy(page)).origins?.['elements.t1.ratedKVA']).toEqual({
+    origin: 'measured',
+    date: '2026-01-31',
+    note: 'photo of the plate',
+  });
+});
+
+test('typical values are counted on the slip and confirmed as nameplate data in one step', async ({
+  page,
+}) => {
+  const slip = await slipOf(page, /^transformer, T1/);
+  await slip.getByText('typical values…').click();
+  await slip.getByRole('button', { name: 'Use these, marked typical' }).click();
+  await expect(slip.getByText(/4 typical/)).toBeVisible();
+  await slip.getByRole('button', { name: 'Confirm as nameplate' }).click();
+  await expect(slip.getByRole('button', { name: 'Confirm as nameplate' })).toBeHidden();
+  await settled(page);
+  expect((await savedStudy(page)).origins?.['elements.t1.loadLossKW']).toEqual({ origin: 'nameplate' });
+  await page.keyboard.press('Escape');
+  expect(await undoWords(page)).toBe('confirm typical values of transformer T1 as nameplate data');
+  await page.keyboard.press('Control+z');
+  await settled(page);
+  expect((await savedStudy(page)).origins?.['elements.t1.loadLossKW']?.origin).toBe('typical');
 });
 
 test('a current pinned from the slip stands among the notes until it is unpinned', async ({ page }) => {

@@ -56,3 +56,24 @@ test('a cable offers the cross-section nearest to what it has', async ({ page })
     reactanceOhmPerKm: 0.08,
   });
 });
+
+test('a drive takes the spectrum of its build, a bank the rated voltage it needs behind its reactor', async ({
+  page,
+}) => {
+  const fans = await slipOf(page, /Fans/);
+  await fans.getByText('typical values…').click();
+  await fans.getByLabel('build').selectOption('choke-5');
+  await fans.getByRole('button', { name: 'Use these, marked typical' }).click();
+  await page.keyboard.press('Escape');
+  const bank = await slipOf(page, /^bank, Bank C1/);
+  await bank.getByText('typical values…').click();
+  await bank.getByLabel('detuned by').selectOption('7');
+  await expect(bank.getByText(/rated at 480.V give/)).toBeVisible();
+  await bank.getByRole('button', { name: 'Use these, marked typical' }).click();
+  await settled(page);
+  const after = await savedStudy(page);
+  expect(after.elements.find(({ id }) => id === 'fans')).toMatchObject({ spectrum: 'drive-reactance-5' });
+  expect(after.origins?.['elements.fans.spectrum']?.note).toContain('5 % total input reactance');
+  // U_C = U/(1 − p) = 430 V at 400 V and 7 %, 473 V with the supply at +10 %: common practice.
+  expect(after.elements.find(({ id }) => id === 'c1')).toMatchObject({ detuningPercent: 7, ratedV: 480 });
+});

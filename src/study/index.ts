@@ -40,7 +40,15 @@ export {
   moveObstacle,
   moveParts,
 } from './edits/moveParts.ts';
-export { originOf, originPath, originsOf, setOrigin } from './edits/origins.ts';
+export {
+  confirmTypical,
+  type OriginTally,
+  originOf,
+  originPath,
+  originsOf,
+  originTally,
+  setOrigin,
+} from './edits/origins.ts';
 export {
   type Chosen,
   type Removal,
@@ -51,6 +59,7 @@ export {
   removeParts,
 } from './edits/removeParts.ts';
 export { replaceObstacle, replacePart } from './edits/replacePart.ts';
+export { setField } from './edits/setField.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {
   resetInCase,
@@ -76,6 +85,9 @@ export type {
   TextField,
 } from './fields/Field.ts';
 export { elementKinds, type FieldOwner, fieldOf, fieldsOf, seriesKinds } from './fields/fieldsOf.ts';
+export { hintOf } from './fields/hintOf.ts';
+export { isInside } from './fields/isInside.ts';
+export { takesOrigin } from './fields/takesOrigin.ts';
 export { valueWords } from './fields/valueWords.ts';
 export { siteFindings } from './findings/siteFindings.ts';
 export { fingerprint } from './fingerprint.ts';
@@ -110,6 +122,7 @@ export { isHarmonicRows, spectrumById, spectrumOf } from './spectra/spectrumOf.t
 export type * from './types.ts';
 export { setTypical } from './typical/setTypical.ts';
 export type { Typical } from './typical/Typical.ts';
+export { type BankValues, typicalBank, usualDetunings } from './typical/typicalBank.ts';
 export {
   type CableLaying,
   type CableValues,
@@ -118,13 +131,21 @@ export {
   typicalCable,
 } from './typical/typicalCable.ts';
 export {
+  type ConverterBuild,
+  type ConverterValues,
+  converterTypes,
+  typicalConverter,
+} from './typical/typicalConverter.ts';
+export { type FilterValues, filteredOrders, typicalFilter } from './typical/typicalFilter.ts';
+export {
   type GeneratorBuild,
   type GeneratorValues,
   generatorReactances,
   typicalGenerator,
 } from './typical/typicalGenerator.ts';
 export { type MotorChoice, type MotorValues, typicalMotor } from './typical/typicalMotor.ts';
-export { stepSizes, typicalSteps } from './typical/typicalSteps.ts';
+export { stepSizes, typicalSteps, usualSplits } from './typical/typicalSteps.ts';
+export { type NetworkBuild, networkBuilds, typicalSupply } from './typical/typicalSupply.ts';
 export {
   type TransformerChoice,
   type TransformerValues,
@@ -139,6 +160,11 @@ export {
   thinSpace,
 } from './units/formatQuantity.ts';
 export { type ParsedQuantity, parseQuantity } from './units/parseQuantity.ts';
+export { parseRows } from './units/parseRows.ts';
+export { parseSteps, stepsText } from './units/parseSteps.ts';
+export type { DecimalMark } from './units/readNumber.ts';
+export { type ReadQuantity, readQuantity } from './units/readQuantity.ts';
+export { understoodAs } from './units/understoodAs.ts';
 export type { Unit } from './units/unit.ts';
 export { allowedOf } from './validate/allowed.ts';
 export { checkStudy, type ReadOutcome } from './validate/checkStudy.ts';

@@ -1,4 +1,5 @@
 import type { ElementKind, ElementOf } from './types.ts';
+import { typicalCapacitorV } from './typical/typicalCapacitor.ts';
 
 /** Transformer loss at rated load in kW by rated kVA: Regulation (EU) 548/2014, Annex I, tier 2, liquid-filled. */
 const loadLossKW: readonly [number, number][] = [
@@ -59,26 +60,11 @@ function cable(place: PartPlace): Values<'cable'> {
     : { lengthM: 500, resistanceOhmPerKm: 0.264, reactanceOhmPerKm: 0.11, capacitanceNFPerKm: 300 };
 }
 
-/** Usual rated voltages of capacitors by nominal system voltage: common practice, about a tenth above it. */
-const capacitorVolts: ReadonlyMap<number, number> = new Map([
-  [208, 240],
-  [230, 260],
-  [400, 440],
-  [415, 460],
-  [480, 525],
-  [600, 660],
-  [690, 760],
-]);
-
-function capacitorRatedV(nominalV: number): number {
-  return capacitorVolts.get(nominalV) ?? Number((1.1 * nominalV).toPrecision(2));
-}
-
 function bank(place: PartPlace): Values<'bank'> {
   const steps = isLow(place)
     ? Array.from({ length: 6 }, () => ({ kvar: 25 }))
     : [{ kvar: 600 }, { kvar: 600 }];
-  return { steps, ratedV: capacitorRatedV(place.nominalV) };
+  return { steps, ratedV: typicalCapacitorV(place.nominalV) };
 }
 
 const makers: { [K in ElementKind]: (place: PartPlace) => Values<K> } = {

@@ -8,6 +8,7 @@ import {
   addSpectrum,
   checkStudy,
   clipItems,
+  confirmTypical,
   duplicateCase,
   duplicateParts,
   type Edit,
@@ -18,6 +19,7 @@ import {
   moveParts,
   newStudy,
   originOf,
+  originTally,
   pasteClip,
   removeBus,
   removeCase,
@@ -31,6 +33,7 @@ import {
   resetInCase,
   type Study,
   sameData,
+  setField,
   setOrigin,
   studyInCase,
   updateBus,
@@ -407,5 +410,66 @@ describe('Any row of edits', () => {
       ),
       { seed: 2026, numRuns: 120 },
     );
+  });
+});
+
+describe('Where values come from', () => {
+  const placed = deepFrozen(
+    addPart(detuned, { kind: 'transformer', bus: 'in', to: 'hall', values: { ratedKVA: 630 } }).apply(
+      detuned,
+    ),
+  );
+  const ids = ['transformer1'];
+  const part = (study: Study) => elementById(study, 'transformer1')!;
+
+  it('is counted for a part: typical until somebody confirms it', () => {
+    expect(originTally(placed, part(placed))).toEqual({
+      measured: 0,
+      nameplate: 0,
+      typical: 3,
+      assumed: 0,
+      // The rating was given, the volts are the busbars'.
+      notStated: 3,
+    });
+  });
+
+  it('typical values are confirmed as nameplate data in one step that can be undone and done again', () => {
+    const noted = setOrigin(placed, part(placed), 'ratedKVA', {
+      origin: 'measured',
+      date: '2026-01',
+      note: 'plate photo',
+    }).apply(placed);
+    const edit = confirmTypical(noted, ids);
+    expect(edit.words).toBe('confirm typical values of transformer T1 as nameplate data');
+    const after = edit.apply(noted);
+    expect(originTally(after, part(after))).toMatchObject({ typical: 0, nameplate: 3, measured: 1 });
+    expect(originOf(after, part(after), 'ratedKVA')).toMatchObject({ note: 'plate photo' });
+    expect(after.elements).toBe(noted.elements);
+    expect(originTally(noted, part(noted)).typical).toBe(3);
+    expect(edit.apply(noted)).toEqual(after);
+    expect(confirmTypical(after, ids).apply(after)).toBe(after);
+  });
+
+  it('a built-in spectrum brings its source with it, and a part’s own rows lose it', () => {
+    const chosen = setField(detuned, 'drv', 'spectrum', 'drive-reactance-5').apply(detuned);
+    const drive = elementById(chosen, 'drv')!;
+    expect(originOf(chosen, drive, 'spectrum')).toMatchObject({
+      origin: 'typical',
+      note: expect.stringContaining('from memory'),
+    });
+    const own = setField(chosen, 'drv', 'spectrum', [{ h: 5, percent: 30 }]).apply(chosen);
+    expect(originOf(own, drive, 'spectrum')).toBeUndefined();
+  });
+
+  it('a busbar given in a field is a move; both ends at one busbar are refused by the rules', () => {
+    const moved = setField(detuned, 'bank', 'bus', 'in');
+    expect(moved.label).toBe('part.move');
+    expect(elementById(moved.apply(detuned), 'bank')).toMatchObject({ bus: 'in' });
+    const looped = setField(placed, 'transformer1', 'to', 'in').apply(placed);
+    expect(
+      errorsOf(looped)
+        .map(({ message }) => message)
+        .join(),
+    ).toContain('both ends');
   });
 });

@@ -2,19 +2,28 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Study } from '../../src/study/index.ts';
 import {
+  builtInSpectrum,
   cableSizes,
   checkStudy,
+  converterTypes,
+  filteredOrders,
   generatorReactances,
+  networkBuilds,
   originOf,
   setTypical,
   stepSizes,
   type Typical,
+  typicalBank,
   typicalCable,
+  typicalConverter,
+  typicalFilter,
   typicalGenerator,
   typicalMotor,
   typicalSteps,
+  typicalSupply,
   typicalTransformer,
   typicalValues,
+  usualSplits,
 } from '../../src/study/index.ts';
 
 function valuesOf<Values extends object>(typical: Typical<Values>): Values {
@@ -179,6 +188,98 @@ describe('Typical generators and bank steps', () => {
     expect(valuesOf(odd).steps.reduce((sum, step) => sum + step.kvar, 0)).toBeCloseTo(137, 9);
     expect(odd.ok && odd.source).toContain('no usual size fits');
     expect(errorOf(typicalSteps(5000))).toContain('allowed is 5 to 960 kvar');
+  });
+});
+
+describe('Typical capacitors, filters, supplies and converters', () => {
+  it.each([
+    // U_C = U/(1 − p), 7 % and 400 V: 430 V; with the supply at +10 % 473 V, the next usual rating 480 V (common practice).
+    [400, 0, 440],
+    [400, 5.67, 480],
+    [400, 7, 480],
+    [400, 14, 525],
+    [480, 0, 525],
+    [690, 7, 830],
+    [230, 0, 260],
+    [208, 0, 240],
+    [11_000, 0, 12_000],
+  ])('at %d V behind p = %d %% the capacitors are rated %d V', (nominalV, p, ratedV) => {
+    const typical = typicalBank([{ kvar: 50 }], nominalV, p);
+    expect(valuesOf(typical).ratedV).toBe(ratedV);
+    expect(valuesOf(typical).detuningPercent).toBe(p);
+  });
+
+  it('say what the kvar at the rated voltage give at the busbar: Q·(U/U_N)²/(1 − p)', () => {
+    const typical = typicalBank(
+      Array.from({ length: 6 }, () => ({ kvar: 50 })),
+      400,
+      7,
+    );
+    // 300·(400/480)²/0.93 = 224.0
+    expect(typical.ok && typical.source).toMatch(/300.kvar rated at 480.V give 224.kvar at 400.V/);
+  });
+
+  it('split a bank into usual steps only where that is asked for', () => {
+    const steps = [{ kvar: 300 }];
+    expect(valuesOf(typicalBank(steps, 400, 7))).not.toHaveProperty('steps');
+    expect(valuesOf(typicalBank(steps, 400, 7, 6)).steps).toEqual(
+      Array.from({ length: 6 }, () => ({ kvar: 50 })),
+    );
+    expect(valuesOf(typicalBank(steps, 400, 7, 7))).not.toHaveProperty('steps');
+    expect(usualSplits(300).every(({ count, kvar }) => count * kvar === 300)).toBe(true);
+  });
+
+  it('tune a filter below its order, and rate its capacitors for U·n²/(n² − 1)', () => {
+    // 4.7 for the 5th (IEEE 1531, from memory); 4.7²/(4.7² − 1) = 1.0474, 1.1·400·1.0474 = 460.9 V, 460 V within 1 %.
+    expect(valuesOf(typicalFilter(5, 'single-tuned', 400))).toEqual({
+      tunedOrder: 4.7,
+      qFactor: 40,
+      ratedV: 460,
+    });
+    for (const order of filteredOrders)
+      expect(valuesOf(typicalFilter(order, 'single-tuned', 400)).tunedOrder / order).toBeCloseTo(0.94, 2);
+    expect(valuesOf(typicalFilter(5, 'c-type', 400)).ratedV).toBe(440);
+  });
+
+  it('never guess a fault level', () => {
+    for (const build of ['substation', 'medium', 'transformer', 'feeder'] as const) {
+      expect(Object.keys(valuesOf(typicalSupply(build)))).toEqual(['xOverR']);
+      const { low, xOverR, high } = networkBuilds[build];
+      expect(low < xOverR && xOverR < high).toBe(true);
+    }
+  });
+
+  it('take a converter’s spectrum from the built-in ones, with its source and what is known of it', () => {
+    for (const build of Object.keys(converterTypes) as (keyof typeof converterTypes)[]) {
+      const typical = typicalConverter(build);
+      if (build === 'active') {
+        expect(errorOf(typical)).toContain('measured spectrum');
+        continue;
+      }
+      const { spectrum } = valuesOf(typical);
+      expect(builtInSpectrum(spectrum)).toBeDefined();
+      expect(typical.ok && typical.origins.spectrum).toEqual({
+        origin: 'typical',
+        note: builtInSpectrum(spectrum)?.origin,
+      });
+    }
+  });
+
+  it('never state a typical number without its source', () => {
+    const all: Typical<object>[] = [
+      typicalTransformer(1000),
+      typicalCable(95, 'copper', 70),
+      typicalMotor(55),
+      typicalGenerator('salient-12'),
+      typicalSupply('medium'),
+      typicalConverter('choke-3'),
+      typicalBank([{ kvar: 300 }], 400, 7, 6),
+      typicalFilter(7, 'high-pass', 690),
+    ];
+    for (const typical of all) {
+      const keys = Object.keys(valuesOf(typical)).filter((key) => key !== 'wires');
+      expect(typical.ok && Object.keys(typical.origins).toSorted()).toEqual(keys.toSorted());
+    }
   });
 });
 

@@ -1,6 +1,16 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { editText, formatNumber, formatQuantity, parseQuantity, type Unit } from '../../src/study/index.ts';
+import {
+  editText,
+  fieldOf,
+  formatNumber,
+  formatQuantity,
+  hintOf,
+  parseQuantity,
+  readQuantity,
+  type Unit,
+  understoodAs,
+} from '../../src/study/index.ts';
 
 const read: [string, Unit, number][] = [
   ['0,4 kV', 'V', 400],
@@ -80,11 +90,109 @@ describe('A quantity is read as a person types it', () => {
     expect(parsed.ok && parsed.value).toBeCloseTo((75 * 550 * 0.3048 * 4.4482216152605) / 1000, 11);
   });
 
-  it('and the reading is said where anything was converted or worked out', () => {
-    expect(parseQuantity('0,4 kV', 'V')).toMatchObject({ said: '0,4 kV = 400\u2009V' });
-    expect(parseQuantity('1.6M', 'kVA')).toMatchObject({ said: '1.6M = 1\u2009600\u2009kVA' });
-    expect(parseQuantity('400', 'V')).toMatchObject({ said: '400\u2009V' });
-    expect(parseQuantity('1,250', 'V')).toMatchObject({ said: '1.25\u2009V' });
+  const shown: [string, Unit, string | null][] = [
+    ['0,4 kV', 'V', '= 400\u2009V'],
+    ['1.6M', 'kVA', '= 1\u2009600\u2009kVA = 1.6\u2009MVA'],
+    ['20000', 'V', '= 20\u2009kV'],
+    ['1,250', 'V', '= 1.25\u2009V'],
+    ['1 250', 'kVA', '= 1\u2009250\u2009kVA = 1.25\u2009MVA'],
+    ['3*55', 'kW', '= 165\u2009kW'],
+    ['400/1.73', 'V', '= 231.214\u2009V'],
+    ['2*(75+15)', 'kW', '= 180\u2009kW'],
+    ['0.0125', 'Ω/km', '= 12.5\u2009mΩ/km'],
+    ['400', 'V', null],
+    ['0.95', '', null],
+    ['12 bananas', 'V', null],
+    ['', 'V', null],
+  ];
+  it.each(shown)('%j in a field of %s is shown while it is typed as %j', (text, unit, words) => {
+    expect(understoodAs(text, unit)).toBe(words);
+  });
+});
+
+describe('Where the decimal mark is known', () => {
+  const marked: [string, '.' | ',', number | null][] = [
+    ['1,250', ',', 1.25],
+    ['1,250', '.', 1250],
+    ['1.250', ',', 1250],
+    ['1.250', '.', 1.25],
+    ['0,95', '.', null],
+    ['0.95', ',', null],
+    ['1.250,5', ',', 1250.5],
+    ['1.250,5', '.', null],
+    ['1\u202f250,5', ',', 1250.5],
+    ["1'250.5", '.', 1250.5],
+    ['1,25,000', '.', null],
+    [',5', ',', 0.5],
+    [',', ',', null],
+  ];
+  it.each(marked)('%j with %j is %j', (text, decimal, value) => {
+    const parsed = parseQuantity(text, 'V', decimal);
+    expect(parsed.ok ? parsed.value : null).toBe(value);
+  });
+
+  it('a number written with that mark and any thousands reads back, and never as another number', () => {
+    const groups = fc.constantFrom('', ' ', '\u00a0', '\u2009', '\u202f', "'", '\u2019', 'other');
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 0, max: 99_999_999 }),
+        fc.integer({ min: 0, max: 999 }),
+        fc.constantFrom<'.' | ','>('.', ','),
+        groups,
+        (whole, thousandths, decimal, group) => {
+          const parting = group === 'other' ? (decimal === ',' ? '.' : ',') : group;
+          const digits = String(whole).replace(/\B(?=(\d{3})+$)/g, parting);
+          const text = `${digits}${decimal}${String(thousandths).padStart(3, '0')}`;
+          const parsed = parseQuantity(text, 'kW', decimal);
+          expect(parsed.ok && parsed.value, text).toBe(
+            Number(`${whole}.${String(thousandths).padStart(3, '0')}`),
+          );
+        },
+      ),
+      { seed: 31, numRuns: 1000 },
+    );
+  });
+});
+
+describe('A number field says at its place', () => {
+  const field = (owner: Parameters<typeof fieldOf>[0], key: string) => {
+    const found = fieldOf(owner, key);
+    if (found?.type !== 'number' && found?.type !== 'integer') throw new Error(`${key} is no number`);
+    return found;
+  };
+  const hints: [Parameters<typeof fieldOf>[0], string, string][] = [
+    ['transformer', 'ukPercent', 'up to 100 %, typical 4…8'],
+    ['transformer', 'tapPercent', '−50…50 %, typical ±2.5, ±5'],
+    ['transformer', 'loadLossKW', ''],
+    ['supply', 'shortCircuitMVA', 'typical 100…500 MVA'],
+    ['load', 'powerFactor', 'up to 1, typical 0.7…0.98'],
+    ['bank', 'detuningPercent', '0…100 %, typical 0, 5.67, 7, 14'],
+    ['filter', 'tunedOrder', 'above 1, typical 4.7 for the 5th'],
+    ['converter', 'kW', ''],
+  ];
+  it.each(hints)('%s %s: %j', (owner, key, hint) => {
+    expect(hintOf(field(owner, key))).toBe(hint);
+  });
+
+  it('what is typical of this very part where a table knows it', () => {
+    expect(hintOf(field('transformer', 'loadLossKW'), '7.6')).toBe('typical 7.6 kW');
+  });
+
+  const refused: [Parameters<typeof fieldOf>[0], string, string, RegExp][] = [
+    ['transformer', 'ratedKVA', '-5', /−5.kVA is not possible here; allowed is a number above 0 kVA/],
+    ['motor', 'count', '2,5', /2\.5 is not possible here; allowed is a whole number from 1/],
+    ['load', 'powerFactor', '85 %', /^$/],
+    ['load', 'powerFactor', '85', /85 is not possible here; allowed is .*at most 1/],
+    ['load', 'kW', '', /A value is needed/],
+    ['load', 'kW', '3 kvar', /does not measure this field/],
+  ];
+  it.each(refused)('%s %s: %j is refused by value and range', (owner, key, typed, error) => {
+    const read = readQuantity(typed, field(owner, key));
+    expect(read.ok ? '' : read.error).toMatch(error);
+  });
+
+  it('nothing written falls back to the default where there is one', () => {
+    expect(readQuantity('', field('motor', 'count'))).toEqual({ ok: true, value: undefined });
   });
 });
 

@@ -12,6 +12,17 @@ const placesKeys: readonly { place: string; keys: readonly (readonly [string, st
   { place: 'On the drawing', keys: drawingKeys },
   { place: 'On the drawing: add a part', keys: trayKeys },
   {
+    place: 'In a data slip',
+    keys: [
+      ['Enter', 'take the value and go on; after the last, back to the part'],
+      ['Shift+Enter', 'take it and go back'],
+      ['Mod+Enter', 'take it and close'],
+      ['↑  ↓', 'step the value; with Shift ten times as far'],
+      ['N  M  T  A', 'on an origin mark: nameplate, measured, typical, assumed'],
+      ['Escape', 'put the old value back and close'],
+    ],
+  },
+  {
     place: 'On the rail',
     keys: [
       ['←  →', 'one order'],

@@ -2,6 +2,7 @@ import { useMemo } from 'react';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
 import { newStudy, type Study } from '../../study/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
+import { originCommands } from '../details/originCommands.ts';
 import { leaveStudy } from '../files/leaveStudy.ts';
 import { openSample } from '../files/openSample.ts';
 import { samples } from '../files/samples.ts';
@@ -95,6 +96,7 @@ function viewCommands(): Command[] {
 export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): Command[] {
   const study = useWorkbench((state: Workbench) => state.study);
   const caseId = useWorkbench((state: Workbench) => state.view.caseId);
+  const selection = useWorkbench((state: Workbench) => state.view.selection);
   const undoing = useWorkbench(undoWords);
   const redoing = useWorkbench(redoWords);
   return useMemo(
@@ -110,9 +112,10 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       },
       ...quickStartCommands(study),
       ...viewCommands(),
+      ...(study ? originCommands(study, selection) : []),
       ...(study ? caseCommands(study, caseId) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
-    [study, caseId, undoing, redoing, openDialog],
+    [study, caseId, selection, undoing, redoing, openDialog],
   );
 }

@@ -1,4 +1,3 @@
-import { stepsText } from '../../drawing/index.ts';
 import {
   type Assumption,
   type BankStep,
@@ -6,6 +5,7 @@ import {
   nameOf,
   type Study,
   spectrumById,
+  stepsText,
 } from '../../study/index.ts';
 
 /** What was assumed in short words: "load loss P_k 7.6 kW". Lists and records stand by their label alone. */

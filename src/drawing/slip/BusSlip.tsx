@@ -15,15 +15,17 @@ import {
   type Study,
   sameData,
   setOrigin,
+  takesOrigin,
   updateBus,
 } from '../../study/index.ts';
 import { busSubject } from '../subject.ts';
 import { FindingLine } from './FieldRow.tsx';
 import { MoreData } from './MoreData.tsx';
+import { OriginTally } from './OriginTally.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import { fallbackOf, fieldValue, findingsAt, refusalOf } from './SlipScope.ts';
-import { slipSections, takesOrigin } from './slipFields.ts';
+import { slipSections } from './slipFields.ts';
 import { TextInput } from './TextInput.tsx';
 
 export interface BusSlipProps {
@@ -121,6 +123,7 @@ function Nameplate({ bus: { id }, study, findings, onEdit, onRemove, onClose }: 
         <FindingLine key={finding.code} finding={finding} />
       ))}
       <div className="slip-essentials">{essential.map(row)}</div>
+      <OriginTally study={study} owner={bus} />
       <MoreData kind="bus">{more.map(row)}</MoreData>
     </SlipFrame>
   );

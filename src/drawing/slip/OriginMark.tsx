@@ -2,36 +2,52 @@ import type { DataOrigin } from '../../study/index.ts';
 
 type Word = DataOrigin['origin'];
 
-const marks: Readonly<Record<Word, string>> = { nameplate: 'N', measured: 'M', typical: 'T', assumed: 'A' };
-const order: readonly (Word | null)[] = [null, 'nameplate', 'measured', 'typical', 'assumed'];
+const words: readonly Word[] = ['nameplate', 'measured', 'typical', 'assumed'];
+
+/** One letter for where a value comes from; nothing where nobody has said. */
+export const originLetters: Readonly<Record<Word, string>> = {
+  nameplate: 'N',
+  measured: 'M',
+  typical: 'T',
+  assumed: 'A',
+};
 
 export interface OriginMarkProps {
+  id: string;
   label: string;
   origin: DataOrigin | undefined;
   onChange(origin: DataOrigin | null): void;
 }
 
-/** The next origin in the round: not stated, nameplate, measured, typical, assumed. A note and date stay. */
-export function nextOrigin(origin: DataOrigin | undefined): DataOrigin | null {
-  const index = order.indexOf(origin?.origin ?? null);
-  const word = order[(index + 1) % order.length] ?? null;
-  return word === null ? null : { ...origin, origin: word };
+/** The origin with another word; a note and a date stay, and go with the origin itself. */
+export function withOriginWord(origin: DataOrigin | undefined, word: string): DataOrigin | null {
+  const chosen = words.find((one) => one === word);
+  return chosen ? { ...origin, origin: chosen } : null;
 }
 
-/** Where a value comes from, as one letter; a press goes to the next. */
-export function OriginMark({ label, origin, onChange }: OriginMarkProps) {
-  const word = origin?.origin ?? 'not stated';
-  const detail = [word, origin?.date, origin?.note].filter(Boolean).join(', ');
+/**
+ * Where a value comes from, as one letter, chosen from a list: by mouse, or on the focused mark by the first
+ * letter of the word.
+ */
+export function OriginMark({ id, label, origin, onChange }: OriginMarkProps) {
+  const word = origin?.origin ?? '';
+  const detail = [origin?.origin ?? 'not stated', origin?.date, origin?.note].filter(Boolean).join(', ');
   return (
-    <button
-      type="button"
-      className="slip-origin"
-      data-origin={origin?.origin ?? 'none'}
-      title={`Origin: ${detail}. N nameplate, M measured, T typical, A assumed.`}
-      aria-label={`Origin of ${label}: ${detail}`}
-      onClick={() => onChange(nextOrigin(origin))}
-    >
-      {origin ? marks[origin.origin] : '·'}
-    </button>
+    <span className="slip-origin" data-origin={word || 'none'} title={`Origin: ${detail}`}>
+      <span aria-hidden="true">{origin ? originLetters[origin.origin] : ''}</span>
+      <select
+        id={id}
+        aria-label={`Origin of ${label}`}
+        value={word}
+        onChange={(event) => onChange(withOriginWord(origin, event.target.value))}
+      >
+        <option value="">not stated</option>
+        {words.map((one) => (
+          <option key={one} value={one}>
+            {one}
+          </option>
+        ))}
+      </select>
+    </span>
   );
 }

@@ -5,6 +5,7 @@ import {
   busById,
   busesOf,
   busName,
+  confirmTypical,
   type DataOrigin,
   duplicateParts,
   type Edit,
@@ -15,9 +16,7 @@ import {
   fullNameOf,
   homeBusOf,
   isOn,
-  isSeries,
   kindWords,
-  moveEnd,
   nameOf,
   originOf,
   type Patch,
@@ -28,12 +27,15 @@ import {
   type StudyCase,
   type StudyElement,
   sameData,
+  setField,
   setOrigin,
+  takesOrigin,
   updateElement,
 } from '../../study/index.ts';
 import { partSubject } from '../subject.ts';
 import { FindingLine } from './FieldRow.tsx';
 import { MoreData } from './MoreData.tsx';
+import { OriginTally } from './OriginTally.tsx';
 import { SlipField } from './SlipField.tsx';
 import { SlipFrame } from './SlipFrame.tsx';
 import {
@@ -46,9 +48,10 @@ import {
   shownElement,
   variantCase,
 } from './SlipScope.ts';
-import { shortValue, slipSections, takesOrigin } from './slipFields.ts';
+import { shortValue, slipSections } from './slipFields.ts';
 import { TextInput } from './TextInput.tsx';
 import { TypicalValues } from './TypicalValues.tsx';
+import { typicalHints } from './typicalOffers.ts';
 
 export interface PartSlipProps {
   element: StudyElement;
@@ -101,16 +104,10 @@ function Nameplate({
   };
   const editOf = (current: Study, patch: Patch) =>
     updateElement(current, id, patch, writeCase ? { caseId: writeCase.id } : {});
-  const commit = (key: string, value: unknown): string | null => {
-    const moves = key === 'bus' || key === 'from' || key === 'to';
-    if (moves && !writeCase) {
-      if (isSeries(base) && value === (key === 'from' ? base.to : base.from))
-        return 'Both ends cannot stand at one busbar; choose another.';
-      return attempt(moveEnd(study, id, key, String(value)));
-    }
-    return attempt(editOf(study, { [key]: value }));
-  };
+  const commit = (key: string, value: unknown): string | null =>
+    attempt(setField(study, id, key, value, writeCase ? { caseId: writeCase.id } : {}));
   const { essential, more, groups } = slipSections(fieldsOf(base.kind));
+  const typical = typicalHints(element, study);
   const row = (field: Field, groupKey?: string): ReactNode => {
     const owner = groupKey === undefined ? element : (fieldValue(element, groupKey) ?? {});
     const originKey = groupKey === undefined ? field.key : groupKey;
@@ -135,6 +132,7 @@ function Nameplate({
             <CaseRemark {...{ study, variant, base, field, writing: writeCase !== undefined, onEdit }} />
           )
         }
+        typical={groupKey === undefined ? typical.get(field.key) : undefined}
         onFocus={setFocused}
         onCommit={(value) =>
           commit(originKey, groupKey === undefined ? value : groupWith(owner as object, field.key, value))
@@ -148,11 +146,22 @@ function Nameplate({
     <SlipFrame
       label={`Data of ${fullNameOf(base)}`}
       kind={kindWords[base.kind]}
+      place={busesOf(element)
+        .map((end) => busName(study, end))
+        .join(' → ')}
       subject={partSubject(id)}
       focused={focused}
       onClose={onClose}
       head={
         <>
+          <label className="slip-check slip-service">
+            <input
+              type="checkbox"
+              checked={isOn(element)}
+              onChange={(event) => commit('on', event.target.checked ? undefined : false)}
+            />
+            in service
+          </label>
           <TextInput
             id={`${prefix}-name`}
             className="slip-name"
@@ -161,14 +170,6 @@ function Nameplate({
             placeholder={id}
             onCommit={(text) => attempt(updateElement(study, id, { name: text || undefined }))}
           />
-          <label className="slip-check">
-            <input
-              type="checkbox"
-              checked={isOn(element)}
-              onChange={(event) => commit('on', event.target.checked ? undefined : false)}
-            />
-            in service
-          </label>
           {variant && (
             <label className="slip-check slip-case">
               <input
@@ -187,6 +188,7 @@ function Nameplate({
         <FindingLine key={finding.code} finding={finding} />
       ))}
       <div className="slip-essentials">{essential.map((field) => row(field))}</div>
+      <OriginTally study={study} owner={base} onConfirm={() => onEdit(confirmTypical(study, [id]))} />
       {!writeCase && <TypicalValues element={base} study={study} onEdit={attempt} />}
       <MoreData kind={base.kind}>
         {more.map((field) => row(field))}

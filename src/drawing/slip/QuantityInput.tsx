@@ -1,6 +1,13 @@
 import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
-import { allowedOf, editText, formatNumber, type NumberField, parseQuantity } from '../../study/index.ts';
-import { isInside, stepValue } from './stepValue.ts';
+import {
+  editText,
+  formatNumber,
+  type NumberField,
+  parseQuantity,
+  readQuantity,
+  understoodAs,
+} from '../../study/index.ts';
+import { stepValue } from './stepValue.ts';
 import { useDraft } from './useDraft.ts';
 
 /** A quantity a line takes, and who takes its value. */
@@ -39,7 +46,7 @@ export function QuantityInput(props: QuantityInputProps) {
   const [editing, setEditing] = useState(false);
   const atRest = value === undefined ? '' : formatNumber(value, { digits: 6 });
   const text = draft ?? (editing ? standing : atRest);
-  const said = draft !== null && error === null ? sayConversion(draft, field) : null;
+  const said = draft !== null && error === null ? understoodAs(draft, field.unit) : null;
   const input = useRef<HTMLInputElement>(null);
   useEffect(() => () => clearTimeout(timer.current), []);
   useEffect(() => {
@@ -119,21 +126,8 @@ export function QuantityInput(props: QuantityInputProps) {
 }
 
 function read(typed: string, { field, onCommit }: Reading, alternative?: Reading): string | null {
-  if (typed.trim() === '') {
-    return field.required ? `A value is needed: ${allowedOf(field)}.` : onCommit(undefined);
-  }
-  const parsed = parseQuantity(typed, field.unit);
-  if (!parsed.ok) {
-    const other = alternative && parseQuantity(typed, alternative.field.unit);
-    return alternative && other?.ok ? read(typed, alternative) : parsed.error;
-  }
-  if (field.type === 'integer' && !Number.isInteger(parsed.value)) return `Allowed is ${allowedOf(field)}.`;
-  if (!isInside(parsed.value, field))
-    return `${formatNumber(parsed.value)} is out of range; allowed is ${allowedOf(field)}.`;
-  return onCommit(parsed.value);
-}
-
-function sayConversion(draft: string, field: NumberField): string | null {
-  const parsed = parseQuantity(draft, field.unit);
-  return parsed.ok && parsed.said.includes(' = ') ? parsed.said : null;
+  const outcome = readQuantity(typed, field);
+  if (outcome.ok) return onCommit(outcome.value);
+  const isOther = alternative !== undefined && parseQuantity(typed, alternative.field.unit).ok;
+  return isOther && !parseQuantity(typed, field.unit).ok ? read(typed, alternative) : outcome.error;
 }

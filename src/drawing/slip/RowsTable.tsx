@@ -1,6 +1,5 @@
 import { type ClipboardEvent, useState } from 'react';
-import { fieldsOf, type HarmonicRow, type NumberField } from '../../study/index.ts';
-import { parseRows } from './parseRows.ts';
+import { fieldsOf, type HarmonicRow, type NumberField, parseRows } from '../../study/index.ts';
 import { QuantityInput } from './QuantityInput.tsx';
 
 export interface RowsTableProps {

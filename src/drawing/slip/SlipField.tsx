@@ -1,5 +1,12 @@
 import { type ReactNode, useState } from 'react';
-import type { DataOrigin, Edit, Field, Finding, Study } from '../../study/index.ts';
+import {
+  type DataOrigin,
+  type Edit,
+  type Field,
+  type Finding,
+  hintOf,
+  type Study,
+} from '../../study/index.ts';
 import { FieldControl } from './FieldControl.tsx';
 import { FieldRow } from './FieldRow.tsx';
 
@@ -13,6 +20,8 @@ export interface SlipFieldProps {
   origin?: DataOrigin | undefined;
   onOrigin?: ((origin: DataOrigin | null) => void) | undefined;
   remark?: ReactNode;
+  /** What is typical for this very part, where a table knows it. */
+  typical?: string | undefined;
   onFocus(field: Field): void;
   onCommit(value: unknown): string | null;
   setReference?: ((study: Study, spectrumId: string) => Edit) | undefined;
@@ -44,10 +53,12 @@ export function SlipField(props: SlipFieldProps) {
       id={id}
       field={field}
       unit={'unit' in field ? field.unit : ''}
+      hint={hintOf(field, props.typical)}
       wide={wideTypes.has(field.type)}
       findings={findings}
       origin={origin}
       onOrigin={onOrigin}
+      onFocusOrigin={() => props.onFocus(field)}
       remark={remark}
     >
       <FieldControl

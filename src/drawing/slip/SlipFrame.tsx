@@ -10,6 +10,8 @@ export interface SlipFrameProps {
   label: string;
   /** Kind in trade words, above the name. */
   kind: string;
+  /** The busbars it stands at. */
+  place?: string;
   /** Another subject is another slip: the focus goes to its first field again. */
   subject: Subject;
   head: ReactNode;
@@ -26,7 +28,8 @@ export interface SlipFrameProps {
  * Command at once, it closes the slip. A field that refuses its value keeps the focus. Escape closes, and
  * what was half typed goes with it; other shortcuts with Ctrl or Command pass.
  */
-export function SlipFrame({ label, kind, subject, head, children, foot, focused, onClose }: SlipFrameProps) {
+export function SlipFrame(props: SlipFrameProps) {
+  const { label, kind, place, subject, head, children, foot, focused, onClose } = props;
   const paper = useRef<HTMLElement>(null);
   useSlipFocus(paper, subject);
   useEffect(() => {
@@ -65,7 +68,10 @@ export function SlipFrame({ label, kind, subject, head, children, foot, focused,
       onDoubleClick={(event) => event.stopPropagation()}
     >
       <header className="slip-head">
-        <span className="slip-kind">{kind}</span>
+        <span className="slip-kind">
+          {kind}
+          {place && <> · {place}</>}
+        </span>
         <button
           type="button"
           className="slip-close"

@@ -1,5 +1,11 @@
-import { type BankStep, fieldsOf, formatQuantity, type NumberField } from '../../study/index.ts';
-import { parseSteps, stepsText } from './parseSteps.ts';
+import {
+  type BankStep,
+  fieldsOf,
+  formatQuantity,
+  type NumberField,
+  parseSteps,
+  stepsText,
+} from '../../study/index.ts';
 import { QuantityInput } from './QuantityInput.tsx';
 import { TextInput } from './TextInput.tsx';
 

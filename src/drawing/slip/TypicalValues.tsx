@@ -1,5 +1,6 @@
 import { useId, useState } from 'react';
 import {
+  builtInSpectrum,
   type Edit,
   type Field,
   fieldOf,
@@ -11,6 +12,7 @@ import {
 } from '../../study/index.ts';
 import { Formula } from './Formula.tsx';
 import { fieldValue } from './SlipScope.ts';
+import { shortValue } from './slipFields.ts';
 import { chosenOf, type TypicalOffer, typicalOffer } from './typicalOffers.ts';
 
 export interface TypicalValuesProps {
@@ -97,10 +99,15 @@ function valueWords(element: StudyElement, typical: Extract<Typical<object>, { o
   return Object.keys(typical.values)
     .map((key) => {
       const field: Field | undefined = fieldOf(element.kind, key);
-      const value = fieldValue(typical.values, key);
-      const shown =
-        typeof value === 'number' ? formatQuantity(value, field && 'unit' in field ? field.unit : '') : '';
-      return `${field?.label ?? key} ${shown}`;
+      return `${field?.label ?? key} ${shownValue(fieldValue(typical.values, key), field)}`;
     })
     .join(', ');
+}
+
+function shownValue(value: unknown, field: Field | undefined): string {
+  if (field?.type === 'choice')
+    return field.options.find((option) => option.value === value)?.label ?? String(value);
+  if (field?.type === 'spectrum') return `“${builtInSpectrum(String(value))?.name ?? value}”`;
+  if (typeof value === 'number') return formatQuantity(value, field && 'unit' in field ? field.unit : '');
+  return shortValue(value, '');
 }

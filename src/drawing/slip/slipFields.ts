@@ -1,20 +1,7 @@
-import { type BankStep, type Field, type FieldType, formatQuantity } from '../../study/index.ts';
-import { stepsText } from './parseSteps.ts';
+import { type BankStep, type Field, formatQuantity, stepsText } from '../../study/index.ts';
 
 /** Fields with a place of their own at the head of the slip. */
 const headKeys: ReadonlySet<string> = new Set(['name', 'on']);
-
-/** Data a reviewer asks the origin of; names, places and choices have none. */
-const withOrigin: ReadonlySet<FieldType> = new Set([
-  'number',
-  'integer',
-  'vectorGroup',
-  'spectrum',
-  'rows',
-  'steps',
-  'skin',
-  'tolerance',
-]);
 
 export interface SlipSections {
   /** What the result hangs on. */
@@ -37,10 +24,6 @@ export function slipSections(fields: readonly Field[]): SlipSections {
     ],
     groups: shown.filter((field): field is Extract<Field, { type: 'group' }> => field.type === 'group'),
   };
-}
-
-export function takesOrigin(field: Field): boolean {
-  return withOrigin.has(field.type);
 }
 
 function isSteps(value: unknown): value is BankStep[] {

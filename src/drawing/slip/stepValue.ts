@@ -1,4 +1,4 @@
-import type { NumberField } from '../../study/index.ts';
+import { isInside, type NumberField } from '../../study/index.ts';
 
 /**
  * The next value up or down from the arrow keys: whole numbers by one, others by one unit of their second
@@ -27,12 +27,6 @@ function stepSize(value: number, field: NumberField, direction: 1 | -1): number 
 /** From zero a field in degrees or per cent starts with 1, a ratio with 0.1. */
 function smallestStep(field: NumberField): number {
   return field.unit === '' ? 0.1 : 1;
-}
-
-export function isInside(value: number, field: NumberField): boolean {
-  const { min, max } = field;
-  if (min !== undefined && (field.minExclusive ? value <= min : value < min)) return false;
-  return !(max !== undefined && (field.maxExclusive ? value >= max : value > max));
 }
 
 function nearestEnd(value: number, next: number, field: NumberField): number {

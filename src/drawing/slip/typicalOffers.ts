@@ -1,20 +1,36 @@
 import {
+  type Bank,
+  busById,
   type Cable,
   type Conductor,
+  type ConverterBuild,
   cableSizes,
+  converterTypes,
+  type Filter,
+  filteredOrders,
+  formatNumber,
   type GeneratorBuild,
   generatorReactances,
+  homeBusOf,
   type Motor,
   type MotorChoice,
+  type NetworkBuild,
+  networkBuilds,
   type Study,
   type StudyElement,
   type Transformer,
   type TransformerChoice,
   type Typical,
+  typicalBank,
   typicalCable,
+  typicalConverter,
+  typicalFilter,
   typicalGenerator,
   typicalMotor,
+  typicalSupply,
   typicalTransformer,
+  usualDetunings,
+  usualSplits,
 } from '../../study/index.ts';
 
 /** What the typical values depend on besides the part's rating. */
@@ -161,9 +177,98 @@ function generatorOffer(): TypicalOffer {
   };
 }
 
+function choiceOf(
+  key: string,
+  label: string,
+  options: Readonly<Record<string, { words: string }>>,
+): TypicalChoice {
+  return {
+    key,
+    label,
+    options: Object.entries(options).map(([value, { words }]) => ({ value, label: words })),
+  };
+}
+
+/** The network most like the busbar stands first. */
+function supplyOffer(nominalV: number): TypicalOffer {
+  const { medium, substation, transformer, feeder } = networkBuilds;
+  const builds =
+    nominalV > 1000
+      ? { medium, substation, transformer, feeder }
+      : { transformer, feeder, medium, substation };
+  const choices = [choiceOf('build', 'network', builds)];
+  return {
+    choices: () => choices,
+    values: (chosen) => typicalSupply(chosenOf(choices, chosen, 'build') as NetworkBuild),
+  };
+}
+
+function converterOffer(): TypicalOffer {
+  const choices = [choiceOf('build', 'build', converterTypes)];
+  return {
+    choices: () => choices,
+    values: (chosen) => typicalConverter(chosenOf(choices, chosen, 'build') as ConverterBuild),
+  };
+}
+
+/** The detuning it has stands first; steps stay as they are unless a split is asked for. */
+function bankOffer(element: Bank, nominalV: number): TypicalOffer {
+  const own = element.detuningPercent ?? 0;
+  const detunings = [own, ...usualDetunings.filter((percent) => percent !== own)];
+  const kvar = element.steps.reduce((sum, step) => sum + step.kvar, 0);
+  const choices: TypicalChoice[] = [
+    {
+      key: 'detuning',
+      label: 'detuned by',
+      options: detunings.map((percent) => ({
+        value: String(percent),
+        label: percent === 0 ? 'plain' : `${percent} %`,
+      })),
+    },
+    {
+      key: 'count',
+      label: 'split into',
+      options: [
+        { value: '', label: 'the steps it has' },
+        ...usualSplits(kvar).map((split) => ({
+          value: String(split.count),
+          label: `${split.count} × ${split.kvar} kvar`,
+        })),
+      ],
+    },
+  ];
+  return {
+    choices: () => choices,
+    values: (chosen) =>
+      typicalBank(
+        element.steps,
+        nominalV,
+        Number(chosenOf(choices, chosen, 'detuning')),
+        Number(chosenOf(choices, chosen, 'count')) || undefined,
+      ),
+  };
+}
+
+function filterOffer(element: Filter, nominalV: number): TypicalOffer {
+  const choices: TypicalChoice[] = [
+    {
+      key: 'order',
+      label: 'for order',
+      options: filteredOrders.map((order) => ({ value: String(order), label: String(order) })),
+    },
+  ];
+  return {
+    choices: () => choices,
+    values: (chosen) => typicalFilter(Number(chosenOf(choices, chosen, 'order')), element.type, nominalV),
+  };
+}
+
 /** Typical values there are for a part, or null where there are none. */
 export function typicalOffer(element: StudyElement, study: Study): TypicalOffer | null {
+  const nominalV = busById(study, homeBusOf(element))?.nominalV ?? 400;
   switch (element.kind) {
+    case 'supply':
+      return supplyOffer(nominalV);
     case 'transformer':
       return transformerOffer(element, study);
     case 'cable':
@@ -172,7 +277,23 @@ export function typicalOffer(element: StudyElement, study: Study): TypicalOffer 
       return motorOffer(element, study);
     case 'generator':
       return generatorOffer();
+    case 'converter':
+      return converterOffer();
+    case 'bank':
+      return bankOffer(element, nominalV);
+    case 'filter':
+      return filterOffer(element, nominalV);
     default:
       return null;
   }
+}
+
+/** Typical numbers of this very part by field, of the first choices; empty where no table knows the part. */
+export function typicalHints(element: StudyElement, study: Study): ReadonlyMap<string, string> {
+  const typical = typicalOffer(element, study)?.values({});
+  if (!typical?.ok) return new Map();
+  const numbers = Object.entries(typical.values).flatMap(([key, value]): [string, string][] =>
+    typeof value === 'number' && typeof typical.origins[key] === 'object' ? [[key, formatNumber(value)]] : [],
+  );
+  return new Map(numbers.filter(([key]) => key !== 'detuningPercent'));
 }

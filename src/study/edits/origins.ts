@@ -1,4 +1,5 @@
-import { fieldOf } from '../fields/fieldsOf.ts';
+import { fieldOf, fieldsOf } from '../fields/fieldsOf.ts';
+import { takesOrigin } from '../fields/takesOrigin.ts';
 import { elementById } from '../lookup.ts';
 import { busName, fullNameOf } from '../names.ts';
 import type { Bus, DataOrigin, Edit, Study, StudyElement } from '../types.ts';
@@ -45,4 +46,35 @@ export function originsOf(study: Study, list: 'elements' | 'buses', id: string):
     ([path]) => path.startsWith(prefix) && !path.slice(prefix.length).includes('.'),
   );
   return Object.fromEntries(own.map(([path, origin]) => [path.slice(prefix.length), origin]));
+}
+
+/** How many of a record's values come from where; a value that falls back to its default is not counted. */
+export type OriginTally = Record<DataOrigin['origin'] | 'notStated', number>;
+
+export function originTally(study: Study, owner: StudyElement | Bus): OriginTally {
+  const tally: OriginTally = { measured: 0, nameplate: 0, typical: 0, assumed: 0, notStated: 0 };
+  const values = new Map<string, unknown>(Object.entries(owner));
+  for (const field of fieldsOf('kind' in owner ? owner.kind : 'bus')) {
+    if (!takesOrigin(field) || values.get(field.key) === undefined) continue;
+    tally[originOf(study, owner, field.key)?.origin ?? 'notStated'] += 1;
+  }
+  return tally;
+}
+
+/**
+ * Takes the typical values of parts for what their nameplates say, in one step. The note named the table the
+ * value came from and goes with the mark.
+ */
+export function confirmTypical(study: Study, ids: readonly string[]): Edit {
+  const parts = ids.flatMap((id) => elementById(study, id) ?? []);
+  const [first] = parts;
+  const name = parts.length === 1 && first ? fullNameOf(first) : `${parts.length} parts`;
+  return makeEdit('origin.confirm', `confirm typical values of ${name} as nameplate data`, (current) => {
+    const typical = parts.flatMap(({ id }) =>
+      Object.entries(originsOf(current, 'elements', id))
+        .filter(([, { origin }]) => origin === 'typical')
+        .map(([field]) => [originPath('elements', id, field), { origin: 'nameplate' as const }] as const),
+    );
+    return putOrigins(current, Object.fromEntries(typical));
+  });
 }

@@ -16,7 +16,7 @@ interface FieldBase {
   required: boolean;
   /** Under "more data" in the data slip; the others are what the result hangs on. */
   rare: boolean;
-  /** A typical value in words, shown as a hint. */
+  /** A typical value in words, with where it comes from. */
   typical?: string;
 }
 
@@ -29,6 +29,8 @@ export interface NumberField extends FieldBase {
   max?: number;
   minExclusive?: boolean;
   maxExclusive?: boolean;
+  /** Usual values in few words, without the unit: "4…8". Common practice where `typical` names no source. */
+  usual?: string;
 }
 
 export interface BooleanField extends FieldBase {

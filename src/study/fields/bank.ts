@@ -40,6 +40,7 @@ export const bankFields: readonly Field[] = [
     default: 0,
     min: 0,
     below: 100,
+    usual: '0, 5.67, 7, 14',
     typical: '0 plain, 5.67 %, 7 %, 14 %',
   }),
   number('reactorQ', 'reactor quality X_L/R_L', '', 'R_L = X_L/Q at the nominal frequency.', {
@@ -74,7 +75,8 @@ export const bankFields: readonly Field[] = [
     min: 0,
     below: 100,
     rare: true,
-    typical: '5 %',
+    usual: '5',
+    typical: '5 % (common practice)',
   }),
   number('ratedReactorA', 'rated reactor current, rms', 'A', 'Judged by the reactor-duty check.', {
     above: 0,

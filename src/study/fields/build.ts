@@ -29,6 +29,7 @@ interface NumberManner extends Manner {
   /** Exclusive bounds. */
   above?: number;
   below?: number;
+  usual?: string;
 }
 
 function base(key: string, label: string, help: string, manner: Manner) {
@@ -53,6 +54,7 @@ function numeric(type: 'number' | 'integer') {
     ...(manner.max === undefined ? {} : { max: manner.max }),
     ...(manner.above === undefined ? {} : { min: manner.above, minExclusive: true }),
     ...(manner.below === undefined ? {} : { max: manner.below, maxExclusive: true }),
+    ...(manner.usual === undefined ? {} : { usual: manner.usual }),
   });
 }
 

@@ -8,11 +8,13 @@ export const cableFields: readonly Field[] = [
   number('resistanceOhmPerKm', 'resistance R′', 'Ω/km', 'At operating temperature, not at 20 °C.', {
     required: true,
     min: 0,
+    usual: '0.05…2',
     typical: '0.0754 Ω/km × 1.20 for 240 mm² copper at 70 °C (IEC 60228 value at 20 °C)',
   }),
   number('reactanceOhmPerKm', 'reactance X′', 'Ω/km', 'At the nominal frequency; Z(h) = R(h) + jhX.', {
     required: true,
     min: 0,
+    usual: '0.08…0.13',
     typical: '0.08 Ω/km multicore or trefoil (from memory)',
   }),
   number('capacitanceNFPerKm', 'capacitance C′', 'nF/km', 'Zero: series impedance alone.', {

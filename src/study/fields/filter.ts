@@ -22,11 +22,13 @@ export const filterFields: readonly Field[] = [
   number('tunedOrder', 'tuned order n', '', 'X_L = X_c/n²; C-type X_c1/(n² − 1).', {
     required: true,
     above: 1,
+    usual: '4.7 for the 5th',
     typical: '4.7 to 4.8 for the 5th',
   }),
   number('qFactor', 'quality q', '', 'Single-tuned R = n·X_L/q; high-pass and C-type R = q·n·X_L.', {
     required: true,
     above: 0,
+    usual: '30…80',
     typical: '30 to 80 single-tuned, 0.5 to 5 high-pass',
   }),
   number('ratedV', 'rated voltage of the capacitors', 'V', 'Rating only: judged by the duty checks.', {

@@ -9,6 +9,7 @@ export const generatorFields: readonly Field[] = [
     required: true,
     above: 0,
     max: 200,
+    usual: '12…20',
     typical: '12 to 20 % (IEEE 141 typical values, second-hand)',
   }),
   number('xOverR', 'X/R', '', 'R = |Z1|/√(1 + (X/R)²).', { default: 20, min: 0, rare: true }),

@@ -9,6 +9,7 @@ export const loadFields: readonly Field[] = [
     required: true,
     above: 0,
     max: 1,
+    usual: '0.7…0.98',
     typical: '0.7 to 0.98',
   }),
   leading('Q turns negative: the load gives kvar.'),

@@ -54,6 +54,7 @@ export const lossWPerKvar = number(
     min: 0,
     default: 0.3,
     rare: true,
+    usual: '0.2…0.5',
     typical: '0.2 to 0.5 W/kvar with discharge resistors (common practice)',
   },
 );

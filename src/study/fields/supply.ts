@@ -7,6 +7,7 @@ export const supplyFields: readonly Field[] = [
   number('shortCircuitMVA', 'fault level, maximum', 'MVA', '|Z1| = U²/S_sc.', {
     required: true,
     above: 0,
+    usual: '100…500',
     typical: '100 to 500 MVA at medium voltage; ask the network operator',
   }),
   number(
@@ -19,6 +20,7 @@ export const supplyFields: readonly Field[] = [
   number('xOverR', 'X/R', '', 'R = |Z1|/√(1 + (X/R)²), X = R·(X/R).', {
     required: true,
     min: 0,
+    usual: '5…15',
     typical: '5 to 15 at medium voltage (common practice)',
   }),
   number('setpointPercent', 'voltage behind the impedance', '%', 'E = setpoint/100 · U/√3.', {

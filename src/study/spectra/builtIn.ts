@@ -32,6 +32,16 @@ function sixPulseAngle(h: number): number {
   return h % 6 === 5 ? 180 : 0;
 }
 
+/** Orders, per cent and degrees against the fundamental current at 0°. */
+const industrialDrive: readonly [number, number, number][] = [
+  [5, 18.24, -55.68],
+  [7, 11.9, -84.11],
+  [11, 5.73, -143.56],
+  [13, 4.01, -175.58],
+  [17, 1.93, 111.39],
+  [19, 1.39, 68.3],
+];
+
 function magnitudes(percentByOrder: Readonly<Record<number, number>>): HarmonicRow[] {
   return Object.entries(percentByOrder).map(([h, percent]) => ({ h: Number(h), percent }));
 }
@@ -136,6 +146,14 @@ export const builtInSpectra: readonly BuiltInSpectrum[] = [
     origin: 'IEEE 519-1992, typical six-pulse values; from memory',
     provenance: 'memory',
     anglesKnown: false,
+  },
+  {
+    id: 'six-pulse-drive-angles',
+    name: 'Six-pulse drive, with angles',
+    orders: industrialDrive.map(([h, percent, angleDeg]) => ({ h, percent, angleDeg })),
+    origin: 'drive of the 13-busbar industrial test system, IEEE task force 1999, orders to 19; from memory',
+    provenance: 'memory',
+    anglesKnown: true,
   },
   ...reactanceTable.map(
     ([percent, percents]): BuiltInSpectrum => ({

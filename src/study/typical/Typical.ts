@@ -6,8 +6,8 @@ export type Typical<Values extends object> =
       ok: true;
       /** An edit-ready patch of the part, in the fields' own units. */
       values: Values;
-      /** Origin 'typical' of every value, the source as its note. */
-      origins: Readonly<Record<keyof Values & string, DataOrigin>>;
+      /** Origin 'typical' of every value by its field, the source as its note; choices need none. */
+      origins: Readonly<Record<string, DataOrigin>> & { readonly [K in keyof Values]: DataOrigin };
       /** All sources in one sentence. */
       source: string;
     }

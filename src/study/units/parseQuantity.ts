@@ -1,5 +1,4 @@
-import { formatQuantity } from './formatQuantity.ts';
-import { readNumber } from './readNumber.ts';
+import { type DecimalMark, readNumber } from './readNumber.ts';
 import type { Unit } from './unit.ts';
 import { prefixes, unitOf } from './unitTable.ts';
 
@@ -8,8 +7,6 @@ export type ParsedQuantity =
       ok: true;
       /** In the field's unit. */
       value: number;
-      /** What was understood: "0.4 kV = 400 V"; the plain value where nothing was converted. */
-      said: string;
     }
   | { ok: false; error: string };
 
@@ -25,21 +22,20 @@ class Refusal extends Error {}
  * Reads a quantity as a person types it, in the unit of its field: decimal comma or point, thousands, SI
  * prefixes with or without the unit ("0,4 kV", "1.25k", "12.5 mΩ/km"), and arithmetic with + − * / × ·,
  * parentheses and sqrt ("3*55", "(2+3)*25", "400/sqrt(3)"). A bare prefix counts from the unprefixed unit,
- * so "1.6M" in a kVA field is 1600. In a sum, a bare number takes the unit of its neighbour.
+ * so "1.6M" in a kVA field is 1600. In a sum, a bare number takes the unit of its neighbour. Where the decimal
+ * mark of the text is known, the other mark parts thousands alone.
  */
-export function parseQuantity(text: string, unit: Unit): ParsedQuantity {
+export function parseQuantity(text: string, unit: Unit, decimal?: DecimalMark): ParsedQuantity {
   const typed = tidy(text);
-  const plain = plainNumber(typed);
-  if (plain !== undefined)
-    return { ok: true, value: plain, said: formatQuantity(plain, unit, { digits: 6 }) };
+  const plain = plainNumber(typed, decimal);
+  if (plain !== undefined) return { ok: true, value: plain };
   if (typed === '') return { ok: false, error: `Give a number${unit ? ` in ${unit}` : ''}.` };
   try {
-    const reader = new Reader(typed, unit);
+    const reader = new Reader(typed, unit, decimal);
     const term = reader.sum();
     reader.finish();
     if (!Number.isFinite(term.value)) throw new Refusal('The result is not a finite number.');
-    const value = withoutRoundingDust(term.value);
-    return { ok: true, value, said: sayWhat(typed, value, unit) };
+    return { ok: true, value: withoutRoundingDust(term.value) };
   } catch (refusal) {
     if (!(refusal instanceof Refusal)) throw refusal;
     return { ok: false, error: refusal.message };
@@ -47,9 +43,9 @@ export function parseQuantity(text: string, unit: Unit): ParsedQuantity {
 }
 
 /** A number alone, kept to its last digit. */
-function plainNumber(typed: string): number | undefined {
+function plainNumber(typed: string, decimal?: DecimalMark): number | undefined {
   const sign = typed.startsWith('-') ? 1 : 0;
-  const number = readNumber(typed, sign);
+  const number = readNumber(typed, sign, decimal);
   if (!number || number.end !== typed.length) return undefined;
   return sign ? -number.value : number.value;
 }
@@ -57,14 +53,6 @@ function plainNumber(typed: string): number | undefined {
 /** Conversions multiply by powers of ten; a digit beyond the fifteenth is rounding, not data. */
 function withoutRoundingDust(value: number): number {
   return Number(value.toPrecision(15));
-}
-
-function sayWhat(typed: string, value: number, unit: Unit): string {
-  const result = formatQuantity(value, unit, { digits: 6 });
-  const plain = readNumber(typed.replace(/^-/, ''), 0);
-  const asTyped =
-    plain !== undefined && typed.replace(/^-/, '').slice(plain.end).replace(unit, '').trim() === '';
-  return asTyped ? result : `${typed} = ${result}`;
 }
 
 function tidy(text: string): string {
@@ -83,6 +71,7 @@ class Reader {
   constructor(
     private readonly text: string,
     private readonly unit: Unit,
+    private readonly decimal: DecimalMark | undefined,
   ) {}
 
   finish(): void {
@@ -157,7 +146,7 @@ class Reader {
       }
       return term.value;
     }
-    const number = readNumber(this.text, this.at);
+    const number = readNumber(this.text, this.at, this.decimal);
     if (!number)
       throw new Refusal(
         `${this.at < this.text.length ? `"${this.text.slice(this.at)}" is no number` : 'A number is missing'}; ${this.hint()}.`,

@@ -1,15 +1,23 @@
+/** The sign before the decimals; the other of the two then parts thousands. */
+export type DecimalMark = '.' | ',';
+
 const grouped = /^\d{1,3}(?:([ '])\d{3})(?:\1\d{3})*/;
 
 /**
  * A number as a person writes it, starting at `from`: decimal comma or point, thousands parted by spaces or
  * apostrophes, exponent. With both marks the last is the decimal mark; one mark alone is decimal unless it
- * stands more than once in groups of three. Returns value and end, or undefined where no number starts.
+ * stands more than once in groups of three. Where the decimal mark is given, the other one parts thousands or
+ * the text is no number. Returns value and end, or undefined where no number starts.
  */
-export function readNumber(text: string, from: number): { value: number; end: number } | undefined {
+export function readNumber(
+  text: string,
+  from: number,
+  decimal?: DecimalMark,
+): { value: number; end: number } | undefined {
   const match = /^[\d.,' ]*[\d.,]/.exec(text.slice(from));
   if (!match || !/\d/.test(match[0])) return undefined;
   const run = digitRun(match[0]);
-  const plain = decimalPoint(run);
+  const plain = decimal === undefined ? decimalPoint(run) : markedPoint(run, decimal);
   if (plain === undefined) return undefined;
   const exponent = /^[eE][+-]?\d+/.exec(text.slice(from + run.length));
   const value = Number(plain + (exponent?.[0] ?? ''));
@@ -41,6 +49,17 @@ function decimalPoint(run: string): string | undefined {
   if (commas + points > 1) return isGrouped(digits, mark) ? digits.replaceAll(mark, '') : undefined;
   const plain = digits.replace(',', '.');
   return plain === '.' ? undefined : plain;
+}
+
+/** The number with a point for its decimal mark, the other mark parting thousands. */
+function markedPoint(run: string, decimal: DecimalMark): string | undefined {
+  const [whole = '', fraction, more] = run.replace(/[ ']/g, '').split(decimal);
+  if (more !== undefined) return undefined;
+  const thousands = decimal === ',' ? '.' : ',';
+  if (fraction?.includes(thousands)) return undefined;
+  if (whole.includes(thousands) && !isGrouped(whole, thousands)) return undefined;
+  const digits = whole.replaceAll(thousands, '');
+  return digits === '' && !fraction ? undefined : `${digits}.${fraction ?? ''}`;
 }
 
 function isGrouped(text: string, mark: string): boolean {

@@ -1,17 +1,19 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { nextOrigin } from '../../../src/drawing/slip/OriginMark.tsx';
-import { parseRows } from '../../../src/drawing/slip/parseRows.ts';
-import { parseSteps, stepsText } from '../../../src/drawing/slip/parseSteps.ts';
+import { withOriginWord } from '../../../src/drawing/slip/OriginMark.tsx';
 import { changedRow, nextOrder } from '../../../src/drawing/slip/RowsTable.tsx';
 import { findingsAt, refusalOf, storedValue, variantCase } from '../../../src/drawing/slip/SlipScope.ts';
 import { slipSections } from '../../../src/drawing/slip/slipFields.ts';
-import { isInside, stepValue } from '../../../src/drawing/slip/stepValue.ts';
+import { stepValue } from '../../../src/drawing/slip/stepValue.ts';
 import {
   elementKinds,
   fieldOf,
   fieldsOf,
+  isInside,
   type NumberField,
+  parseRows,
+  parseSteps,
+  stepsText,
   updateElement,
 } from '../../../src/study/index.ts';
 import { exampleStudy } from '../../study/exampleStudies.ts';
@@ -165,13 +167,13 @@ describe('The slip', () => {
     expect(keys('cable')).toEqual(['lengthM', 'resistanceOhmPerKm', 'reactanceOhmPerKm', 'runs', 'ratedA']);
   });
 
-  it('goes round the origins and keeps note and date', () => {
-    expect(nextOrigin(undefined)).toEqual({ origin: 'nameplate' });
-    expect(nextOrigin({ origin: 'nameplate', note: 'plate photo' })).toEqual({
+  it('keeps note and date when the origin changes, and drops them with it', () => {
+    expect(withOriginWord(undefined, 'nameplate')).toEqual({ origin: 'nameplate' });
+    expect(withOriginWord({ origin: 'nameplate', note: 'plate photo' }, 'measured')).toEqual({
       origin: 'measured',
       note: 'plate photo',
     });
-    expect(nextOrigin({ origin: 'assumed' })).toBeNull();
+    expect(withOriginWord({ origin: 'assumed', date: '2026-01' }, '')).toBeNull();
   });
 
   it('leaves a default out of the file', () => {

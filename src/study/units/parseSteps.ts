@@ -1,4 +1,5 @@
-import { type BankStep, parseQuantity } from '../../study/index.ts';
+import type { BankStep } from '../types.ts';
+import { parseQuantity } from './parseQuantity.ts';
 
 export type ParsedSteps = { ok: true; steps: BankStep[] } | { ok: false; error: string };
 

@@ -1,4 +1,5 @@
-import { type HarmonicRow, parseQuantity } from '../../study/index.ts';
+import type { HarmonicRow } from '../types.ts';
+import { parseQuantity } from './parseQuantity.ts';
 
 export type ParsedRows = { ok: true; rows: HarmonicRow[] } | { ok: false; error: string };
 
