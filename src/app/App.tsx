@@ -7,6 +7,7 @@ import { useCommands } from './commands/useCommands.ts';
 import { CorrectionPlace } from './correction/CorrectionPlace.tsx';
 import { StudyDetails } from './details/StudyDetails.tsx';
 import { DropTarget } from './files/DropTarget.tsx';
+import { FileDrawers } from './files/FileDrawers.tsx';
 import { LeaveDialog } from './files/LeaveDialog.tsx';
 import { NoticeDialog, NoticeLine } from './files/NoticeDialog.tsx';
 import { Header } from './header/Header.tsx';
@@ -46,7 +47,12 @@ export function App() {
       {place !== 'sheet' && <RailConnection />}
       <CommandList commands={commands} open={dialog === 'commands'} onOpenChange={close} />
       <KeyMap commands={commands} open={dialog === 'keys'} onClose={close} />
+<<<<<<< HEAD
       {dialog === 'details' && <StudyDetails firstField={detailsField} onClose={close} />}
+=======
+      {dialog === 'details' && <StudyDetails onClose={close} />}
+      <FileDrawers />
+>>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
       <LeaveDialog />
       <NoticeDialog />
       <DropTarget />

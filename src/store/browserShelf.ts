@@ -1,7 +1,7 @@
 import type { Database } from './database.ts';
 import type { Shelf } from './shelf.ts';
 
-const slotsKept = 6;
+const slotsKept = 8;
 
 /** The shelf in the browser's IndexedDB. */
 export function browserShelf(database: () => Promise<Database>): Shelf {

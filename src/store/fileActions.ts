@@ -22,7 +22,8 @@ type Set = (change: (state: Workbench) => Partial<WorkbenchState>) => void;
 type Get = () => Workbench;
 type FileActions = Pick<WorkbenchActions, 'openText' | 'openFile' | 'saveFile' | 'saveFileAs'>;
 
-function refusal(name: string, findings: Finding[]): Notice {
+/** A file that cannot be read as a study, with everything that is wrong. */
+export function refusal(name: string, findings: Finding[]): Notice {
   const errors = findings.filter((finding) => finding.severity === 'error').length;
   const count = errors === 1 ? 'an error' : `${errors} errors`;
   return { severity: 'error', title: `${name} was not opened: it has ${count}.`, findings };

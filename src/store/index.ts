@@ -1,7 +1,8 @@
 export type { Archive, KeptDocument, KeptRevision } from './archive.ts';
 export { type Autosave, type AutosaveOptions, autosave } from './autosave.ts';
+export { browserFiles } from './browserFiles.ts';
 export { createWorkbench, type WorkbenchStore } from './createWorkbench.ts';
-export type { Files, OpenedFile } from './fileActions.ts';
+export { type Files, type OpenedFile, refusal } from './fileActions.ts';
 export { type FollowOptions, followStudy } from './followStudy.ts';
 export type { History, Revision } from './history.ts';
 export { type KeepRevisionsOptions, keepRevisions, type RevisionKeeper } from './keepRevisions.ts';

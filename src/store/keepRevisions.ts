@@ -52,17 +52,18 @@ export function keepRevisions(
     const known = await archive.revisions(documentId);
     const newest = known[0];
     const same = kept === null && newest && sameData(await archive.revisionStudy(newest.id), study);
+    if (!same) {
+      const revision = revisionOf(documentId, study, words, now());
+      await withRoom(archive, () => archive.putRevision(revision, study));
+      await archive.dropRevisions(revisionsToDrop([revision, ...known], now()));
+    }
     kept = { documentId, study };
-    if (same) return;
-    const revision = revisionOf(documentId, study, words, now());
-    await withRoom(archive, () => archive.putRevision(revision, study));
-    await archive.dropRevisions(revisionsToDrop([revision, ...known], now()));
   }
 
   async function adopt(): Promise<void> {
     const state = store.getState();
     const documents = await archive.documents();
-    for (const { documentId } of documents.slice(documentsKept)) await archive.dropDocument(documentId);
+    for (const { documentId } of documents.slice(documentsKept)) await forget(archive, documentId);
     const same = await sameFile(documents, state);
     if (!same || same.documentId === state.documentId) return;
     store.setState((current) =>
@@ -97,9 +98,13 @@ export function keepRevisions(
       return writing;
     },
     keepAs: async (name) => {
+      waiting.now();
+      await writing;
       const study = settled(store.getState());
       if (!study) return;
       const { documentId, lastEdit } = store.getState();
+      const newest = kept?.study === study ? (await archive.revisions(documentId))[0] : undefined;
+      if (newest?.name === null) return archive.nameRevision(newest.id, name);
       const revision = revisionOf(documentId, study, lastEdit ?? 'opened', now());
       await archive.putDocument(documentOf(store.getState(), study, now()));
       await withRoom(archive, () => archive.putRevision({ ...revision, name }, study));
@@ -139,6 +144,12 @@ function documentOf(state: Workbench, study: Study, at: number): KeptDocument {
     parts: study.elements.length,
     inFile: !isUnsaved(state),
   };
+}
+
+/** Lets an old document go, unless a state of it is kept under a name. */
+async function forget(archive: Archive, documentId: string): Promise<void> {
+  const revisions = await archive.revisions(documentId);
+  if (revisions.every(({ name }) => name === null)) await archive.dropDocument(documentId);
 }
 
 /** The document of the same file: by its handle, or by name and title where the browser gives no handles. */

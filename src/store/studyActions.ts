@@ -96,6 +96,7 @@ function opened(
     savedStudy: fileName === null ? null : study,
     importWarnings: [],
     readOnly: false,
+    notice: null,
     view: openingView(study, state.view),
     answer: null,
     probe: null,

@@ -85,6 +85,11 @@ async function start(restoring: boolean): Promise<{ restored: boolean }> {
   const { restored } = restoring ? await restore(workbench, shelf, slot()) : { restored: false };
   const { flush } = autosave(workbench, shelf, { slot });
   const revisions = keepRevisions(workbench, archive);
+  // The study that is left stays on the shelf with its undo, for when it is gone on with.
+  workbench.subscribe((after, before) => {
+    if (after.documentId === before.documentId || after.openedRevision === before.openedRevision) return;
+    if ((before.study?.elements.length ?? 0) > 0) takeFresh();
+  });
   keeper = revisions;
   const flushAll = () => void Promise.all([flush(), revisions.flush()]);
   addEventListener('pagehide', flushAll);

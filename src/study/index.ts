@@ -31,6 +31,7 @@ export { type CopyEdit, duplicateParts } from './edits/copyParts.ts';
 export { setDrawn, setSymbols } from './edits/drawnEdits.ts';
 export { joinEdits, makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter } from './edits/errorsAfter.ts';
+export { importParts, partsHangingFrom } from './edits/importParts.ts';
 export {
   alongWith,
   busesLosingFeed,
@@ -59,6 +60,7 @@ export {
   removeParts,
 } from './edits/removeParts.ts';
 export { replaceObstacle, replacePart } from './edits/replacePart.ts';
+export { restoreStudy } from './edits/restoreStudy.ts';
 export { setField } from './edits/setField.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {

@@ -1,49 +1,18 @@
 import { useMemo } from 'react';
+import { useStore } from 'zustand';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
-import { newStudy, type Study } from '../../study/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
+<<<<<<< HEAD
 import { originCommands } from '../details/originCommands.ts';
 import { leaveStudy } from '../files/leaveStudy.ts';
 import { openSample } from '../files/openSample.ts';
 import { samples } from '../files/samples.ts';
+=======
+import { fileCommands } from '../files/fileCommands.ts';
+import { recentStudies } from '../files/recentStudies.ts';
+>>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
 import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
 import type { Command } from './command.ts';
-
-function fileCommands(study: Study | null): Command[] {
-  const { openStudy, openFile, saveFile, saveFileAs } = workbench.getState();
-  return [
-    {
-      id: 'study.new',
-      words: 'New study, 50 Hz',
-      run: () => leaveStudy(() => openStudy(newStudy({ title: 'New study', frequencyHz: 50 }))),
-    },
-    {
-      id: 'study.new60',
-      words: 'New study, 60 Hz',
-      run: () => leaveStudy(() => openStudy(newStudy({ title: 'New study', frequencyHz: 60 }))),
-    },
-    { id: 'study.open', words: 'Open a study…', keys: 'Mod+O', run: () => leaveStudy(() => void openFile()) },
-    {
-      id: 'study.save',
-      words: 'Save the study',
-      keys: 'Mod+S',
-      enabled: study !== null,
-      run: () => void saveFile(),
-    },
-    {
-      id: 'study.saveAs',
-      words: 'Save the study as…',
-      keys: 'Mod+Shift+S',
-      enabled: study !== null,
-      run: () => void saveFileAs(),
-    },
-    ...samples.map((sample) => ({
-      id: `sample.${sample.id}`,
-      words: `Sample: ${sample.title}`,
-      run: () => leaveStudy(() => void openSample(sample)),
-    })),
-  ];
-}
 
 function historyCommands(undoing: string | null, redoing: string | null): Command[] {
   const { undo, redo } = workbench.getState();
@@ -99,9 +68,10 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
   const selection = useWorkbench((state: Workbench) => state.view.selection);
   const undoing = useWorkbench(undoWords);
   const redoing = useWorkbench(redoWords);
+  const recent = useStore(recentStudies, (state) => state.documents);
   return useMemo(
     () => [
-      ...fileCommands(study),
+      ...fileCommands(study, recent),
       ...historyCommands(undoing, redoing),
       {
         id: 'study.details',
@@ -116,6 +86,10 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...(study ? caseCommands(study, caseId) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
+<<<<<<< HEAD
     [study, caseId, selection, undoing, redoing, openDialog],
+=======
+    [study, caseId, undoing, redoing, recent, openDialog],
+>>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
   );
 }

@@ -6,6 +6,21 @@ function carriesFile(event: DragEvent): boolean {
   return event.dataTransfer?.types.includes('Files') ?? false;
 }
 
+/** A dropped item as far as browsers let it be written back to. */
+interface HandledItem extends DataTransferItem {
+  getAsFileSystemHandle?(): Promise<FileSystemHandle | null>;
+}
+
+async function handleOf(item: HandledItem | undefined): Promise<FileSystemFileHandle | undefined> {
+  try {
+    const handle = await item?.getAsFileSystemHandle?.();
+    return handle?.kind === 'file' ? (handle as FileSystemFileHandle) : undefined;
+  } catch {
+    // Without a handle the file opens all the same; saving then asks where to.
+    return undefined;
+  }
+}
+
 /** Opens a study file dropped anywhere on the window. */
 export function DropTarget() {
   const [over, setOver] = useState(false);
@@ -24,8 +39,11 @@ export function DropTarget() {
       setOver(false);
       const file = event.dataTransfer?.files[0];
       if (!file) return;
+      // Asked for in the event itself: afterwards the dropped items are gone.
+      const handle = handleOf(event.dataTransfer?.items[0]);
       const text = await file.text();
-      leaveStudy(() => workbench.getState().openText(text, file.name));
+      const known = await handle;
+      leaveStudy(() => workbench.getState().openText(text, file.name, known));
     };
     const dropped = (event: DragEvent) => void drop(event);
     window.addEventListener('dragover', drag);

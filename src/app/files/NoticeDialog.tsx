@@ -1,5 +1,7 @@
 import { Button, Dialog, Heading, Modal, ModalOverlay } from 'react-aria-components';
-import { useWorkbench } from '../../store/index.ts';
+import { useWorkbench, workbench } from '../../store/index.ts';
+import { LookingLine } from './LookingLine.tsx';
+import { ReadOnlyLine } from './ReadOnlyLine.tsx';
 
 /** What the user must read before going on: a refused file with every finding, a failed autosave. */
 export function NoticeDialog() {
@@ -30,24 +32,30 @@ export function NoticeDialog() {
   );
 }
 
-/** A quiet line for what need not interrupt: warnings of a file, a restarted computation. */
+/** Quiet lines for what need not interrupt: another tab at work, a former state, warnings, a restart. */
 export function NoticeLine() {
   const notice = useWorkbench((state) => state.notice);
-  const dismiss = useWorkbench((state) => state.dismissNotice);
+  const { dismissNotice, saveFileAs } = workbench.getState();
   const workerMessage = useWorkbench((state) => state.status.workerMessage);
   const quiet = notice && notice.severity !== 'error' ? notice : null;
-  if (!quiet && !workerMessage) return null;
   return (
-    <div className="notice-line" role="status">
-      {workerMessage && <span>{workerMessage}</span>}
+    <div className="notice-lines">
+      <ReadOnlyLine />
+      <LookingLine />
+      {workerMessage && (
+        <div className="notice-line" role="status">
+          <span>{workerMessage}</span>
+        </div>
+      )}
       {quiet && (
-        <>
+        <div className="notice-line" role="status">
           <span>
             {quiet.title}
             {quiet.findings.length > 0 && ` ${quiet.findings.map((finding) => finding.message).join(' ')}`}
           </span>
-          <Button onPress={dismiss}>Dismiss</Button>
-        </>
+          {quiet.offer === 'save' && <Button onPress={() => void saveFileAs()}>Save to a file</Button>}
+          <Button onPress={dismissNotice}>Dismiss</Button>
+        </div>
       )}
     </div>
   );

@@ -2,6 +2,7 @@ import { useCallback, useState } from 'react';
 import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { type Study, studyInCase } from '../../study/index.ts';
+import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
@@ -94,6 +95,7 @@ export function Paper(props: Props) {
           renderSlip={renderSlip}
         >
           <QuickStart />
+          <Recent />
           <Samples />
         </Drawing>
       )}
