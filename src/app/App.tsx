@@ -4,6 +4,7 @@ import { CommandList } from './commands/CommandList.tsx';
 import { KeyMap } from './commands/KeyMap.tsx';
 import { useCommandKeys } from './commands/useCommandKeys.ts';
 import { useCommands } from './commands/useCommands.ts';
+import { Compare } from './compare/Compare.tsx';
 import { CorrectionPlace } from './correction/CorrectionPlace.tsx';
 import { StudyDetails } from './details/StudyDetails.tsx';
 import { DropTarget } from './files/DropTarget.tsx';
@@ -22,6 +23,8 @@ type OpenDialog = 'commands' | 'keys' | 'details' | null;
 export function App() {
   useTheme();
   const place = useWorkbench((state) => state.view.place);
+  const study = useWorkbench((state) => state.study);
+  const compared = useWorkbench((state) => state.view.compared);
   const [dialog, setDialog] = useState<OpenDialog>(null);
   const openList = useCallback(() => setDialog('commands'), []);
   const [detailsField, setDetailsField] = useState<string | null>(null);
@@ -41,6 +44,7 @@ export function App() {
       <NoticeLine />
       <main className="place">
         {place === 'site' && <SitePlace onDetails={openDetails} />}
+        {place === 'site' && study && compared && <Compare study={study} compared={compared} />}
         {place === 'correction' && <CorrectionPlace />}
         {place === 'sheet' && <SheetConnection />}
       </main>

@@ -23,6 +23,7 @@ export {
   type ThreePhasors,
 } from './phasor/phasorSpectrum.ts';
 export { FrequencyRail, type FrequencyRailProps } from './rail/FrequencyRail.tsx';
+export { ImpedancePair, type ImpedancePairProps } from './rail/ImpedancePair.tsx';
 export type { Injection } from './rail/injections.ts';
 export type { OrderDomain } from './rail/orderAxis.ts';
 export { RailFigure, type RailFigureProps } from './rail/RailFigure.tsx';

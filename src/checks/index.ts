@@ -1,6 +1,14 @@
 export { defaultPresence, type PresenceThresholds } from './CheckContext.ts';
 export { type CapacitorDuty, capacitorDuty } from './capacitorDuty.ts';
 export type { JudgeOptions } from './caseContext.ts';
+export {
+  type ComparedRow,
+  type ComparedValue,
+  comparedText,
+  compareStates,
+  passingInBoth,
+} from './compare/compareStates.ts';
+export type { StateNumbers } from './compare/stateQuantities.ts';
 export { figure, ordinal } from './figure.ts';
 export { type Inflow, inflowAt } from './inflow.ts';
 export { type Check, judgeCase, judgeDuties, judgeStudy } from './judgeCase.ts';

@@ -1,6 +1,17 @@
 import { casesOf, isOn, type Study, studyInCase } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 
+/** Checks of nameplates and settings, said in the first case alone: in another case their absence says nothing. */
+export const nameplateChecks: ReadonlySet<string> = new Set([
+  'background',
+  'controller',
+  'discharge',
+  'feeder',
+  'inrush',
+  'reconnection',
+  'self-excitation',
+]);
+
 const first = new WeakMap<Study, Map<string, string>>();
 
 /**

@@ -8,6 +8,7 @@ import {
   resetCase,
   type Study,
 } from '../../study/index.ts';
+import { comparisonFrom } from '../compare/comparisonFrom.ts';
 import { setCaseForm } from './caseForms.ts';
 
 interface Props {
@@ -19,7 +20,7 @@ interface Props {
 export function CaseActions({ study, caseId }: Props) {
   const item = casesOf(study).find(({ id }) => id === caseId);
   if (!item) return null;
-  const { edit, setCase } = workbench.getState();
+  const { edit, setCase, compareCases } = workbench.getState();
   const duplicate = () => {
     const copy = duplicateCase(study, caseId);
     edit(copy);
@@ -37,6 +38,13 @@ export function CaseActions({ study, caseId }: Props) {
         </button>
         <button type="button" className="small-button" onClick={() => setCaseForm('details')}>
           Name, role…
+        </button>
+        <button
+          type="button"
+          className="small-button"
+          onClick={() => compareCases(comparisonFrom(study, caseId))}
+        >
+          Compare…
         </button>
         <button
           type="button"

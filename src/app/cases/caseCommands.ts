@@ -10,6 +10,7 @@ import {
   type Study,
 } from '../../study/index.ts';
 import type { Command } from '../commands/command.ts';
+import { comparisonFrom } from '../compare/comparisonFrom.ts';
 import { setCaseForm } from './caseForms.ts';
 
 function addAndShow(edit: ReturnType<typeof duplicateCase>): void {
@@ -30,6 +31,12 @@ function toggleMargin(listed: 'cases' | 'findings'): void {
   setMargin(view.margin === listed && view.place === 'site' ? null : listed);
 }
 
+function toggleComparison(study: Study, caseId: string): void {
+  const { view, compareCases, setPlace } = workbench.getState();
+  setPlace('site');
+  compareCases(view.compared && view.place === 'site' ? null : comparisonFrom(study, caseId));
+}
+
 /** What can be done with the operating cases, and the way to each. */
 export function caseCommands(study: Study, caseId: string): Command[] {
   const cases = casesOf(study);
@@ -38,7 +45,7 @@ export function caseCommands(study: Study, caseId: string): Command[] {
   const several = cases.length > 1;
   const { edit } = workbench.getState();
   return [
-    { id: 'case.choose', words: 'Choose a case…', keys: 'C', run: () => setCaseForm('menu') },
+    { id: 'case.choose', words: 'Choose a case…', keys: 'K', run: () => setCaseForm('menu') },
     {
       id: 'case.next',
       words: 'Next case',
@@ -54,9 +61,15 @@ export function caseCommands(study: Study, caseId: string): Command[] {
       run: () => step(study, caseId, -1),
     },
     {
+      id: 'case.compare',
+      words: 'Compare two cases side by side',
+      keys: 'V',
+      run: () => toggleComparison(study, caseId),
+    },
+    {
       id: 'case.list',
       words: 'Cases and what differs in them',
-      keys: 'Shift+D',
+      keys: 'X',
       run: () => toggleMargin('cases'),
     },
     { id: 'findings.list', words: 'Findings about the data', keys: '!', run: () => toggleMargin('findings') },

@@ -28,10 +28,12 @@ export function SitePlace({ onDetails }: { onDetails(field: string | null): void
   const onSubject = useCallback((subject: NoteSubject | null, note: string | null) => {
     setSpoken(subject ? { subject: `${subject.kind}:${subject.id}`, note } : null);
   }, []);
+  // Two cases side by side lie over the paper, which keeps its place meanwhile.
+  const comparing = useWorkbench((state) => state.view.compared !== null);
   if (!study) return null;
   const litNotes = hovered ?? selection.at(-1);
   return (
-    <div className="site">
+    <div className="site" inert={comparing}>
       <Tray armedKind={armedKind} onArm={setArmedKind} />
       <Paper
         study={study}
