@@ -51,12 +51,8 @@ export function App() {
       {place !== 'sheet' && <RailConnection />}
       <CommandList commands={commands} open={dialog === 'commands'} onOpenChange={close} />
       <KeyMap commands={commands} open={dialog === 'keys'} onClose={close} />
-<<<<<<< HEAD
       {dialog === 'details' && <StudyDetails firstField={detailsField} onClose={close} />}
-=======
-      {dialog === 'details' && <StudyDetails onClose={close} />}
       <FileDrawers />
->>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
       <LeaveDialog />
       <NoticeDialog />
       <DropTarget />

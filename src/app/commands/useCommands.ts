@@ -2,15 +2,9 @@ import { useMemo } from 'react';
 import { useStore } from 'zustand';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
-<<<<<<< HEAD
 import { originCommands } from '../details/originCommands.ts';
-import { leaveStudy } from '../files/leaveStudy.ts';
-import { openSample } from '../files/openSample.ts';
-import { samples } from '../files/samples.ts';
-=======
 import { fileCommands } from '../files/fileCommands.ts';
 import { recentStudies } from '../files/recentStudies.ts';
->>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
 import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
 import type { Command } from './command.ts';
 
@@ -86,10 +80,6 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...(study ? caseCommands(study, caseId) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
-<<<<<<< HEAD
-    [study, caseId, selection, undoing, redoing, openDialog],
-=======
-    [study, caseId, undoing, redoing, recent, openDialog],
->>>>>>> f993f37 (Files: recent studies, parts of another study, earlier states to look at and go back to; storage failures and a study in two tabs said with a way on)
+    [study, caseId, selection, undoing, redoing, recent, openDialog],
   );
 }
