@@ -236,11 +236,12 @@ test('a note widens to a lens over the paper, and a verdict leads to its part an
   page,
 }) => {
   const reading = note(page, 'Intake · current from Supply');
-  await reading.hover();
-  await reading.getByRole('button', { name: 'widen' }).click();
+  await reading.getByRole('button', { name: 'What can be done with this note' }).click();
+  await page.getByRole('menuitem', { name: /^Widen to a lens/ }).click();
   await expect(reading).toBeInViewport({ ratio: 0.99 });
   expect((await reading.boundingBox())?.width).toBeGreaterThan(600);
-  await reading.getByRole('button', { name: 'narrow' }).click();
+  await reading.getByRole('button', { name: 'Intake · current from Supply' }).press('l');
+  await expect.poll(async () => (await reading.boundingBox())?.width).toBeLessThan(500);
   await page.keyboard.press('F8');
   await settled(page);
   const verdict = note(page, 'Intake · 11th harmonic current at the PCC');

@@ -1,5 +1,9 @@
+export { FoldMark } from './figure/FoldMark.tsx';
 export type { NoteState } from './notes/NoteFrame.tsx';
-export { NotesColumn, type NotesColumnProps } from './notes/NotesColumn.tsx';
+export { NotesColumn } from './notes/NotesColumn.tsx';
+export type { NotesColumnProps } from './notes/NotesColumnProps.ts';
+export { NotesLetters, type NotesLettersProps } from './notes/NotesLetters.tsx';
+export { PICTURE_WAYS, type PictureWay, type ReadingPicture } from './notes/noteActions.ts';
 export { type NoteSubject, noteLetters, pinKey, pinSubject, subjectKey } from './notes/noteLetters.ts';
 export { readingText, verdictText } from './notes/noteText.ts';
 export type { Reading } from './notes/Reading.ts';
@@ -8,6 +12,7 @@ export { type ReadingNumber, readingNumbers } from './notes/readingNumbers.ts';
 export { VerdictMark } from './notes/VerdictMark.tsx';
 export { VerdictNote, type VerdictNoteProps } from './notes/VerdictNote.tsx';
 export { byMargin, verdictCounts } from './notes/verdictOrder.ts';
+export type { WorstCase } from './notes/verdictWords.ts';
 export { marginWords, sourceWords, VERDICT_MARKS, VERDICT_WORDS } from './notes/verdictWords.ts';
 export type { LitPhasor } from './phasor/PhasorDrawing.tsx';
 export { PhasorFigure, type PhasorFigureProps } from './phasor/PhasorFigure.tsx';

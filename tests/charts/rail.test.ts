@@ -261,6 +261,37 @@ describe('the handle', () => {
     );
   });
 
+  it('never lays its words over the flag of a peak or a current, at any size of the rail', () => {
+    const place = fc.record({
+      kvar: fc.integer({ min: 60, max: 600 }),
+      p: fc.constantFrom(0, 0.0567, 0.07, 0.14),
+      width: fc.integer({ min: 700, max: 2540 }),
+      height: fc.integer({ min: 100, max: 260 }),
+      share: fc.double({ min: 0.02, max: 0.98, noNaN: true }),
+    });
+    const injected = [5, 7, 11, 13, 17, 19, 23, 25].map((h) => ({ h, amps: 200 / h, name: 'drives' }));
+    fc.assert(
+      fc.property(place, ({ kvar, p, width, height, share }) => {
+        const layout = railLayout(width, height, 11);
+        const sizes = { textSize: 12, smallSize: 11 };
+        const inputs = { scan: railScan(kvar, p), frequencyHz: 50, injected };
+        const model = railModel(inputs, FULL, layout, sizes);
+        const written = [
+          ...model.peaks.flatMap((peak) => peak.box ?? []),
+          ...model.injected.flatMap((tick) => tick.words?.box ?? []),
+        ];
+        for (const box of written)
+          expect(boxInside(box, { ...layout.words, height: layout.axisY })).toBe(true);
+        const handle = { x: layout.left + share * (layout.right - layout.left), y: layout.axisY / 2 };
+        const size = { width: 205, height: 23 };
+        const bounds = { ...layout.words, width: layout.width - layout.words.x - 2 };
+        const box = handleLabelBox(handle, size, bounds, written, model.curveHeights);
+        expect(written.filter((one) => boxesMeet(one, box))).toEqual([]);
+      }),
+      { seed: 44, numRuns: 60 },
+    );
+  });
+
   it('moves its words off a flag and stands right of the handle where nothing is in the way', () => {
     const bounds = { x: 0, y: 0, width: 900, height: 110 };
     const size = { width: 190, height: 23 };
@@ -362,6 +393,22 @@ describe('a typed order or frequency', () => {
 });
 
 describe('injected orders', () => {
+  it('carry their currents over their ticks, the largest first, clear of one another and of the curves', () => {
+    const injected = [5, 7, 11, 13, 17, 19, 23, 25, 29, 31].map((h) => ({
+      h,
+      amps: 300 / h,
+      name: 'drives',
+    }));
+    const layout = railLayout(1400, 150, 11);
+    const inputs = { scan: railScan(300, 0), frequencyHz: 50, injected };
+    const model = railModel(inputs, FULL, layout, { textSize: 12, smallSize: 11 });
+    const words = model.injected.flatMap((tick) => tick.words ?? []);
+    expect(words[0]?.text).toBe('60\u00a0A');
+    words.forEach(({ box }, i) => {
+      for (const other of words.slice(i + 1)) expect(boxesMeet(box, other.box)).toBe(false);
+    });
+  });
+
   it('are added by magnitude over the sources and stand as high as their current', () => {
     const orders = injectedOrders([
       { h: 7, amps: 70, name: 'Fans' },

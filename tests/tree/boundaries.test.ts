@@ -11,10 +11,11 @@ const mayImport: Record<string, readonly string[]> = {
   cli: ['study', 'engine', 'checks', 'sizing'],
   worker: ['study', 'engine', 'checks', 'sizing'],
   store: ['study', 'engine', 'checks', 'sizing', 'worker'],
-  drawing: ['study', 'engine', 'checks', 'sizing', 'worker', 'store'],
-  charts: ['study', 'engine', 'checks', 'sizing', 'worker', 'store'],
+  keys: [],
+  drawing: ['study', 'engine', 'checks', 'sizing', 'worker', 'store', 'keys'],
+  charts: ['study', 'engine', 'checks', 'sizing', 'worker', 'store', 'keys'],
   sheet: ['study', 'engine', 'checks', 'sizing', 'worker', 'store', 'drawing', 'charts'],
-  app: ['study', 'engine', 'checks', 'sizing', 'worker', 'store', 'drawing', 'charts', 'sheet'],
+  app: ['study', 'engine', 'checks', 'sizing', 'worker', 'store', 'keys', 'drawing', 'charts', 'sheet'],
 };
 
 /** Packages the pure folders may use: no DOM, no React. */

@@ -10,9 +10,10 @@ import {
   Separator,
   Text,
 } from 'react-aria-components';
+import { shownKeys } from '../../keys/index.ts';
 import { useWorkbench } from '../../store/index.ts';
 import { caseDifferences, casesOf, nameOf, type Study } from '../../study/index.ts';
-import { type Command, shownKeys } from '../commands/command.ts';
+import type { Command } from '../commands/command.ts';
 import { CaseForm } from './CaseForm.tsx';
 import { closeCaseMenu, setCaseForm, useCaseForm } from './caseForms.ts';
 import { NewCaseForm } from './NewCaseForm.tsx';

@@ -13,7 +13,8 @@ import {
   Text,
   useFilter,
 } from 'react-aria-components';
-import { type Command, shownKeys } from './command.ts';
+import { shownKeys } from '../../keys/index.ts';
+import type { Command } from './command.ts';
 
 interface Props {
   commands: readonly Command[];

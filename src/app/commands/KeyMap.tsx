@@ -1,6 +1,7 @@
 import { Button, Dialog, Heading, Modal, ModalOverlay } from 'react-aria-components';
 import { drawingKeys, trayKeys } from '../../drawing/index.ts';
-import { type Command, shownKeys } from './command.ts';
+import { shownKeys } from '../../keys/index.ts';
+import type { Command } from './command.ts';
 
 interface Props {
   commands: readonly Command[];

@@ -1,5 +1,6 @@
 import { useEffect } from 'react';
-import { type Command, matchesKeys } from './command.ts';
+import { matchesKeys } from '../../keys/index.ts';
+import type { Command } from './command.ts';
 
 function typing(target: EventTarget | null): boolean {
   return (

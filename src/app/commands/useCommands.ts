@@ -5,6 +5,7 @@ import { caseCommands } from '../cases/caseCommands.ts';
 import { originCommands } from '../details/originCommands.ts';
 import { fileCommands } from '../files/fileCommands.ts';
 import { recentStudies } from '../files/recentStudies.ts';
+import { panelCommands } from '../panels/panelCommands.ts';
 import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
 import type { Command } from './command.ts';
 
@@ -76,6 +77,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       },
       ...quickStartCommands(study),
       ...viewCommands(),
+      ...panelCommands(),
       ...(study ? originCommands(study, selection) : []),
       ...(study ? caseCommands(study, caseId) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },

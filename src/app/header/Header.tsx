@@ -1,5 +1,6 @@
+import { shownKeys } from '../../keys/index.ts';
 import { CaseMenu } from '../cases/CaseMenu.tsx';
-import { type Command, shownKeys } from '../commands/command.ts';
+import type { Command } from '../commands/command.ts';
 import { FindingsCount } from '../findings/FindingsCount.tsx';
 import { PlaceTabs } from './PlaceTabs.tsx';
 import { StudyMenu } from './StudyMenu.tsx';
@@ -14,15 +15,19 @@ interface Props {
 export function Header({ commands, onCommandList }: Props) {
   return (
     <header className="header">
-      <h1>Varwright</h1>
-      <StudyMenu commands={commands} />
-      <CaseMenu commands={commands} />
+      <div className="header-study">
+        <h1>Varwright</h1>
+        <StudyMenu commands={commands} />
+        <CaseMenu commands={commands} />
+      </div>
       <PlaceTabs />
-      <FindingsCount />
-      <VerdictCounts />
-      <button type="button" className="command-key" onClick={onCommandList} aria-label="Command list">
-        {shownKeys('Mod+K')}
-      </button>
+      <div className="header-counts">
+        <FindingsCount />
+        <VerdictCounts />
+        <button type="button" className="command-key" onClick={onCommandList} aria-label="Command list">
+          {shownKeys('Mod+K')}
+        </button>
+      </div>
     </header>
   );
 }

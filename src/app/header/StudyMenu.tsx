@@ -11,8 +11,9 @@ import {
   Text,
 } from 'react-aria-components';
 import { useStore } from 'zustand';
+import { shownKeys } from '../../keys/index.ts';
 import { isUnsaved, useWorkbench } from '../../store/index.ts';
-import { type Command, shownKeys } from '../commands/command.ts';
+import type { Command } from '../commands/command.ts';
 import { recentStudies, recentWords, refreshRecent } from '../files/recentStudies.ts';
 import { samples } from '../files/samples.ts';
 

@@ -2,6 +2,7 @@ import { workbench } from '../../store/index.ts';
 import { newStudy, type Study } from '../../study/index.ts';
 import type { Command } from '../commands/command.ts';
 import { leaveStudy } from '../files/leaveStudy.ts';
+import { setPanels } from '../panels/panelStore.ts';
 import { listAssumptions, quickAnswers } from './quickAnswers.ts';
 
 function isEmpty(study: Study | null): boolean {
@@ -35,6 +36,7 @@ export function quickStartCommands(study: Study | null): Command[] {
       enabled: study !== null && study.elements.length > 0,
       run: () => {
         workbench.getState().setPlace('site');
+        setPanels({ notes: 'open' });
         listAssumptions(true);
       },
     },

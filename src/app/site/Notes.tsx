@@ -1,9 +1,11 @@
-import { useCallback, useMemo } from 'react';
-import { type NoteSubject, NotesColumn } from '../../charts/index.ts';
+import { useCallback, useMemo, useState } from 'react';
+import { type NoteSubject, NotesColumn, NotesLetters } from '../../charts/index.ts';
 import type { Verdict } from '../../checks/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { busName, casesOf, elementName, nameOf, type Pin, type Study, setPins } from '../../study/index.ts';
+import { setPanels } from '../panels/panelStore.ts';
 import { readingOf } from './readingOf.ts';
+import { worstCases } from './worstCases.ts';
 
 const noPins: readonly Pin[] = [];
 const noVerdicts: readonly Verdict[] = [];
@@ -12,6 +14,7 @@ interface Props {
   study: Study;
   letters: ReadonlyMap<string, string>;
   litSubject: NoteSubject | null;
+  folded: boolean;
   onSubject(subject: NoteSubject | null, noteKey: string | null): void;
 }
 
@@ -23,17 +26,23 @@ function jumpTo({ subject, order }: Verdict): void {
   if (order !== undefined) setOrder(order);
 }
 
-/** The notes column on the present answer. */
-export function Notes({ study, letters, litSubject, onSubject }: Props) {
+function copy(text: string): void {
+  void navigator.clipboard.writeText(text);
+}
+
+/** The notes column on the present answer, or its letters where it is folded. */
+export function Notes({ study, letters, litSubject, folded, onSubject }: Props) {
   const answer = useWorkbench((state) => state.answer);
+  const allVerdicts = useWorkbench((state) => state.allVerdicts);
+  const revision = useWorkbench((state) => state.revision);
+  const caseId = useWorkbench((state) => state.view.caseId);
   const stale = useWorkbench((state) => state.answer?.revision !== state.revision);
   const order = useWorkbench((state) => state.view.order);
   const timeTurn = useWorkbench((state) => state.view.timeCursor);
-  const setTimeCursor = useWorkbench((state) => state.setTimeCursor);
-  const setOrder = useWorkbench((state) => state.setOrder);
-  const togglePin = useWorkbench((state) => state.togglePin);
-  const edit = useWorkbench((state) => state.edit);
+  const { setTimeCursor, setOrder, togglePin, edit } = workbench.getState();
+  const [firstNote, setFirstNote] = useState<string | null>(null);
   const pins = study.view?.pins ?? noPins;
+  const verdicts = answer?.verdicts ?? noVerdicts;
   const solution = answer?.solution;
   const readings = useMemo(
     () => (solution ? pins.map((pin) => readingOf(study, solution, pin)) : []),
@@ -51,24 +60,38 @@ export function Notes({ study, letters, litSubject, onSubject }: Props) {
     },
     [study],
   );
+  const worst = useMemo(
+    () => worstCases(allVerdicts, revision, caseId, caseName),
+    [allVerdicts, revision, caseId, caseName],
+  );
+  const shared = { readings, verdicts, letters, nameOf: subjectName, stale, onSubject };
+  if (folded) {
+    const open = (note: string | null) => {
+      setFirstNote(note);
+      setPanels({ notes: 'open' });
+    };
+    return <NotesLetters {...shared} onOpen={open} />;
+  }
   return (
     <NotesColumn
-      readings={readings}
-      verdicts={answer?.verdicts ?? noVerdicts}
-      letters={letters}
-      nameOf={subjectName}
+      {...shared}
       caseNameOf={caseName}
+      worstOf={(verdict) => worst.get(verdict.key)}
       litSubject={litSubject}
+      judging={answer !== null && answer.verdictsRevision === null}
+      firstNote={firstNote}
       order={order}
       timeTurn={timeTurn}
-      stale={stale}
       onOrder={setOrder}
       onTimeTurn={setTimeCursor}
-      onSubject={onSubject}
       onJump={jumpTo}
       onUnpin={togglePin}
       onReorder={(next) => edit(setPins(study, next))}
-      onCopy={(text) => void navigator.clipboard.writeText(text)}
+      onCopy={copy}
+      onFold={() => {
+        setFirstNote(null);
+        setPanels({ notes: 'letters' });
+      }}
     />
   );
 }

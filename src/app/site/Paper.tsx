@@ -1,10 +1,11 @@
-import { useCallback, useState } from 'react';
+import { useCallback } from 'react';
 import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
 import { type Study, studyInCase } from '../../study/index.ts';
 import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
+import { setPanels, useOutlined } from '../panels/panelStore.ts';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
 import { RemovalDialog } from './RemovalDialog.tsx';
 import { removeChosen } from './removal.ts';
@@ -43,7 +44,7 @@ export function Paper(props: Props) {
   const openedRevision = useWorkbench((state) => state.openedRevision);
   const said = useWorkbench((state) => state.said);
   const { edit, say, setFocusBus, setReadingMode } = workbench.getState();
-  const [outlined, setOutlined] = useState(false);
+  const outlined = useOutlined();
   const verdicts = answer?.verdicts ?? noVerdicts;
   const ofCase = answer?.caseId === view.caseId;
   const renderSlip = useCallback(
@@ -104,7 +105,7 @@ export function Paper(props: Props) {
           type="button"
           className="outline-toggle"
           aria-pressed={outlined}
-          onClick={() => setOutlined(!outlined)}
+          onClick={() => setPanels({ outline: !outlined })}
         >
           {outlined ? 'as a drawing' : 'as a list'}
         </button>

@@ -2,6 +2,8 @@ import { useMemo } from 'react';
 import { FrequencyRail, type Probe } from '../../charts/index.ts';
 import { freshAnswer, isStale, useWorkbench, type Workbench } from '../../store/index.ts';
 import { busName } from '../../study/index.ts';
+import { RailSplitter } from '../panels/panelSplitters.tsx';
+import { setPanels, usePanelPlaces } from '../panels/panelStore.ts';
 import { injectionsOf } from './injectionsOf.ts';
 
 /** The exact impedance under the handle, where the newest probe speaks of it. */
@@ -34,9 +36,11 @@ export function RailConnection() {
       ),
     [fresh],
   );
+  const place = usePanelPlaces().rail;
   if (!study || study.buses.length === 0) return null;
   return (
-    <div className="rail-place">
+    <div className="rail-place" id="rail-panel">
+      <RailSplitter place={place} />
       <FrequencyRail
         busName={busName(study, focusBus)}
         scan={scan}
@@ -49,7 +53,10 @@ export function RailConnection() {
         sequence="positive"
         stale={stale}
         peakVerdicts={peakVerdicts}
+        height={place.size}
+        folded={place.show === 'strip'}
         onOrder={setOrder}
+        onFold={(folded) => setPanels({ rail: folded ? 'strip' : 'open' })}
       />
     </div>
   );

@@ -1,7 +1,11 @@
-import { useCallback, useState } from 'react';
+import { type CSSProperties, useCallback, useState } from 'react';
 import type { NoteSubject } from '../../charts/index.ts';
-import { readSubject, type Subject, Tray, type TrayKind } from '../../drawing/index.ts';
+import { readSubject, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench } from '../../store/index.ts';
+import { LETTERS, type PanelPlaces } from '../panels/panelPlaces.ts';
+import { NotesSplitter } from '../panels/panelSplitters.tsx';
+import { usePanelPlaces } from '../panels/panelStore.ts';
+import { TrayPanel } from '../panels/TrayPanel.tsx';
 import { Assumptions } from '../quickstart/Assumptions.tsx';
 import { Leader } from './Leader.tsx';
 import { Notes } from './Notes.tsx';
@@ -30,11 +34,13 @@ export function SitePlace({ onDetails }: { onDetails(field: string | null): void
   }, []);
   // Two cases side by side lie over the paper, which keeps its place meanwhile.
   const comparing = useWorkbench((state) => state.view.compared !== null);
+  const places = usePanelPlaces();
   if (!study) return null;
+  const folded = places.notes.show === 'letters';
   const litNotes = hovered ?? selection.at(-1);
   return (
-    <div className="site" inert={comparing}>
-      <Tray armedKind={armedKind} onArm={setArmedKind} />
+    <div className="site" inert={comparing} style={siteColumns(places)}>
+      <TrayPanel place={places.tray} armedKind={armedKind} onArm={setArmedKind} />
       <Paper
         study={study}
         letters={letters}
@@ -44,14 +50,24 @@ export function SitePlace({ onDetails }: { onDetails(field: string | null): void
         onHover={setHovered}
         onDetails={onDetails}
       />
-      <Assumptions study={study} />
-      <Notes
-        study={study}
-        letters={letters}
-        litSubject={(litNotes && readSubject(litNotes)) || null}
-        onSubject={onSubject}
-      />
+      <NotesSplitter place={places.notes} />
+      <div className="notes-panel" id="notes-panel">
+        {!folded && <Assumptions study={study} />}
+        <Notes
+          study={study}
+          letters={letters}
+          litSubject={(litNotes && readSubject(litNotes)) || null}
+          folded={folded}
+          onSubject={onSubject}
+        />
+      </div>
       {spoken?.note && <Leader subject={spoken.subject} note={spoken.note} />}
     </div>
   );
+}
+
+/** Widths of tray and notes as custom properties, so that a lens knows how far it may reach. */
+function siteColumns({ tray, notes }: PanelPlaces): CSSProperties {
+  const notesWidth = notes.show === 'letters' ? LETTERS : notes.size;
+  return { '--tray': `${tray.width}px`, '--notes': `${notesWidth}px` } as CSSProperties;
 }

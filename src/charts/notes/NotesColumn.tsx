@@ -1,111 +1,81 @@
-import { type KeyboardEvent, useMemo, useRef, useState } from 'react';
+import { type FocusEvent, useEffect, useMemo, useRef, useState } from 'react';
 import type { Verdict, VerdictWord } from '../../checks/index.ts';
-import type { Pin } from '../../study/index.ts';
-import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
-import { columnHandlers } from './columnHandlers.ts';
-import { movedPin } from './movedPin.ts';
-import type { NoteState } from './NoteFrame.tsx';
-import { NotesFilter } from './NotesFilter.tsx';
+import { useMeasuredSize } from '../figure/useMeasuredSize.ts';
+import { columnActions } from './columnActions.ts';
+import { columnHandlers, focusNote } from './columnHandlers.ts';
+import { NoteMenu } from './NoteMenu.tsx';
+import type { NotesColumnProps } from './NotesColumnProps.ts';
+import { NotesHead } from './NotesHead.tsx';
 import { type NoteSubject, pinKey, pinSubject, subjectKey } from './noteLetters.ts';
+import { openReadings, openVerdicts } from './openAtFirst.ts';
 import type { Reading } from './Reading.ts';
 import { ReadingNote } from './ReadingNote.tsx';
 import { useLatest } from './useLatest.ts';
 import { type NoteDrag, useNoteDrag } from './useNoteDrag.ts';
+import { useNoteStates } from './useNoteStates.ts';
 import { VerdictRow } from './VerdictRow.tsx';
 import { groupedVerdicts, type VerdictGrouping, verdictCounts } from './verdictOrder.ts';
 
-export interface NotesColumnProps {
-  readings: readonly Reading[];
-  verdicts: readonly Verdict[];
-  /** Letters by `subjectKey`, from `noteLetters`. */
-  letters: ReadonlyMap<string, string>;
-  nameOf(subject: NoteSubject): string;
-  caseNameOf?(caseId: string): string;
-  /** Subject lit elsewhere (hovered or selected on the drawing). */
-  litSubject?: NoteSubject | null;
-  order: number;
-  timeTurn: number;
-  /** Results belong to an earlier state of the study. */
-  stale: boolean;
-  onOrder?(order: number): void;
-  onTimeTurn?(timeTurn: number): void;
-  /** A note is hovered or focused; null when none is. For the leader and the light on the part. */
-  onSubject?(subject: NoteSubject | null, noteKey: string | null): void;
-  onJump?(verdict: Verdict): void;
-  onTry?(verdict: Verdict): void;
-  onUnpin?(pin: Pin): void;
-  /** The pins in a new order. */
-  onReorder?(pins: Pin[]): void;
-  onCopy?(text: string): void;
-  onLit?(lit: LitPhasor | null, reading: Reading): void;
-}
-
 const FIRST_SHOWN: ReadonlySet<VerdictWord> = new Set(['fail', 'watch', 'unknown']);
+
+const FIRST_SIZE = { width: 320, height: 640 };
+/** From this width on readings and verdicts stand side by side, as the style sheet has it. */
+const BESIDE = 580;
 
 /** The notes column: pinned readings first, then verdicts; every note tied to its part by a letter. */
 export function NotesColumn(props: NotesColumnProps) {
   const { readings, verdicts, nameOf } = props;
-  const [states, setStates] = useState<ReadonlyMap<string, NoteState>>(new Map());
   const [shown, setShown] = useState(FIRST_SHOWN);
   const [grouping, setGrouping] = useState<VerdictGrouping>('margin');
   const [focused, setFocused] = useState<string | null>(null);
+  const [menu, setMenu] = useState<{ key: string; anchor: HTMLElement } | null>(null);
   const column = useRef<HTMLElement>(null);
+  const size = useMeasuredSize(column, FIRST_SIZE);
   const counts = useMemo(() => verdictCounts(verdicts), [verdicts]);
   const groups = useMemo(
     () => groupedVerdicts(verdicts, shown, grouping, (verdict) => nameOf(verdict.subject)),
     [verdicts, shown, grouping, nameOf],
   );
   const listed = groups.flatMap((group) => group.verdicts);
-  const keys = [...readings.map((one) => pinKey(one.pin)), ...listed.map((one) => one.key)];
+  const readingKeys = readings.map((one) => pinKey(one.pin));
+  const keys = [...readingKeys, ...listed.map((one) => one.key)];
   const tabStop = focused !== null && keys.includes(focused) ? focused : (keys[0] ?? null);
-  const firstFail = listed[0]?.verdict === 'fail' ? listed[0].key : null;
-  const pinned = new Set(readings.map((one) => pinKey(one.pin)));
-  const openFirst = (key: string): NoteState => (pinned.has(key) || key === firstFail ? 'card' : 'line');
-  const stateOf = (key: string, otherwise: NoteState) => states.get(key) ?? otherwise;
-  const setState = (key: string, state: NoteState) => setStates(new Map(states).set(key, state));
+  const opened = new Set([
+    ...readingKeys.slice(0, openReadings(size.height)),
+    ...openVerdicts(listed, size.width >= BESIDE),
+  ]);
+  const states = useNoteStates(
+    (key) => (opened.has(key) ? 'card' : 'line'),
+    (key) => (key.startsWith('voltage') ? 'spectrum' : 'course'),
+  );
+
+  const { actionsOf, moveReading } = columnActions(props, listed, states);
+  const { drag, handlersOf } = useNoteDrag(column, readingKeys, moveReading);
+  const letterOf = (subject: NoteSubject) => props.letters.get(subjectKey(subject)) ?? '';
 
   const live = useLatest({
     keys,
+    actionsOf,
     setFocused,
-    toggle: (key: string) => setState(key, stateOf(key, openFirst(key)) === 'line' ? 'card' : 'line'),
+    toggle: states.toggle,
+    openMenu: (key: string, anchor: HTMLElement) => setMenu({ key, anchor }),
     onSubject: props.onSubject,
   });
   const handlers = useMemo(() => columnHandlers(live, column), [live]);
   const isLit = (subject: NoteSubject) =>
     props.litSubject ? subjectKey(props.litSubject) === subjectKey(subject) : false;
-  const letterOf = (subject: NoteSubject) => props.letters.get(subjectKey(subject)) ?? '';
+  useFirstNote(column, props.firstNote ?? null, states.open);
 
-  const readingKeys = readings.map((one) => pinKey(one.pin));
-  const moveReading = (key: string, by: number) => {
-    const moved = movedPin(
-      readings.map((one) => one.pin),
-      readingKeys.indexOf(key),
-      by,
-    );
-    if (moved) props.onReorder?.(moved);
-  };
-  const { drag, handlersOf } = useNoteDrag(column, readingKeys, moveReading);
-
-  const onReadingKey = (reading: Reading, event: KeyboardEvent<HTMLElement>) => {
-    const key = pinKey(reading.pin);
-    if (event.altKey && isVertical(event.key)) moveReading(key, event.key === 'ArrowUp' ? -1 : 1);
-    else if (event.key === 'Delete') props.onUnpin?.(reading.pin);
-    else {
-      handlers.walk(key, event);
-      return;
-    }
-    event.preventDefault();
-  };
   const readingNote = (reading: Reading) => {
     const key = pinKey(reading.pin);
     const subject = pinSubject(reading.pin);
-    const state = stateOf(key, 'card');
     return (
       <ReadingNote
         key={key}
         reading={reading}
         letter={letterOf(subject)}
-        state={state}
+        state={states.stateOf(key)}
+        face={states.faceOf(key)}
         lit={isLit(subject)}
         tabStop={key === tabStop}
         dropMark={dropMark(drag, readingKeys, key)}
@@ -114,14 +84,12 @@ export function NotesColumn(props: NotesColumnProps) {
         timeTurn={props.timeTurn}
         onOrder={props.onOrder}
         onTimeTurn={props.onTimeTurn}
-        onCopy={props.onCopy}
         onToggle={() => handlers.toggle(key)}
         onHover={(hovered) => handlers.hover(key, subject, hovered)}
         onFocus={() => handlers.focus(key, subject)}
-        onWiden={() => setState(key, state === 'lens' ? 'card' : 'lens')}
-        onUnpin={props.onUnpin && (() => props.onUnpin?.(reading.pin))}
+        onMenu={(anchor) => handlers.menu(key, anchor)}
         onLit={props.onLit && ((lit) => props.onLit?.(lit, reading))}
-        onKeyDown={(event) => onReadingKey(reading, event)}
+        onKeyDown={(event) => handlers.press(key, event)}
       />
     );
   };
@@ -132,42 +100,73 @@ export function NotesColumn(props: NotesColumnProps) {
       subjectName={nameOf(verdict.subject)}
       letter={letterOf(verdict.subject)}
       caseName={props.caseNameOf?.(verdict.caseId)}
-      folded={stateOf(verdict.key, openFirst(verdict.key)) === 'line'}
+      worst={props.worstOf?.(verdict)}
+      folded={states.stateOf(verdict.key) === 'line'}
       lit={isLit(verdict.subject)}
       tabStop={verdict.key === tabStop}
       handlers={handlers}
-      onCopy={props.onCopy}
       onJump={props.onJump}
       onTry={props.onTry}
       onOrder={props.onOrder}
     />
   );
+  const leave = (event: FocusEvent) => {
+    if (!event.currentTarget.contains(event.relatedTarget)) props.onSubject?.(null, null);
+  };
   return (
-    <section ref={column} className={props.stale ? 'notes stale' : 'notes'} aria-label="Notes">
+    <section ref={column} className={props.stale ? 'notes stale' : 'notes'} aria-label="Notes" onBlur={leave}>
+      <NotesHead
+        counts={counts}
+        shown={shown}
+        grouping={grouping}
+        onShown={setShown}
+        onGrouping={setGrouping}
+        onFold={props.onFold}
+      />
       <div className="notes-list">
-        {readings.map(readingNote)}
-        {readings.length === 0 && (
-          <p className="chart-hint">
-            No readings pinned. Select a busbar or a part and pin its voltage or current to watch it here.
-          </p>
-        )}
-        <NotesFilter
-          counts={counts}
-          shown={shown}
-          grouping={grouping}
-          onShown={setShown}
-          onGrouping={setGrouping}
-        />
-        {groups.map((group) => (
-          <div key={group.title} className="notes-group">
-            {group.title && <h3>{group.title}</h3>}
-            {group.verdicts.map(verdictNote)}
-          </div>
-        ))}
-        {listed.length === 0 && <p className="chart-hint">{emptyWords(verdicts.length)}</p>}
+        <div className="notes-readings">
+          {readings.map(readingNote)}
+          {readings.length === 0 && (
+            <p className="chart-hint">
+              Nothing is watched yet. Open a busbar or a part and pin its voltage or current: its phasors,
+              waveform and spectrum stand here.
+            </p>
+          )}
+        </div>
+        <div className="notes-verdicts">
+          {groups.map((group) => (
+            <div key={group.title} className="notes-group">
+              {group.title && <h3>{group.title}</h3>}
+              {group.verdicts.map(verdictNote)}
+            </div>
+          ))}
+          {listed.length === 0 && <p className="chart-hint">{emptyWords(counts, props.judging ?? false)}</p>}
+        </div>
       </div>
+      {menu && (
+        <NoteMenu
+          name="What can be done with this note"
+          actions={actionsOf(menu.key)}
+          anchor={menu.anchor}
+          onClose={() => setMenu(null)}
+        />
+      )}
     </section>
   );
+}
+
+/** Opens a note chosen before the column was there and gives it the keyboard. */
+function useFirstNote(
+  column: React.RefObject<HTMLElement | null>,
+  key: string | null,
+  open: (key: string) => void,
+) {
+  const opening = useLatest(open);
+  useEffect(() => {
+    if (key === null) return;
+    opening.current(key);
+    focusNote(column.current, key);
+  }, [key, column, opening]);
 }
 
 function dropMark(drag: NoteDrag | null, keys: readonly string[], key: string) {
@@ -177,12 +176,12 @@ function dropMark(drag: NoteDrag | null, keys: readonly string[], key: string) {
   return drag.by < 0 ? 'drop-before' : 'drop-after';
 }
 
-function isVertical(key: string): boolean {
-  return key === 'ArrowUp' || key === 'ArrowDown';
-}
-
-function emptyWords(total: number): string {
-  return total === 0
-    ? 'No verdicts yet: they appear as soon as the study has a supply and something to judge.'
-    : 'No verdict of the chosen kinds. Switch the counts above to list the others.';
+function emptyWords(counts: Record<VerdictWord, number>, judging: boolean): string {
+  const { pass, ...others } = counts;
+  const left = Object.values(others).reduce((sum, count) => sum + count, 0);
+  if (pass + left === 0 && judging) return 'Judging this case.';
+  if (pass + left === 0)
+    return 'Verdicts appear here as soon as a supply feeds something to judge: a bank, a drive, a busbar with a limit.';
+  if (left === 0) return `All ${pass} checks pass. The ✓ above lists them.`;
+  return 'No verdict of the kinds chosen above.';
 }

@@ -1,17 +1,17 @@
 import { type HTMLAttributes, memo, useMemo, useState } from 'react';
-import { joinParts } from '../figure/quantityParts.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
-import { PhasorView } from '../phasor/PhasorView.tsx';
+import { PhasorTable, PhasorView } from '../phasor/PhasorView.tsx';
 import { phasorsAt, reversedSpectrum } from '../phasor/phasorSpectrum.ts';
 import { SpectrumView } from '../spectrum/SpectrumView.tsx';
 import { spectrumBars } from '../spectrum/spectrumBars.ts';
 import { WaveformView } from '../waveform/WaveformView.tsx';
 import type { WaveSettings } from '../waveform/waveModel.ts';
+import { cardNumbers, headNumber, type ReadingFace } from './cardNumbers.ts';
 import { NoteFrame, type NoteHandlers, type NoteState } from './NoteFrame.tsx';
 import { pinKey } from './noteLetters.ts';
 import { readingText } from './noteText.ts';
 import type { Reading } from './Reading.ts';
-import { ReadingNumbers } from './ReadingNumbers.tsx';
+import { NumberParts, ReadingNumbers } from './ReadingNumbers.tsx';
 import { type ReadingNumber, readingNumbers, worstThd } from './readingNumbers.ts';
 
 export interface ReadingNoteProps extends NoteHandlers {
@@ -29,8 +29,8 @@ export interface ReadingNoteProps extends NoteHandlers {
   timeTurn: number;
   onOrder?: ((order: number) => void) | undefined;
   onTimeTurn?: ((timeTurn: number) => void) | undefined;
-  onWiden?: (() => void) | undefined;
-  onUnpin?: (() => void) | undefined;
+  /** Which picture the card shows. */
+  face: ReadingFace;
   /** A phasor is pointed at: its part may be lit on the drawing. */
   onLit?: ((lit: LitPhasor | null) => void) | undefined;
 }
@@ -40,59 +40,37 @@ const LENS_WAVE: WaveSettings = { content: 'all', periods: 1, phases: 'all' };
 
 /** One pinned quantity: phasors, waveform or spectrum and its numbers; as a line, a card or a lens. */
 export const ReadingNote = memo(function ReadingNote(props: ReadingNoteProps) {
-  const { reading, letter, state } = props;
+  const { reading, letter } = props;
   const numbers = useMemo(() => readingNumbers(reading), [reading]);
-  const [face, setFace] = useState<'course' | 'spectrum'>(
-    reading.pin.quantity === 'voltage' ? 'spectrum' : 'course',
-  );
-  const other = face === 'course' ? 'spectrum' : 'course';
+  const head = headNumber(numbers);
   return (
     <NoteFrame
       {...props}
       noteKey={pinKey(reading.pin)}
       className={props.dropMark ? `reading ${props.dropMark}` : 'reading'}
-      title={state === 'line' ? lineTitle(reading, numbers) : reading.title}
+      title={reading.title}
+      figure={
+        head && (
+          <span title={head.formula}>
+            <NumberParts number={{ ...head, words: undefined }} />
+          </span>
+        )
+      }
       lit={props.lit ?? false}
       tabStop={props.tabStop ?? true}
       text={() => readingText(reading, letter)}
-      actions={
-        <>
-          {state === 'card' && (
-            <button type="button" onClick={() => setFace(other)}>
-              {other === 'course' ? 'phasors' : 'spectrum'}
-            </button>
-          )}
-          {props.onWiden && (
-            <button type="button" aria-pressed={state === 'lens'} onClick={props.onWiden}>
-              {state === 'lens' ? 'narrow' : 'widen'}
-            </button>
-          )}
-          {props.onUnpin && (
-            <button type="button" title="Take this reading off the column (Delete)" onClick={props.onUnpin}>
-              unpin
-            </button>
-          )}
-        </>
-      }
     >
       {reading.absent ? (
         <p className="chart-hint">{reading.absent}</p>
       ) : (
-        <ReadingBody {...props} numbers={numbers} face={face} />
+        <ReadingBody {...props} numbers={numbers} />
       )}
     </NoteFrame>
   );
 });
 
-/** Title and the one number a folded note shows. */
-function lineTitle(reading: Reading, numbers: readonly ReadingNumber[]): string {
-  const first = numbers.find((one) => one.label === 'I' || one.label === 'U');
-  return first ? `${reading.title} · ${joinParts(first.parts)}` : reading.title;
-}
-
 interface ReadingBodyProps extends ReadingNoteProps {
   numbers: readonly ReadingNumber[];
-  face: 'course' | 'spectrum';
 }
 
 function ReadingBody(props: ReadingBodyProps) {
@@ -109,16 +87,19 @@ function ReadingBody(props: ReadingBodyProps) {
     setLit(next);
     props.onLit?.(next);
   };
+  const voltageNow = reading.voltage && phasorsAt(reading.voltage, order);
+  const currentNow = current && phasorsAt(current, order);
+  const magnitudesOnly = reading.summation === 'alpha' && order > 1;
   const course = (
     <div className="reading-course">
       <PhasorView
-        voltage={reading.voltage && phasorsAt(reading.voltage, order)}
-        current={current && phasorsAt(current, order)}
+        voltage={voltageNow}
+        current={currentNow}
         order={order}
         size={size}
         timeTurn={timeTurn}
         anglesUnknown={size === 'lens' && (reading.anglesUnknown[order - 1] ?? false)}
-        magnitudesOnly={reading.summation === 'alpha' && order > 1}
+        magnitudesOnly={magnitudesOnly}
         lit={lit}
         onLit={showLit}
       />
@@ -138,11 +119,24 @@ function ReadingBody(props: ReadingBodyProps) {
       />
     </div>
   );
+  if (size === 'small') {
+    return (
+      <>
+        {face === 'course' ? course : <ReadingSpectrum {...props} size={size} />}
+        <ReadingNumbers numbers={cardNumbers(reading, numbers, face)} />
+      </>
+    );
+  }
   return (
     <>
-      {(size === 'lens' || face === 'course') && course}
-      {(size === 'lens' || face === 'spectrum') && <ReadingSpectrum {...props} size={size} />}
-      <ReadingNumbers numbers={numbers} />
+      {course}
+      <div className="reading-details">
+        <div>
+          {!magnitudesOnly && <PhasorTable voltage={voltageNow} current={currentNow} />}
+          <ReadingNumbers numbers={numbers} />
+        </div>
+        <ReadingSpectrum {...props} size={size} />
+      </div>
     </>
   );
 }

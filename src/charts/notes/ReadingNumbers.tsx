@@ -21,12 +21,22 @@ function NumberRow({ numbers }: { numbers: readonly ReadingNumber[] }) {
         <div key={one.label} title={one.formula}>
           <dt>{one.label}</dt>
           <dd>
-            {one.parts.number}
-            {one.parts.unit && <span className="unit"> {one.parts.unit}</span>}
-            {one.words && <span className="words"> {one.words}</span>}
+            <NumberParts number={one} />
           </dd>
         </div>
       ))}
     </dl>
+  );
+}
+
+/** A number, its unit in lighter ink, and the words beside it. */
+export function NumberParts({ number }: { number: ReadingNumber }) {
+  const { parts, words } = number;
+  return (
+    <>
+      {parts.number}
+      {parts.unit && <span className="unit"> {parts.unit}</span>}
+      {words && <span className="words"> {words}</span>}
+    </>
   );
 }

@@ -1,15 +1,19 @@
 import type { Verdict } from '../../checks/index.ts';
+import { Equation } from './Equation.tsx';
 import { NoteFrame, type NoteHandlers } from './NoteFrame.tsx';
 import { verdictText } from './noteText.ts';
 import { VerdictMark } from './VerdictMark.tsx';
 import {
   limitValue,
   marginWords,
-  sourceWords,
+  shortSourceWords,
   VERDICT_WORDS,
+  valueAgainstLimit,
   verdictHeadline,
   verdictValue,
+  type WorstCase,
   withoutCorrectionWords,
+  worstWords,
 } from './verdictWords.ts';
 
 export interface VerdictNoteProps extends NoteHandlers {
@@ -17,8 +21,10 @@ export interface VerdictNoteProps extends NoteHandlers {
   /** Name of the part or busbar judged. */
   subjectName: string;
   letter: string;
-  /** The case it was judged in, where several are shown. */
+  /** The case it was judged in. */
   caseName?: string | undefined;
+  /** The case in which this check ends worst, where all are judged. */
+  worst?: WorstCase | undefined;
   folded: boolean;
   lit?: boolean;
   tabStop?: boolean;
@@ -31,15 +37,18 @@ export interface VerdictNoteProps extends NoteHandlers {
 
 /** One verdict: mark and headline; opened, its working, source and what would mend it. */
 export function VerdictNote(props: VerdictNoteProps) {
-  const { verdict, subjectName } = props;
+  const { verdict, subjectName, folded } = props;
+  const headline = verdictHeadline(verdict, subjectName);
   return (
     <NoteFrame
       {...props}
       noteKey={verdict.key}
-      state={props.folded ? 'line' : 'card'}
+      state={folded ? 'line' : 'card'}
       className={`verdict verdict-${verdict.verdict}`}
       mark={<VerdictMark verdict={verdict.verdict} />}
-      title={verdictHeadline(verdict, subjectName)}
+      title={folded ? `${subjectName} · ${verdict.title}` : headline}
+      name={headline}
+      figure={folded && <span title={headline}>{valueAgainstLimit(verdict)}</span>}
       lit={props.lit ?? false}
       tabStop={props.tabStop ?? true}
       text={() => verdictText(verdict, subjectName, props.caseName)}
@@ -50,54 +59,71 @@ export function VerdictNote(props: VerdictNoteProps) {
 }
 
 function VerdictBody(props: VerdictNoteProps) {
-  const { verdict, caseName, onJump, onOrder, onTry } = props;
-  const { order, mend } = verdict;
-  const without = withoutCorrectionWords(verdict);
+  const { verdict, worst } = props;
+  const said = [
+    worst && worstWords(verdict, worst),
+    ...verdict.remarks,
+    withoutCorrectionWords(verdict),
+  ].filter((words) => typeof words === 'string');
   const word = verdict.screening
     ? `${VERDICT_WORDS[verdict.verdict]}, screening rule`
     : VERDICT_WORDS[verdict.verdict];
   return (
     <>
+      {verdict.working.map(({ equation, numbers }) => (
+        <p key={equation} className="verdict-working">
+          <Equation text={equation} />
+          {isShort(equation, numbers) ? ' = ' : <br />}
+          <Equation text={numbers} />
+        </p>
+      ))}
       <p className="verdict-sum">
-        <strong className={`word-${verdict.verdict}`}>{word}</strong> · value{' '}
-        {verdictValue(verdict.value, verdict.unit)} · limit {limitValue(verdict.limit, verdict.unit)} · margin{' '}
-        {marginWords(verdict.margin)}
+        <strong className={`word-${verdict.verdict}`}>{word}</strong> · limit{' '}
+        {limitValue(verdict.limit, verdict.unit)} · margin {marginWords(verdict.margin)}
+        {verdict.value === null && ` · value ${verdictValue(null, verdict.unit)}`}
+        {' · '}
+        <span className="verdict-source">{shortSourceWords(verdict.source)}</span>
       </p>
-      {verdict.working.map((working) => (
-        <p key={working.equation} className="verdict-working">
-          {working.equation}
-          <br />
-          {working.numbers}
+      {said.map((words) => (
+        <p key={words} className="verdict-remark">
+          {words}
         </p>
       ))}
-      <p className="verdict-source">Source: {sourceWords(verdict.source)}</p>
-      {caseName && <p className="verdict-remark">Case: {caseName}.</p>}
-      {verdict.remarks.map((remark) => (
-        <p key={remark} className="verdict-remark">
-          {remark}
-        </p>
-      ))}
-      {without && <p className="verdict-remark">{without}</p>}
-      <div className="verdict-foot">
-        {mend && <p className="verdict-mend">Mend: {mend}</p>}
-        <span className="verdict-links">
-          {onJump && (
-            <button type="button" onClick={() => onJump(verdict)}>
-              jump to the part
-            </button>
-          )}
-          {onOrder && order !== undefined && (
-            <button type="button" onClick={() => onOrder(order)}>
-              rail to h {Number(order.toFixed(2))}
-            </button>
-          )}
-          {onTry && mend && (
-            <button type="button" onClick={() => onTry(verdict)}>
-              try
-            </button>
-          )}
-        </span>
-      </div>
+      <VerdictFoot {...props} />
     </>
+  );
+}
+
+const SHORT = 48;
+
+/** A formula without further words and its numbers share a line where both are short. */
+function isShort(equation: string, numbers: string): boolean {
+  return equation.length + numbers.length <= SHORT && !/[,:]/.test(equation);
+}
+
+/** What would mend it, and where it leads. */
+function VerdictFoot({ verdict, onJump, onOrder, onTry }: VerdictNoteProps) {
+  const { order, mend } = verdict;
+  return (
+    <div className="verdict-foot">
+      {mend && <p className="verdict-mend">Mend: {mend}</p>}
+      <span className="verdict-links">
+        {onTry && mend && (
+          <button type="button" onClick={() => onTry(verdict)}>
+            try
+          </button>
+        )}
+        {onJump && (
+          <button type="button" onClick={() => onJump(verdict)}>
+            jump to the part
+          </button>
+        )}
+        {onOrder && order !== undefined && (
+          <button type="button" onClick={() => onOrder(order)}>
+            rail to h {Number(order.toFixed(2))}
+          </button>
+        )}
+      </span>
+    </div>
   );
 }

@@ -2,17 +2,18 @@ import { memo } from 'react';
 import type { Verdict } from '../../checks/index.ts';
 import type { ColumnHandlers } from './columnHandlers.ts';
 import { VerdictNote } from './VerdictNote.tsx';
+import type { WorstCase } from './verdictWords.ts';
 
 interface VerdictRowProps {
   verdict: Verdict;
   subjectName: string;
   letter: string;
   caseName: string | undefined;
+  worst: WorstCase | undefined;
   folded: boolean;
   lit: boolean;
   tabStop: boolean;
   handlers: ColumnHandlers;
-  onCopy: ((text: string) => void) | undefined;
   onJump: ((verdict: Verdict) => void) | undefined;
   onTry: ((verdict: Verdict) => void) | undefined;
   onOrder: ((order: number) => void) | undefined;
@@ -27,7 +28,8 @@ export const VerdictRow = memo(function VerdictRow({ handlers, ...note }: Verdic
       onToggle={() => handlers.toggle(key)}
       onHover={(hovered) => handlers.hover(key, subject, hovered)}
       onFocus={() => handlers.focus(key, subject)}
-      onKeyDown={(event) => handlers.walk(key, event)}
+      onMenu={(anchor) => handlers.menu(key, anchor)}
+      onKeyDown={(event) => handlers.press(key, event)}
     />
   );
 });

@@ -14,7 +14,7 @@ import type { Reading } from './Reading.ts';
 export interface ReadingNumber {
   label: string;
   parts: QuantityParts;
-  words?: string;
+  words?: string | undefined;
   formula: string;
   /** Which line of the note it stands in. */
   row: 1 | 2 | 3;

@@ -44,6 +44,13 @@ export function verdictHeadline(verdict: Verdict, subjectName: string): string {
   return `${subject} ${verdictValue(verdict.value, verdict.unit)}${limit}`;
 }
 
+/** "1.72 / 1.30", "19.4 / 5 %": value and limit where a line has little room; "" without a value. */
+export function valueAgainstLimit({ value, limit, unit }: Pick<Verdict, 'value' | 'limit' | 'unit'>): string {
+  if (value === null) return '';
+  if (limit === null) return verdictValue(value, unit);
+  return `${threeDigits(value, unit)} / ${verdictValue(limit, unit)}`;
+}
+
 /** "+0.23", "−3.62", "not known". */
 export function marginWords(margin: number | null): string {
   if (margin === null) return 'not known';
@@ -65,4 +72,33 @@ export function withoutCorrectionWords(verdict: Verdict): string | null {
   const without = verdict.withoutCorrection;
   if (!without) return null;
   return `Without the correction: ${verdictValue(without.value, verdict.unit)}, ${VERDICT_WORDS[without.verdict]}.`;
+}
+
+const SHORT_PROVENANCE: Record<Provenance, string | null> = {
+  published: null,
+  'second-hand': 'second-hand',
+  memory: 'from memory',
+  practice: 'practice',
+};
+
+/** The same where room is short: "IEC 60831-1:2014, clause 21 (second-hand)". */
+export function shortSourceWords(source: Source): string {
+  const [document = ''] = sourceWords(source).split(' (');
+  const provenance = document === 'common practice' ? null : SHORT_PROVENANCE[source.provenance];
+  return provenance ? `${document} (${provenance})` : document;
+}
+
+/** The case in which a check ends worst of all. */
+export interface WorstCase {
+  caseName: string;
+  value: number | null;
+  verdict: VerdictWord;
+  /** It is the case on screen. */
+  here: boolean;
+}
+
+/** "Worst of all cases: 1.94 in Night shift, fails.", "No case is worse than this one." */
+export function worstWords({ unit }: Pick<Verdict, 'unit'>, worst: WorstCase): string {
+  if (worst.here) return 'No case is worse than this one.';
+  return `Worst of all cases: ${verdictValue(worst.value, unit)} in ${worst.caseName}, ${VERDICT_WORDS[worst.verdict]}.`;
 }

@@ -24,7 +24,7 @@ export interface PhasorViewProps {
   onLit?(lit: LitPhasor | null): void;
 }
 
-const RADIUS = { small: 54, lens: 132 };
+const RADIUS = { small: 47, lens: 112 };
 
 /** Three-phase voltage and current phasors of one order, with φ drawn and given in words. */
 export function PhasorView(props: PhasorViewProps) {
@@ -37,7 +37,7 @@ export function PhasorView(props: PhasorViewProps) {
     );
   }
   const radius = RADIUS[size];
-  const half = radius + (size === 'lens' ? 20 : 15);
+  const half = radius + (size === 'lens' ? 20 : 14);
   const angle = phaseAngle(voltage, current);
   const words = angle ? phaseAngleWords(angle, size === 'lens' ? 1 : 0) : null;
   return (
@@ -71,17 +71,18 @@ export function PhasorView(props: PhasorViewProps) {
         )}
         {props.anglesUnknown && <span className="chart-doubt">unknown angles taken as 0</span>}
       </figcaption>
-      {size === 'lens' && <PhasorTable voltage={voltage} current={current} names={names} />}
     </figure>
   );
 }
 
-function PhasorTable(props: {
+interface PhasorTableProps {
   voltage: ThreePhasors | null;
   current: ThreePhasors | null;
-  names: PhaseNames;
-}) {
-  const { voltage, current, names } = props;
+  names?: PhaseNames;
+}
+
+/** The same phasors in numbers. */
+export function PhasorTable({ voltage, current, names = PHASE_NAMES }: PhasorTableProps) {
   return (
     <table className="phasor-table">
       <thead>

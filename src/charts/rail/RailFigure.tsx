@@ -1,7 +1,7 @@
 import { useMemo } from 'react';
 import { printStyle } from '../figure/figureInk.ts';
 import type { Injection } from './injections.ts';
-import { RailAxis, RailCurves, RailFlags, RailInjected } from './RailLandscape.tsx';
+import { RailAxis, RailCurrents, RailCurves, RailFlags, RailInjected } from './RailLandscape.tsx';
 import { railLayout } from './railLayout.ts';
 import { fullDomain, type RailBand, type RailScan, railModel } from './railModel.ts';
 
@@ -40,6 +40,7 @@ export function RailFigure(props: RailFigureProps) {
       <RailAxis model={model} style={style} />
       <RailInjected model={model} style={style} />
       <RailCurves model={model} style={style} />
+      <RailCurrents model={model} style={style} />
       <RailFlags model={model} style={style} frequencyHz={frequencyHz} />
     </svg>
   );

@@ -31,9 +31,13 @@ export function RailHandle({ model, style, order, frequencyHz, probe, exact }: R
   const x = axis.x(order);
   const onCurve = withCurve ? ohmAt(withCurve, order) : null;
   const y = ohm && onCurve !== null ? ohm.y(onCurve) : (layout.curveTop + layout.axisY) / 2;
-  const words = handleWords(order, frequencyHz, probe, exact);
+  const injected = model.injected.find((one) => one.h === order);
+  const words = handleWords(order, frequencyHz, probe, exact, injected);
   const size = { width: textWidth(words, style.textSize) + 14, height: style.textSize * 1.9 };
-  const flags = model.peaks.map((peak) => peak.box).filter((box): box is Box => box !== null);
+  const flags: Box[] = [
+    ...model.peaks.flatMap((peak) => peak.box ?? []),
+    ...model.injected.flatMap((tick) => tick.words?.box ?? []),
+  ];
   const bounds = { ...layout.words, width: layout.width - layout.words.x - 2 };
   const box = handleLabelBox({ x, y }, size, bounds, flags, model.curveHeights);
   return (

@@ -1,6 +1,7 @@
 import { memo, useId } from 'react';
 import type { FigureStyle } from '../figure/figureInk.ts';
-import type { PlacedInjection, PlacedPeak, RailModel } from './railModel.ts';
+import type { PlacedInjection } from './placedInjections.ts';
+import type { PlacedPeak, RailModel } from './railModel.ts';
 import { injectionWords, peakTooltip } from './railWords.ts';
 
 interface LayerProps {
@@ -145,6 +146,28 @@ function InjectedTick(props: { order: PlacedInjection; axisY: number; half: numb
     </g>
   );
 }
+
+/** The currents over the ticks, legible over the handle's line. */
+export const RailCurrents = memo(function RailCurrents({ model, style }: LayerProps) {
+  const halo = style.print ? {} : { stroke: style.ink.ground, strokeWidth: 3, paintOrder: 'stroke' };
+  return (
+    <g
+      fontSize={style.smallSize}
+      fill={style.ink.current}
+      {...(style.fontFamily ? { fontFamily: style.fontFamily } : {})}
+      {...halo}
+    >
+      {model.injected.map(
+        ({ h, words }) =>
+          words && (
+            <text key={h} x={words.box.x} y={words.box.y + words.box.height * 0.8}>
+              {words.text}
+            </text>
+          ),
+      )}
+    </g>
+  );
+});
 
 interface FlagProps extends LayerProps {
   frequencyHz: number;

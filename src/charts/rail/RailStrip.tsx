@@ -1,3 +1,5 @@
+import type { ReactNode } from 'react';
+import { FoldMark } from '../figure/FoldMark.tsx';
 import type { RailScan } from './railModel.ts';
 
 interface RailStripProps {
@@ -9,9 +11,15 @@ interface RailStripProps {
   band?: unknown;
   thinWords?: string;
   zoomed: boolean;
+  folded?: boolean;
+  /** The handle's words, where the strip stands alone. */
+  children?: ReactNode;
   onPickBus?(): void;
   onZoom(factor: number): void;
   onReset(): void;
+  /** Opens the entry of an order or frequency. */
+  onEntry(): void;
+  onFold?(folded: boolean): void;
 }
 
 /** The thin line above the rail: which busbar, which sequence and summation, what each curve is. */
@@ -26,24 +34,52 @@ export function RailStrip(props: RailStripProps) {
       ) : (
         <strong className="rail-bus">{busName}</strong>
       )}
+      {props.children}
       <span className="rail-words">{stripWords(props)}</span>
       {props.stale && (
         <span className="rail-state" role="status">
           recalculating: shown as before the last change
         </span>
       )}
-      <span className="rail-tools">
-        <button type="button" aria-label="Widen the axis about the handle" onClick={() => props.onZoom(0.6)}>
-          +
-        </button>
-        <button type="button" aria-label="Show more of the axis" onClick={() => props.onZoom(1 / 0.6)}>
-          −
-        </button>
-        <button type="button" disabled={!props.zoomed} onClick={props.onReset}>
-          whole axis
-        </button>
-      </span>
+      <RailTools {...props} />
     </div>
+  );
+}
+
+function RailTools({ zoomed, folded, onZoom, onReset, onEntry, onFold }: RailStripProps) {
+  return (
+    <span className="rail-tools">
+      <button
+        type="button"
+        title="7.2, h 7.2, 350 Hz or 0.35 kHz; on the rail a digit opens it"
+        onClick={onEntry}
+      >
+        order or Hz…
+      </button>
+      {!folded && (
+        <>
+          <button type="button" aria-label="Widen the axis about the handle" onClick={() => onZoom(0.6)}>
+            +
+          </button>
+          <button type="button" aria-label="Show more of the axis" onClick={() => onZoom(1 / 0.6)}>
+            −
+          </button>
+          <button type="button" disabled={!zoomed} onClick={onReset}>
+            whole axis
+          </button>
+        </>
+      )}
+      {onFold && (
+        <button
+          type="button"
+          className="fold"
+          aria-label={folded ? 'Open the rail' : 'Fold the rail to its strip'}
+          onClick={() => onFold(!folded)}
+        >
+          <FoldMark way={folded ? 'up' : 'down'} />
+        </button>
+      )}
+    </span>
   );
 }
 

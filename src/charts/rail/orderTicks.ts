@@ -17,9 +17,18 @@ const PLAIN_INTEGER_SPACING = 40;
 const FINE_SPACING = 44;
 const MARK_SPACING = 3.5;
 
-/** Ticks of the axis with order and hertz labels that never overlap; letters are `fontSize` high. */
-export function orderTicks(axis: OrderAxis, frequencyHz: number, fontSize: number): OrderTick[] {
-  const labelled = [...tellingOrders(axis), ...plainIntegers(axis), ...fineOrders(axis)];
+/**
+ * Ticks of the axis with order and hertz labels that never overlap; letters are `fontSize` high. `injected`
+ * orders are labelled next after the characteristic ones.
+ */
+export function orderTicks(
+  axis: OrderAxis,
+  frequencyHz: number,
+  fontSize: number,
+  injected: readonly number[] = [],
+): OrderTick[] {
+  const shown = injected.filter((order) => Number.isInteger(order) && inView(axis, order));
+  const labelled = [...tellingOrders(axis), ...shown, ...plainIntegers(axis), ...fineOrders(axis)];
   const ordersKept = keepApart(axis, labelled, (order) => orderLabel(order), fontSize);
   const hzKept = keepApart(axis, ordersKept, (order) => hzLabel(order * frequencyHz), fontSize);
   const marks = new Set([...ordersKept, ...bareIntegers(axis)]);

@@ -5,11 +5,12 @@ import type { Box } from '../figure/box.ts';
 import type { CurveHeight } from '../figure/curveCrossings.ts';
 import { textWidth } from '../figure/textWidth.ts';
 import { type CurvePoint, type ImpedanceCurve, impedanceCurve, ohmAt, ohmExtent } from './impedanceCurve.ts';
-import { type InjectedOrder, type Injection, injectedOrders, injectionHeights } from './injections.ts';
+import type { Injection } from './injections.ts';
 import { type OhmAxis, ohmAxis } from './ohmAxis.ts';
 import { type OrderAxis, type OrderDomain, orderAxis } from './orderAxis.ts';
 import { type OrderTick, orderTicks } from './orderTicks.ts';
 import { placeFlags } from './peakFlags.ts';
+import { type PlacedInjection, placedInjections, withCurrents } from './placedInjections.ts';
 import type { RailLayout } from './railLayout.ts';
 import { type RailPeak, railPeaks } from './railPeaks.ts';
 import { peakWords } from './railWords.ts';
@@ -41,11 +42,6 @@ export interface PlacedPeak {
   /** null where no room was left: the peak then shows as a mark alone. */
   box: Box | null;
   verdict: VerdictWord | null;
-}
-
-export interface PlacedInjection extends InjectedOrder {
-  x: number;
-  height: number;
 }
 
 /** Everything the rail draws but the handle, placed in figure units. */
@@ -103,18 +99,26 @@ export function railModel(
   const bars = injected.map(({ x, height }) => ({ x: x - 4, y: layout.axisY - height, width: 8, height }));
   const room = { axis, layout, curves: curveHeights, bars, textSize: sizes.textSize };
   const allPeaks = scan ? railPeaks(scan.with, scan.without, frequencyHz) : [];
+  const peaks = ohm ? placedPeaks(allPeaks, inputs, { ...room, ohm }) : [];
+  const flags = peaks.flatMap(({ box }) => box ?? []);
+  const tickRoom = { bounds: layout.words, curves: curveHeights, flags, letterSize: sizes.smallSize };
   return {
     layout,
     axis,
-    ticks: orderTicks(axis, frequencyHz, sizes.smallSize),
+    ticks: orderTicks(
+      axis,
+      frequencyHz,
+      sizes.smallSize,
+      injected.map((one) => one.h),
+    ),
     ohm,
     withCurve,
     withPath: curvePath(withCurve, heights),
     withoutPath: curvePath(withoutCurve, heights),
     bandPath: inputs.band && ohm ? bandPath(inputs.band, frequencyHz, axis, ohm) : null,
     allPeaks,
-    peaks: ohm ? placedPeaks(allPeaks, inputs, { ...room, ohm }) : [],
-    injected,
+    peaks,
+    injected: withCurrents(injected, layout.axisY, tickRoom),
     curveHeights,
   };
 }
@@ -215,16 +219,4 @@ const SAME_PEAK = 0.01;
 function verdictOf(peak: RailPeak, verdicts: readonly PeakVerdict[]): VerdictWord | null {
   const match = verdicts.find((one) => Math.abs(one.order - peak.order) <= SAME_PEAK * peak.order);
   return match?.verdict ?? null;
-}
-
-function placedInjections(
-  injections: readonly Injection[],
-  axis: OrderAxis,
-  layout: RailLayout,
-): PlacedInjection[] {
-  const orders = injectedOrders(injections);
-  const heights = injectionHeights(orders, Math.min(40, (layout.axisY - layout.curveTop) * 0.3));
-  return orders
-    .map((order, i) => ({ ...order, x: axis.x(order.h), height: heights[i] ?? 0 }))
-    .filter((order) => order.h >= axis.domain.low && order.h <= axis.domain.high);
 }

@@ -8,12 +8,22 @@ export interface Probe {
   im: number;
 }
 
-/** "h 7.000 · 350 Hz · 625 mΩ ∠ 27°"; a value read off the scan instead of solved is marked ≈. */
-export function handleWords(order: number, frequencyHz: number, probe: Probe | null, exact = true): string {
+/**
+ * "h 7.000 · 350 Hz · 625 mΩ ∠ 27°", and on an injected order "· 36 A injected"; a value read off the scan
+ * instead of solved is marked ≈.
+ */
+export function handleWords(
+  order: number,
+  frequencyHz: number,
+  probe: Probe | null,
+  exact = true,
+  injected?: InjectedOrder,
+): string {
   const place = `h ${fixedNumber(order, 3)} · ${hertz(order * frequencyHz)}`;
-  if (!probe) return `${place} · impedance not known`;
+  const current = injected && injected.amps > 0 ? ` · ${joinParts(ampereParts(injected.amps))} injected` : '';
+  if (!probe) return `${place} · impedance not known${current}`;
   const size = joinParts(ohmParts(Math.hypot(probe.re, probe.im)));
-  return `${place} · ${exact ? '' : '≈ '}${size} ∠ ${angle(probe)}°`;
+  return `${place} · ${exact ? '' : '≈ '}${size} ∠ ${angle(probe)}°${current}`;
 }
 
 /** The same for a screen reader, in whole words. */

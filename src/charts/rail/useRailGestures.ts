@@ -9,11 +9,14 @@ interface Gesture {
   startView: OrderDomain;
   startX: number;
   startGap: number;
+  /** As all was before the first touch, for Escape. */
+  before: { order: number; view: OrderDomain };
 }
 
 export interface RailGestureInputs {
   plot: RefObject<HTMLDivElement | null>;
   model: RailModel;
+  order: number;
   view: OrderDomain;
   full: OrderDomain;
   onOrder(order: number): void;
@@ -28,6 +31,7 @@ export interface RailGestureInputs {
  *   down below the axis       → pan the axis
  *   second pointer            → pinch: zoom and pan together
  *   Ctrl+wheel / Shift+wheel  → zoom about the pointer / pan; a plain wheel scrolls the page
+ *   Escape while pressing     → as before the press
  *
  * At most one order is sent per animation frame.
  */
@@ -82,6 +86,7 @@ export function useRailGestures(inputs: RailGestureInputs) {
       startView: latest.current.view,
       startX: x,
       startGap: 1,
+      before: { order: latest.current.order, view: latest.current.view },
     };
     if (kind === 'scrub') scrub(event);
   };
@@ -95,11 +100,26 @@ export function useRailGestures(inputs: RailGestureInputs) {
   };
 
   const onPointerUp = (event: PointerEvent<HTMLDivElement>) => {
-    gesture.current?.pointers.delete(event.pointerId);
-    if (gesture.current?.pointers.size === 0) gesture.current = null;
+    const running = gesture.current;
+    running?.pointers.delete(event.pointerId);
+    if (running?.pointers.size === 0) gesture.current = null;
+    // The finger that stays goes on panning from where the pinch left the axis.
+    else if (running) startPan(running, latest.current.view);
   };
 
-  return { onPointerDown, onPointerMove, onPointerUp, onPointerCancel: onPointerUp };
+  const cancel = (): boolean => {
+    const running = gesture.current;
+    if (!running) return false;
+    gesture.current = null;
+    cancelAnimationFrame(frame.current?.id ?? 0);
+    frame.current = null;
+    latest.current.onOrder(running.before.order);
+    latest.current.onView(running.before.view);
+    return true;
+  };
+
+  const handlers = { onPointerDown, onPointerMove, onPointerUp, onPointerCancel: onPointerUp };
+  return { handlers, cancel };
 }
 
 function localPoint(event: PointerEvent): { x: number; y: number } {
@@ -118,6 +138,12 @@ function startPinch(gesture: Gesture, view: OrderDomain): void {
   gesture.startView = view;
   gesture.startX = middle(gesture.pointers);
   gesture.startGap = gap(gesture.pointers);
+}
+
+function startPan(gesture: Gesture, view: OrderDomain): void {
+  gesture.kind = 'pan';
+  gesture.startView = view;
+  gesture.startX = middle(gesture.pointers);
 }
 
 function middle(pointers: ReadonlyMap<number, number>): number {

@@ -26,7 +26,7 @@ export interface SpectrumViewProps {
 /** Bars by order against the limit of each order; the order under the rail is marked and can be chosen. */
 export function SpectrumView(props: SpectrumViewProps) {
   const { bars, size, maxOrder, order, quantity, onOrder } = props;
-  const height = props.height ?? (size === 'lens' ? 240 : 132);
+  const height = props.height ?? (size === 'lens' ? 190 : 118);
   const [host, width] = useMeasuredWidth<HTMLDivElement>(size === 'lens' ? 520 : 300);
   const model = useMemo(() => {
     if (!bars) return null;
@@ -71,7 +71,7 @@ export function SpectrumView(props: SpectrumViewProps) {
           <SpectrumBars model={model} quantity={quantity} style={SCREEN_STYLE} />
         </svg>
       </div>
-      {props.anglesUnknown && (
+      {props.anglesUnknown && size === 'lens' && (
         <figcaption className="chart-doubt">sources of unknown angle added by magnitude</figcaption>
       )}
     </figure>
@@ -104,7 +104,9 @@ function ThdLine(props: SpectrumViewProps) {
   const fails = thdPercent !== null && thdLimit !== undefined && thdPercent > thdLimit;
   return (
     <div className="spectrum-head">
-      <span className="spectrum-base">order · % {props.baseWords ?? 'of fundamental'}</span>
+      <span className="spectrum-base">
+        {props.size === 'lens' && 'order · '}% {props.baseWords ?? 'of fundamental'}
+      </span>
       <span className={fails ? 'spectrum-thd fails' : 'spectrum-thd'}>{thdWords(thdPercent, thdLimit)}</span>
     </div>
   );

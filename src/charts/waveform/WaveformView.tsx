@@ -31,7 +31,7 @@ export interface WaveformViewProps {
   onSettings?(settings: WaveSettings): void;
 }
 
-const SIZES = { small: { width: 168, height: 124 }, lens: { width: 520, height: 330 } };
+const SIZES = { small: { width: 168, height: 116 }, lens: { width: 520, height: 236 } };
 
 /** v(t) and i(t) over one or two periods, with the time cursor that turns the phasors. */
 export function WaveformView(props: WaveformViewProps) {
@@ -40,7 +40,7 @@ export function WaveformView(props: WaveformViewProps) {
   const width = props.width ?? measured;
   const height = props.height ?? SIZES[size].height;
   const layout = useMemo(() => waveLayout(width, height, size === 'lens'), [width, height, size]);
-  const doubt = waveDoubt(props.summation, props.anglesUnknown, settings);
+  const doubt = waveDoubt(props.summation, props.anglesUnknown, settings, size === 'small');
   const model = useMemo(
     () => (doubt?.refused ? null : waveModel({ voltage, current, maxOrder, settings }, layout)),
     [doubt?.refused, voltage, current, maxOrder, settings, layout],

@@ -9,12 +9,13 @@ export interface WaveDoubt {
 
 /**
  * Under the IEC 61000-3-6 summation the orders above the fundamental carry no angle, so nothing but the
- * fundamental has a course in time. Unknown angles are drawn as 0 and said to be so.
+ * fundamental has a course in time. Unknown angles are drawn as 0 and said to be so, briefly in a card.
  */
 export function waveDoubt(
   summation: 'phasor' | 'alpha',
   anglesUnknown: boolean,
   settings: Pick<WaveSettings, 'content'>,
+  brief = false,
 ): WaveDoubt | null {
   if (settings.content === 'fundamental') return null;
   if (summation === 'alpha') {
@@ -24,7 +25,8 @@ export function waveDoubt(
         'No waveform: the IEC 61000-3-6 summation gives magnitudes without angles. The fundamental alone can be drawn.',
     };
   }
-  return anglesUnknown ? { refused: false, words: 'drawn with unknown angles taken as 0' } : null;
+  if (!anglesUnknown) return null;
+  return { refused: false, words: brief ? 'unknown angles as 0' : 'drawn with unknown angles taken as 0' };
 }
 
 /** "fundamental alone", "orders 1 to 25", "all orders to 50". */

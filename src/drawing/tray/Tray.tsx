@@ -61,6 +61,7 @@ interface TrayItemProps {
   kind: TrayKind;
   name: string;
   model: string;
+  /** Shows its symbol also where words stand under the symbols. */
   symbol: boolean;
   armed: boolean;
   /** Holds the tray's one tab stop. */
@@ -76,7 +77,7 @@ function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFo
   return (
     <button
       type="button"
-      className="tray-item"
+      className={symbol ? 'tray-item' : 'tray-item tray-further'}
       title={`${model}\n${kindKeys[kind]} on the drawing adds it to the busbar in focus`}
       data-tray={kind}
       tabIndex={stop ? 0 : -1}
@@ -87,7 +88,7 @@ function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFo
       onClick={(event) => event.detail === 0 && onArm(kind)}
       onFocus={() => onFocus(kind)}
     >
-      {symbol && <TraySymbol kind={kind} />}
+      <TraySymbol kind={kind} />
       <span>
         {before}
         <span className="tray-letter">{letter}</span>

@@ -13,15 +13,19 @@ export interface Size {
 export const LEAST_SCALE = 0.05;
 export const MOST_SCALE = 4;
 const EDGE = 12;
+/** A pane up to this wide shows a small site at 100 %; a wider one, on a large screen, larger in proportion. */
+const USUAL_PANE = 1200;
+const MOST_FITTED = 1.5;
 
 function clampScale(scale: number): number {
   return Math.min(Math.max(scale, LEAST_SCALE), MOST_SCALE);
 }
 
-/** The whole drawing in the pane, never larger than 100 %, centred sideways and close to the top. */
+/** The whole drawing in the pane, no larger than 100 % (150 % in a large pane), centred sideways and close to the top. */
 export function fitView(content: Size, pane: Size): PaneView {
   const room = Math.min((pane.width - 2 * EDGE) / content.width, (pane.height - 2 * EDGE) / content.height);
-  const scale = clampScale(Math.min(1, Math.max(room, LEAST_SCALE)));
+  const most = Math.min(MOST_FITTED, Math.max(1, pane.width / USUAL_PANE));
+  const scale = clampScale(Math.min(most, Math.max(room, LEAST_SCALE)));
   const slack = pane.height - content.height * scale;
   return { scale, x: (pane.width - content.width * scale) / 2, y: Math.max(EDGE, slack / 3) };
 }

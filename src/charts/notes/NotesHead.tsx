@@ -1,13 +1,16 @@
 import type { VerdictWord } from '../../checks/index.ts';
+import { FoldMark } from '../figure/FoldMark.tsx';
 import { VerdictMark } from './VerdictMark.tsx';
 import type { VerdictGrouping } from './verdictOrder.ts';
 
-interface NotesFilterProps {
+interface NotesHeadProps {
   counts: Record<VerdictWord, number>;
   shown: ReadonlySet<VerdictWord>;
   grouping: VerdictGrouping;
   onShown(shown: ReadonlySet<VerdictWord>): void;
   onGrouping(grouping: VerdictGrouping): void;
+  /** Folds the column to its letters. */
+  onFold: (() => void) | undefined;
 }
 
 const CHOICES: readonly { word: VerdictWord; label: string }[] = [
@@ -17,23 +20,24 @@ const CHOICES: readonly { word: VerdictWord; label: string }[] = [
   { word: 'pass', label: 'pass' },
 ];
 
-/** Counts that switch which verdicts are listed, and how they are gathered. */
-export function NotesFilter({ counts, shown, grouping, onShown, onGrouping }: NotesFilterProps) {
+/** The column's head: which verdicts are listed, how they are gathered, and the fold. */
+export function NotesHead({ counts, shown, grouping, onShown, onGrouping, onFold }: NotesHeadProps) {
   const toggle = (word: VerdictWord) => {
     const next = new Set(shown);
     if (!next.delete(word)) next.add(word);
     onShown(next);
   };
+  const any = Object.values(counts).some((count) => count > 0);
   return (
-    <div className="notes-filter">
-      <fieldset>
+    <div className="notes-head">
+      <fieldset hidden={!any}>
         <legend className="visually-hidden">Verdicts shown</legend>
         {CHOICES.map(({ word, label }) => (
           <button
             key={word}
             type="button"
             className={`word-${word}`}
-            title={`${shown.has(word) ? 'Hide' : 'Show'}: ${label}`}
+            title={`${counts[word]} ${label}: ${shown.has(word) ? 'listed' : 'left out'}`}
             aria-pressed={shown.has(word)}
             onClick={() => toggle(word)}
           >
@@ -44,6 +48,7 @@ export function NotesFilter({ counts, shown, grouping, onShown, onGrouping }: No
         ))}
       </fieldset>
       <select
+        hidden={!any}
         aria-label="Order of the verdicts"
         value={grouping}
         onChange={(event) => onGrouping(groupingFrom(event.target.value))}
@@ -52,6 +57,11 @@ export function NotesFilter({ counts, shown, grouping, onShown, onGrouping }: No
         <option value="part">by part</option>
         <option value="check">by check</option>
       </select>
+      {onFold && (
+        <button type="button" className="fold" aria-label="Fold the notes to their letters" onClick={onFold}>
+          <FoldMark way="right" />
+        </button>
+      )}
     </div>
   );
 }
