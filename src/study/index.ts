@@ -62,6 +62,7 @@ export {
 export { replaceObstacle, replacePart } from './edits/replacePart.ts';
 export { restoreStudy } from './edits/restoreStudy.ts';
 export { setField } from './edits/setField.ts';
+export { type RowChange, type SetTableOptions, setTable } from './edits/setTable.ts';
 export { type AddSpectrumEdit, addSpectrum, removeSpectrum, updateSpectrum } from './edits/spectrumEdits.ts';
 export {
   resetInCase,
@@ -103,7 +104,7 @@ export {
   isOn,
   isSeries,
 } from './lookup.ts';
-export { busName, elementName, fullNameOf, kindWords, nameOf, shortKindWords } from './names.ts';
+export { busName, elementName, fullNameOf, kindsWords, kindWords, nameOf, shortKindWords } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
 export { type AnswerKey, answerFields } from './quickStart/answerFields.ts';
@@ -121,6 +122,34 @@ export {
   type SpectrumProvenance,
 } from './spectra/builtIn.ts';
 export { isHarmonicRows, spectrumById, spectrumOf } from './spectra/spectrumOf.ts';
+export {
+  arrangeRows,
+  matchesOrigin,
+  type OriginFilter,
+  type RowFilter,
+  type RowOrder,
+} from './table/arrangeRows.ts';
+export { type CellStyle, cellText } from './table/cellText.ts';
+export { type CellReading, type ReadCell, readCell } from './table/readCell.ts';
+export {
+  type Paste,
+  type PasteChoices,
+  type PastedCell,
+  type PastedColumn,
+  type PastedRow,
+  type PastePlace,
+  readPaste,
+} from './table/readPaste.ts';
+export {
+  columnValue,
+  type TableColumn,
+  type TableOwner,
+  type TableRecord,
+  tableColumns,
+  tableRecords,
+} from './table/tableColumns.ts';
+export { type TablePaste, tablePaste } from './table/tablePaste.ts';
+export { tabularText } from './table/tabularText.ts';
 export type * from './types.ts';
 export { setTypical } from './typical/setTypical.ts';
 export type { Typical } from './typical/Typical.ts';
@@ -163,7 +192,7 @@ export {
 } from './units/formatQuantity.ts';
 export { type ParsedQuantity, parseQuantity } from './units/parseQuantity.ts';
 export { parseRows } from './units/parseRows.ts';
-export { parseSteps, stepsText } from './units/parseSteps.ts';
+export { parseSteps, stepsFromLines, stepsText } from './units/parseSteps.ts';
 export type { DecimalMark } from './units/readNumber.ts';
 export { type ReadQuantity, readQuantity } from './units/readQuantity.ts';
 export { understoodAs } from './units/understoodAs.ts';

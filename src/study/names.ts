@@ -18,6 +18,23 @@ export const kindWords: Readonly<Record<ElementKind, string>> = {
   shunt: 'R-L-C, to neutral',
 };
 
+/** Several of a kind, lower case. */
+export const kindsWords: Readonly<Record<ElementKind, string>> = {
+  supply: 'supplies',
+  generator: 'generators',
+  transformer: 'transformers',
+  cable: 'cables',
+  reactor: 'reactors',
+  coupler: 'bus couplers',
+  branch: 'R-L-C, series',
+  load: 'loads',
+  motor: 'motors',
+  converter: 'drives and converters',
+  bank: 'capacitor banks',
+  filter: 'filters',
+  shunt: 'R-L-C, to neutral',
+};
+
 /** The kind in one short word, as the tray and the reader's ear have it. */
 export const shortKindWords: Readonly<Record<ElementKind, string>> = {
   ...kindWords,

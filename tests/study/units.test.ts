@@ -2,7 +2,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
   editText,
+  elementKinds,
   fieldOf,
+  fieldsOf,
   formatNumber,
   formatQuantity,
   hintOf,
@@ -194,6 +196,19 @@ describe('A number field says at its place', () => {
   it('nothing written falls back to the default where there is one', () => {
     expect(readQuantity('', field('motor', 'count'))).toEqual({ ok: true, value: undefined });
   });
+});
+
+describe('Every field of the catalogue', () => {
+  const owners = [...elementKinds, 'bus', 'criteria', 'step', 'controller', 'harmonicRow'] as const;
+  const numbers = owners.flatMap((owner) =>
+    fieldsOf(owner).flatMap((field) => (field.type === 'number' || field.type === 'integer' ? [field] : [])),
+  );
+  it.each([...new Set(numbers.map(({ unit }) => unit))])(
+    'takes its own unit behind the number: %j',
+    (unit) => {
+      expect(parseQuantity(`12.5 ${unit}`, unit)).toEqual({ ok: true, value: 12.5 });
+    },
+  );
 });
 
 describe('A sentence says what is wrong with', () => {

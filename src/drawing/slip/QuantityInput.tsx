@@ -101,6 +101,12 @@ export function QuantityInput(props: QuantityInputProps) {
           setDraft(event.target.value);
           setError(null);
         }}
+        onPaste={(event) => {
+          // A line of text would run several cells together to one number.
+          if (!/[\t\n]/.test(event.clipboardData.getData('text').trim()) || event.defaultPrevented) return;
+          event.preventDefault();
+          setError('Several values are on the clipboard and this field takes one; a table takes them all.');
+        }}
         onFocus={() => {
           setEditing(true);
           props.onFocus?.();

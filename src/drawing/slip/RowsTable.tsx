@@ -1,5 +1,5 @@
 import { type ClipboardEvent, useState } from 'react';
-import { fieldsOf, type HarmonicRow, type NumberField, parseRows } from '../../study/index.ts';
+import { counted, fieldsOf, type HarmonicRow, type NumberField, parseRows } from '../../study/index.ts';
 import { QuantityInput } from './QuantityInput.tsx';
 
 export interface RowsTableProps {
@@ -24,9 +24,11 @@ export function nextOrder(rows: readonly HarmonicRow[]): number {
 /** Harmonic rows as a table; a table copied from a sheet or a report can be pasted over any cell. */
 export function RowsTable({ id, caption, rows, onFocus, onCommit }: RowsTableProps) {
   const [error, setError] = useState<string | null>(null);
+  const [said, setSaid] = useState('');
   const take = (next: HarmonicRow[]) => {
     const outcome = onCommit(next);
     setError(outcome);
+    setSaid('');
     return outcome;
   };
   const onPaste = (event: ClipboardEvent) => {
@@ -34,11 +36,15 @@ export function RowsTable({ id, caption, rows, onFocus, onCommit }: RowsTablePro
     if (!/[\n\t;]/.test(text.trim())) return;
     event.preventDefault();
     const parsed = parseRows(text);
-    if (parsed.ok) take(parsed.rows);
-    else setError(parsed.error);
+    if (!parsed.ok) {
+      setError(parsed.error);
+      setSaid('');
+    } else if (take(parsed.rows) === null) {
+      setSaid([`${counted(parsed.rows.length, 'row')} pasted.`, parsed.said].filter(Boolean).join(' '));
+    }
   };
   return (
-    <div className="slip-rows" onPaste={onPaste}>
+    <div className="slip-rows" onPasteCapture={onPaste}>
       {rows.length > 0 && (
         <table>
           <caption className="slip-hidden">{caption}</caption>
@@ -92,6 +98,12 @@ export function RowsTable({ id, caption, rows, onFocus, onCommit }: RowsTablePro
       >
         Add an order
       </button>
+      <p className="slip-summary">or paste order, per cent and angle from a sheet</p>
+      {said !== '' && (
+        <p className="slip-summary" role="status">
+          {said}
+        </p>
+      )}
       {error !== null && (
         <span className="slip-error" role="alert">
           {error}

@@ -4,6 +4,7 @@ import {
   formatQuantity,
   type NumberField,
   parseSteps,
+  stepsFromLines,
   stepsText,
 } from '../../study/index.ts';
 import { QuantityInput } from './QuantityInput.tsx';
@@ -35,6 +36,7 @@ export function StepsInput({ id, steps, describedBy, onFocus, onCommit }: StepsI
         placeholder="6x25"
         describedBy={describedBy}
         onFocus={onFocus}
+        ofPasted={stepsFromLines}
         onCommit={(text) => {
           const parsed = parseSteps(text);
           return parsed.ok ? onCommit(parsed.steps) : parsed.error;

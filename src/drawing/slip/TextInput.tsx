@@ -10,6 +10,8 @@ export interface TextInputProps {
   suggestions?: readonly string[] | undefined;
   className?: string;
   onFocus?(): void;
+  /** What text of several lines from the clipboard becomes; a line of text would run them together. */
+  ofPasted?(text: string): string;
   /** Takes the text, trimmed; returns why it cannot, as a sentence. */
   onCommit(text: string): string | null;
 }
@@ -53,6 +55,13 @@ export function TextInput(props: TextInputProps) {
         value={text}
         onChange={(event) => {
           setDraft(event.target.value);
+          setError(null);
+        }}
+        onPaste={(event) => {
+          const pasted = event.clipboardData.getData('text').trim();
+          if (!props.ofPasted || !/[\t\n]/.test(pasted)) return;
+          event.preventDefault();
+          setDraft(props.ofPasted(pasted));
           setError(null);
         }}
         onFocus={props.onFocus}

@@ -2,6 +2,7 @@ import { busName, nameOf } from '../names.ts';
 import { spectrumById } from '../spectra/spectrumOf.ts';
 import type { BankStep, Study } from '../types.ts';
 import { formatQuantity } from '../units/formatQuantity.ts';
+import { stepsText } from '../units/parseSteps.ts';
 import type { Field } from './Field.ts';
 import { type FieldOwner, fieldOf } from './fieldsOf.ts';
 
@@ -40,14 +41,8 @@ function listWords(field: Field, value: readonly unknown[]): string {
 
 /** "3 × 80 kvar, 2 of 3 in"; unequal steps one by one. */
 function stepsWords(steps: readonly BankStep[]): string {
-  const groups: { kvar: number; count: number }[] = [];
-  for (const { kvar } of steps) {
-    const last = groups.at(-1);
-    if (last?.kvar === kvar) last.count += 1;
-    else groups.push({ kvar, count: 1 });
-  }
-  const sizes = groups.map(({ kvar, count }) => (count === 1 ? `${kvar}` : `${count} × ${kvar}`));
+  const sizes = stepsText(steps.map(({ kvar }) => ({ kvar })));
   const on = steps.filter((step) => step.on !== false).length;
   const state = on === steps.length ? 'all in' : on === 0 ? 'all out' : `${on} of ${steps.length} in`;
-  return `${sizes.join(' + ') || '0'} kvar, ${state}`;
+  return `${sizes || '0'} kvar, ${state}`;
 }

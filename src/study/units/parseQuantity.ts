@@ -170,7 +170,7 @@ class Reader {
   /** Factor from what is written behind a number to the field's unit; undefined where nothing is. */
   private takeUnit(): number | undefined {
     this.space();
-    const match = /^(?:per unit|per cent|p\.u\.|[%°]|[A-Za-zµΩ]+(?: ?\/ ?[A-Za-zµΩ]+)?)/.exec(
+    const match = /^(?:per unit|per cent|p\.u\.|°C|[%°]|[A-Za-zµΩ]+(?: ?\/ ?[A-Za-zµΩ]+)?)/.exec(
       this.text.slice(this.at),
     );
     if (!match || /^(x|X)(?=\s*[\d(])/.test(this.text.slice(this.at))) return undefined;

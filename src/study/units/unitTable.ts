@@ -27,6 +27,7 @@ const bases: readonly [string, BaseUnit][] = [
   ['min', { dimension: 's', factor: 60, prefixed: false }],
   ['h', { dimension: 's', factor: 3600, prefixed: false }],
   ['°', { dimension: 'angle', factor: 1, prefixed: false }],
+  ['°C', { dimension: 'temperature', factor: 1, prefixed: false }],
   ['rad', { dimension: 'angle', factor: 180 / Math.PI, prefixed: false }],
   ['%', { dimension: '', factor: 0.01, prefixed: false }],
   ['pu', { dimension: '', factor: 1, prefixed: false }],

@@ -13,6 +13,7 @@ import {
   type NumberField,
   parseRows,
   parseSteps,
+  stepsFromLines,
   stepsText,
   updateElement,
 } from '../../../src/study/index.ts';
@@ -46,16 +47,30 @@ describe('Steps are read as they are spoken of', () => {
     },
   );
 
-  it('and written back so that they read the same', () => {
-    expect(stepsText([{ kvar: 25 }, { kvar: 25, on: false }, { kvar: 50 }])).toBe('2 × 25 + 50');
+  it('and written back so that they read the same, those switched off as well', () => {
+    expect(stepsText([{ kvar: 25 }, { kvar: 25, on: false }, { kvar: 50 }])).toBe('25 + 25 off + 50');
     const kvar = fc.constantFrom(6.25, 12.5, 25, 50, 100);
+    const step = fc.tuple(kvar, fc.boolean());
     fc.assert(
-      fc.property(fc.array(kvar, { minLength: 1, maxLength: 20 }), (values) => {
-        const steps = values.map((value) => ({ kvar: value }));
+      fc.property(fc.array(step, { minLength: 1, maxLength: 20 }), (values) => {
+        const steps = values.map(([value, off]) => (off ? { kvar: value, on: false } : { kvar: value }));
         expect(parseSteps(stepsText(steps))).toEqual({ ok: true, steps });
       }),
       { seed: 5 },
     );
+  });
+});
+
+describe('Steps copied from a sheet', () => {
+  it.each([
+    ['25\n25\n50\n', '25; 25; 50', 3],
+    ['kvar\n12,5\n25', '12,5; 25', 2],
+    ['number\tkvar\n2\t12.5\n4\t25', '2 × 12.5; 4 × 25', 6],
+    ['6x25', '6x25', 6],
+  ] as const)('%j are the steps %j', (text, typed, count) => {
+    expect(stepsFromLines(text)).toBe(typed);
+    const parsed = parseSteps(typed);
+    expect(parsed.ok && parsed.steps.length).toBe(count);
   });
 });
 
@@ -68,7 +83,28 @@ describe('A pasted spectrum', () => {
         { h: 7, percent: 14.1 },
         { h: 11, percent: 6 },
       ],
+      said: '',
     });
+  });
+  it('may have heads with digits in them, a row of units, and two columns alone', () => {
+    expect(parseRows('Order h\t% of I1\n-\t%\n5\t38.2\n7\t14,1')).toMatchObject({
+      ok: true,
+      rows: [
+        { h: 5, percent: 38.2 },
+        { h: 7, percent: 14.1 },
+      ],
+    });
+  });
+  it('in amperes is brought to per cent of its fundamental, and that is said', () => {
+    expect(parseRows('h\tA\n1\t250\n5\t95,5\n7\t35.25')).toEqual({
+      ok: true,
+      rows: [
+        { h: 5, percent: 38.2 },
+        { h: 7, percent: 14.1 },
+      ],
+      said: 'Order 1 is 250, so the rows are taken as amperes and brought to per cent of it.',
+    });
+    expect(parseRows('1\t100\n5\t38.2')).toMatchObject({ rows: [{ h: 5, percent: 38.2 }] });
   });
   it.each([
     ['5 20\n5 10', /Line 2: order 5 stands there twice/],
@@ -76,9 +112,48 @@ describe('A pasted spectrum', () => {
     ['5 -1', /no percentage/],
     ['5 20 north', /no angle/],
     ['nothing here', /No rows were found/],
+    ['5\t20\nTHD\t44', /Line 2: "THD" is no whole order/],
+    ['5\t20\nremark', /Line 2: "remark" is no whole order/],
+    ['5\t250\t20\t174', /Line 1: 4 columns stand there/],
+    ['1\t0\n5\t20', /fundamental/],
   ] as const)('%j is refused with its line', (text, error) => {
     const parsed = parseRows(text);
     expect(!parsed.ok && parsed.error).toMatch(error);
+  });
+  it('of any text loses no line unsaid: a head before the first row, a row, or a refusal', () => {
+    const cell = fc.constantFrom(
+      '5',
+      '7',
+      '11',
+      '1',
+      'h = 13',
+      '38,2',
+      '14 %',
+      '-',
+      '',
+      '174',
+      'THD',
+      '−30',
+      '250',
+    );
+    fc.assert(
+      fc.property(
+        fc.array(fc.array(cell, { minLength: 1, maxLength: 4 }), { maxLength: 6 }),
+        fc.constantFrom('\t', ';'),
+        (lines, separator) => {
+          const parsed = parseRows(lines.map((line) => line.join(separator)).join('\n'));
+          if (!parsed.ok) return parsed.error.endsWith('.');
+          const filled = lines.filter((line) => line.some((one) => one !== ''));
+          const isRow = (line: string[]) =>
+            /\d/.test(line[0] ?? '') || line.some((one) => /^[−-]?\d/.test(one));
+          const first = filled.findIndex(isRow);
+          const read = filled.length - Math.max(0, first);
+          const fundamental = parsed.said === '' ? 0 : 1;
+          return parsed.rows.length + fundamental === read;
+        },
+      ),
+      { seed: 12, numRuns: 1000 },
+    );
   });
   it('grows by the next odd order, and an emptied angle is unknown, not zero', () => {
     expect(nextOrder([])).toBe(3);
