@@ -13,7 +13,13 @@ export { VerdictMark } from './notes/VerdictMark.tsx';
 export { VerdictNote, type VerdictNoteProps } from './notes/VerdictNote.tsx';
 export { byMargin, verdictCounts } from './notes/verdictOrder.ts';
 export type { WorstCase } from './notes/verdictWords.ts';
-export { marginWords, sourceWords, VERDICT_MARKS, VERDICT_WORDS } from './notes/verdictWords.ts';
+export {
+  marginWords,
+  sourceWords,
+  VERDICT_MARKS,
+  VERDICT_WORDS,
+  verdictHeadline,
+} from './notes/verdictWords.ts';
 export type { LitPhasor } from './phasor/PhasorDrawing.tsx';
 export { PhasorFigure, type PhasorFigureProps } from './phasor/PhasorFigure.tsx';
 export { PhasorView, type PhasorViewProps } from './phasor/PhasorView.tsx';

@@ -13,7 +13,7 @@ export type Theme = 'system' | 'light' | 'dark';
 export type WaveOrders = 'fundamental' | 'all' | number;
 
 /** What the drawing's left margin lists; null where it is put away. */
-export type Margin = 'cases' | 'findings' | null;
+export type Margin = 'cases' | 'findings' | 'states' | null;
 /** Two operating states side by side: ids of cases, or of the base study. */
 export interface ComparedCases {
   a: string;

@@ -7,6 +7,7 @@ import { fileCommands } from '../files/fileCommands.ts';
 import { recentStudies } from '../files/recentStudies.ts';
 import { panelCommands } from '../panels/panelCommands.ts';
 import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
+import { statesCommands } from '../states/statesCommands.ts';
 import type { Command } from './command.ts';
 
 function historyCommands(undoing: string | null, redoing: string | null): Command[] {
@@ -80,6 +81,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...panelCommands(),
       ...(study ? originCommands(study, selection) : []),
       ...(study ? caseCommands(study, caseId) : []),
+      ...(study ? statesCommands() : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
     [study, caseId, selection, undoing, redoing, recent, openDialog],

@@ -3,11 +3,13 @@ import { type Margin as Listed, useWorkbench, workbench } from '../../store/inde
 import type { Study } from '../../study/index.ts';
 import { CaseMargin } from '../cases/CaseMargin.tsx';
 import { FindingMargin } from '../findings/FindingMargin.tsx';
+import { StatesMargin } from '../states/StatesMargin.tsx';
 import './margin.css';
 
 const lists: readonly [Exclude<Listed, null>, string][] = [
   ['cases', 'Cases'],
   ['findings', 'Findings'],
+  ['states', 'States'],
 ];
 
 function putAway(): void {
@@ -15,7 +17,7 @@ function putAway(): void {
   document.querySelector<HTMLElement>('[data-drawing-pane] [tabindex="0"], [data-drawing-pane]')?.focus();
 }
 
-/** The paper's left margin: the cases with what differs in them, or what is found about the site. It stays until put away. */
+/** The paper's left margin: the cases with what differs in them, what is found about the site, or the worst over states and tolerances. It stays until put away. */
 export function Margin({ study, onDetails }: { study: Study; onDetails(field: string | null): void }) {
   const listed = useWorkbench((state) => state.view.margin);
   const margin = useRef<HTMLElement>(null);
@@ -53,11 +55,9 @@ export function Margin({ study, onDetails }: { study: Study; onDetails(field: st
           ×
         </button>
       </header>
-      {listed === 'cases' ? (
-        <CaseMargin study={study} />
-      ) : (
-        <FindingMargin study={study} onDetails={onDetails} />
-      )}
+      {listed === 'cases' && <CaseMargin study={study} />}
+      {listed === 'findings' && <FindingMargin study={study} onDetails={onDetails} />}
+      {listed === 'states' && <StatesMargin study={study} />}
     </aside>
   );
 }
