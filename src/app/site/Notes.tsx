@@ -1,11 +1,11 @@
 import { useCallback, useMemo, useState } from 'react';
 import { type NoteSubject, NotesColumn, NotesLetters } from '../../charts/index.ts';
 import type { Verdict } from '../../checks/index.ts';
-import { useWorkbench, workbench } from '../../store/index.ts';
+import { freshWorst, useWorkbench, workbench } from '../../store/index.ts';
 import { busName, casesOf, elementName, nameOf, type Pin, type Study, setPins } from '../../study/index.ts';
 import { setPanels } from '../panels/panelStore.ts';
 import { readingOf } from './readingOf.ts';
-import { worstCases } from './worstCases.ts';
+import { worstCases, worstSearched } from './worstCases.ts';
 
 const noPins: readonly Pin[] = [];
 const noVerdicts: readonly Verdict[] = [];
@@ -48,6 +48,7 @@ export function Notes({ study, letters, litSubject, folded, onSubject }: Props) 
     () => (solution ? pins.map((pin) => readingOf(study, solution, pin)) : []),
     [study, solution, pins],
   );
+  const searched = useWorkbench(freshWorst);
   const subjectName = useCallback(
     (subject: NoteSubject) =>
       subject.kind === 'bus' ? busName(study, subject.id) : elementName(study, subject.id),
@@ -61,8 +62,8 @@ export function Notes({ study, letters, litSubject, folded, onSubject }: Props) 
     [study],
   );
   const worst = useMemo(
-    () => worstCases(allVerdicts, revision, caseId, caseName),
-    [allVerdicts, revision, caseId, caseName],
+    () => (searched ? worstSearched(searched, caseId) : worstCases(allVerdicts, revision, caseId, caseName)),
+    [searched, allVerdicts, revision, caseId, caseName],
   );
   const shared = { readings, verdicts, letters, nameOf: subjectName, stale, onSubject };
   if (folded) {

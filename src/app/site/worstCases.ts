@@ -1,5 +1,6 @@
 import { byMargin, type WorstCase } from '../../charts/index.ts';
 import type { Verdict } from '../../checks/index.ts';
+import type { WorstResult } from '../../sizing/index.ts';
 import type { AllVerdicts } from '../../store/index.ts';
 
 /** The case in which each check ends worst, by the verdict's key; nothing while not every case is judged. */
@@ -29,6 +30,24 @@ export function worstCases(
         here: verdict.caseId === caseId,
       },
     ]),
+  );
+}
+
+/** The same over states and tolerances, once they are searched. */
+export function worstSearched(result: WorstResult, caseId: string): ReadonlyMap<string, WorstCase> {
+  return new Map(
+    result.verdicts
+      .filter(({ screening }) => !screening)
+      .map(({ key, value, verdict, governing }) => [
+        key,
+        {
+          caseName: governing.stateName,
+          point: governing.point,
+          value,
+          verdict,
+          here: governing.stateId === caseId && governing.rated,
+        },
+      ]),
   );
 }
 

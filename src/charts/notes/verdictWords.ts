@@ -88,17 +88,29 @@ export function shortSourceWords(source: Source): string {
   return provenance ? `${document} (${provenance})` : document;
 }
 
-/** The case in which a check ends worst of all. */
+/** The case, or the state and tolerance point, in which a check ends worst of all. */
 export interface WorstCase {
+  /** Of the case or state. */
   caseName: string;
+  /** The tolerance point in words, where states and tolerances were searched. */
+  point?: string;
   value: number | null;
   verdict: VerdictWord;
   /** It is the case on screen. */
   here: boolean;
 }
 
-/** "Worst of all cases: 1.94 in Night shift, fails.", "No case is worse than this one." */
+/**
+ * "Worst of all cases: 1.94 in Night shift, fails.", "No case is worse than this one.", or, searched:
+ * "Worst of all states and tolerances: 1.94, fails, in Night shift, Bank C1 off; frequency +1 %."
+ */
 export function worstWords({ unit }: Pick<Verdict, 'unit'>, worst: WorstCase): string {
+  const value = verdictValue(worst.value, unit);
+  const word = VERDICT_WORDS[worst.verdict];
+  if (worst.point !== undefined)
+    return worst.here
+      ? 'No state and no tolerance searched is worse than this.'
+      : `Worst of all states and tolerances: ${value}, ${word}, in ${worst.caseName}; ${worst.point}.`;
   if (worst.here) return 'No case is worse than this one.';
-  return `Worst of all cases: ${verdictValue(worst.value, unit)} in ${worst.caseName}, ${VERDICT_WORDS[worst.verdict]}.`;
+  return `Worst of all cases: ${value} in ${worst.caseName}, ${word}.`;
 }
