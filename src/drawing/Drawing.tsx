@@ -14,7 +14,7 @@ import { Hatch } from './glyphs/Hatch.tsx';
 import { useClipboard } from './keyboard/useClipboard.ts';
 import { useHandling } from './keyboard/useHandling.ts';
 import { useRovingFocus } from './keyboard/useRovingFocus.ts';
-import { keepPlaces, type Layout, layoutStudy } from './layout/index.ts';
+import { differencesByPart, keepPlaces, type Layout, layoutStudy } from './layout/index.ts';
 import type { ImpedanceProbe } from './readings/busReading.ts';
 import { figuresOf } from './readings/figures.ts';
 import { type ReadingMode, readOrder } from './readings/ReadingMode.ts';
@@ -71,12 +71,16 @@ export function Drawing(props: DrawingProps) {
   const hatchId = `hatch${useId().replaceAll(':', '')}`;
   const layout = useSteadyLayout(study, props.layout);
   const inCase = useMemo(() => studyInCase(study, caseId), [study, caseId]);
+  const beside = useMemo(
+    () => ({ base: study, differences: differencesByPart(study, caseId) }),
+    [study, caseId],
+  );
   // The order plays no part in the two other readings: scrubbing then leaves the figures alone.
   const handle = readingMode === 'order' ? order : 1;
   const handleProbe = readingMode === 'order' ? probe : null;
   const figures = useMemo(
-    () => figuresOf(inCase, solution, verdicts, readingMode, handle, handleProbe),
-    [inCase, solution, verdicts, readingMode, handle, handleProbe],
+    () => figuresOf(inCase, solution, verdicts, readingMode, handle, handleProbe, beside),
+    [inCase, solution, verdicts, readingMode, handle, handleProbe, beside],
   );
   const controls = usePaneView(paneRef, layout, props.fitKey ?? '');
   const roving = useRovingFocus(paneRef, layout, selection, controls);

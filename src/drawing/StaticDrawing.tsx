@@ -5,7 +5,7 @@ import { type Study, studyInCase } from '../study/index.ts';
 import { BusGlyph } from './glyphs/BusGlyph.tsx';
 import { type Palette, printPalette } from './glyphs/Palette.ts';
 import { PartGlyph } from './glyphs/PartGlyph.tsx';
-import { type Layout, layoutStudy } from './layout/index.ts';
+import { differencesByPart, type Layout, layoutStudy } from './layout/index.ts';
 import { figuresOf } from './readings/figures.ts';
 import type { ReadingMode } from './readings/ReadingMode.ts';
 
@@ -32,7 +32,9 @@ export function StaticDrawing(props: StaticDrawingProps) {
   const { study, caseId, solution, palette = printPalette, fontFamily, verdicts = NO_VERDICTS } = props;
   const inCase = useMemo(() => studyInCase(study, caseId), [study, caseId]);
   const layout = useMemo(() => props.layout ?? layoutStudy(study), [props.layout, study]);
-  const figures = figuresOf(inCase, solution, verdicts, props.readingMode ?? 'fundamental', props.order ?? 1);
+  const beside = { base: study, differences: differencesByPart(study, caseId) };
+  const { readingMode = 'fundamental', order = 1 } = props;
+  const figures = figuresOf(inCase, solution, verdicts, readingMode, order, null, beside);
   return (
     <svg
       xmlns="http://www.w3.org/2000/svg"

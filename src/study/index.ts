@@ -92,6 +92,7 @@ export { hintOf } from './fields/hintOf.ts';
 export { isInside } from './fields/isInside.ts';
 export { takesOrigin } from './fields/takesOrigin.ts';
 export { valueWords } from './fields/valueWords.ts';
+export { fedBuses } from './findings/feeding.ts';
 export { siteFindings } from './findings/siteFindings.ts';
 export { fingerprint } from './fingerprint.ts';
 export {

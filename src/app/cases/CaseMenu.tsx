@@ -12,7 +12,7 @@ import {
 } from 'react-aria-components';
 import { shownKeys } from '../../keys/index.ts';
 import { useWorkbench } from '../../store/index.ts';
-import { caseDifferences, casesOf, nameOf, type Study } from '../../study/index.ts';
+import { caseDifferences, casesOf, counted, nameOf, type Study } from '../../study/index.ts';
 import type { Command } from '../commands/command.ts';
 import { CaseForm } from './CaseForm.tsx';
 import { closeCaseMenu, setCaseForm, useCaseForm } from './caseForms.ts';
@@ -129,5 +129,5 @@ function CaseChoice({ study, caseId, commands }: ChoiceProps) {
 
 function differenceWords(study: Study, caseId: string): string {
   const { length } = caseDifferences(study, caseId);
-  return length === 0 ? '' : ` · Δ ${length}`;
+  return length === 0 ? '' : ` · Δ ${counted(length, 'value')}`;
 }

@@ -124,7 +124,7 @@ function Choice({ id, chosen, onChoose, children }: ChoiceProps) {
         checked={chosen === id}
         onChange={() => onChoose(id)}
       />
-      <span>{children}</span>
+      <span className="capital">{children}</span>
     </label>
   );
 }

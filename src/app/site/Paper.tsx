@@ -1,7 +1,7 @@
 import { useCallback } from 'react';
 import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
-import { type Study, studyInCase } from '../../study/index.ts';
+import type { Study } from '../../study/index.ts';
 import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
@@ -57,7 +57,8 @@ export function Paper(props: Props) {
       {outlined && study.buses.length > 0 ? (
         <div className="outline-place">
           <Outline
-            study={studyInCase(study, view.caseId)}
+            study={study}
+            caseId={view.caseId}
             selection={view.selection}
             verdicts={verdicts}
             onSelect={select}

@@ -31,6 +31,7 @@ function sameFigure(a: BusFigure, b: BusFigure): boolean {
     a.more === b.more &&
     a.mark === b.mark &&
     a.deenergised === b.deenergised &&
+    a.darkened === b.darkened &&
     samePhasors(a.phasors, b.phasors)
   );
 }
@@ -66,7 +67,7 @@ export const BusView = memo(function BusView(props: BusViewProps) {
     'busbar',
     figure.name,
     figure.plate,
-    figure.text,
+    figure.darkened ? `in this case ${figure.text}` : figure.text,
     figure.more,
     mark,
     focus ? 'on the rail' : '',

@@ -2,7 +2,7 @@ import { memo } from 'react';
 import { trayNames } from '../gestures/TrayKind.ts';
 import { screenPalette } from '../glyphs/Palette.ts';
 import { PartGlyph } from '../glyphs/PartGlyph.tsx';
-import { measures, type PartPlace } from '../layout/index.ts';
+import { differenceMark, measures, type PartPlace } from '../layout/index.ts';
 import type { PartFigure } from '../readings/figures.ts';
 import { verdictWords } from '../readings/worstVerdict.ts';
 import { partSubject } from '../subject.ts';
@@ -28,6 +28,7 @@ function sameFigure(a: PartFigure, b: PartFigure): boolean {
     a.element === b.element &&
     a.name === b.name &&
     a.plate === b.plate &&
+    a.differences === b.differences &&
     a.mark === b.mark &&
     a.off === b.off &&
     a.dead === b.dead &&
@@ -62,7 +63,8 @@ export function partBoxes(place: PartPlace, figure: PartFigure) {
 }
 
 function spoken(figure: PartFigure, letters: string): string {
-  const { element, name, plate, cells, words, mark, off } = figure;
+  const { element, name, cells, words, mark, off } = figure;
+  const plate = figure.plate.replaceAll(differenceMark, 'in this case ');
   const readings = cells.map(({ value, unit, spoken }) => spoken ?? `${value} ${unit}`);
   const verdict = mark ? verdictWords[mark] : '';
   const notes = letters ? `notes ${letters}` : '';

@@ -1,4 +1,4 @@
-import { type BusPlace, measures } from '../layout/index.ts';
+import { type BusPlace, differenceMark, measures } from '../layout/index.ts';
 import type { BusFigure } from '../readings/figures.ts';
 import type { Palette } from './Palette.ts';
 import { PhasorDial } from './PhasorDial.tsx';
@@ -61,6 +61,7 @@ function Plate({ place, figure, palette, letters }: Required<BusGlyphProps>) {
       <text x={left} y={first + measures.LINE_PX} fill={palette.ink2}>
         <tspan className="plate">{figure.plate}</tspan>
         <tspan className="reading" dx={6} fill={ink} fontStyle={figure.deenergised ? 'italic' : undefined}>
+          {figure.darkened && differenceMark}
           {figure.text}
         </tspan>
       </text>

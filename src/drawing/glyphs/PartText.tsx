@@ -1,4 +1,5 @@
-import { measures, type PartPlace, wrapWords } from '../layout/index.ts';
+import { differenceMark, measures, type PartPlace, wrapWords } from '../layout/index.ts';
+import { differenceWords } from '../readings/differenceWords.ts';
 import type { PartFigure } from '../readings/figures.ts';
 import type { Palette } from './Palette.ts';
 
@@ -48,14 +49,22 @@ export function PartText({ place, figure, palette }: PartTextProps) {
   const values = cells.map(({ value }) => value);
   const units = cells.map(({ unit }) => unit);
   const plate = wrapWords(figure.plate, label.width, text.plateLines);
+  const changed = figure.differences.length > 0;
+  // Where no nameplates are drawn the name carries the mark of what the case changes.
+  const name =
+    changed && plate.length === 0 ? text.name.with(0, `${differenceMark}${text.name[0] ?? ''}`) : text.name;
+  const told = [
+    ...(plate.at(-1)?.endsWith('…') ? [figure.plate] : []),
+    ...differenceWords(figure.differences),
+  ];
   return (
     <g textAnchor={middle ? 'middle' : 'start'} fontSize={measures.FONT_PX}>
       <text fontWeight={600} fill={palette.ink}>
         {text.name.at(-1)?.endsWith('…') && <title>{figure.name}</title>}
-        <Pieces of={pieces(text.name, () => x, line(top))} />
+        <Pieces of={pieces(name, () => x, line(top))} />
       </text>
-      <text className="plate" fill={palette.ink2}>
-        {plate.at(-1)?.endsWith('…') && <title>{figure.plate}</title>}
+      <text className="plate" fill={changed ? palette.ink : palette.ink2}>
+        {told.length > 0 && <title>{told.join('\n')}</title>}
         <Pieces of={pieces(plate, () => x, line(plateY))} />
       </text>
       {figure.words !== '' && (

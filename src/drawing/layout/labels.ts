@@ -19,6 +19,7 @@ import {
   SIDE_LIMIT,
 } from './measures.ts';
 import { nominalVoltage, widestNameplate } from './nameplate.ts';
+import { platesInCases } from './plateInCase.ts';
 import { readingRoom } from './readingRoom.ts';
 import { textWidth } from './textWidth.ts';
 import type { PartText } from './types.ts';
@@ -73,32 +74,43 @@ function remembered<K, V>(known: Map<K, V>, key: K, find: () => V): V {
   return found;
 }
 
+/** Every nameplate the part has, in the base study and in the cases that change it; none where none are drawn. */
+function platesOf(part: StudyElement, study: Study, drawn: ReadonlySet<DrawnItem>): readonly string[] {
+  if (!drawn.has('nameplates')) return [];
+  return [widestNameplate(part, study), ...(platesInCases(study).get(part.id) ?? [])];
+}
+
 function leafText(part: StudyElement, study: Study, drawn: ReadonlySet<DrawnItem>): TextPlan {
-  const plate = drawn.has('nameplates') ? widestNameplate(part, study) : '';
-  const wished = Math.max(CELL_WIDTH, twoLineWidth(nameOf(part), true), twoLineWidth(plate));
+  const plates = platesOf(part, study, drawn);
+  const wished = Math.max(
+    CELL_WIDTH,
+    twoLineWidth(nameOf(part), true),
+    ...plates.map((plate) => twoLineWidth(plate)),
+  );
   const width = Math.min(LEAF_LIMIT, Math.ceil(wished / WIDTH_STEP) * WIDTH_STEP);
-  return planned(part, plate, width, 1, 'middle', drawn);
+  return planned(part, plates, width, 1, 'middle', drawn);
 }
 
 function sideText(part: StudyElement, study: Study, drawn: ReadonlySet<DrawnItem>, tall: boolean): TextPlan {
-  const plate = drawn.has('nameplates') ? widestNameplate(part, study) : '';
+  const plates = platesOf(part, study, drawn);
   const columns = !tall && readingRoom(part, drawn) > 1 ? 2 : 1;
   const cells = columns * CELL_WIDTH + (columns - 1) * CELL_GAP;
   const name = columns === 1 ? twoLineWidth(nameOf(part), true) : textWidth(nameOf(part), undefined, true);
-  const width = Math.max(cells, Math.min(SIDE_LIMIT, Math.ceil(Math.max(name, twoLineWidth(plate)))));
-  return planned(part, plate, width, columns, 'start', drawn);
+  const wished = Math.max(name, ...plates.map((plate) => twoLineWidth(plate)));
+  const width = Math.max(cells, Math.min(SIDE_LIMIT, Math.ceil(wished)));
+  return planned(part, plates, width, columns, 'start', drawn);
 }
 
 function planned(
   part: StudyElement,
-  plate: string,
+  plates: readonly string[],
   width: number,
   columns: 1 | 2,
   align: PartText['align'],
   drawn: ReadonlySet<DrawnItem>,
 ): TextPlan {
   const name = wrapWords(nameOf(part), width, 2, true);
-  const plateLines = wrapWords(plate, width, 2).length;
+  const plateLines = Math.max(0, ...plates.map((plate) => wrapWords(plate, width, 2).length));
   const readings = readingRoom(part, drawn);
   const lines = name.length + plateLines + Math.ceil(readings / columns);
   return {

@@ -1,14 +1,23 @@
 import { type KeyboardEvent, useMemo, useRef, useState } from 'react';
 import type { Verdict } from '../../checks/index.ts';
-import { busById, elementById, type Study } from '../../study/index.ts';
+import { busById, type CaseDifference, elementById, type Study, studyInCase } from '../../study/index.ts';
 import { trayNames } from '../gestures/TrayKind.ts';
-import { nameplate, nominalVoltage, type OutlineNode, outlineWords, siteOutline } from '../layout/index.ts';
+import {
+  differencesByPart,
+  nominalVoltage,
+  type OutlineNode,
+  outlineWords,
+  plateInCase,
+  siteOutline,
+} from '../layout/index.ts';
 import { verdictWords, worstVerdicts } from '../readings/worstVerdict.ts';
 import { readSubject, type Subject } from '../subject.ts';
 import { type OutlineRow, outlineRows } from './outlineRows.ts';
 
 export interface OutlineProps {
+  /** The base study; what stands in the case is told. */
   study: Study;
+  caseId: string;
   selection: readonly Subject[];
   verdicts: readonly Verdict[];
   onSelect(items: readonly Subject[]): void;
@@ -20,7 +29,12 @@ const MARK = { fail: '✕', watch: '!', unknown: '?', pass: '✓' } as const;
 
 /** The site as a tree: the same parts, the same selection, without a picture. */
 export function Outline(props: OutlineProps) {
-  const { study, selection, verdicts } = props;
+  const { selection, verdicts } = props;
+  const study = useMemo(() => studyInCase(props.study, props.caseId), [props.study, props.caseId]);
+  const differences = useMemo(
+    () => differencesByPart(props.study, props.caseId),
+    [props.study, props.caseId],
+  );
   const tree = useMemo(() => siteOutline(study), [study]);
   const worst = useMemo(() => worstVerdicts(verdicts), [verdicts]);
   const [folded, setFolded] = useState<ReadonlySet<Subject>>(new Set());
@@ -87,7 +101,7 @@ export function Outline(props: OutlineProps) {
             <span className={row.node.kind === 'bus' ? 'outline-bus' : undefined}>
               {outlineWords(study, row.node)}
             </span>
-            <span className="outline-plate">{plateOf(study, row.node)}</span>
+            <span className="outline-plate">{plateOf(study, row.node, differences)}</span>
             {mark && mark !== 'pass' && (
               <span className={`outline-mark ${mark}`}>
                 {MARK[mark]} {verdictWords[mark]}
@@ -100,8 +114,13 @@ export function Outline(props: OutlineProps) {
   );
 }
 
-function plateOf(study: Study, node: OutlineNode): string {
+function plateOf(
+  study: Study,
+  node: OutlineNode,
+  differences: ReadonlyMap<string, readonly CaseDifference[]>,
+): string {
   if (node.kind === 'bus') return nominalVoltage(busById(study, node.id)?.nominalV ?? Number.NaN);
   const part = elementById(study, node.id);
-  return part ? `${trayNames[part.kind]} · ${nameplate(part, study)}` : '';
+  if (!part) return '';
+  return `${trayNames[part.kind]} · ${plateInCase(part, study, differences.get(part.id) ?? [])}`;
 }

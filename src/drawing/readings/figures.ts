@@ -2,7 +2,9 @@ import type { Verdict, VerdictWord } from '../../checks/index.ts';
 import type { CaseSolution } from '../../engine/index.ts';
 import {
   busesOf,
+  type CaseDifference,
   drawnOf,
+  fedBuses,
   nameOf,
   type Study,
   type StudyElement,
@@ -10,7 +12,7 @@ import {
   symbolSetOf,
   withDefaults,
 } from '../../study/index.ts';
-import { nameplate, nominalVoltage } from '../layout/index.ts';
+import { nominalVoltage, plateInCase } from '../layout/index.ts';
 import { type BusReading, busReading, type ImpedanceProbe } from './busReading.ts';
 import { lineWidth } from './lineWidth.ts';
 import { partReading, type ReadingCell } from './partReading.ts';
@@ -23,6 +25,8 @@ export interface PartFigure {
   element: StudyElement;
   name: string;
   plate: string;
+  /** What the case shown has otherwise than the base study. */
+  differences: readonly CaseDifference[];
   /** Live figures, each with its own place in the part's text. */
   cells: ReadingCell[];
   /** Said instead of figures: off, no step on. */
@@ -44,6 +48,8 @@ export interface BusFigure extends BusReading {
   name: string;
   plate: string;
   mark: VerdictWord | undefined;
+  /** Without voltage in the case shown, and fed in the base study. */
+  darkened: boolean;
 }
 
 export interface Figures {
@@ -58,6 +64,14 @@ function symbolData(part: StudyElement, study: Study): StudyElement {
   return bus ? { ...part, neutral: withDefaults(part, bus).neutral } : part;
 }
 
+const NO_DIFFERENCES: readonly CaseDifference[] = [];
+
+/** The base study beside a case, for what the case has otherwise. */
+export interface BesideBase {
+  base: Study;
+  differences: ReadonlyMap<string, readonly CaseDifference[]>;
+}
+
 /** Readings, line widths and marks of a whole drawing. `study` is the study as it stands in the case shown. */
 export function figuresOf(
   study: Study,
@@ -66,6 +80,7 @@ export function figuresOf(
   mode: ReadingMode,
   handle: number,
   probe: ImpedanceProbe | null = null,
+  beside: BesideBase = { base: study, differences: new Map() },
 ): Figures {
   const worst = worstVerdicts(verdicts);
   const drawn = drawnOf(study);
@@ -76,11 +91,13 @@ export function figuresOf(
   study.elements.forEach((part, at) => {
     const reading = readings[at] ?? { cells: [], words: '', amperes: {}, flow: 0 as const };
     const ends = busesOf(part);
+    const differences = beside.differences.get(part.id) ?? NO_DIFFERENCES;
     const ampere = (bus: string) => (drawn.has('widths') ? (reading.amperes[bus] ?? null) : null);
     parts.set(part.id, {
       element: symbolData(part, study),
       name: nameOf(part),
-      plate: drawn.has('nameplates') ? nameplate(part, study) : '',
+      plate: drawn.has('nameplates') ? plateInCase(part, study, differences) : '',
+      differences,
       cells: reading.cells,
       words: reading.words,
       flow: drawn.has('direction') ? reading.flow : 0,
@@ -92,6 +109,7 @@ export function figuresOf(
     });
   });
   const buses = new Map<string, BusFigure>();
+  const fed = solution?.deenergised.length ? fedBuses(beside.base) : null;
   for (const bus of study.buses) {
     const reading = busReading(bus, solution, mode, handle, probe);
     buses.set(bus.id, {
@@ -101,6 +119,7 @@ export function figuresOf(
       // A busbar without voltage says so whatever is shown.
       ...(drawn.has('voltages') || reading.deenergised ? {} : { text: '', more: '' }),
       mark: worst.get(`bus:${bus.id}`),
+      darkened: reading.deenergised && (fed?.has(bus.id) ?? false),
     });
   }
   return { parts, buses };
