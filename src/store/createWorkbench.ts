@@ -29,6 +29,7 @@ const emptyTable: WorkbenchState = {
   allVerdicts: null,
   worstQuestion: { families: defaultFamilies, tolerances: defaultTolerances },
   worst: null,
+  envelope: null,
   status: { solving: false, workerMessage: null },
   notice: null,
   said: null,

@@ -104,7 +104,22 @@ export function followStudy(
         }),
       ),
     );
+    await bandOf(at);
     await judgeWorst(at);
+  }
+
+  /** The band of the focused busbar's impedance, in states and tolerances as the worst is looked for. */
+  async function bandOf(at: StudyAt): Promise<void> {
+    const { worstQuestion: question, envelope: known, revision, beforePreview, view } = store.getState();
+    const bus = view.focusBus;
+    if (revision !== at.revision || beforePreview || bus === '') return;
+    if (known?.revision === revision && known.question === question && known.envelope.bus === bus) return;
+    const envelope = answered(await computation.envelope(at, bus, question));
+    store.setState((now) =>
+      envelope && now.revision === revision && now.worstQuestion === question && now.view.focusBus === bus
+        ? { envelope: { revision, question, envelope } }
+        : {},
+    );
   }
 
   /** Over states and tolerances: the longest of all, begun last and ended by the next edit. */
@@ -162,7 +177,9 @@ export function followStudy(
     if (moved || caseChanged) void solve(at, view.caseId);
     else if (busChanged) void rescan(at, view);
     if (moved || caseChanged || view.order !== before.view.order) probeSoon();
-    if (!moved && now.worstQuestion !== before.worstQuestion) void judgeWorst(at);
+    const asked = now.worstQuestion !== before.worstQuestion;
+    if (!moved && (asked || busChanged) && now.allVerdicts?.complete) void bandOf(at);
+    if (!moved && asked) void judgeWorst(at);
   }
 
   const { study, revision, view } = store.getState();

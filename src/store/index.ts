@@ -11,6 +11,7 @@ export { restore } from './restore.ts';
 export {
   countVerdicts,
   freshAnswer,
+  freshEnvelope,
   freshVerdicts,
   freshWorst,
   isScanStale,

@@ -1,5 +1,5 @@
 import type { Verdict, VerdictWord } from '../checks/index.ts';
-import type { WorstResult, WorstVerdict } from '../sizing/index.ts';
+import type { ImpedanceEnvelope, WorstResult, WorstVerdict } from '../sizing/index.ts';
 import type { Answer, Workbench } from './types.ts';
 
 /** Words for "Undo …"; null where there is nothing to undo. */
@@ -69,6 +69,17 @@ export function countVerdicts(word: VerdictWord, scope: 'case' | 'all'): (state:
 /** The worst over states and tolerances, where it was computed from the study on screen. */
 export function freshWorst({ worst, revision, worstQuestion }: Workbench): WorstResult | null {
   return worst?.revision === revision && worst.question === worstQuestion ? worst.result : null;
+}
+
+/** The band of the impedance on the rail, where it was computed from the study and for the busbar on screen. */
+export function freshEnvelope({
+  envelope,
+  revision,
+  worstQuestion,
+  view,
+}: Workbench): ImpedanceEnvelope | null {
+  const fits = envelope?.revision === revision && envelope.question === worstQuestion;
+  return fits && envelope.envelope.bus === view.focusBus ? envelope.envelope : null;
 }
 
 const byKey = new WeakMap<WorstResult, ReadonlyMap<string, WorstVerdict>>();

@@ -102,6 +102,7 @@ function opened(
     probe: null,
     allVerdicts: null,
     worst: null,
+    envelope: null,
   };
 }
 

@@ -1,7 +1,7 @@
 /** State and actions of the workbench: the one source of truth of the page. */
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution } from '../engine/index.ts';
-import type { WorstProgress, WorstResult } from '../sizing/index.ts';
+import type { ImpedanceEnvelope, WorstProgress, WorstResult } from '../sizing/index.ts';
 import type { Edit, Finding, Pin, Study } from '../study/index.ts';
 import type { Probe, ScanPair, WorstQuestion } from '../worker/index.ts';
 import type { History } from './history.ts';
@@ -87,6 +87,13 @@ export interface WorstAnswer {
   tooMany: number | null;
 }
 
+/** The band of the focused busbar's impedance, of the revision and question it names. */
+export interface EnvelopeAnswer {
+  revision: number;
+  question: WorstQuestion;
+  envelope: ImpedanceEnvelope;
+}
+
 /** Something the user must read: a refused file, a failed autosave, a study open twice. */
 export interface Notice {
   severity: 'error' | 'warning' | 'info';
@@ -133,6 +140,7 @@ export interface WorkbenchState {
   /** Which states and tolerances the worst is looked for in. */
   worstQuestion: WorstQuestion;
   worst: WorstAnswer | null;
+  envelope: EnvelopeAnswer | null;
   status: Status;
   notice: Notice | null;
   /** What was said last beside the drawing: what was undone, pasted or refused. The next edit ends it. */

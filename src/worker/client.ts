@@ -1,6 +1,6 @@
 import type { Verdict } from '../checks/index.ts';
 import type { ResultsFile } from '../engine/index.ts';
-import type { WorstProgress } from '../sizing/index.ts';
+import type { ImpedanceEnvelope, WorstProgress } from '../sizing/index.ts';
 import { type ComputationOptions, Dispatcher, type Lane, type StudyAt } from './dispatcher.ts';
 import type {
   CaseDossier,
@@ -43,6 +43,8 @@ export interface Computation {
     question: WorstQuestion,
     onProgress: (progress: WorstProgress) => void,
   ): Promise<Settled<WorstEnd>>;
+  /** The band of a busbar's impedance over states and tolerances, in slices like `worst`; null where there is none. */
+  envelope(at: StudyAt, bus: string, question: WorstQuestion): Promise<Settled<ImpedanceEnvelope | null>>;
   results(at: StudyAt): Promise<Settled<ResultsFile>>;
   /** What a printed study needs, case by case, with the impedance curves of the busbars named. */
   dossiers(
@@ -109,6 +111,21 @@ export function createComputation(options: ComputationOptions): Computation {
     }
   }
 
+  async function envelope(
+    at: StudyAt,
+    bus: string,
+    question: WorstQuestion,
+  ): Promise<Settled<ImpedanceEnvelope | null>> {
+    const own = {};
+    newestRound.set('envelope', own);
+    for (;;) {
+      const slice = await patient.ask('envelope', { kind: 'envelope', bus, question }, at);
+      if (newestRound.get('envelope') !== own) return { outcome: 'superseded' };
+      if (slice.outcome !== 'done') return slice;
+      if (slice.value.state === 'done') return { outcome: 'done', value: slice.value.result };
+    }
+  }
+
   return {
     warm,
     solve: (at, caseId) => live.ask('solve', { kind: 'solve', caseId }, at),
@@ -131,6 +148,7 @@ export function createComputation(options: ComputationOptions): Computation {
         (_, dossier, done) => onCase(dossier, done),
       ),
     worst,
+    envelope,
     results: (at) => patient.ask('results', { kind: 'results' }, at),
     cancel: (lane) => {
       for (const dispatcher of [live, patient]) dispatcher.cancel(lane);

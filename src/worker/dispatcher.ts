@@ -26,6 +26,7 @@ const lanes = [
   'results',
   'dossiers',
   'judgeAll',
+  'envelope',
   'worst',
   'warm',
 ] as const;

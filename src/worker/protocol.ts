@@ -8,7 +8,13 @@
  */
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution, DrivingPoints, ImpedanceScan, ResultsFile } from '../engine/index.ts';
-import type { StateFamilies, ToleranceSettings, WorstProgress, WorstResult } from '../sizing/index.ts';
+import type {
+  ImpedanceEnvelope,
+  StateFamilies,
+  ToleranceSettings,
+  WorstProgress,
+  WorstResult,
+} from '../sizing/index.ts';
 import type { Study } from '../study/index.ts';
 
 /** Positive-sequence driving-point impedance of one busbar with and without the correction, on one axis. */
@@ -60,6 +66,9 @@ export type WorstSlice =
   /** More states than are solved at once: the families are to be narrowed. */
   | { state: 'too-many'; count: number };
 
+/** One slice of the band of a busbar's impedance; null where it has no source, or the states are too many. */
+export type EnvelopeSlice = { state: 'running' } | { state: 'done'; result: ImpedanceEnvelope | null };
+
 /** How a worst-case run ended. */
 export type WorstEnd = Exclude<WorstSlice, { state: 'running' }>;
 
@@ -72,6 +81,7 @@ export type Job =
   | { kind: 'judge'; caseId: string; screening: boolean }
   | { kind: 'dossier'; caseId: string; buses: readonly string[] }
   | { kind: 'worst'; question: WorstQuestion }
+  | { kind: 'envelope'; bus: string; question: WorstQuestion }
   | { kind: 'results' };
 
 export type JobKind = Job['kind'];
@@ -86,6 +96,7 @@ export interface Replies {
   judge: Verdict[];
   dossier: CaseDossier;
   worst: WorstSlice;
+  envelope: EnvelopeSlice;
   results: ResultsFile;
 }
 

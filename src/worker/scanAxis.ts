@@ -15,12 +15,24 @@ export function railSpan(study: Study): { from: number; to: number } {
 
 /** The rail's frequencies in Hz: log-spaced, with every integer order among them exactly, ascending. */
 export function scanAxis(study: Study): Float64Array {
+  return logAxis(study, points);
+}
+
+function logAxis(study: Study, count: number): Float64Array {
   const { from, to } = railSpan(study);
   const orders: number[] = [];
-  for (let i = 0; i < points; i += 1) orders.push(from * (to / from) ** (i / (points - 1)));
-  orders[points - 1] = to;
+  for (let i = 0; i < count; i += 1) orders.push(from * (to / from) ** (i / (count - 1)));
+  orders[count - 1] = to;
   for (let h = 1; h <= to; h += 1) orders.push(h);
   return toFrequencies(orders, study.frequencyHz);
+}
+
+/** Points of a band: fewer than of a curve, as it is scanned again and again. */
+const bandPoints = 240;
+
+/** The rail's span for a band, log-spaced with every integer order, ascending, in Hz. */
+export function railAxis(study: Study): Float64Array {
+  return logAxis(study, bandPoints);
 }
 
 /** Frequencies in Hz around the given resonances that draw each peak and dip to its tip, ascending. */

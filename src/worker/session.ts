@@ -1,10 +1,19 @@
 import type { Verdict } from '../checks/index.ts';
 import { type CaseSolution, solveCase } from '../engine/index.ts';
+import {
+  type ImpedanceEnvelope,
+  impedanceEnvelope,
+  statesOf,
+  type WorstProgress,
+  type WorstResult,
+  worstOver,
+} from '../sizing/index.ts';
 import { baseStateId, casesOf, type Study, withBaseState } from '../study/index.ts';
 import { judgeNumbers, probeOrder, resultsOf, scanPair, solveNumbers } from './compute.ts';
 import type {
   CaseDossier,
   CaseNumbers,
+  EnvelopeSlice,
   Job,
   JobKind,
   Replies,
@@ -13,7 +22,8 @@ import type {
   WorstQuestion,
   WorstSlice,
 } from './protocol.ts';
-import { WorstRun } from './WorstRun.ts';
+import { SlicedRun } from './SlicedRun.ts';
+import { railAxis } from './scanAxis.ts';
 import { createWarmUp } from './warmUp.ts';
 
 /** What the worker remembers between messages, and what it answers to each. */
@@ -28,7 +38,8 @@ interface Held {
   study: Study;
   solutions: Map<string, CaseSolution>;
   without: Map<string, CaseSolution>;
-  worst?: WorstRun;
+  worst?: SlicedRun<WorstProgress, WorstResult>;
+  envelope?: SlicedRun<unknown, ImpedanceEnvelope | null>;
 }
 
 export function createSession(): Session {
@@ -54,6 +65,8 @@ export function createSession(): Session {
         return judgeKept(now, job.caseId, job.screening);
       case 'dossier':
         return dossierOf(now, job.caseId, job.buses);
+      case 'envelope':
+        return envelopeSlice(now, job.bus, job.question);
       case 'worst':
         return worstSlice(now, job.question);
       case 'results':
@@ -107,6 +120,32 @@ function dossierOf(held: Held, caseId: string, buses: readonly string[]): CaseDo
 
 /** Goes on with the run under way, or begins another where a different question is asked. */
 function worstSlice(held: Held, question: WorstQuestion): WorstSlice {
-  if (!held.worst?.answers(question)) held.worst = new WorstRun(held.study, question);
+  const key = JSON.stringify(question);
+  if (held.worst?.key !== key) {
+    const { states, count } = statesOf(held.study, question.families);
+    if (!states) return { state: 'too-many', count };
+    const { tolerances } = question;
+    held.worst = new SlicedRun(key, worstOver(held.study, { states, tolerances }));
+  }
   return held.worst.slice();
+}
+
+/** No band where the states are too many to be solved. */
+function envelopeSlice(held: Held, bus: string, question: WorstQuestion): EnvelopeSlice {
+  const key = JSON.stringify([bus, question]);
+  if (held.envelope?.key !== key) {
+    const { states } = statesOf(held.study, question.families);
+    if (!states) return { state: 'done', result: null };
+    const { tolerances } = question;
+    const frequencyHz = railAxis(held.study);
+    held.envelope = new SlicedRun(
+      key,
+      impedanceEnvelope(held.study, { bus, states, tolerances, frequencyHz }),
+    );
+  }
+  const slice = held.envelope.slice();
+  if (slice.state === 'running') return { state: 'running' };
+  // Its arrays leave with the answer: asked again, it is computed again.
+  delete held.envelope;
+  return slice;
 }

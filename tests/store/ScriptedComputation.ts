@@ -111,6 +111,15 @@ export class ScriptedComputation implements Computation {
     const result = { verdicts: [], states: 2, points: 9, bound: 0, unsolved: [] };
     return { outcome: 'done', value: { state: 'done', result } };
   };
+  readonly envelopesAsked: { at: StudyAt; bus: string }[] = [];
+  envelope: Computation['envelope'] = async (at, bus) => {
+    this.envelopesAsked.push({ at, bus });
+    const none = new Float64Array(0);
+    return {
+      outcome: 'done',
+      value: { bus, frequencyHz: none, lowOhm: none, highOhm: none, states: 1 },
+    };
+  };
   cancel = (): void => {};
   close = (): void => {};
 

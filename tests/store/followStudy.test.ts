@@ -3,6 +3,7 @@ import {
   countVerdicts,
   createWorkbench,
   followStudy,
+  freshEnvelope,
   freshVerdicts,
   freshWorst,
   isScanStale,
@@ -299,6 +300,19 @@ describe('the worst over states and tolerances', () => {
     expect(computation.worstAsked.at(-1)?.question.families.couplers).toBe(true);
     expect(freshWorst(state())?.states).toBe(2);
     expect(computation.count('solve')).toBe(solves);
+  });
+
+  it('comes after the band of the busbar on the rail, which follows the busbar', async () => {
+    state().openStudy(site);
+    await judgedAll();
+    expect(computation.envelopesAsked.map(({ bus }) => bus)).toEqual([state().view.focusBus]);
+    expect(freshEnvelope(state())?.bus).toBe(state().view.focusBus);
+    const other = site.buses.find(({ id }) => id !== state().view.focusBus)?.id ?? '';
+    state().setFocusBus(other);
+    expect(freshEnvelope(state())).toBeNull();
+    await settled();
+    expect(freshEnvelope(state())?.bus).toBe(other);
+    expect(computation.worstAsked).toHaveLength(1);
   });
 
   it('is not asked twice for what is known', async () => {

@@ -73,6 +73,22 @@ describe('the session in the worker', () => {
     expect(slices).toBeGreaterThan(1);
   });
 
+  it('draws the band of a busbar, again as often as it is asked', () => {
+    const { send } = behindBoundary();
+    const question = { families: defaultFamilies, tolerances: defaultTolerances };
+    const bus = site.buses[0]?.id ?? '';
+    const whole = () => {
+      let slice = good(send({ kind: 'envelope', bus, question }, 1, site));
+      while (slice.state === 'running') slice = good(send({ kind: 'envelope', bus, question }));
+      return slice.result;
+    };
+    const band = whole();
+    expect(band?.bus).toBe(bus);
+    expect(band?.highOhm.length).toBeGreaterThan(200);
+    expect(band?.highOhm.every((high, k) => high >= (band.lowOhm[k] ?? Number.NaN))).toBe(true);
+    expect(whole()).toEqual(band);
+  });
+
   it('counts states that are too many instead of solving some of them', () => {
     const { send } = behindBoundary();
     const bank = site.elements.find((part) => part.kind === 'bank');

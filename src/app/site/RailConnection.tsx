@@ -1,6 +1,6 @@
 import { useMemo } from 'react';
 import { FrequencyRail, type Probe } from '../../charts/index.ts';
-import { freshAnswer, isStale, useWorkbench, type Workbench } from '../../store/index.ts';
+import { freshAnswer, freshEnvelope, isStale, useWorkbench, type Workbench } from '../../store/index.ts';
 import { busName } from '../../study/index.ts';
 import { RailSplitter } from '../panels/panelSplitters.tsx';
 import { setPanels, usePanelPlaces } from '../panels/panelStore.ts';
@@ -36,6 +36,7 @@ export function RailConnection() {
       ),
     [fresh],
   );
+  const band = useWorkbench(freshEnvelope);
   const place = usePanelPlaces().rail;
   if (!study || study.buses.length === 0) return null;
   return (
@@ -47,6 +48,7 @@ export function RailConnection() {
         frequencyHz={study.frequencyHz}
         maxOrder={study.maxOrder ?? 50}
         order={order}
+        {...(band ? { band } : {})}
         probe={re !== null && im !== null ? { re, im } : null}
         injected={injected}
         summation={study.summation ?? 'phasor'}
