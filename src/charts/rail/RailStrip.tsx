@@ -92,7 +92,7 @@ export function stripWords(
   if (!props.scan) return 'no impedance to show yet';
   const summation = props.summation === 'alpha' ? 'IEC 61000-3-6 summation' : 'phasor summation';
   const parts = [`impedance seen, ${props.sequence} sequence`, summation];
-  if (props.band) parts.push('band: all cases and tolerances');
+  if (props.band) parts.push('band: all states and tolerances');
   parts.push(`thin: ${props.thinWords ?? 'without correction'}`);
   return parts.join(' · ');
 }
