@@ -6,7 +6,12 @@ import { moveInColumn } from '../../src/charts/notes/noteKeys.ts';
 import { readingText, verdictText } from '../../src/charts/notes/noteText.ts';
 import type { Reading } from '../../src/charts/notes/Reading.ts';
 import { readingNumbers, worstThd } from '../../src/charts/notes/readingNumbers.ts';
-import { byMargin, groupedVerdicts, verdictCounts } from '../../src/charts/notes/verdictOrder.ts';
+import {
+  byMargin,
+  groupedVerdicts,
+  type VerdictNames,
+  verdictCounts,
+} from '../../src/charts/notes/verdictOrder.ts';
 import {
   limitValue,
   marginWords,
@@ -38,6 +43,11 @@ function verdict(key: string, change: Partial<Verdict>): Verdict {
     ...change,
   };
 }
+
+const names: VerdictNames = {
+  subject: (one) => one.subject.id,
+  case: ({ caseId }) => `case ${caseId}`,
+};
 
 describe('letters of notes', () => {
   it('run a, b, c … in reading order, one a subject', () => {
@@ -88,14 +98,23 @@ describe('verdicts in the column', () => {
 
   it('are counted by word and filtered without losing any', () => {
     expect(verdictCounts(list)).toEqual({ fail: 2, watch: 1, unknown: 1, pass: 1 });
-    const shown = groupedVerdicts(list, new Set(['fail', 'pass']), 'margin', () => '');
+    const shown = groupedVerdicts(list, new Set(['fail', 'pass']), 'margin', names);
     expect(shown.flatMap((group) => group.verdicts.map((one) => one.key))).toEqual(['f2', 'f1', 'p']);
   });
 
   it('are gathered by part with the worst part first', () => {
     const two = [...list, verdict('b', { subject: bus('main'), verdict: 'fail', margin: -9 })];
-    const groups = groupedVerdicts(two, new Set(['fail']), 'part', (one) => one.subject.id);
+    const groups = groupedVerdicts(two, new Set(['fail']), 'part', names);
     expect(groups.map((group) => group.title)).toEqual(['main', 'C1']);
+  });
+
+  it('of several cases are gathered by case, the worst case first', () => {
+    const two = [...list, verdict('n', { caseId: 'night', verdict: 'fail', margin: -9 })];
+    const groups = groupedVerdicts(two, new Set(['fail']), 'case', names);
+    expect(groups.map(({ title, verdicts }) => [title, verdicts.length])).toEqual([
+      ['case night', 1],
+      [`case ${list[0]?.caseId}`, 2],
+    ]);
   });
 
   it('say value, limit and margin with three digits and a true minus', () => {

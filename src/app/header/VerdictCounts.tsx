@@ -1,5 +1,5 @@
 import type { VerdictWord } from '../../checks/index.ts';
-import { countVerdicts, useWorkbench } from '../../store/index.ts';
+import { countVerdicts, useWorkbench, workbench } from '../../store/index.ts';
 
 const marks: Record<VerdictWord, { mark: string; words: string }> = {
   fail: { mark: '×', words: 'fail' },
@@ -23,17 +23,38 @@ function Count({ word, count }: CountProps) {
   );
 }
 
-/** How many checks fail, here and in all cases. */
+function show(verdictScope: 'case' | 'all'): void {
+  const { setPlace, setVerdictScope } = workbench.getState();
+  setPlace('site');
+  setVerdictScope(verdictScope);
+}
+
+/** How many checks fail, here and in all cases; each count lists its verdicts in the notes. */
 function FailCount() {
   const here = useWorkbench(countVerdicts('fail', 'case'));
   const inAll = useWorkbench(countVerdicts('fail', 'all'));
+  const scope = useWorkbench((state) => state.view.verdictScope);
   return (
-    <span className="count" data-verdict="fail" title="checks that fail in this case · in all cases">
-      <span data-some={here ? '' : undefined}>
+    <span className="count" data-verdict="fail">
+      <button
+        type="button"
+        data-some={here ? '' : undefined}
+        aria-pressed={scope === 'case'}
+        title="Checks that fail in this case; the notes list its verdicts"
+        onClick={() => show('case')}
+      >
         {marks.fail.mark} {here ?? '…'} fail<span className="when-wide"> in this case</span>
-      </span>
+      </button>
       {' · '}
-      <span data-some={inAll ? '' : undefined}>{inAll ?? '…'} in all</span>
+      <button
+        type="button"
+        data-some={inAll ? '' : undefined}
+        aria-pressed={scope === 'all'}
+        title="Checks that fail in all cases together; the notes list the verdicts of every case"
+        onClick={() => show('all')}
+      >
+        {inAll ?? '…'} in all
+      </button>
     </span>
   );
 }

@@ -5,10 +5,10 @@ import { freshWorst, useWorkbench, workbench } from '../../store/index.ts';
 import { busName, casesOf, elementName, nameOf, type Pin, type Study, setPins } from '../../study/index.ts';
 import { setPanels } from '../panels/panelStore.ts';
 import { readingOf } from './readingOf.ts';
+import { useListedVerdicts } from './useListedVerdicts.ts';
 import { worstCases, worstSearched } from './worstCases.ts';
 
 const noPins: readonly Pin[] = [];
-const noVerdicts: readonly Verdict[] = [];
 
 interface Props {
   study: Study;
@@ -18,9 +18,17 @@ interface Props {
   onSubject(subject: NoteSubject | null, noteKey: string | null): void;
 }
 
-/** Goes to what a verdict speaks of: selects the part, moves the rail to its busbar and its order. */
-function jumpTo({ subject, order }: Verdict): void {
+/** A note of another case brings its case on screen. */
+function showCaseOf({ caseId }: Verdict): void {
+  const { view, setCase } = workbench.getState();
+  if (view.caseId !== caseId) setCase(caseId);
+}
+
+/** Goes to what a verdict speaks of: its case, the part selected, the rail at its busbar and its order. */
+function jumpTo(verdict: Verdict): void {
+  const { subject, order } = verdict;
   const { select, setFocusBus, setOrder } = workbench.getState();
+  showCaseOf(verdict);
   select([`${subject.kind}:${subject.id}`]);
   if (subject.kind === 'bus') setFocusBus(subject.id);
   if (order !== undefined) setOrder(order);
@@ -42,7 +50,7 @@ export function Notes({ study, letters, litSubject, folded, onSubject }: Props) 
   const { setTimeCursor, setOrder, togglePin, edit } = workbench.getState();
   const [firstNote, setFirstNote] = useState<string | null>(null);
   const pins = study.view?.pins ?? noPins;
-  const verdicts = answer?.verdicts ?? noVerdicts;
+  const { verdicts, everyCase } = useListedVerdicts();
   const solution = answer?.solution;
   const readings = useMemo(
     () => (solution ? pins.map((pin) => readingOf(study, solution, pin)) : []),
@@ -77,6 +85,9 @@ export function Notes({ study, letters, litSubject, folded, onSubject }: Props) 
     <NotesColumn
       {...shared}
       caseNameOf={caseName}
+      everyCase={everyCase}
+      onOpen={showCaseOf}
+      onThisCase={() => workbench.getState().setVerdictScope('case')}
       worstOf={(verdict) => worst.get(verdict.key)}
       litSubject={litSubject}
       judging={answer !== null && answer.verdictsRevision === null}

@@ -11,6 +11,7 @@ import { Leader } from './Leader.tsx';
 import { Notes } from './Notes.tsx';
 import { Paper } from './Paper.tsx';
 import { useLetters } from './useLetters.ts';
+import { useListedVerdicts } from './useListedVerdicts.ts';
 import './site.css';
 
 const none: never[] = [];
@@ -23,7 +24,7 @@ interface Spoken {
 /** Draw, watch, judge: tray, drawing and notes column. */
 export function SitePlace({ onDetails }: { onDetails(field: string | null): void }) {
   const study = useWorkbench((state) => state.study);
-  const verdicts = useWorkbench((state) => state.answer?.verdicts ?? none);
+  const { verdicts } = useListedVerdicts();
   const selection = useWorkbench((state) => state.view.selection);
   const letters = useLetters(study?.view?.pins ?? none, verdicts);
   const [armedKind, setArmedKind] = useState<TrayKind | null>(null);

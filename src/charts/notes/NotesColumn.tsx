@@ -24,17 +24,22 @@ const BESIDE = 580;
 
 /** The notes column: pinned readings first, then verdicts; every note tied to its part by a letter. */
 export function NotesColumn(props: NotesColumnProps) {
-  const { readings, verdicts, nameOf } = props;
+  const { readings, verdicts, nameOf, caseNameOf, everyCase = false } = props;
   const [shown, setShown] = useState(FIRST_SHOWN);
-  const [grouping, setGrouping] = useState<VerdictGrouping>('margin');
+  const [chosen, setGrouping] = useState<VerdictGrouping>('margin');
+  const grouping = chosen === 'case' && !everyCase ? 'margin' : chosen;
   const [focused, setFocused] = useState<string | null>(null);
   const [menu, setMenu] = useState<{ key: string; anchor: HTMLElement } | null>(null);
   const column = useRef<HTMLElement>(null);
   const size = useMeasuredSize(column, FIRST_SIZE);
   const counts = useMemo(() => verdictCounts(verdicts), [verdicts]);
   const groups = useMemo(
-    () => groupedVerdicts(verdicts, shown, grouping, (verdict) => nameOf(verdict.subject)),
-    [verdicts, shown, grouping, nameOf],
+    () =>
+      groupedVerdicts(verdicts, shown, grouping, {
+        subject: (verdict) => nameOf(verdict.subject),
+        case: ({ caseId }) => caseNameOf?.(caseId) ?? caseId,
+      }),
+    [verdicts, shown, grouping, nameOf, caseNameOf],
   );
   const listed = groups.flatMap((group) => group.verdicts);
   const readingKeys = readings.map((one) => pinKey(one.pin));
@@ -57,7 +62,11 @@ export function NotesColumn(props: NotesColumnProps) {
     keys,
     actionsOf,
     setFocused,
-    toggle: states.toggle,
+    toggle: (key: string) => {
+      states.toggle(key);
+      const opened = listed.find((verdict) => verdict.key === key);
+      if (opened) props.onOpen?.(opened);
+    },
     openMenu: (key: string, anchor: HTMLElement) => setMenu({ key, anchor }),
     onSubject: props.onSubject,
   });
@@ -99,7 +108,8 @@ export function NotesColumn(props: NotesColumnProps) {
       verdict={verdict}
       subjectName={nameOf(verdict.subject)}
       letter={letterOf(verdict.subject)}
-      caseName={props.caseNameOf?.(verdict.caseId)}
+      caseName={caseNameOf?.(verdict.caseId)}
+      namesCase={everyCase}
       worst={props.worstOf?.(verdict)}
       folded={states.stateOf(verdict.key) === 'line'}
       lit={isLit(verdict.subject)}
@@ -119,6 +129,7 @@ export function NotesColumn(props: NotesColumnProps) {
         counts={counts}
         shown={shown}
         grouping={grouping}
+        everyCase={everyCase}
         onShown={setShown}
         onGrouping={setGrouping}
         onFold={props.onFold}
@@ -134,6 +145,14 @@ export function NotesColumn(props: NotesColumnProps) {
           )}
         </div>
         <div className="notes-verdicts">
+          {everyCase && (
+            <p className="notes-scope">
+              Verdicts of every case
+              <button type="button" onClick={props.onThisCase}>
+                this case alone
+              </button>
+            </p>
+          )}
           {groups.map((group) => (
             <div key={group.title} className="notes-group">
               {group.title && <h3>{group.title}</h3>}

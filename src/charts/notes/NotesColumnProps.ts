@@ -14,6 +14,8 @@ export interface NotesColumnProps {
   letters: ReadonlyMap<string, string>;
   nameOf(subject: NoteSubject): string;
   caseNameOf?(caseId: string): string;
+  /** The verdicts are of several cases: each names its own, and they may be gathered by case. */
+  everyCase?: boolean;
   /** Where the check of a verdict ends worst, once all cases are judged. */
   worstOf?(verdict: Verdict): WorstCase | undefined;
   /** Subject lit elsewhere (hovered or selected on the drawing). */
@@ -31,6 +33,10 @@ export interface NotesColumnProps {
   /** A note is hovered or focused; null when none is. For the leader and the light on the part. */
   onSubject?(subject: NoteSubject | null, noteKey: string | null): void;
   onJump?(verdict: Verdict): void;
+  /** A verdict's note is opened or folded. */
+  onOpen?(verdict: Verdict): void;
+  /** Back from the verdicts of every case to those of the case on screen. */
+  onThisCase?(): void;
   onTry?(verdict: Verdict): void;
   onUnpin?(pin: Pin): void;
   /** The pins in a new order. */

@@ -7,6 +7,8 @@ interface NotesHeadProps {
   counts: Record<VerdictWord, number>;
   shown: ReadonlySet<VerdictWord>;
   grouping: VerdictGrouping;
+  /** The verdicts are of every case. */
+  everyCase: boolean;
   onShown(shown: ReadonlySet<VerdictWord>): void;
   onGrouping(grouping: VerdictGrouping): void;
   /** Folds the column to its letters. */
@@ -21,7 +23,8 @@ const CHOICES: readonly { word: VerdictWord; label: string }[] = [
 ];
 
 /** The column's head: which verdicts are listed, how they are gathered, and the fold. */
-export function NotesHead({ counts, shown, grouping, onShown, onGrouping, onFold }: NotesHeadProps) {
+export function NotesHead(props: NotesHeadProps) {
+  const { counts, shown, grouping, everyCase, onShown, onGrouping, onFold } = props;
   const toggle = (word: VerdictWord) => {
     const next = new Set(shown);
     if (!next.delete(word)) next.add(word);
@@ -56,6 +59,7 @@ export function NotesHead({ counts, shown, grouping, onShown, onGrouping, onFold
         <option value="margin">by margin</option>
         <option value="part">by part</option>
         <option value="check">by check</option>
+        {everyCase && <option value="case">by case</option>}
       </select>
       {onFold && (
         <button type="button" className="fold" aria-label="Fold the notes to their letters" onClick={onFold}>
@@ -67,5 +71,5 @@ export function NotesHead({ counts, shown, grouping, onShown, onGrouping, onFold
 }
 
 function groupingFrom(text: string): VerdictGrouping {
-  return text === 'part' || text === 'check' ? text : 'margin';
+  return text === 'part' || text === 'check' || text === 'case' ? text : 'margin';
 }

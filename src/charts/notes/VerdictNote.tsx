@@ -23,6 +23,8 @@ export interface VerdictNoteProps extends NoteHandlers {
   letter: string;
   /** The case it was judged in. */
   caseName?: string | undefined;
+  /** Notes of several cases stand together: the title names the case. */
+  namesCase?: boolean;
   /** The case in which this check ends worst, where all are judged. */
   worst?: WorstCase | undefined;
   folded: boolean;
@@ -37,8 +39,9 @@ export interface VerdictNoteProps extends NoteHandlers {
 
 /** One verdict: mark and headline; opened, its working, source and what would mend it. */
 export function VerdictNote(props: VerdictNoteProps) {
-  const { verdict, subjectName, folded } = props;
-  const headline = verdictHeadline(verdict, subjectName);
+  const { verdict, subjectName, folded, caseName } = props;
+  const prefix = props.namesCase && caseName ? `${caseName}: ` : '';
+  const headline = `${prefix}${verdictHeadline(verdict, subjectName)}`;
   return (
     <NoteFrame
       {...props}
@@ -46,12 +49,12 @@ export function VerdictNote(props: VerdictNoteProps) {
       state={folded ? 'line' : 'card'}
       className={`verdict verdict-${verdict.verdict}`}
       mark={<VerdictMark verdict={verdict.verdict} />}
-      title={folded ? `${subjectName} · ${verdict.title}` : headline}
+      title={folded ? `${prefix}${subjectName} · ${verdict.title}` : headline}
       name={headline}
       figure={folded && <span title={headline}>{valueAgainstLimit(verdict)}</span>}
       lit={props.lit ?? false}
       tabStop={props.tabStop ?? true}
-      text={() => verdictText(verdict, subjectName, props.caseName)}
+      text={() => verdictText(verdict, subjectName, caseName)}
     >
       <VerdictBody {...props} />
     </NoteFrame>

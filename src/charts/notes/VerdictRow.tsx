@@ -9,6 +9,7 @@ interface VerdictRowProps {
   subjectName: string;
   letter: string;
   caseName: string | undefined;
+  namesCase: boolean;
   worst: WorstCase | undefined;
   folded: boolean;
   lit: boolean;

@@ -1,6 +1,12 @@
 import type { Verdict, VerdictWord } from '../../checks/index.ts';
 
-export type VerdictGrouping = 'margin' | 'part' | 'check';
+export type VerdictGrouping = 'margin' | 'part' | 'check' | 'case';
+
+/** What a verdict's groups are headed by. */
+export interface VerdictNames {
+  subject(verdict: Verdict): string;
+  case(verdict: Verdict): string;
+}
 
 export interface VerdictGroup {
   /** Heading; empty when verdicts are sorted by margin alone. */
@@ -19,21 +25,26 @@ export function byMargin(a: Verdict, b: Verdict): number {
   return a.key < b.key ? -1 : a.key > b.key ? 1 : 0;
 }
 
-/** Verdicts of the chosen words, sorted by margin and, if wanted, gathered by part or by check. */
+/** Verdicts of the chosen words, sorted by margin and, if wanted, gathered by part, by check or by case. */
 export function groupedVerdicts(
   verdicts: readonly Verdict[],
   words: ReadonlySet<VerdictWord>,
   grouping: VerdictGrouping,
-  nameOf: (verdict: Verdict) => string,
+  names: VerdictNames,
 ): VerdictGroup[] {
   const sorted = verdicts.filter((verdict) => words.has(verdict.verdict)).sort(byMargin);
   if (grouping === 'margin') return sorted.length > 0 ? [{ title: '', verdicts: sorted }] : [];
   const groups = new Map<string, Verdict[]>();
   for (const verdict of sorted) {
-    const title = grouping === 'part' ? nameOf(verdict) : verdict.title;
+    const title = titleOf(verdict, grouping, names);
     groups.set(title, [...(groups.get(title) ?? []), verdict]);
   }
   return [...groups.entries()].map(([title, members]) => ({ title, verdicts: members }));
+}
+
+function titleOf(verdict: Verdict, grouping: VerdictGrouping, names: VerdictNames): string {
+  if (grouping === 'part') return names.subject(verdict);
+  return grouping === 'case' ? names.case(verdict) : verdict.title;
 }
 
 /** How many verdicts there are of each word. */
