@@ -16,6 +16,12 @@ export const samples: readonly Sample[] = [
     title: 'Harrow Lane offices',
     story: '60 Hz. Four-wire electronic loads: the neutral carries more than its phases.',
   },
+  {
+    id: 'waterworks',
+    title: 'Tarnwell waterworks',
+    story:
+      '50 Hz. Two transformers, a coupler, a generator. With the boards coupled, an old plain bank beside a detuned one meets the 11th.',
+  },
 ];
 
 export function sampleFile(sample: Sample): string {
