@@ -219,13 +219,13 @@ test('earlier states: look at one and return, go back to it as one step, keep on
   const found = await savedStudy(page);
   await remove(page, 'hoist');
   await page.waitForTimeout(800);
-  await remove(page, 'w2');
+  await remove(page, 'fans');
   await page.waitForTimeout(800);
   await command(page, 'Earlier states');
   const states = drawer(page, /^Earlier states/);
-  await states.getByLabel('Keep the present state as').fill('without drives');
+  await states.getByLabel('Keep the present state as').fill('fewer drives');
   await page.keyboard.press('Enter');
-  await expect(states.locator('.state').first()).toContainText('without drives');
+  await expect(states.locator('.state').first()).toContainText('fewer drives');
   await accessible(page);
 
   const opened = states.getByRole('button', { name: /opened/ });

@@ -77,8 +77,6 @@ test('the drawn site is one step: undo brings the form back as it was, redo the 
   expect(await undoWords(page)).toBe('draw the site of the quick start');
   await page.keyboard.press('Control+z');
   await expect(field(page, 'transformer')).toHaveValue('630');
-  await page.keyboard.press('Escape');
-  await page.locator('body').click({ position: { x: 400, y: 20 } });
   await page.keyboard.press('Control+Shift+z');
   await settled(page);
   const again = await savedStudy(page);
@@ -88,7 +86,7 @@ test('the drawn site is one step: undo brings the form back as it was, redo the 
 test('errors are said at their field, and nothing is drawn until they are mended', async ({ page }) => {
   await field(page, 'transformer').fill('40 MVA');
   await field(page, 'transformer').press('Enter');
-  await expect(form(page).getByRole('alert')).toContainText('out of range; allowed is a number from 25 kVA');
+  await expect(form(page).getByRole('alert')).toContainText('allowed is a number from 25 kVA');
   await expect(form(page)).toBeVisible();
   await field(page, 'transformer').fill('250');
   await field(page, 'peak, or hours of use').fill('480');

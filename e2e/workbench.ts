@@ -53,7 +53,10 @@ export async function middle(locator: Locator): Promise<{ x: number; y: number }
 }
 
 /** Opens a sample site and waits for its answer. */
-export async function openSampleSite(page: Page, id: 'cold-store' | 'office-tower' | 'waterworks'): Promise<void> {
+export async function openSampleSite(
+  page: Page,
+  id: 'cold-store' | 'office-tower' | 'waterworks',
+): Promise<void> {
   await page.goto(`/?sample=${id}`);
   await expect(page.getByRole('region', { name: 'Drawing' })).toBeVisible();
   await settled(page);

@@ -20,7 +20,7 @@ export const samples: readonly Sample[] = [
     id: 'waterworks',
     title: 'Tarnwell waterworks',
     story:
-      '50 Hz. Two transformers, a coupler, a generator. With the boards coupled, an old plain bank beside a detuned one meets the 11th.',
+      '50 Hz. Two boards coupled on one transformer: an old plain bank beside a detuned one meets the 11th.',
   },
 ];
 
