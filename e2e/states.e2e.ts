@@ -14,7 +14,10 @@ test('the worst over every step combination and tolerance is found, explained an
   const named = { name: /^fails Bank C1 · bank current/ };
   const bank = worst.getByRole('button', named);
   await expect(bank).toContainText('limit 1.3');
-  const place = worst.getByRole('listitem').filter({ has: page.getByRole('button', named) }).first();
+  const place = worst
+    .getByRole('listitem')
+    .filter({ has: page.getByRole('button', named) })
+    .first();
   await expect(place).toContainText('capacitance of Bank C1');
 
   await bank.click();
