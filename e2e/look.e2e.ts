@@ -1,5 +1,15 @@
 import { expect, type Page, test } from '@playwright/test';
-import { note, openSampleSite, rail } from './workbench.ts';
+import {
+  middle,
+  note,
+  openSampleSite,
+  part,
+  pdfPages,
+  rail,
+  saveByDownload,
+  savedStudy,
+  undoWords,
+} from './workbench.ts';
 
 const notesEdge = (page: Page) => page.getByRole('separator', { name: 'Width of the notes' });
 const railEdge = (page: Page) => page.getByRole('separator', { name: 'Height of the rail' });
@@ -182,5 +192,138 @@ test.describe('the rail', () => {
     await fingers('touchMove', x - 132);
     expect(await ticks(), 'the finger that stays does not zoom').toHaveLength(pinched.length);
     await fingers('touchEnd');
+  });
+});
+
+test.describe('marks on the drawing', () => {
+  test.beforeEach(async ({ page }) => {
+    await saveByDownload(page);
+    await openSampleSite(page, 'cold-store');
+  });
+
+  const marks = async (page: Page) => (await savedStudy(page)).view?.marks ?? [];
+  const paperAt = async (page: Page, x: number, y: number) => {
+    const box = await page.locator('.drawing .pane').boundingBox();
+    if (!box) throw new Error('no paper');
+    return { x: box.x + x, y: box.y + y };
+  };
+  const drawBetween = async (page: Page, from: { x: number; y: number }, to: { x: number; y: number }) => {
+    await page.mouse.move(from.x, from.y);
+    await page.mouse.down();
+    await page.mouse.move(to.x, to.y, { steps: 5 });
+  };
+
+  test('a note is written, dragged, reworded and removed by mouse, each undone in words', async ({
+    page,
+  }) => {
+    await page.getByRole('button', { name: 'Write on the drawing' }).click();
+    const at = await paperAt(page, 650, 120);
+    await page.mouse.click(at.x, at.y);
+    await page.keyboard.type('confirm <b>uk</b>');
+    await page.keyboard.press('Enter');
+    const words = page.getByRole('button', { name: /^note( at .*)?: confirm <b>uk<\/b>$/ });
+    await expect(words).toBeFocused();
+    expect(await undoWords(page)).toBe('write the note “confirm <b>uk</b>”');
+
+    const before = await middle(words);
+    await drawBetween(page, before, { x: before.x + 60, y: before.y + 40 });
+    await page.keyboard.press('Escape');
+    await page.mouse.up();
+    expect(await middle(words), 'given up').toEqual(before);
+    await drawBetween(page, before, { x: before.x + 60, y: before.y + 40 });
+    await page.mouse.up();
+    expect((await middle(words)).x).toBeCloseTo(before.x + 60, 0);
+    expect(await undoWords(page)).toBe('move the note “confirm <b>uk</b>”');
+
+    await words.press('Enter');
+    await page.getByRole('textbox', { name: 'Words on the drawing' }).fill('confirmed');
+    await page.keyboard.press('Escape');
+    await expect(words).toBeVisible();
+    await words.dblclick();
+    await page.getByRole('textbox', { name: 'Words on the drawing' }).fill('confirmed');
+    await page.keyboard.press('Enter');
+    const reworded = page.getByRole('button', { name: /^note( at .*)?: confirmed$/ });
+    await reworded.press('Delete');
+    await expect(reworded).toBeHidden();
+    expect(await undoWords(page)).toBe('remove the note “confirmed”');
+    for (let step = 0; step < 4; step++) await page.keyboard.press('Control+z');
+    expect(await marks(page)).toEqual([]);
+    for (let step = 0; step < 2; step++) await page.keyboard.press('Control+Shift+z');
+    expect(await marks(page)).toMatchObject([{ kind: 'note', text: 'confirm <b>uk</b>' }]);
+  });
+
+  test('cloud, box and arrow are drawn and given up by mouse, and follow their parts', async ({ page }) => {
+    const bank = await middle(part(page, /^bank, Bank C1/));
+    await page.getByRole('button', { name: 'Cloud round an area' }).click();
+    await drawBetween(page, { x: bank.x - 60, y: bank.y - 60 }, { x: bank.x + 60, y: bank.y + 70 });
+    await page.keyboard.press('Escape');
+    await page.mouse.up();
+    expect(await marks(page), 'given up').toEqual([]);
+
+    await page.getByRole('button', { name: 'Cloud round an area' }).click();
+    await drawBetween(page, { x: bank.x - 60, y: bank.y - 60 }, { x: bank.x + 60, y: bank.y + 70 });
+    await page.mouse.up();
+    await page.keyboard.press('Enter');
+    const cloud = page.getByRole('button', { name: /^cloud at Bank C1$/ });
+    await expect(cloud).toBeFocused();
+    const before = await middle(cloud);
+    const part1 = await middle(part(page, /^bank, Bank C1/).locator('.frame'));
+    await part(page, /^bank, Bank C1/)
+      .locator('.hit')
+      .first()
+      .click();
+    await page.keyboard.press('Alt+ArrowRight');
+    await expect
+      .poll(async () => (await middle(part(page, /^bank, Bank C1/).locator('.frame'))).x)
+      .not.toBe(part1.x);
+    const part2 = await middle(part(page, /^bank, Bank C1/).locator('.frame'));
+    const after = await middle(cloud);
+    expect(after.x - before.x).toBeCloseTo(part2.x - part1.x, 0);
+  });
+
+  test('every kind is placed, stretched and removed by keys alone', async ({ page }) => {
+    await part(page, /^busbar, Main board/).focus();
+    for (const [tool, kind] of [
+      ['box round an area', 'box'],
+      ['arrow', 'arrow'],
+      ['write on the drawing', 'note'],
+    ]) {
+      await page.keyboard.press('Control+k');
+      await page.getByRole('searchbox', { name: 'Find a command' }).fill(`mark: ${tool}`);
+      await page.keyboard.press('Enter');
+      await expect(page.getByRole('application', { name: /Escape gives it up/ })).toBeFocused();
+      await page.keyboard.press('Shift+ArrowRight');
+      await page.keyboard.press('Enter');
+      if (kind !== 'note') {
+        await page.keyboard.press('ArrowDown');
+        await page.keyboard.press('Enter');
+      }
+      await expect(page.getByRole('textbox', { name: 'Words on the drawing' })).toBeFocused();
+      await page.keyboard.type(`by keys ${kind}`);
+      await page.keyboard.press('Enter');
+      await expect(
+        page.getByRole('button', { name: new RegExp(`^${kind}.*: by keys ${kind}$`) }),
+      ).toBeFocused();
+    }
+    const [box] = await marks(page);
+    await page.getByRole('button', { name: /^box/ }).press('Alt+ArrowRight');
+    const [wider] = await marks(page);
+    expect(wider?.to?.x).toBe((box?.to?.x ?? 0) + 4);
+    expect(wider?.from).toEqual(box?.from);
+    await page.getByRole('button', { name: /^arrow/ }).press('Delete');
+    expect((await marks(page)).map(({ kind }) => kind)).toEqual(['box', 'note']);
+  });
+
+  test('stand on the results sheet', async ({ page }) => {
+    await page.getByRole('button', { name: 'Write on the drawing' }).click();
+    const at = await paperAt(page, 640, 110);
+    await page.mouse.click(at.x, at.y);
+    await page.keyboard.type('reviewed 12 May');
+    await page.keyboard.press('Enter');
+    await page.getByRole('button', { name: 'Sheet', exact: true }).click();
+    const exporting = page.getByRole('button', { name: 'Export PDF' });
+    await expect(exporting).toBeEnabled({ timeout: 30_000 });
+    const [pdf] = await Promise.all([page.waitForEvent('download', { timeout: 60_000 }), exporting.click()]);
+    expect(pdfPages(await pdf.path()).join('\n')).toContain('reviewed 12 May');
   });
 });

@@ -7,6 +7,7 @@ import { openAddressedSample } from './files/openSample.ts';
 import './theme/theme.css';
 import '../charts/charts.css';
 import '../drawing/drawing.css';
+import '../drawing/marks/marks.css';
 import '../drawing/hand.css';
 import '../drawing/slip/slip.css';
 import './app.css';

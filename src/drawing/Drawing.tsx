@@ -1,7 +1,14 @@
 import { type ReactNode, useId, useMemo, useRef } from 'react';
 import type { Verdict } from '../checks/index.ts';
 import type { CaseSolution } from '../engine/index.ts';
-import { type Chosen, countedTogether, type Edit, type Study, studyInCase } from '../study/index.ts';
+import {
+  type Chosen,
+  countedTogether,
+  type Edit,
+  type MarkKind,
+  type Study,
+  studyInCase,
+} from '../study/index.ts';
 import { DrawingContents } from './editor/DrawingContents.tsx';
 import { EmptyHint } from './editor/EmptyHint.tsx';
 import { HandOverlay, PlaceMark } from './editor/HandOverlay.tsx';
@@ -15,6 +22,9 @@ import { useClipboard } from './keyboard/useClipboard.ts';
 import { useHandling } from './keyboard/useHandling.ts';
 import { useRovingFocus } from './keyboard/useRovingFocus.ts';
 import { differencesByPart, keepPlaces, type Layout, layoutStudy } from './layout/index.ts';
+import { drawingSize } from './marks/drawingSize.ts';
+import { MarkTools } from './marks/MarkTools.tsx';
+import { useMarks } from './marks/useMarks.tsx';
 import type { ImpedanceProbe } from './readings/busReading.ts';
 import { figuresOf } from './readings/figures.ts';
 import { type ReadingMode, readOrder } from './readings/ReadingMode.ts';
@@ -44,6 +54,8 @@ export interface DrawingProps {
   /** The subject of a hovered note. */
   lit?: Subject | null;
   armedKind: TrayKind | null;
+  /** The mark to be placed next. */
+  armedMark: MarkKind | null;
   /** Changes when another study is opened: the drawing is fitted anew. */
   fitKey?: string;
   onSelect(items: readonly Subject[]): void;
@@ -58,6 +70,7 @@ export interface DrawingProps {
   said?: string | null;
   onReadingMode(mode: ReadingMode): void;
   onArm(kind: TrayKind | null): void;
+  onArmMark(kind: MarkKind | null): void;
   onHover?(subject: Subject | null): void;
   renderSlip(subject: Subject): ReactNode;
   /** Stands on the paper of an empty study, under the three steps. */
@@ -82,7 +95,8 @@ export function Drawing(props: DrawingProps) {
     () => figuresOf(inCase, solution, verdicts, readingMode, handle, handleProbe, beside),
     [inCase, solution, verdicts, readingMode, handle, handleProbe, beside],
   );
-  const controls = usePaneView(paneRef, layout, props.fitKey ?? '');
+  const size = useMemo(() => drawingSize(study, layout), [study, layout]);
+  const controls = usePaneView(paneRef, size, props.fitKey ?? '');
   const roving = useRovingFocus(paneRef, layout, selection, controls);
   const [current] = roving;
   const { hand, band, handlers, act, plan, held, keyHints } = useHandling(
@@ -98,6 +112,16 @@ export function Drawing(props: DrawingProps) {
   );
   useClipboard(paneRef, { ...props, layout, current });
 
+  const marks = useMarks({
+    study,
+    layout,
+    controls,
+    paneRef,
+    current,
+    armed: props.armedMark,
+    onArm: props.onArmMark,
+    onEdit: props.onEdit,
+  });
   const empty = study.buses.length === 0 && study.elements.length === 0;
   const far = controls.view.scale < 0.45;
   const { scale, x, y } = controls.view;
@@ -132,6 +156,7 @@ export function Drawing(props: DrawingProps) {
               focusBus={props.focusBus}
               hatchId={hatchId}
             />
+            {marks.onPaper}
             {plan && <PlaceMark plan={plan} layout={layout} />}
             {hand && <HandOverlay hand={hand} layout={layout} study={study} />}
             {band && <rect className="band" {...band.box} />}
@@ -157,7 +182,9 @@ export function Drawing(props: DrawingProps) {
       </output>
       {plan && <HandTag plan={plan} at={hand?.at} {...{ layout, controls }} />}
       <KeyLine hints={hand ? [] : keyHints} />
+      {!empty && <MarkTools armed={props.armedMark} onArm={props.onArmMark} />}
       {!empty && <ZoomTools controls={controls} />}
+      {marks.overPaper}
       {slip && !hand && (
         <SlipHolder key={slip} subject={slip} layout={layout} figures={figures} controls={controls}>
           {props.renderSlip(slip)}

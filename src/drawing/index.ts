@@ -5,6 +5,8 @@ export { SymbolGlyph, type SymbolGlyphProps } from './glyphs/SymbolGlyph.tsx';
 export { drawingKeys, trayKeys } from './keyboard/keyWords.ts';
 export { kindKeys } from './keyboard/kindKeys.ts';
 export * from './layout/index.ts';
+export { drawingSize } from './marks/drawingSize.ts';
+export { markWords } from './marks/markWords.ts';
 export { Outline, type OutlineProps } from './outline/Outline.tsx';
 export type { ImpedanceProbe } from './readings/busReading.ts';
 export { type BusFigure, type Figures, figuresOf, type PartFigure } from './readings/figures.ts';

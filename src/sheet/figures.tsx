@@ -7,7 +7,7 @@ import {
   WaveformFigure,
 } from '../charts/index.ts';
 import { orderTable } from '../checks/index.ts';
-import { layoutStudy, StaticDrawing } from '../drawing/index.ts';
+import { drawingSize, layoutStudy, StaticDrawing } from '../drawing/index.ts';
 import type { ImpedanceScan } from '../engine/index.ts';
 import { type Pin, studyInCase } from '../study/index.ts';
 import type { DrawingWindow, FigureRequest, SheetCase, SheetInput } from './document/index.ts';
@@ -31,7 +31,7 @@ function emptyScan({ bus, sequence }: ImpedanceScan): ImpedanceScan {
 
 function drawing(input: SheetInput, computed: SheetCase, window: DrawingWindow, size: Size) {
   const layout = layoutStudy(input.study);
-  const shown = window ?? { x: 0, y: 0, width: layout.width, height: layout.height };
+  const shown = window ?? { x: 0, y: 0, ...drawingSize(input.study, layout) };
   const clip = `piece-${[shown.x, shown.y].map(Math.round).join('-')}`;
   return (
     <svg

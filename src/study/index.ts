@@ -32,6 +32,7 @@ export { setDrawn, setSymbols } from './edits/drawnEdits.ts';
 export { joinEdits, makeEdit, type Patch, sameData } from './edits/edit.ts';
 export { errorsAfter } from './edits/errorsAfter.ts';
 export { importParts, partsHangingFrom } from './edits/importParts.ts';
+export { addMark, type MarkEdit, moveMark, removeMark, setMarkText } from './edits/marks.ts';
 export {
   alongWith,
   busesLosingFeed,
@@ -50,6 +51,7 @@ export {
   originTally,
   setOrigin,
 } from './edits/origins.ts';
+export { setPhaseColours, setPhaseLabels } from './edits/phaseEdits.ts';
 export {
   type Chosen,
   type Removal,
@@ -105,9 +107,11 @@ export {
   isOn,
   isSeries,
 } from './lookup.ts';
+export { markKinds, markName, marksOf } from './marksOf.ts';
 export { busName, elementName, fullNameOf, kindsWords, kindWords, nameOf, shortKindWords } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
+export { type PhaseNames, phaseColourSets, phaseColoursOf, phaseLabelSets, phaseNamesOf } from './phases.ts';
 export { type AnswerKey, answerFields } from './quickStart/answerFields.ts';
 export { type AnswerIssue, answerIssues } from './quickStart/answerIssues.ts';
 export { type DrawnSite, drawSite } from './quickStart/drawSite.ts';

@@ -7,6 +7,7 @@ import { fileCommands } from '../files/fileCommands.ts';
 import { recentStudies } from '../files/recentStudies.ts';
 import { panelCommands } from '../panels/panelCommands.ts';
 import { quickStartCommands } from '../quickstart/quickStartCommands.ts';
+import { markCommands } from '../site/markTool.ts';
 import { statesCommands } from '../states/statesCommands.ts';
 import type { Command } from './command.ts';
 
@@ -79,6 +80,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...quickStartCommands(study),
       ...viewCommands(),
       ...panelCommands(),
+      ...(study ? markCommands() : []),
       ...(study ? originCommands(study, selection) : []),
       ...(study ? caseCommands(study, caseId) : []),
       ...(study ? statesCommands() : []),

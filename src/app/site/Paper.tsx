@@ -7,6 +7,7 @@ import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
 import { setPanels, useOutlined } from '../panels/panelStore.ts';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
+import { armMark, useMarkTool } from './markTool.ts';
 import { RemovalDialog } from './RemovalDialog.tsx';
 import { removeChosen } from './removal.ts';
 import { SlipConnection } from './SlipConnection.tsx';
@@ -45,6 +46,7 @@ export function Paper(props: Props) {
   const said = useWorkbench((state) => state.said);
   const { edit, say, setFocusBus, setReadingMode } = workbench.getState();
   const outlined = useOutlined();
+  const armedMark = useMarkTool();
   const verdicts = answer?.verdicts ?? noVerdicts;
   const ofCase = answer?.caseId === view.caseId;
   const renderSlip = useCallback(
@@ -93,6 +95,8 @@ export function Paper(props: Props) {
           said={said}
           onReadingMode={setReadingMode}
           onArm={onArm}
+          armedMark={armedMark}
+          onArmMark={armMark}
           onHover={onHover}
           renderSlip={renderSlip}
         >

@@ -10,6 +10,10 @@ export interface Palette {
   pass: string;
   watch: string;
   fail: string;
+  /** The reviewer's marks. */
+  pen: string;
+  /** Of L1, L2, L3; label and dash come first. */
+  phases: readonly [string, string, string];
 }
 
 export const screenPalette: Palette = {
@@ -23,6 +27,8 @@ export const screenPalette: Palette = {
   pass: 'var(--pass)',
   watch: 'var(--watch)',
   fail: 'var(--fail)',
+  pen: 'var(--pen)',
+  phases: ['var(--l1)', 'var(--l2)', 'var(--l3)'],
 };
 
 /** For the sheet: everything told by shape, dash and weight, so that it survives a black and white printer. */
@@ -37,4 +43,6 @@ export const printPalette: Palette = {
   pass: '#1e2430',
   watch: '#1e2430',
   fail: '#1e2430',
+  pen: '#5b2a52',
+  phases: ['#1e2430', '#1e2430', '#1e2430'],
 };

@@ -34,7 +34,7 @@ export function PhasorDial({ phasors, x, y, palette }: PhasorDialProps) {
             key={phase}
             x2={px.toFixed(2)}
             y2={py.toFixed(2)}
-            stroke={palette.ink}
+            stroke={palette.phases[at] ?? palette.ink}
             strokeWidth={1.5}
             strokeDasharray={dash}
           />

@@ -15,7 +15,8 @@ const itemWords: Record<DrawnItem, string> = {
   widths: 'line widths by current',
 };
 
-function withView(study: Study, patch: Partial<Record<keyof StudyView, unknown>>): Study {
+/** The study with entries of its view replaced; one without any left has no view. */
+export function withView(study: Study, patch: Partial<Record<keyof StudyView, unknown>>): Study {
   const before = study.view ?? {};
   const view = patched(before, patch);
   if (view === before) return study;

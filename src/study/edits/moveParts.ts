@@ -5,6 +5,7 @@ import { busName, fullNameOf, nameOf } from '../names.ts';
 import type { Edit, Study, StudyElement, StudyView } from '../types.ts';
 import { isBroughtName } from './addParts.ts';
 import { makeEdit, mapById, patched, withField } from './edit.ts';
+import { marksLeftBy } from './marks.ts';
 
 export type End = 'bus' | 'from' | 'to';
 
@@ -136,6 +137,7 @@ function withoutBareBus(study: Study, busId: string): Study {
         ...view,
         ...(focusBus !== undefined && focusBus !== busId ? { focusBus } : {}),
         ...(order ? { orderAlong: order } : {}),
+        ...(view.marks ? { marks: marksLeftBy(view.marks, new Set(), new Set([busId])) } : {}),
       },
     }),
   };

@@ -4,6 +4,7 @@ import { busById, elementById, elementsAt } from '../lookup.ts';
 import { fullNameOf, nameOf } from '../names.ts';
 import type { CaseChange, Edit, Study, StudyView } from '../types.ts';
 import { makeEdit } from './edit.ts';
+import { marksLeftBy } from './marks.ts';
 
 /** Chosen parts and busbars, by id. */
 export interface Chosen {
@@ -105,6 +106,7 @@ function viewWithout(view: StudyView, elements: ReadonlySet<string>, buses: Read
     );
   }
   if (view.focusBus !== undefined && buses.has(view.focusBus)) delete next.focusBus;
+  if (view.marks) next.marks = marksLeftBy(view.marks, elements, buses);
   return next;
 }
 

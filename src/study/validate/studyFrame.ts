@@ -1,10 +1,11 @@
 import { drawnItems, symbolSets } from '../drawn.ts';
+import { marksAmong } from '../marksOf.ts';
 import { builtInSpectrum } from '../spectra/builtIn.ts';
 import type { Finding, HarmonicRow } from '../types.ts';
 import { duplicateIds } from './duplicateIds.ts';
 import { listed } from './elementIssues.ts';
 import { recordSchema, refusals, valueAt } from './fieldSchema.ts';
-import { errorIssue, findingOf, type Issue, isRecord, valueText } from './issue.ts';
+import { errorIssue, findingOf, type Issue, isRecord, valueText, warningIssue } from './issue.ts';
 import { wordsFor } from './recordWords.ts';
 import { refusalCode } from './refusalCode.ts';
 import { rowIssues } from './rowIssues.ts';
@@ -126,6 +127,7 @@ export function frameFindings(study: Record<string, unknown>): Finding[] {
     ...own,
     ...originFindings(study.origins),
     ...viewFindings(study.view),
+    ...markWarnings(study.view),
     ...proposalFindings(study.proposals),
   ];
 }
@@ -200,6 +202,8 @@ function viewFindings(view: unknown): Finding[] {
     ],
     ['orderAlong', view.orderAlong === undefined || isOrder(view.orderAlong), 'lists of part ids by busbar'],
     // A set or an item this version does not know is drawn as by default, never refused.
+    ['marks', view.marks === undefined || Array.isArray(view.marks), 'a list of marks on the drawing'],
+    ['phases', view.phases === undefined || isRecord(view.phases), 'a record of labels and colours'],
     ['symbols', view.symbols === undefined || typeof view.symbols === 'string', symbolSets.join(' or ')],
     [
       'hidden',
@@ -223,6 +227,16 @@ function viewFindings(view: unknown): Finding[] {
         [],
       ),
     );
+}
+
+/** Marks of a later version, or a broken one, are no reason to refuse a study. */
+function markWarnings(view: unknown): Finding[] {
+  if (!isRecord(view) || !Array.isArray(view.marks)) return [];
+  const unread = view.marks.length - marksAmong(view.marks).length;
+  if (unread === 0) return [];
+  const which = unread === 1 ? 'one of the marks' : `${unread} of the marks`;
+  const text = `${which} on the drawing cannot be drawn here; what is not understood is kept in the file`;
+  return [findingOf(warningIssue('unknown-mark', ['view', 'marks'], undefined, text), '', [])];
 }
 
 function isPin(pin: unknown): boolean {
