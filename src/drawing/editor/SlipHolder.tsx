@@ -66,6 +66,7 @@ export function SlipHolder({ subject, layout, figures, controls, children }: Sli
           pane,
         )
       : undefined;
+  const { standing, press } = usePressedStill(place);
   const panX = place?.panX ?? 0;
   useLayoutEffect(() => {
     // Once per opening: the drawing moves aside, afterwards the user may move it as they like.
@@ -76,10 +77,35 @@ export function SlipHolder({ subject, layout, figures, controls, children }: Sli
   if (!box) return null;
   // Before its place is known the slip is out of sight, not hidden: what is hidden takes no focus, and what
   // is typed at once would be lost.
-  const style = place ? { left: place.x, top: place.y } : { left: 0, top: 0, opacity: 0 };
+  const style = standing ? { left: standing.x, top: standing.y } : { left: 0, top: 0, opacity: 0 };
   return (
-    <div ref={holder} className="slip-holder" style={{ ...style, maxHeight: pane.height - 16 }}>
+    <div
+      ref={holder}
+      className="slip-holder"
+      style={{ ...style, maxHeight: pane.height - 16 }}
+      onPointerDownCapture={press}
+    >
       {children}
     </div>
   );
+}
+
+/**
+ * The place, kept as it was while a press inside lasts. A press takes what was typed in the field it leaves;
+ * where that moves the part, the slip must not slide away under the pointer before it is let go.
+ */
+function usePressedStill<T>(place: T | undefined): { standing: T | undefined; press(): void } {
+  const [kept, setKept] = useState<{ place: T | undefined } | null>(null);
+  const press = () => {
+    setKept({ place });
+    const release = () => {
+      window.removeEventListener('pointerup', release);
+      window.removeEventListener('pointercancel', release);
+      // The click comes after the release.
+      setTimeout(() => setKept(null));
+    };
+    window.addEventListener('pointerup', release);
+    window.addEventListener('pointercancel', release);
+  };
+  return { standing: kept ? kept.place : place, press };
 }
