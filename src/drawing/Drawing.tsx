@@ -61,7 +61,7 @@ export interface DrawingProps {
   onSelect(items: readonly Subject[]): void;
   onFocusBus(bus: string): void;
   onOpenSlip(subject: Subject | null): void;
-  onEdit(edit: Edit): void;
+  onEdit(edit: Edit, said?: string): void;
   /** Takes chosen parts and busbars away; whoever holds the study asks first where more hangs from them. */
   onRemove(chosen: Chosen): void;
   /** Something the person should read once, beside the drawing. */

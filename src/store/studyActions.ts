@@ -19,7 +19,7 @@ function withStudy(state: WorkbenchState, study: Study): Partial<WorkbenchState>
   return { study, revision: state.revision + 1, view: fitView(state.view, study) };
 }
 
-function editOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
+function editOf(state: WorkbenchState, edit: Edit, said: string | null): Partial<WorkbenchState> {
   const before = state.beforePreview ?? state.study;
   if (!before) return {};
   const after = edit.apply(before);
@@ -29,7 +29,7 @@ function editOf(state: WorkbenchState, edit: Edit): Partial<WorkbenchState> {
   if (after === before) return settled;
   return {
     ...settled,
-    said: null,
+    said,
     lastEdit: edit.words,
     history: record(state.history, before, edit.label, edit.words),
   };
@@ -115,7 +115,7 @@ export function studyActions(set: Set, get: Get): StudyActions {
         const study = state.beforePreview ?? state.study;
         return study ? opened(state, { ...study, title: `${study.title}, copy` }, null) : {};
       }),
-    edit: (edit) => set(unlessReadOnly((state) => editOf(state, edit))),
+    edit: (edit, said = null) => set(unlessReadOnly((state) => editOf(state, edit, said))),
     preview: (edit) => set((state) => (state.readOnly ? {} : previewOf(state, edit))),
     cancelPreview: () => set(cancelled),
     undo: () => set(unlessReadOnly((state) => stepped(state, stepBack))),

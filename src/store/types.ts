@@ -161,7 +161,8 @@ export interface WorkbenchActions {
   /** Goes on with a study of its own under another title, in no file: the way out of a study open twice. */
   makeCopy(): void;
 
-  edit(edit: Edit): void;
+  /** `said` stands beside the drawing once it is made. */
+  edit(edit: Edit, said?: string): void;
   /** Shows an edit while a gesture lasts: always applied to the study before the gesture, no history. */
   preview(edit: Edit): void;
   /** Ends the gesture without a trace. `edit` ends it with one step of history. */

@@ -80,7 +80,7 @@ function look(c: KeyContext, held: Held, from: string): void {
   c.setCurrent(busSubject(from));
 }
 
-type Focus = Pick<KeyContext, 'study' | 'layout' | 'current'>;
+type Focus = Pick<KeyContext, 'layout' | 'current'>;
 
 /** The busbar in focus, or the one the focused part hangs from. */
 export function busInFocus({ layout, current }: Focus): string | undefined {

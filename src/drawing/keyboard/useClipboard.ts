@@ -21,7 +21,7 @@ export interface ClipboardContext {
   layout: Layout;
   selection: readonly Subject[];
   current: Subject | undefined;
-  onEdit(edit: Edit): void;
+  onEdit(edit: Edit, said?: string): void;
   onSelect(items: readonly Subject[]): void;
   onSay(words: string): void;
 }
@@ -64,8 +64,9 @@ function copy(c: ClipboardContext, event: ClipboardEvent, cutting: boolean): voi
     [clip.study.elements.length, 'part'],
     [carried, 'busbar'],
   ]);
-  if (cutting) c.onEdit(cutEdit(c.study, chosen));
-  c.onSay(`${cutting ? 'Cut' : 'Copied'} ${what}; paste onto a busbar, here or in another window`);
+  const said = `${cutting ? 'Cut' : 'Copied'} ${what}; paste onto a busbar, here or in another window`;
+  if (cutting) c.onEdit(cutEdit(c.study, chosen), said);
+  else c.onSay(said);
 }
 
 function cutEdit(study: Study, chosen: Chosen): Edit {
@@ -81,8 +82,7 @@ function paste(c: ClipboardContext, event: ClipboardEvent): void {
     return;
   }
   const edit = pasteClip(c.study, outcome.clip, busInFocus(c) ?? null);
-  c.onEdit(edit);
-  c.onSelect([...edit.elementIds.map(partSubject), ...edit.busIds.map(busSubject)]);
   const said = edit.words.charAt(0).toUpperCase() + edit.words.slice(1).replace(/^aste/, 'asted');
-  c.onSay([said, ...edit.remarks].join('. '));
+  c.onEdit(edit, [said, ...edit.remarks].join('. '));
+  c.onSelect([...edit.elementIds.map(partSubject), ...edit.busIds.map(busSubject)]);
 }

@@ -1,4 +1,4 @@
-import { type RefObject, useEffect, useMemo, useState } from 'react';
+import { type RefObject, useEffect, useMemo, useRef, useState } from 'react';
 import { type Chosen, type Edit, type Study, withBelow } from '../../study/index.ts';
 import type { DropOutcome } from '../gestures/DropOutcome.ts';
 import { dropPlan } from '../gestures/dropPlan.ts';
@@ -9,7 +9,7 @@ import { useGestures } from '../gestures/useGestures.ts';
 import type { Layout } from '../layout/index.ts';
 import { readSubject, type Subject } from '../subject.ts';
 import type { PaneControls } from '../view/usePaneView.ts';
-import { OFF_PAPER } from './carryKeys.ts';
+import { busInFocus, OFF_PAPER } from './carryKeys.ts';
 import type { Key, Swap } from './KeyContext.ts';
 import { useDrawingKeys } from './useDrawingKeys.ts';
 import { useKeyboardInput } from './useKeyboardInput.ts';
@@ -96,11 +96,14 @@ export function useHandling(
   };
   useLooseKeys(paneRef, act);
 
+  const latestFocus = useRef<string | undefined>(undefined);
+  latestFocus.current = selection.length > 0 ? busInFocus({ layout, current }) : undefined;
   useEffect(() => {
     setMoved(null);
     setSwap(null);
     if (!armedKind) return;
     setPointed(!byKey.current);
+    setAimed(latestFocus.current);
     paneRef.current?.focus({ preventScroll: true });
   }, [armedKind, paneRef, byKey]);
 
