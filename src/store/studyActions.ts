@@ -115,7 +115,7 @@ export function studyActions(set: Set, get: Get): StudyActions {
         const study = state.beforePreview ?? state.study;
         return study ? opened(state, { ...study, title: `${study.title}, copy` }, null) : {};
       }),
-    edit: (edit, said = null) => set(unlessReadOnly((state) => editOf(state, edit, said))),
+    edit: (edit, said) => set(unlessReadOnly((state) => editOf(state, edit, said ?? null))),
     preview: (edit) => set((state) => (state.readOnly ? {} : previewOf(state, edit))),
     cancelPreview: () => set(cancelled),
     undo: () => set(unlessReadOnly((state) => stepped(state, stepBack))),

@@ -58,6 +58,8 @@ export function useHandling(
     if (last) setCurrent(last);
   };
   const onPress = (subject: Subject | undefined, adding: boolean) => {
+    setSwap(null);
+    if (moved) return letGoAt(subject);
     if (!subject) {
       if (adding) return;
       props.onSelect([]);
@@ -76,6 +78,14 @@ export function useHandling(
     if (read?.kind === 'bus') props.onFocusBus(read.id);
     if (again) props.onOpenSlip(subject);
     else if (props.openSlip !== null && props.openSlip !== subject) props.onOpenSlip(null);
+  };
+  /** A click on a busbar is where the keyboard's find goes; anywhere else it stays. */
+  const letGoAt = (subject: Subject | undefined) => {
+    const bus = subject ? readSubject(subject) : undefined;
+    const plan = moved && bus?.kind === 'bus' ? dropPlan(study, layout, moved, { bus: bus.id }) : undefined;
+    setMoved(null);
+    if (plan?.edit) onDrop(plan.edit, plan.select);
+    else if (plan?.refused) props.onSay(plan.words);
   };
   const onBand = (picks: readonly Subject[]) => {
     props.onSelect([...new Set([...selection, ...picks])]);
@@ -99,9 +109,9 @@ export function useHandling(
   const latestFocus = useRef<string | undefined>(undefined);
   latestFocus.current = selection.length > 0 ? busInFocus({ layout, current }) : undefined;
   useEffect(() => {
+    if (!armedKind) return;
     setMoved(null);
     setSwap(null);
-    if (!armedKind) return;
     setPointed(!byKey.current);
     setAimed(latestFocus.current);
     paneRef.current?.focus({ preventScroll: true });
