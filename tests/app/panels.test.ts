@@ -81,7 +81,7 @@ describe('what was kept of the panels', () => {
       notes: 'letters',
       notesWidth: 333,
       rail: 'strip',
-      outline: true,
+      paper: 'list',
     };
     expect(readPanels(JSON.stringify(panels))).toEqual(panels);
   });

@@ -1,6 +1,7 @@
 import { Button, Dialog, Heading, Modal, ModalOverlay } from 'react-aria-components';
 import { drawingKeys, trayKeys } from '../../drawing/index.ts';
 import { shownKeys } from '../../keys/index.ts';
+import { tableKeys } from '../table/gridKeys.ts';
 import type { Command } from './command.ts';
 
 interface Props {
@@ -23,6 +24,7 @@ const placesKeys: readonly { place: string; keys: readonly (readonly [string, st
       ['Escape', 'put the old value back and close'],
     ],
   },
+  { place: 'In a table', keys: tableKeys },
   {
     place: 'On the rail',
     keys: [

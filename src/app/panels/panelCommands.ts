@@ -1,5 +1,12 @@
+import { workbench } from '../../store/index.ts';
 import type { Command } from '../commands/command.ts';
 import { currentPlaces, panelStore, resetPanels, setPanels } from './panelStore.ts';
+
+/** The list or the table on the paper, in the place of Site; the drawing where it lay there already. */
+function turnPaper(paper: 'list' | 'table'): void {
+  workbench.getState().setPlace('site');
+  setPanels({ paper: panelStore.getState().paper === paper ? 'drawing' : paper });
+}
 
 /** What can be done with the panels; each command turns over what is on screen when it runs. */
 export function panelCommands(): Command[] {
@@ -25,7 +32,13 @@ export function panelCommands(): Command[] {
       id: 'panel.outline',
       words: 'Site as a drawing or as a list',
       keys: 'F10',
-      run: () => setPanels({ outline: !panelStore.getState().outline }),
+      run: () => turnPaper('list'),
+    },
+    {
+      id: 'panel.table',
+      words: 'Data as a table, or the drawing',
+      keys: 'F7',
+      run: () => turnPaper('table'),
     },
     { id: 'panel.reset', words: 'Panels: sizes that follow the window', run: resetPanels },
   ];

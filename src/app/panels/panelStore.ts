@@ -61,6 +61,6 @@ export function currentPlaces(): PanelPlaces {
   return panelPlaces(panelStore.getState(), readSize());
 }
 
-export function useOutlined(): boolean {
-  return useStore(panelStore, (panels) => panels.outline ?? false);
+export function usePaper(): NonNullable<Panels['paper']> {
+  return useStore(panelStore, (panels) => panels.paper ?? 'drawing');
 }

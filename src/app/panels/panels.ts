@@ -7,8 +7,8 @@ export interface Panels {
   rail?: 'open' | 'strip';
   /** Of the landscape with its axis, in CSS pixels. */
   railHeight?: number;
-  /** The site is read as a list instead of a drawing. */
-  outline?: boolean;
+  /** What lies on the paper: the drawing, the site as a list, its data as a table. */
+  paper?: 'drawing' | 'list' | 'table';
 }
 
 type Wanted = { [K in keyof Panels]-?: (value: unknown) => boolean };
@@ -26,7 +26,8 @@ const wanted: Wanted = {
   notesWidth: pixels,
   rail: oneOf('open', 'strip'),
   railHeight: pixels,
-  outline: (value) => typeof value === 'boolean',
+  // A visit begins with a picture of the site.
+  paper: oneOf('drawing', 'list'),
 };
 
 /** What was kept as text, entry by entry; an entry that cannot be read is left out. */

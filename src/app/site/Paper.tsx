@@ -5,9 +5,11 @@ import type { Study } from '../../study/index.ts';
 import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
-import { setPanels, useOutlined } from '../panels/panelStore.ts';
+import { usePaper } from '../panels/panelStore.ts';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
+import { TablePlace } from '../table/TablePlace.tsx';
 import { armMark, useMarkTool } from './markTool.ts';
+import { PaperSwitch } from './PaperSwitch.tsx';
 import { RemovalDialog } from './RemovalDialog.tsx';
 import { removeChosen } from './removal.ts';
 import { SlipConnection } from './SlipConnection.tsx';
@@ -35,7 +37,7 @@ function openSlip(subject: Subject | null): void {
   else state.openSlip(subject);
 }
 
-/** The drawing, or the same site as an outline. */
+/** The drawing, the same site as an outline, or its data as a table. */
 export function Paper(props: Props) {
   const { study, letters, lit, armedKind, onArm, onHover } = props;
   const view = useWorkbench((state) => state.view);
@@ -45,7 +47,7 @@ export function Paper(props: Props) {
   const openedRevision = useWorkbench((state) => state.openedRevision);
   const said = useWorkbench((state) => state.said);
   const { edit, say, setFocusBus, setReadingMode } = workbench.getState();
-  const outlined = useOutlined();
+  const paper = usePaper();
   const armedMark = useMarkTool();
   const verdicts = answer?.verdicts ?? noVerdicts;
   const ofCase = answer?.caseId === view.caseId;
@@ -56,7 +58,9 @@ export function Paper(props: Props) {
   return (
     <section className="paper" aria-label="Drawing">
       <Margin study={study} onDetails={props.onDetails} />
-      {outlined && study.buses.length > 0 ? (
+      {paper === 'table' ? (
+        <TablePlace study={study} />
+      ) : paper === 'list' && study.buses.length > 0 ? (
         <div className="outline-place">
           <Outline
             study={study}
@@ -105,16 +109,7 @@ export function Paper(props: Props) {
           <Samples />
         </Drawing>
       )}
-      {study.buses.length > 0 && (
-        <button
-          type="button"
-          className="outline-toggle"
-          aria-pressed={outlined}
-          onClick={() => setPanels({ outline: !outlined })}
-        >
-          {outlined ? 'as a drawing' : 'as a list'}
-        </button>
-      )}
+      <PaperSwitch paper={paper} empty={study.buses.length === 0} />
       <RemovalDialog />
     </section>
   );

@@ -24,7 +24,7 @@ export function markCommands(): Command[] {
     words: `Mark: ${markWords[kind].tool.toLowerCase()}`,
     run: () => {
       workbench.getState().setPlace('site');
-      setPanels({ outline: false });
+      setPanels({ paper: 'drawing' });
       armMark(kind);
     },
   }));
