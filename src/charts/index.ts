@@ -1,4 +1,6 @@
 export { FoldMark } from './figure/FoldMark.tsx';
+export { type FigureInk, PAPER_INK, PRINT_INK } from './figure/figureInk.ts';
+export { phaseInk } from './figure/phaseInk.ts';
 export type { NoteState } from './notes/NoteFrame.tsx';
 export { NotesColumn } from './notes/NotesColumn.tsx';
 export type { NotesColumnProps } from './notes/NotesColumnProps.ts';

@@ -1,4 +1,4 @@
-import type { Bus } from '../study/index.ts';
+import { type Bus, phaseNamesOf } from '../study/index.ts';
 import type { CheckContext } from './CheckContext.ts';
 import { figure } from './figure.ts';
 import { bandSetFor } from './limits/choice.ts';
@@ -10,7 +10,6 @@ import type { Verdict } from './types.ts';
 import { judged, type Row, unknown } from './verdict.ts';
 
 const SQRT3 = Math.sqrt(3);
-const phaseNames = ['L1', 'L2', 'L3'] as const;
 
 interface Worst {
   phase: number;
@@ -75,7 +74,7 @@ function atBus(context: CheckContext, bus: Bus): Verdict {
     working: () => [
       {
         equation: 'U1 / U_n, worst phase',
-        numbers: `${phaseNames[worst.phase]}: ${figure(volts / SQRT3)} V / (${figure(bus.nominalV)} V/√3) = ${figure(worst.percent)} %, band ${band.lowPercent} to ${band.highPercent} %`,
+        numbers: `${phaseNamesOf(context.study)[worst.phase]}: ${figure(volts / SQRT3)} V / (${figure(bus.nominalV)} V/√3) = ${figure(worst.percent)} %, band ${band.lowPercent} to ${band.highPercent} %`,
       },
     ],
     mend: low

@@ -1,5 +1,7 @@
 import {
   PhasorFigure,
+  PRINT_INK,
+  phaseInk,
   phasorsAt,
   RailFigure,
   SpectrumFigure,
@@ -7,9 +9,9 @@ import {
   WaveformFigure,
 } from '../charts/index.ts';
 import { orderTable } from '../checks/index.ts';
-import { drawingSize, layoutStudy, StaticDrawing } from '../drawing/index.ts';
+import { drawingSize, layoutStudy, printPalette, StaticDrawing } from '../drawing/index.ts';
 import type { ImpedanceScan } from '../engine/index.ts';
-import { type Pin, studyInCase } from '../study/index.ts';
+import { type Pin, phaseColoursOf, phaseNamesOf, studyInCase } from '../study/index.ts';
 import type { DrawingWindow, FigureRequest, SheetCase, SheetInput } from './document/index.ts';
 import type { FigureComposer } from './FigureComposer.ts';
 import { type PinSpectra, phasesToDraw, pinSpectra } from './pinSpectra.ts';
@@ -27,6 +29,11 @@ interface Size {
 function emptyScan({ bus, sequence }: ImpedanceScan): ImpedanceScan {
   const none = new Float64Array();
   return { bus, sequence, frequencyHz: none, re: none, im: none, resonances: [], error: 'not computed' };
+}
+
+/** Black but for the phases, which have their customary colours beside dash and label. */
+function inkOf({ study }: SheetInput) {
+  return { ...PRINT_INK, phases: phaseInk(phaseColoursOf(study), 'light') };
 }
 
 function drawing(input: SheetInput, computed: SheetCase, window: DrawingWindow, size: Size) {
@@ -50,6 +57,7 @@ function drawing(input: SheetInput, computed: SheetCase, window: DrawingWindow, 
           layout={layout}
           solution={computed.solution.converged ? computed.solution : null}
           verdicts={computed.verdicts}
+          palette={{ ...printPalette, phases: phaseInk(phaseColoursOf(input.study), 'light') }}
           fontFamily={FAMILY}
         />
       </g>
@@ -89,6 +97,7 @@ function waveform(input: SheetInput, computed: SheetCase, spectra: PinSpectra, s
   return (
     <WaveformFigure
       {...size}
+      ink={inkOf(input)}
       fontFamily={FAMILY}
       textSize={LETTERS}
       voltage={spectra.voltage}
@@ -139,6 +148,8 @@ function pinFigure(
   return (
     <PhasorFigure
       {...size}
+      ink={inkOf(input)}
+      names={phaseNamesOf(input.study)}
       fontFamily={FAMILY}
       textSize={LETTERS}
       voltage={phasorsAt(spectra.voltage, 1)}

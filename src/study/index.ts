@@ -111,7 +111,15 @@ export { markKinds, markName, marksOf } from './marksOf.ts';
 export { busName, elementName, fullNameOf, kindsWords, kindWords, nameOf, shortKindWords } from './names.ts';
 export { type PartPlace, typicalValues } from './newPart.ts';
 export { newStudy } from './newStudy.ts';
-export { type PhaseNames, phaseColourSets, phaseColoursOf, phaseLabelSets, phaseNamesOf } from './phases.ts';
+export {
+  connectionWords,
+  inPhaseNames,
+  type PhaseNames,
+  phaseColourSets,
+  phaseColoursOf,
+  phaseLabelSets,
+  phaseNamesOf,
+} from './phases.ts';
 export { type AnswerKey, answerFields } from './quickStart/answerFields.ts';
 export { type AnswerIssue, answerIssues } from './quickStart/answerIssues.ts';
 export { type DrawnSite, drawSite } from './quickStart/drawSite.ts';

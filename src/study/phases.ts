@@ -1,4 +1,4 @@
-import type { PhaseColours, PhaseLabels, Study } from './types.ts';
+import type { Connection, PhaseColours, PhaseLabels, Study } from './types.ts';
 
 export type PhaseNames = readonly [string, string, string];
 
@@ -38,4 +38,17 @@ export function phaseNamesOf(study: Study | null): PhaseNames {
 export function phaseColoursOf(study: Study | null): PhaseColours {
   const chosen = study?.view?.phases?.colours;
   return phaseColourSets.find(({ id }) => id === chosen)?.id ?? 'brown-black-grey';
+}
+
+/** Words that name phases L1 L2 L3, in the study's own names: "L1 to neutral" becomes "A to neutral". */
+export function inPhaseNames(study: Study | null, words: string): string {
+  const names = phaseNamesOf(study);
+  return words.replaceAll(/L([123])/g, (label, digit: string) => names[Number(digit) - 1] ?? label);
+}
+
+/** How a part is connected, in the study's own names: "three-phase", "L1", "L1–L2". */
+export function connectionWords(study: Study | null, connection: Connection): string {
+  if (connection === 'L1L2L3') return 'three-phase';
+  const parted = connection.length > 2 ? `${connection.slice(0, 2)}–${connection.slice(2)}` : connection;
+  return inPhaseNames(study, parted);
 }

@@ -3,6 +3,7 @@ import { useStore } from 'zustand';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
 import { originCommands } from '../details/originCommands.ts';
+import { phaseCommands } from '../details/phaseCommands.ts';
 import { fileCommands } from '../files/fileCommands.ts';
 import { recentStudies } from '../files/recentStudies.ts';
 import { panelCommands } from '../panels/panelCommands.ts';
@@ -81,6 +82,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...viewCommands(),
       ...panelCommands(),
       ...(study ? markCommands() : []),
+      ...(study ? phaseCommands(study) : []),
       ...(study ? originCommands(study, selection) : []),
       ...(study ? caseCommands(study, caseId) : []),
       ...(study ? statesCommands() : []),

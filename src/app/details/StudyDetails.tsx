@@ -14,6 +14,7 @@ import {
   updateStudy,
 } from '../../study/index.ts';
 import { useFocusField } from '../fields/useFocusField.ts';
+import { PhaseChoice } from './PhaseChoice.tsx';
 
 const limitUses = ['pcc', 'internal', 'current', 'capacitor'] as const;
 
@@ -95,6 +96,7 @@ export function StudyDetails({ firstField, onClose }: Props) {
                 ))}
               </section>
             ))}
+            <PhaseChoice study={study} onEdit={edit} />
           </div>
           <footer>
             <p className="hint">{focused ? `${focused.label}: ${focused.help}` : ''}</p>

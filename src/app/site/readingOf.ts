@@ -1,7 +1,15 @@
 import { phasorSpectrum, type Reading } from '../../charts/index.ts';
 import { orderTable, pccBusesOf, thdLimit, voltageSetFor } from '../../checks/index.ts';
 import { busReading, type CaseSolution, terminalReading } from '../../engine/index.ts';
-import { busById, busName, elementById, nameOf, type Pin, type Study } from '../../study/index.ts';
+import {
+  busById,
+  busName,
+  elementById,
+  nameOf,
+  type Pin,
+  phaseNamesOf,
+  type Study,
+} from '../../study/index.ts';
 
 function titleOf(study: Study, pin: Pin): string {
   if (pin.quantity === 'voltage') return `${busName(study, pin.bus)} · voltage`;
@@ -36,7 +44,14 @@ function thdLimitPercent(study: Study, busId: string): number | null {
 /** Everything the notes show of one pinned quantity, or why there is nothing to show. */
 export function readingOf(study: Study, solution: CaseSolution, pin: Pin): Reading {
   const { frequencyHz, maxOrder, summation, judged } = solution;
-  const frame = { pin, title: titleOf(study, pin), frequencyHz, maxOrder, summation };
+  const frame = {
+    pin,
+    title: titleOf(study, pin),
+    frequencyHz,
+    maxOrder,
+    summation,
+    phaseNames: phaseNamesOf(study),
+  };
   const absent = absence(study, solution, pin);
   const nothing = { voltage: null, current: null, judged: null, bus: null, terminal: null };
   if (absent !== undefined) return { ...frame, ...nothing, anglesUnknown: judged.anglesUnknown, absent };

@@ -1,5 +1,5 @@
 import type { BusReading, TerminalReading } from '../../engine/index.ts';
-import type { Pin } from '../../study/index.ts';
+import type { PhaseNames, Pin } from '../../study/index.ts';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
 import type { OrderLimit } from '../spectrum/spectrumBars.ts';
 
@@ -11,6 +11,8 @@ export interface Reading {
   frequencyHz: number;
   maxOrder: number;
   summation: 'phasor' | 'alpha';
+  /** What the three phases are called; absent: L1 L2 L3. */
+  phaseNames?: PhaseNames;
   /** Phase-to-neutral voltage at the pin's busbar. */
   voltage: PhasorSpectrum | null;
   /** Current into the part; null for a voltage pin. */

@@ -100,6 +100,7 @@ function ReadingBody(props: ReadingBodyProps) {
         timeTurn={timeTurn}
         anglesUnknown={size === 'lens' && (reading.anglesUnknown[order - 1] ?? false)}
         magnitudesOnly={magnitudesOnly}
+        names={reading.phaseNames}
         lit={lit}
         onLit={showLit}
       />
@@ -109,6 +110,7 @@ function ReadingBody(props: ReadingBodyProps) {
         frequencyHz={reading.frequencyHz}
         maxOrder={reading.maxOrder}
         summation={reading.summation}
+        names={reading.phaseNames}
         anglesUnknown={reading.anglesUnknown.some(Boolean)}
         settings={size === 'lens' ? lensWave : SMALL_WAVE}
         size={size}
@@ -132,7 +134,9 @@ function ReadingBody(props: ReadingBodyProps) {
       {course}
       <div className="reading-details">
         <div>
-          {!magnitudesOnly && <PhasorTable voltage={voltageNow} current={currentNow} />}
+          {!magnitudesOnly && (
+            <PhasorTable voltage={voltageNow} current={currentNow} names={reading.phaseNames} />
+          )}
           <ReadingNumbers numbers={numbers} />
         </div>
         <ReadingSpectrum {...props} size={size} />

@@ -23,7 +23,7 @@ export function readingText(reading: Reading, letter: string): string {
   );
   const voltage = reading.voltage && phasorsAt(reading.voltage, 1);
   const current = reading.current && phasorsAt(reading.current, 1);
-  return [head, ...numbers, phasorSummary(voltage, current, 1)].join('\n');
+  return [head, ...numbers, phasorSummary(voltage, current, 1, reading.phaseNames)].join('\n');
 }
 
 /** A verdict as plain text: headline, verdict, value and limit, working, source, remarks, mend. */

@@ -7,6 +7,7 @@ import {
   voltParts,
 } from '../figure/quantityParts.ts';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
+import { PHASE_NAMES } from '../phasor/phasorWords.ts';
 import { crestFactor } from '../waveform/waveform.ts';
 import type { Reading } from './Reading.ts';
 
@@ -69,7 +70,7 @@ function currentNumbers(reading: Reading): ReadingNumber[] {
       label: 'I neutral',
       row: 2,
       parts: ampereParts(terminal.neutralRmsA),
-      formula: 'rms of I_L1 + I_L2 + I_L3 over all orders',
+      formula: `rms of ${(reading.phaseNames ?? PHASE_NAMES).map((name) => `I_${name}`).join(' + ')} over all orders`,
     });
   }
   return [...numbers, ...powers(reading)];

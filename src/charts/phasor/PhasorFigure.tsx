@@ -1,4 +1,4 @@
-import { printStyle } from '../figure/figureInk.ts';
+import { type FigureInk, printStyle } from '../figure/figureInk.ts';
 import { PhasorDrawing } from './PhasorDrawing.tsx';
 import { phaseAngle, phaseAngleWords } from './phaseAngle.ts';
 import type { ThreePhasors } from './phasorSpectrum.ts';
@@ -9,6 +9,8 @@ export interface PhasorFigureProps {
   height: number;
   fontFamily: string;
   textSize?: number;
+  /** Default: black, for the results sheet. */
+  ink?: FigureInk | undefined;
   voltage: ThreePhasors | null;
   current: ThreePhasors | null;
   order: number;
@@ -18,7 +20,7 @@ export interface PhasorFigureProps {
 /** Phasors as a static figure for the results sheet, φ in words underneath. */
 export function PhasorFigure(props: PhasorFigureProps) {
   const { width, height, fontFamily, textSize = 9.5, voltage, current, order } = props;
-  const style = printStyle(fontFamily, textSize);
+  const style = printStyle(fontFamily, textSize, props.ink);
   const angle = phaseAngle(voltage, current);
   const caption = textSize * 1.8;
   const radius = Math.max(10, Math.min(width / 2, (height - caption) / 2) - style.smallSize * 1.7);
@@ -45,6 +47,7 @@ export function PhasorFigure(props: PhasorFigureProps) {
           fontSize={textSize}
           fill={style.ink.ink}
         >
+          {angle.phase === 0 ? '' : `${(props.names ?? PHASE_NAMES)[angle.phase]} `}
           {phaseAngleWords(angle)}
         </text>
       )}

@@ -15,7 +15,7 @@ export interface PhasorViewProps {
   size: 'small' | 'lens';
   /** Instant of the shared time cursor, 0…1 of a fundamental period. */
   timeTurn?: number;
-  names?: PhaseNames;
+  names?: PhaseNames | undefined;
   /** The angles at this order are not all known. */
   anglesUnknown?: boolean;
   /** Only magnitudes exist at this order (IEC 61000-3-6 summation); nothing can be drawn. */
@@ -78,7 +78,7 @@ export function PhasorView(props: PhasorViewProps) {
 interface PhasorTableProps {
   voltage: ThreePhasors | null;
   current: ThreePhasors | null;
-  names?: PhaseNames;
+  names?: PhaseNames | undefined;
 }
 
 /** The same phasors in numbers. */

@@ -1,9 +1,10 @@
+import { type PhaseNames, phaseLabelSets } from '../../study/index.ts';
 import { ampereParts, fixedNumber, joinParts, voltParts } from '../figure/quantityParts.ts';
 import { angleDeg, magnitude, type ThreePhasors } from './phasorSpectrum.ts';
 
-export type PhaseNames = readonly [string, string, string];
+export type { PhaseNames };
 
-export const PHASE_NAMES: PhaseNames = ['L1', 'L2', 'L3'];
+export const PHASE_NAMES: PhaseNames = phaseLabelSets.L123;
 
 /** All phasors in words: "fundamental: L1 230 V at 0°, 18.5 A at −34°; …". */
 export function phasorSummary(

@@ -1,5 +1,5 @@
 import { useMemo } from 'react';
-import { printStyle } from '../figure/figureInk.ts';
+import { type FigureInk, printStyle } from '../figure/figureInk.ts';
 import type { Injection } from './injections.ts';
 import { RailAxis, RailCurrents, RailCurves, RailFlags, RailInjected } from './RailLandscape.tsx';
 import { railLayout } from './railLayout.ts';
@@ -11,6 +11,8 @@ export interface RailFigureProps {
   fontFamily: string;
   /** Letter height in the figure's units; default 9.5. */
   textSize?: number;
+  /** Default: black, for the results sheet. */
+  ink?: FigureInk | undefined;
   scan: RailScan | null;
   frequencyHz: number;
   maxOrder: number;
@@ -22,9 +24,9 @@ const NONE: readonly Injection[] = [];
 
 /** The impedance landscape as a static figure for the results sheet; null scans draw the axis alone. */
 export function RailFigure(props: RailFigureProps) {
-  const { width, height, fontFamily, textSize = 9.5, scan, frequencyHz, maxOrder, band } = props;
+  const { width, height, fontFamily, textSize = 9.5, scan, frequencyHz, maxOrder, band, ink } = props;
   const injected = props.injected ?? NONE;
-  const style = useMemo(() => printStyle(fontFamily, textSize), [fontFamily, textSize]);
+  const style = useMemo(() => printStyle(fontFamily, textSize, ink), [fontFamily, textSize, ink]);
   const model = useMemo(
     () =>
       railModel(

@@ -1,4 +1,4 @@
-import { printStyle } from '../figure/figureInk.ts';
+import { type FigureInk, printStyle } from '../figure/figureInk.ts';
 import { SpectrumBars } from './SpectrumDrawing.tsx';
 import { thdWords } from './SpectrumView.tsx';
 import type { SpectrumBar } from './spectrumBars.ts';
@@ -9,6 +9,8 @@ export interface SpectrumFigureProps {
   height: number;
   fontFamily: string;
   textSize?: number;
+  /** Default: black, for the results sheet. */
+  ink?: FigureInk | undefined;
   quantity: 'voltage' | 'current';
   bars: readonly SpectrumBar[] | null;
   baseWords?: string;
@@ -20,7 +22,7 @@ export interface SpectrumFigureProps {
 /** The spectrum as a static figure for the results sheet: every order up to the highest. */
 export function SpectrumFigure(props: SpectrumFigureProps) {
   const { width, height, fontFamily, textSize = 9.5, bars, maxOrder } = props;
-  const style = printStyle(fontFamily, textSize);
+  const style = printStyle(fontFamily, textSize, props.ink);
   const head = textSize * 1.6;
   const model = bars
     ? spectrumModel(bars, { width, height: height - head, smallSize: style.smallSize, lastOrder: maxOrder })

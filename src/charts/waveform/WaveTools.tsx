@@ -1,14 +1,16 @@
 import { useId } from 'react';
+import type { PhaseNames } from '../phasor/phasorWords.ts';
 import type { WavePhases, WaveSettings } from './waveModel.ts';
 
 interface WaveToolsProps {
   settings: WaveSettings;
   maxOrder: number;
+  names: PhaseNames;
   onSettings(settings: WaveSettings): void;
 }
 
 /** Choice of orders, periods and phases of a waveform. */
-export function WaveTools({ settings, maxOrder, onSettings }: WaveToolsProps) {
+export function WaveTools({ settings, maxOrder, names, onSettings }: WaveToolsProps) {
   const ordersId = useId();
   const { content } = settings;
   const kind = typeof content === 'string' ? content : 'upTo';
@@ -60,9 +62,9 @@ export function WaveTools({ settings, maxOrder, onSettings }: WaveToolsProps) {
           onChange={(event) => onSettings({ ...settings, phases: phasesFrom(event.target.value) })}
         >
           <option value="all">all three</option>
-          <option value="L1">L1</option>
-          <option value="L2">L2</option>
-          <option value="L3">L3</option>
+          <option value="L1">{names[0]}</option>
+          <option value="L2">{names[1]}</option>
+          <option value="L3">{names[2]}</option>
         </select>
       </label>
     </div>

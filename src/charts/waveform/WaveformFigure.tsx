@@ -1,4 +1,4 @@
-import { printStyle } from '../figure/figureInk.ts';
+import { type FigureInk, printStyle } from '../figure/figureInk.ts';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
 import { WaveAxes, WaveCurves } from './WaveDrawing.tsx';
 import { waveLayout } from './WaveformView.tsx';
@@ -10,6 +10,8 @@ export interface WaveformFigureProps {
   height: number;
   fontFamily: string;
   textSize?: number;
+  /** Default: black, for the results sheet. */
+  ink?: FigureInk | undefined;
   voltage: PhasorSpectrum | null;
   current: PhasorSpectrum | null;
   frequencyHz: number;
@@ -24,7 +26,7 @@ const DEFAULT: WaveSettings = { content: 'all', periods: 1, phases: 'L1' };
 /** v(t) and i(t) as a static figure for the results sheet; voltage in the stronger line. */
 export function WaveformFigure(props: WaveformFigureProps) {
   const { width, height, fontFamily, textSize = 9.5, settings = DEFAULT, frequencyHz } = props;
-  const style = printStyle(fontFamily, textSize);
+  const style = printStyle(fontFamily, textSize, props.ink);
   const doubt = waveDoubt(props.summation, props.anglesUnknown, settings);
   const room = doubt ? textSize * 1.6 : 0;
   const layout = waveLayout(width, height - room, true, style.smallSize);

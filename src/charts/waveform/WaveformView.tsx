@@ -4,6 +4,7 @@ import { ampereParts, fixedNumber, joinParts, voltParts } from '../figure/quanti
 import { useMeasuredWidth } from '../figure/useMeasuredWidth.ts';
 import type { LitPhasor } from '../phasor/PhasorDrawing.tsx';
 import type { PhasorSpectrum } from '../phasor/phasorSpectrum.ts';
+import { PHASE_NAMES, type PhaseNames } from '../phasor/phasorWords.ts';
 import { WaveAxes, WaveCurves } from './WaveDrawing.tsx';
 import { WaveTools } from './WaveTools.tsx';
 import { instantaneous } from './waveform.ts';
@@ -16,6 +17,8 @@ export interface WaveformViewProps {
   frequencyHz: number;
   maxOrder: number;
   summation: 'phasor' | 'alpha';
+  /** What the phases are called. */
+  names?: PhaseNames | undefined;
   /** Some order in view has an angle the data do not give. */
   anglesUnknown: boolean;
   settings: WaveSettings;
@@ -49,7 +52,12 @@ export function WaveformView(props: WaveformViewProps) {
   return (
     <figure ref={host} className={`wave wave-${size}`}>
       {size === 'lens' && props.onSettings && (
-        <WaveTools settings={settings} maxOrder={maxOrder} onSettings={props.onSettings} />
+        <WaveTools
+          settings={settings}
+          maxOrder={maxOrder}
+          names={props.names ?? PHASE_NAMES}
+          onSettings={props.onSettings}
+        />
       )}
       {model && (
         <div className="wave-plot" {...cursor}>
@@ -121,7 +129,8 @@ function instantWords(props: WaveformViewProps, highest: number): string {
     current && `i ${joinParts(ampereParts(instantaneous(current, phase, highest, timeTurn)))}`,
   ].filter(Boolean);
   const place = `t ${fixedNumber((timeTurn * 1000) / frequencyHz, 2)} ms · ${fixedNumber(timeTurn * 360, 1)}°`;
-  return `${place} · L${phase + 1}: ${values.join(', ')}`;
+  const name = (props.names ?? PHASE_NAMES)[phase];
+  return `${place} · ${name}: ${values.join(', ')}`;
 }
 
 /** Pointer and keys of the time cursor, as a slider over one period; nothing when it cannot be moved. */

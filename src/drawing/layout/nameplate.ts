@@ -1,6 +1,8 @@
 import {
   type Bank,
+  type Connection,
   type Converter,
+  connectionWords,
   type ElementOf,
   nameOf,
   type Study,
@@ -28,13 +30,11 @@ function converterPlate(part: Converter, study: Study): string {
   const named = typeof spectrum === 'string' ? study.spectra?.find((s) => s.id === spectrum) : undefined;
   const words =
     typeof spectrum === 'string' ? (named ? nameOf(named) : spectrum.replaceAll('-', ' ')) : 'own spectrum';
-  return `${phases(part)}${n(part.kW)}\u00a0kW · ${words}`;
+  return `${phases(part, study)}${n(part.kW)}\u00a0kW · ${words}`;
 }
 
-function phases(part: { connection?: string }): string {
-  const connection = part.connection ?? 'L1L2L3';
-  if (connection === 'L1L2L3') return '';
-  return `${connection.length > 2 ? `${connection.slice(0, 2)}–${connection.slice(2)}` : connection} · `;
+function phases({ connection = 'L1L2L3' }: { connection?: Connection }, study: Study): string {
+  return connection === 'L1L2L3' ? '' : `${connectionWords(study, connection)} · `;
 }
 
 function freeRlc(part: ElementOf<'branch'> | ElementOf<'shunt'>): string {
@@ -71,7 +71,7 @@ export function nameplate(part: StudyElement, study: Study): string {
     case 'shunt':
       return freeRlc(part);
     case 'load':
-      return `${phases(part)}${n(part.kW)}\u00a0kW · ${part.powerFactor === 1 ? 'cos\u00a0φ\u00a01' : `${n(part.powerFactor)}\u00a0${part.leading ? 'lead' : 'lag'}`}`;
+      return `${phases(part, study)}${n(part.kW)}\u00a0kW · ${part.powerFactor === 1 ? 'cos\u00a0φ\u00a01' : `${n(part.powerFactor)}\u00a0${part.leading ? 'lead' : 'lag'}`}`;
     case 'motor': {
       const count = part.count ?? 1;
       return `${count > 1 ? `${n(count)}\u00a0×\u00a0` : ''}${n(part.ratedKW)}\u00a0kW · ${n(part.loadPercent ?? 75)}\u00a0% load`;

@@ -4,6 +4,7 @@ import {
   type Edit,
   type Field,
   type HarmonicRow,
+  inPhaseNames,
   isHarmonicRows,
   nameOf,
   type Study,
@@ -138,7 +139,7 @@ function asPair(value: unknown): [number, number] | undefined {
   return Array.isArray(value) && value.length === 2 ? [Number(value[0]), Number(value[1])] : undefined;
 }
 
-function ChoiceSelect({ id, field, value, fallback, onFocus, onCommit }: FieldControlProps) {
+function ChoiceSelect({ id, field, study, value, fallback, onFocus, onCommit }: FieldControlProps) {
   if (field.type !== 'choice') return null;
   const standing = value ?? fallback;
   return (
@@ -155,7 +156,7 @@ function ChoiceSelect({ id, field, value, fallback, onFocus, onCommit }: FieldCo
       {standing === undefined && <option value="">not stated</option>}
       {field.options.map((option) => (
         <option key={option.value} value={String(option.value)}>
-          {option.label}
+          {inPhaseNames(study, option.label)}
         </option>
       ))}
     </select>

@@ -1,6 +1,7 @@
 import {
   builtInSpectrum,
   busName,
+  connectionWords,
   elementsOfKind,
   fieldsOf,
   nameOf,
@@ -93,7 +94,7 @@ function loadRow(study: Study, part: LoadPart): Row {
     demandOf(part),
     entered(powerFactor),
     leading ? 'leading' : 'lagging',
-    connection === 'L1L2L3' ? 'three-phase' : connection,
+    connectionWords(study, connection),
     spectrumOf(study, part),
   );
 }

@@ -1,8 +1,16 @@
-import { busesOf, busName, elementById, elementName, type Pin, type Study } from '../../../study/index.ts';
+import {
+  busesOf,
+  busName,
+  elementById,
+  elementName,
+  type Pin,
+  phaseNamesOf,
+  type Study,
+} from '../../../study/index.ts';
 import { cells, NONE } from '../cells.ts';
 import { correctionOf } from '../correctionParts.ts';
 import { fixed, significant } from '../formatNumber.ts';
-import type { Block, Row, Section } from '../model.ts';
+import type { Block, Column, Row, Section } from '../model.ts';
 import { readBus, readTerminal } from '../readings.ts';
 import { type SheetView, solvedIn } from '../SheetView.ts';
 
@@ -113,17 +121,14 @@ export function pinsSection(view: SheetView): Section {
   if (pins.length === 0) {
     return { ...section, blocks: [{ kind: 'paragraph', text: 'There is nothing to show: no busbar.' }] };
   }
+  const names = phaseNamesOf(view.input.study);
   const table: Block = {
     kind: 'table',
     columns: [
       { head: 'quantity', align: 'left', grow: 3 },
       { head: 'unit', align: 'left' },
-      { head: 'L1 rms', align: 'decimal', grow: 1 },
-      { head: 'L2 rms', align: 'decimal', grow: 1 },
-      { head: 'L3 rms', align: 'decimal', grow: 1 },
-      { head: 'THD L1', unit: '%', align: 'decimal', grow: 1 },
-      { head: 'THD L2', unit: '%', align: 'decimal', grow: 1 },
-      { head: 'THD L3', unit: '%', align: 'decimal', grow: 1 },
+      ...names.map((name): Column => ({ head: `${name} rms`, align: 'decimal', grow: 1 })),
+      ...names.map((name): Column => ({ head: `THD ${name}`, unit: '%', align: 'decimal', grow: 1 })),
     ],
     rows: pins.map((pin) => pinRow(view, pin)),
     notes: [],
