@@ -3,7 +3,6 @@ export { type TrayKind, trayNames } from './gestures/TrayKind.ts';
 export { type Palette, printPalette, screenPalette } from './glyphs/Palette.ts';
 export { SymbolGlyph, type SymbolGlyphProps } from './glyphs/SymbolGlyph.tsx';
 export { drawingKeys, trayKeys } from './keyboard/keyWords.ts';
-export { kindKeys } from './keyboard/kindKeys.ts';
 export * from './layout/index.ts';
 export { drawingSize } from './marks/drawingSize.ts';
 export { markWords } from './marks/markWords.ts';
