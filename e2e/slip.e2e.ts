@@ -249,3 +249,52 @@ test('a note widens to a lens over the paper, and a verdict leads to its part an
   await expect(part(page, /^busbar, Intake/)).toHaveAttribute('aria-pressed', 'true');
   await expect(rail(page)).toHaveAttribute('aria-valuenow', '11');
 });
+
+/** Pastes text into the field with the focus, as from a spreadsheet. */
+async function pasteText(page: Page, text: string): Promise<void> {
+  await page.evaluate((pasted) => {
+    const data = new DataTransfer();
+    data.setData('text', pasted);
+    document.activeElement?.dispatchEvent(
+      new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true }),
+    );
+  }, text);
+}
+
+test('a spectrum copied from a sheet replaces the rows, amperes are brought to per cent, and a wrong line is named', async ({
+  page,
+}) => {
+  const slip = await slipOf(page, /Fans/);
+  await slip.getByRole('button', { name: 'Edit a copy of these rows' }).click();
+  await slip.locator('table input').first().focus();
+  await pasteText(page, 'Order\tA\tAngle\n1\t250\t0\n5\t95,5\t174\n7\t35,25\t-\n');
+  await expect(slip.getByRole('status').filter({ hasText: '2 rows pasted' })).toContainText('Order 1 is 250');
+  await settled(page);
+  expect(await elementOf(page, 'fans')).toMatchObject({
+    spectrum: [
+      { h: 5, percent: 38.2, angleDeg: 174 },
+      { h: 7, percent: 14.1 },
+    ],
+  });
+  await slip.locator('table input').first().focus();
+  await pasteText(page, '5\t20\nTHD\t44');
+  await expect(slip.getByRole('alert')).toContainText('Line 2: "THD" is no whole order');
+  expect(await elementOf(page, 'fans')).toMatchObject({ spectrum: [{ h: 5, percent: 38.2 }, { h: 7 }] });
+});
+
+test('steps copied from a sheet are listed, and several values never run together in one field', async ({
+  page,
+}) => {
+  const slip = await slipOf(page, /^bank, Bank C1/);
+  const steps = slip.getByLabel('steps', { exact: true });
+  await steps.focus();
+  await pasteText(page, 'number\tkvar\n2\t12,5\n4\t25\n');
+  await expect(steps).toHaveValue('2 × 12,5; 4 × 25');
+  await page.keyboard.press('Enter');
+  await expect(slip.getByText(/125\skvar of 125\skvar/)).toBeVisible();
+  const volts = slip.getByLabel('rated voltage of the capacitors', { exact: true });
+  await expect(volts).toBeFocused();
+  await pasteText(page, '440\n480');
+  await expect(slip.getByRole('alert')).toContainText('this field takes one');
+  await expect(volts).toHaveValue('400');
+});

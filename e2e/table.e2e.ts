@@ -89,7 +89,7 @@ test('a cell is written over by typing, opened by F2, put back by Escape, and re
   const editor = page.getByRole('textbox', { name: 'rated shaft power, each of Compressors' });
   await expect(table(page).getByRole('status')).toContainText('= 100 kW');
   await page.keyboard.press('Escape');
-  await expect(power).toHaveText('90');
+  await expect(power).toContainText('90');
   await expect(power).toBeFocused();
   await page.keyboard.press('F2');
   await expect(editor).toHaveValue('90');
@@ -267,7 +267,7 @@ test('in an operating state the table says where edits go, as the slip does', as
   );
   await expect(load).toHaveAttribute('title', /base: 80/);
   await page.getByLabel('change in Morning, two of three steps only').uncheck();
-  await expect(load).toHaveText('80');
+  await expect(load).toContainText('80');
 });
 
 test('busbars are a table too, and a part is shown on the drawing with its data', async ({ page }) => {

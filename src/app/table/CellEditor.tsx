@@ -1,4 +1,4 @@
-import { type KeyboardEvent, useEffect, useRef } from 'react';
+import { type KeyboardEvent, useLayoutEffect, useRef } from 'react';
 import {
   builtInSpectra,
   hintOf,
@@ -40,7 +40,8 @@ export function CellEditor(props: CellEditorProps) {
   const input = useRef<HTMLInputElement & HTMLSelectElement>(null);
   const choices = choicesOf(props.study, column, draft);
   const left = useRef(false);
-  useEffect(() => {
+  // Before the next key, which belongs into the cell.
+  useLayoutEffect(() => {
     input.current?.focus({ preventScroll: true });
     if (!typed && input.current instanceof HTMLInputElement) input.current.select();
   }, [typed]);

@@ -1,4 +1,4 @@
-import { type RefObject, useCallback, useEffect, useLayoutEffect, useRef, useState } from 'react';
+import { type RefObject, useCallback, useLayoutEffect, useRef, useState } from 'react';
 import type { GridPlace, GridRange, GridSize } from './gridMoves.ts';
 
 const start: GridPlace = { row: 0, column: 0 };
@@ -51,7 +51,8 @@ export function useGridRange(
     wanted.current = true;
     setWished((before) => ({ ...before }));
   }, []);
-  useEffect(() => {
+  // Before the next key: what is typed right after a new row belongs into it.
+  useLayoutEffect(() => {
     if (!waiting.current) go(first, false);
     waiting.current = false;
   }, [first, go]);
