@@ -10,6 +10,7 @@ import {
   studyInCase,
 } from '../study/index.ts';
 import { DrawingContents } from './editor/DrawingContents.tsx';
+import { DrawnMenu } from './editor/DrawnMenu.tsx';
 import { EmptyHint } from './editor/EmptyHint.tsx';
 import { HandOverlay, PlaceMark } from './editor/HandOverlay.tsx';
 import { HandTag, KeyLine } from './editor/HandTag.tsx';
@@ -165,11 +166,14 @@ export function Drawing(props: DrawingProps) {
       </div>
       {empty && !hand && <EmptyHint>{props.children}</EmptyHint>}
       {!empty && (
-        <ReadingModeChoice
-          mode={readingMode}
-          order={readOrder(order, solution?.maxOrder ?? study.maxOrder ?? 50)}
-          onReadingMode={props.onReadingMode}
-        />
+        <div className="drawing-tools">
+          <ReadingModeChoice
+            mode={readingMode}
+            order={readOrder(order, solution?.maxOrder ?? study.maxOrder ?? 50)}
+            onReadingMode={props.onReadingMode}
+          />
+          <DrawnMenu study={study} onEdit={props.onEdit} />
+        </div>
       )}
       {props.stale && <span className="solving">solving</span>}
       {solution?.converged === false && !props.stale && (

@@ -12,6 +12,23 @@ export const drawnItems: readonly DrawnItem[] = [
   'widths',
 ];
 
+/** What each item is called, in the plural, lower case. */
+export const drawnWords: Readonly<Record<DrawnItem, string>> = {
+  current: 'currents',
+  power: 'powers',
+  powerFactor: 'power factors',
+  voltages: 'voltages',
+  nameplates: 'nameplates',
+  dials: 'phasor dials',
+  direction: 'directions of power',
+  widths: 'line widths by current',
+};
+
+export const symbolSetWords: Readonly<Record<SymbolSet, string>> = {
+  iec60617: 'IEC 60617',
+  ieee315: 'IEEE 315',
+};
+
 export const symbolSets: readonly SymbolSet[] = ['iec60617', 'ieee315'];
 
 /** Items this study's drawing shows: all but those its view hides. */

@@ -15,7 +15,7 @@ export { clipText, type PartsClip } from './clip/PartsClip.ts';
 export { type PasteEdit, pasteClip } from './clip/pasteClip.ts';
 export { type ClipOutcome, readClip } from './clip/readClip.ts';
 export { counted, countedTogether } from './counted.ts';
-export { drawnItems, drawnOf, symbolSetOf, symbolSets } from './drawn.ts';
+export { drawnItems, drawnOf, drawnWords, symbolSetOf, symbolSets, symbolSetWords } from './drawn.ts';
 export { type AddBusEdit, type AddPartEdit, type AddPartOptions, addBus, addPart } from './edits/addParts.ts';
 export { addPin, removePin, reorderAlong, setPins } from './edits/arrange.ts';
 export {

@@ -1,6 +1,17 @@
 import { useMemo } from 'react';
 import { useStore } from 'zustand';
 import { redoWords, undoWords, useWorkbench, type Workbench, workbench } from '../../store/index.ts';
+import {
+  drawnItems,
+  drawnOf,
+  drawnWords,
+  type Study,
+  setDrawn,
+  setSymbols,
+  symbolSetOf,
+  symbolSets,
+  symbolSetWords,
+} from '../../study/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
 import { originCommands } from '../details/originCommands.ts';
 import { phaseCommands } from '../details/phaseCommands.ts';
@@ -59,6 +70,25 @@ function viewCommands(): Command[] {
   ];
 }
 
+/** What the drawing shows and the standard its symbols follow: edits of the study's view. */
+function drawnCommands(study: Study): Command[] {
+  const { edit } = workbench.getState();
+  const shown = drawnOf(study);
+  return [
+    ...symbolSets.map((symbols) => ({
+      id: `symbols.${symbols}`,
+      words: `Symbols: ${symbolSetWords[symbols]}`,
+      enabled: symbolSetOf(study) !== symbols,
+      run: () => edit(setSymbols(study, symbols)),
+    })),
+    ...drawnItems.map((item) => ({
+      id: `drawn.${item}`,
+      words: `${shown.has(item) ? 'Hide' : 'Show'} on the drawing: ${drawnWords[item]}`,
+      run: () => edit(setDrawn(study, item, !shown.has(item))),
+    })),
+  ];
+}
+
 /** Every command of the page in its present state. */
 export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): Command[] {
   const study = useWorkbench((state: Workbench) => state.study);
@@ -84,6 +114,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...(study ? markCommands() : []),
       ...(study ? phaseCommands(study) : []),
       ...(study ? originCommands(study, selection) : []),
+      ...(study ? drawnCommands(study) : []),
       ...(study ? caseCommands(study, caseId) : []),
       ...(study ? statesCommands() : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },

@@ -2,6 +2,7 @@ import { type CSSProperties, useCallback, useState } from 'react';
 import type { NoteSubject } from '../../charts/index.ts';
 import { readSubject, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench } from '../../store/index.ts';
+import { symbolSetOf } from '../../study/index.ts';
 import { LETTERS, type PanelPlaces } from '../panels/panelPlaces.ts';
 import { NotesSplitter } from '../panels/panelSplitters.tsx';
 import { usePanelPlaces } from '../panels/panelStore.ts';
@@ -41,7 +42,12 @@ export function SitePlace({ onDetails }: { onDetails(field: string | null): void
   const litNotes = hovered ?? selection.at(-1);
   return (
     <div className="site" inert={comparing} style={siteColumns(places)}>
-      <TrayPanel place={places.tray} armedKind={armedKind} onArm={setArmedKind} />
+      <TrayPanel
+        place={places.tray}
+        symbols={symbolSetOf(study)}
+        armedKind={armedKind}
+        onArm={setArmedKind}
+      />
       <Paper
         study={study}
         letters={letters}

@@ -1,4 +1,4 @@
-import { elementById, type Study } from '../../study/index.ts';
+import { elementById, type Study, symbolSetOf } from '../../study/index.ts';
 import type { DropOutcome } from '../gestures/DropOutcome.ts';
 import type { Held } from '../gestures/Held.ts';
 import type { Hand } from '../gestures/useGestures.ts';
@@ -7,9 +7,11 @@ import { type Layout, measures } from '../layout/index.ts';
 import { symbolPaths } from '../symbols/symbolShape.ts';
 
 function heldShape(held: Held, study: Study) {
-  if (held.what === 'new') return held.kind === 'bus' ? undefined : symbolPaths(held.kind);
+  const symbols = symbolSetOf(study);
+  if (held.what === 'new')
+    return held.kind === 'bus' ? undefined : symbolPaths(held.kind, undefined, symbols);
   const part = held.what === 'parts' ? elementById(study, held.grip) : undefined;
-  return part && symbolPaths(part.kind, part);
+  return part && symbolPaths(part.kind, part, symbols);
 }
 
 export interface HandOverlayProps {

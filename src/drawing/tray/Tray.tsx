@@ -1,4 +1,5 @@
 import type { PointerEvent as ReactPointerEvent } from 'react';
+import type { SymbolSet } from '../../study/index.ts';
 import { type TrayKind, trayNames } from '../gestures/TrayKind.ts';
 import { SymbolGlyph } from '../glyphs/SymbolGlyph.tsx';
 import { aroundKey, kindKeys } from '../keyboard/kindKeys.ts';
@@ -9,6 +10,8 @@ import { useTrayStops } from './useTrayStops.ts';
 
 export interface TrayProps {
   armedKind: TrayKind | null;
+  /** The standard the symbols follow. */
+  symbols?: SymbolSet;
   onArm(kind: TrayKind | null): void;
 }
 
@@ -16,7 +19,7 @@ export interface TrayProps {
  * The column of symbols. A part is dragged onto the drawing, or armed (Enter, or a plain click) and then
  * dropped on the busbar chosen there.
  */
-export function Tray({ armedKind, onArm }: TrayProps) {
+export function Tray({ armedKind, symbols, onArm }: TrayProps) {
   const { ghost, press } = useTrayDrag(armedKind, onArm);
   const { list, stop, setStop, onKeyDown } = useTrayStops();
   const arm = (kind: TrayKind) => onArm(armedKind === kind ? null : kind);
@@ -39,6 +42,7 @@ export function Tray({ armedKind, onArm }: TrayProps) {
               model={entry.model}
               name={at === 0 ? trayNames[kind] : trayNames[kind].replace('R-L-C, ', '')}
               symbol={at === 0}
+              symbols={symbols}
               armed={armedKind === kind}
               stop={stop === kind}
               onPress={press}
@@ -50,7 +54,7 @@ export function Tray({ armedKind, onArm }: TrayProps) {
       ))}
       {ghost && (
         <div className="tray-ghost" style={{ left: ghost.x, top: ghost.y }}>
-          <TraySymbol kind={ghost.kind} />
+          <TraySymbol kind={ghost.kind} symbols={symbols} />
         </div>
       )}
     </div>
@@ -63,6 +67,7 @@ interface TrayItemProps {
   model: string;
   /** Shows its symbol also where words stand under the symbols. */
   symbol: boolean;
+  symbols: SymbolSet | undefined;
   armed: boolean;
   /** Holds the tray's one tab stop. */
   stop: boolean;
@@ -72,7 +77,18 @@ interface TrayItemProps {
 }
 
 /** A kind with its symbol; its letter on the drawing is underlined in its name. */
-function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFocus }: TrayItemProps) {
+function TrayItem({
+  kind,
+  name,
+  model,
+  symbol,
+  symbols,
+  armed,
+  stop,
+  onPress,
+  onArm,
+  onFocus,
+}: TrayItemProps) {
   const [before, letter, after] = aroundKey(kind, name);
   return (
     <button
@@ -88,7 +104,7 @@ function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFo
       onClick={(event) => event.detail === 0 && onArm(kind)}
       onFocus={() => onFocus(kind)}
     >
-      <TraySymbol kind={kind} />
+      <TraySymbol kind={kind} symbols={symbols} />
       <span>
         {before}
         <span className="tray-letter">{letter}</span>
@@ -98,13 +114,13 @@ function TrayItem({ kind, name, model, symbol, armed, stop, onPress, onArm, onFo
   );
 }
 
-function TraySymbol({ kind }: { kind: TrayKind }) {
+function TraySymbol({ kind, symbols }: { kind: TrayKind; symbols: SymbolSet | undefined }) {
   return (
     <svg width={40} height={36} viewBox="-30 -27 60 54" aria-hidden="true">
       {kind === 'bus' ? (
         <path d="M-24,0 H24" stroke="currentColor" strokeWidth={4} strokeLinecap="round" />
       ) : (
-        <SymbolGlyph shape={symbolPaths(kind)} ink="currentColor" strokePx={1.8} />
+        <SymbolGlyph shape={symbolPaths(kind, undefined, symbols)} ink="currentColor" strokePx={1.8} />
       )}
     </svg>
   );

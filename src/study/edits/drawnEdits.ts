@@ -1,19 +1,6 @@
-import { drawnItems } from '../drawn.ts';
+import { drawnItems, drawnWords, symbolSetWords } from '../drawn.ts';
 import type { DrawnItem, Edit, Study, StudyView, SymbolSet } from '../types.ts';
 import { makeEdit, patched } from './edit.ts';
-
-const setWords: Record<SymbolSet, string> = { iec60617: 'IEC 60617', ieee315: 'IEEE 315' };
-
-const itemWords: Record<DrawnItem, string> = {
-  current: 'currents',
-  power: 'powers',
-  powerFactor: 'power factors',
-  voltages: 'voltages',
-  nameplates: 'nameplates',
-  dials: 'phasor dials',
-  direction: 'directions of power',
-  widths: 'line widths by current',
-};
 
 /** The study with entries of its view replaced; one without any left has no view. */
 export function withView(study: Study, patch: Partial<Record<keyof StudyView, unknown>>): Study {
@@ -26,14 +13,14 @@ export function withView(study: Study, patch: Partial<Record<keyof StudyView, un
 
 /** Draws the study with the shapes of the other standard. */
 export function setSymbols(_study: Study, symbols: SymbolSet): Edit {
-  return makeEdit('drawing.symbols', `draw with symbols after ${setWords[symbols]}`, (current) =>
+  return makeEdit('drawing.symbols', `draw with symbols after ${symbolSetWords[symbols]}`, (current) =>
     withView(current, { symbols: symbols === 'iec60617' ? undefined : symbols }),
   );
 }
 
 /** Shows or hides one kind of figure on the drawing. */
 export function setDrawn(_study: Study, item: DrawnItem, shown: boolean): Edit {
-  const words = `${shown ? 'show' : 'hide'} the ${itemWords[item]} on the drawing`;
+  const words = `${shown ? 'show' : 'hide'} the ${drawnWords[item]} on the drawing`;
   return makeEdit('drawing.show', words, (current) => {
     const before = current.view?.hidden ?? [];
     const hidden = drawnItems.filter((other) => (other === item ? !shown : before.includes(other)));

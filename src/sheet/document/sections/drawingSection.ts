@@ -3,7 +3,7 @@ import { type SheetView, solvedIn } from '../SheetView.ts';
 import { shownWords } from './frontSections.ts';
 
 /** Units of the drawing's own margin that the sheet leaves out on each side. */
-const CROP = 16;
+const CROP = 8;
 /** Letter height of the drawing in its own units, and the least it may have on paper, in points. */
 const LETTER_UNITS = 12;
 const LEAST_LETTER = 7;
