@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import { expect, type Page, test } from '@playwright/test';
 import {
   middle,
@@ -325,5 +326,87 @@ test.describe('marks on the drawing', () => {
     await expect(exporting).toBeEnabled({ timeout: 30_000 });
     const [pdf] = await Promise.all([page.waitForEvent('download', { timeout: 60_000 }), exporting.click()]);
     expect(pdfPages(await pdf.path()).join('\n')).toContain('reviewed 12 May');
+  });
+});
+
+test.describe('what is handed on', () => {
+  test.beforeEach(async ({ page, context }) => {
+    await context.grantPermissions(['clipboard-read', 'clipboard-write']);
+    await openSampleSite(page, 'cold-store');
+  });
+
+  const copied = (page: Page) => page.evaluate(() => navigator.clipboard.readText());
+
+  /** The SVG parses, names its fonts, has no reference to the page, and shows something. */
+  const standsAlone = (text: string) => {
+    expect(text).toMatch(/^<svg [^>]*xmlns="http:\/\/www\.w3\.org\/2000\/svg"/);
+    expect(text).toContain("font-family=\"'Varwright Sans'");
+    expect(text).not.toMatch(/var\(|class=|href=/);
+    expect(text).toMatch(/<(path|line|rect) /);
+  };
+
+  test("every plot as SVG and PNG, and its numbers as a table, by the note's menu", async ({ page }) => {
+    const choose = async (picture: string, way: string) => {
+      await note(page, 'Intake · current from Supply')
+        .getByRole('button', { name: 'What can be done with this note' })
+        .click();
+      await page.getByRole('menuitem', { name: picture }).click();
+      await page.getByRole('menuitem', { name: way }).click();
+      await expect(page.locator('.plan')).toContainText(`${picture.toLowerCase()}`);
+    };
+    for (const picture of ['Phasors', 'Waveform', 'Spectrum']) {
+      await choose(picture, 'Copy as SVG');
+      standsAlone(await copied(page));
+      await choose(picture, 'Copy the values as a table');
+      expect((await copied(page)).split('\n').length).toBeGreaterThan(3);
+      await choose(picture, 'Copy as PNG');
+      await expect(page.locator('.plan')).toContainText('Copied as PNG');
+      const size = await page.evaluate(async () => {
+        const [item] = await navigator.clipboard.read();
+        const blob = await item?.getType('image/png');
+        const image = blob && (await createImageBitmap(blob));
+        return image ? [image.width, image.height] : null;
+      });
+      expect(size?.[0]).toBeGreaterThan(600);
+    }
+  });
+
+  test('rail and drawing by their buttons and by the command list', async ({ page }) => {
+    await page.getByRole('button', { name: 'picture of the rail' }).click();
+    await page.getByRole('menuitem', { name: 'Copy as SVG' }).click();
+    await expect(page.locator('.plan')).toContainText('Copied as SVG: Impedance seen at Main board');
+    const rail1 = await copied(page);
+    standsAlone(rail1);
+    expect(rail1).toContain('parallel h');
+
+    await page.getByRole('button', { name: 'picture of the drawing' }).click();
+    const [file] = await Promise.all([
+      page.waitForEvent('download'),
+      page.getByRole('menuitem', { name: 'Save as SVG…' }).click(),
+    ]);
+    expect(file.suggestedFilename()).toBe('Brackwater-cold-store-as-found-single-line-diagram.svg');
+    const drawn = readFileSync(await file.path(), 'utf8');
+    standsAlone(drawn);
+    expect(drawn).toContain('Compressors');
+
+    const run = async (words: string) => {
+      await page.keyboard.press('Control+k');
+      await page.getByRole('searchbox', { name: 'Find a command' }).fill(words);
+      await page.keyboard.press('Enter');
+    };
+    await run('copy the verdicts');
+    await expect(page.locator('.plan')).toContainText('Copied: the verdicts of this case');
+    const [head, ...rows] = (await copied(page)).split('\n').map((line) => line.split('\t'));
+    expect(head?.slice(0, 3)).toEqual(['verdict', 'at', 'check']);
+    for (const row of rows) expect(row).toHaveLength(head?.length ?? 0);
+    await run('copy the spectrum of main board, voltage as svg');
+    await expect(page.locator('.plan')).toContainText('Main board · voltage, spectrum');
+    standsAlone(await copied(page));
+  });
+
+  test('a note as text by Ctrl+C on its title', async ({ page }) => {
+    await note(page, 'Main board · voltage').getByRole('button', { name: 'Main board · voltage' }).focus();
+    await page.keyboard.press('Control+c');
+    expect(await copied(page)).toMatch(/Main board · voltage\nU\t[\d.]+/);
   });
 });

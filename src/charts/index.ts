@@ -1,3 +1,5 @@
+export { FigureMenu } from './figure/FigureMenu.tsx';
+export type { FigureValues } from './figure/FigureValues.ts';
 export { FoldMark } from './figure/FoldMark.tsx';
 export { type FigureInk, PAPER_INK, PRINT_INK } from './figure/figureInk.ts';
 export { phaseInk } from './figure/phaseInk.ts';
@@ -35,17 +37,21 @@ export {
   reversedSpectrum,
   type ThreePhasors,
 } from './phasor/phasorSpectrum.ts';
+export { phasorValues } from './phasor/phasorValues.ts';
 export { FrequencyRail, type FrequencyRailProps } from './rail/FrequencyRail.tsx';
 export { ImpedancePair, type ImpedancePairProps } from './rail/ImpedancePair.tsx';
 export type { Injection } from './rail/injections.ts';
 export type { OrderDomain } from './rail/orderAxis.ts';
 export { RailFigure, type RailFigureProps } from './rail/RailFigure.tsx';
 export type { PeakVerdict, RailBand, RailScan } from './rail/railModel.ts';
+export { railValues } from './rail/railValues.ts';
 export type { Probe } from './rail/railWords.ts';
 export { SpectrumFigure, type SpectrumFigureProps } from './spectrum/SpectrumFigure.tsx';
 export { SpectrumView, type SpectrumViewProps } from './spectrum/SpectrumView.tsx';
 export { type OrderLimit, type SpectrumBar, spectrumBars } from './spectrum/spectrumBars.ts';
+export { spectrumValues } from './spectrum/spectrumValues.ts';
 export { WaveformFigure, type WaveformFigureProps } from './waveform/WaveformFigure.tsx';
 export { WaveformView, type WaveformViewProps } from './waveform/WaveformView.tsx';
 export { crestFactor, type WaveContent, waveform } from './waveform/waveform.ts';
 export type { WavePhases, WaveSettings } from './waveform/waveModel.ts';
+export { waveValues } from './waveform/waveValues.ts';

@@ -13,6 +13,7 @@ import {
   symbolSetWords,
 } from '../../study/index.ts';
 import { caseCommands } from '../cases/caseCommands.ts';
+import { copyCommands } from '../copy/copyCommands.ts';
 import { originCommands } from '../details/originCommands.ts';
 import { phaseCommands } from '../details/phaseCommands.ts';
 import { fileCommands } from '../files/fileCommands.ts';
@@ -117,6 +118,7 @@ export function useCommands(openDialog: (dialog: 'details' | 'keys') => void): C
       ...(study ? drawnCommands(study) : []),
       ...(study ? caseCommands(study, caseId) : []),
       ...(study ? statesCommands() : []),
+      ...(study ? copyCommands(study) : []),
       { id: 'help.keys', words: 'Keys', keys: '?', run: () => openDialog('keys') },
     ],
     [study, caseId, selection, undoing, redoing, recent, openDialog],

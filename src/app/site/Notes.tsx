@@ -3,6 +3,8 @@ import { type NoteSubject, NotesColumn, NotesLetters } from '../../charts/index.
 import type { Verdict } from '../../checks/index.ts';
 import { freshWorst, useWorkbench, workbench } from '../../store/index.ts';
 import { busName, casesOf, elementName, nameOf, type Pin, type Study, setPins } from '../../study/index.ts';
+import { copyText, handOn } from '../copy/handOn.ts';
+import { readingPicture } from '../copy/readingPicture.tsx';
 import { setPanels } from '../panels/panelStore.ts';
 import { readingOf } from './readingOf.ts';
 import { useListedVerdicts } from './useListedVerdicts.ts';
@@ -35,7 +37,7 @@ function jumpTo(verdict: Verdict): void {
 }
 
 function copy(text: string): void {
-  void navigator.clipboard.writeText(text);
+  void copyText(text, text.split('\n')[0] ?? 'the note');
 }
 
 /** The notes column on the present answer, or its letters where it is folded. */
@@ -100,6 +102,10 @@ export function Notes({ study, letters, litSubject, folded, onSubject }: Props) 
       onUnpin={togglePin}
       onReorder={(next) => edit(setPins(study, next))}
       onCopy={copy}
+      onPicture={(reading, picture, way) => {
+        const handed = readingPicture(study, reading, picture, order);
+        if (handed) void handOn(handed, way);
+      }}
       onFold={() => {
         setFirstNote(null);
         setPanels({ notes: 'letters' });

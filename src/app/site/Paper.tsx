@@ -1,7 +1,10 @@
 import { useCallback } from 'react';
+import { FigureMenu } from '../../charts/index.ts';
 import { Drawing, Outline, type Subject, type TrayKind } from '../../drawing/index.ts';
 import { useWorkbench, workbench } from '../../store/index.ts';
 import type { Study } from '../../study/index.ts';
+import { drawingPicture } from '../copy/drawingPicture.tsx';
+import { handOn } from '../copy/handOn.ts';
 import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
 import { Margin } from '../margin/Margin.tsx';
@@ -109,7 +112,14 @@ export function Paper(props: Props) {
           <Samples />
         </Drawing>
       )}
-      <PaperSwitch paper={paper} empty={study.buses.length === 0} />
+      <PaperSwitch paper={paper} empty={study.buses.length === 0}>
+        {paper === 'drawing' && study.buses.length > 0 && (
+          <FigureMenu
+            name="the drawing"
+            onPicture={(way) => void handOn(drawingPicture(workbench.getState(), study), way)}
+          />
+        )}
+      </PaperSwitch>
       <RemovalDialog />
     </section>
   );

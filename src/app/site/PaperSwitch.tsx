@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { setPanels } from '../panels/panelStore.ts';
 import type { Panels } from '../panels/panels.ts';
 
@@ -9,8 +10,15 @@ const views: readonly (readonly [PaperView, string, string])[] = [
   ['table', 'as a table', 'F7'],
 ];
 
+interface Props {
+  paper: PaperView;
+  empty: boolean;
+  /** What else can be done with what lies there. */
+  children?: ReactNode;
+}
+
 /** What lies on the paper. An empty study has no list. */
-export function PaperSwitch({ paper, empty }: { paper: PaperView; empty: boolean }) {
+export function PaperSwitch({ paper, empty, children }: Props) {
   return (
     <fieldset className="paper-switch" aria-label="The site">
       {views
@@ -26,6 +34,7 @@ export function PaperSwitch({ paper, empty }: { paper: PaperView; empty: boolean
             {words}
           </button>
         ))}
+      {children}
     </fieldset>
   );
 }

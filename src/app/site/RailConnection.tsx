@@ -2,6 +2,8 @@ import { useMemo } from 'react';
 import { FrequencyRail, type Probe } from '../../charts/index.ts';
 import { freshAnswer, freshEnvelope, isStale, useWorkbench, type Workbench } from '../../store/index.ts';
 import { busName } from '../../study/index.ts';
+import { handOn } from '../copy/handOn.ts';
+import { railPicture } from '../copy/railPicture.tsx';
 import { RailSplitter } from '../panels/panelSplitters.tsx';
 import { setPanels, usePanelPlaces } from '../panels/panelStore.ts';
 import { injectionsOf } from './injectionsOf.ts';
@@ -58,6 +60,13 @@ export function RailConnection() {
         height={place.size}
         folded={place.show === 'strip'}
         onOrder={setOrder}
+        onPicture={(way, shown) => {
+          if (scan)
+            void handOn(
+              railPicture({ study, focusBus, scan, injected, band: band ?? undefined, view: shown }),
+              way,
+            );
+        }}
         onFold={(folded) => setPanels({ rail: folded ? 'strip' : 'open' })}
       />
     </div>

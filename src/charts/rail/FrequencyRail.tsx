@@ -1,4 +1,5 @@
 import { type KeyboardEvent, useCallback, useMemo, useRef, useState } from 'react';
+import type { PictureWay } from '../notes/noteActions.ts';
 import { impedanceAt } from './impedanceCurve.ts';
 import { type Injection, injectedOrders } from './injections.ts';
 import { OrderEntryField } from './OrderEntryField.tsx';
@@ -36,6 +37,8 @@ export interface FrequencyRailProps {
   folded?: boolean;
   onOrder(order: number): void;
   onFold?(folded: boolean): void;
+  /** Hands the landscape on as a picture, or its numbers; `view` is the stretch of the axis on screen. */
+  onPicture?(way: PictureWay, view: OrderDomain): void;
   onPickBus?(): void;
   /** The orders in view changed by zoom or pan. */
   onView?(view: OrderDomain): void;
@@ -100,6 +103,7 @@ export function FrequencyRail(props: FrequencyRailProps) {
         onZoom={zoom}
         onReset={() => changeView(full)}
         onEntry={() => setEntry('')}
+        onPicture={props.onPicture && ((way) => props.onPicture?.(way, view))}
       >
         {props.folded && (
           <span className="rail-readout" {...slider}>

@@ -1,6 +1,7 @@
 import { useMemo } from 'react';
 import { type FigureInk, printStyle } from '../figure/figureInk.ts';
 import type { Injection } from './injections.ts';
+import type { OrderDomain } from './orderAxis.ts';
 import { RailAxis, RailCurrents, RailCurves, RailFlags, RailInjected } from './RailLandscape.tsx';
 import { railLayout } from './railLayout.ts';
 import { fullDomain, type RailBand, type RailScan, railModel } from './railModel.ts';
@@ -17,25 +18,27 @@ export interface RailFigureProps {
   frequencyHz: number;
   maxOrder: number;
   injected?: readonly Injection[];
-  band?: RailBand;
+  band?: RailBand | undefined;
+  /** The stretch of the axis shown; absent: all of it. */
+  view?: OrderDomain | undefined;
 }
 
 const NONE: readonly Injection[] = [];
 
 /** The impedance landscape as a static figure for the results sheet; null scans draw the axis alone. */
 export function RailFigure(props: RailFigureProps) {
-  const { width, height, fontFamily, textSize = 9.5, scan, frequencyHz, maxOrder, band, ink } = props;
+  const { width, height, fontFamily, textSize = 9.5, scan, frequencyHz, maxOrder, band, ink, view } = props;
   const injected = props.injected ?? NONE;
   const style = useMemo(() => printStyle(fontFamily, textSize, ink), [fontFamily, textSize, ink]);
   const model = useMemo(
     () =>
       railModel(
         { scan, frequencyHz, injected, band },
-        fullDomain(scan, frequencyHz, maxOrder),
+        view ?? fullDomain(scan, frequencyHz, maxOrder),
         railLayout(width, height, style.smallSize),
         style,
       ),
-    [scan, frequencyHz, injected, band, maxOrder, width, height, style],
+    [scan, frequencyHz, injected, band, maxOrder, view, width, height, style],
   );
   return (
     <svg xmlns="http://www.w3.org/2000/svg" width={width} height={height} viewBox={`0 0 ${width} ${height}`}>

@@ -1,5 +1,7 @@
 import type { ReactNode } from 'react';
+import { FigureMenu } from '../figure/FigureMenu.tsx';
 import { FoldMark } from '../figure/FoldMark.tsx';
+import type { PictureWay } from '../notes/noteActions.ts';
 import type { RailScan } from './railModel.ts';
 
 interface RailStripProps {
@@ -20,6 +22,8 @@ interface RailStripProps {
   /** Opens the entry of an order or frequency. */
   onEntry(): void;
   onFold?(folded: boolean): void;
+  /** Hands the landscape on as a picture, or its numbers. */
+  onPicture?: ((way: PictureWay) => void) | undefined;
 }
 
 /** The thin line above the rail: which busbar, which sequence and summation, what each curve is. */
@@ -46,7 +50,8 @@ export function RailStrip(props: RailStripProps) {
   );
 }
 
-function RailTools({ zoomed, folded, onZoom, onReset, onEntry, onFold }: RailStripProps) {
+function RailTools(props: RailStripProps) {
+  const { zoomed, folded, onZoom, onReset, onEntry, onFold, onPicture } = props;
   return (
     <span className="rail-tools">
       <button
@@ -67,6 +72,7 @@ function RailTools({ zoomed, folded, onZoom, onReset, onEntry, onFold }: RailStr
           <button type="button" disabled={!zoomed} onClick={onReset}>
             whole axis
           </button>
+          {onPicture && <FigureMenu name="the rail" onPicture={onPicture} />}
         </>
       )}
       {onFold && (

@@ -1,7 +1,7 @@
 export { keepPlaces } from './keepPlaces.ts';
 export { DENSITIES, type Density, layoutStudy } from './layoutStudy.ts';
 export * as measures from './measures.ts';
-export { nominalVoltage } from './nameplate.ts';
+export { nameplate, nominalVoltage } from './nameplate.ts';
 export { differenceMark, differencesByPart, plateInCase } from './plateInCase.ts';
 export { hasPowerFactor, hasRatedCurrent, reactiveKinds, readingRoom } from './readingRoom.ts';
 export { type OutlineNode, outlineWords, siteOutline } from './siteOutline.ts';
