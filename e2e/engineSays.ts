@@ -23,6 +23,13 @@ export function cosPhi(study: Study, caseId: string, element: string, bus: strin
   return Math.abs(pf);
 }
 
+/** Active power a source delivers to a busbar, kW. */
+export function deliveredKW(study: Study, caseId: string, source: string, bus: string): number {
+  const solution = solveCase(study, caseId);
+  const at = solution.terminals.findIndex((one) => one.element === source && one.bus === bus);
+  return -terminalReading(solution, at).kW;
+}
+
 /** Order of the strongest parallel resonance seen from a busbar. */
 export function parallelOrder(study: Study, caseId: string, bus: string): number {
   const { frequencyHz, maxOrder = 50 } = study;
