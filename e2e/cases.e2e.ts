@@ -2,7 +2,6 @@ import AxeBuilder from '@axe-core/playwright';
 import { expect, type Locator, type Page, test } from '@playwright/test';
 import { deliveredKW } from './engineSays.ts';
 import {
-  middle,
   note,
   openSampleSite,
   part,
@@ -44,9 +43,9 @@ test('a case is switched with one key, and drawing, rail and notes follow', asyn
   await page.keyboard.press('[');
   await expect(caseButton(page)).toContainText('Night');
   await page.keyboard.press('k');
-  await expect(page.getByRole('menu', { name: 'Cases' })).toBeVisible();
+  await expect(page.getByRole('menu')).toBeVisible();
   await page.keyboard.press('1');
-  await expect(page.getByRole('menu', { name: 'Cases' })).toBeHidden();
+  await expect(page.getByRole('menu')).toBeHidden();
   await expect(caseButton(page)).toContainText('Day, all steps');
   await settled(page);
   await expect(page.locator('.rail-plot')).toContainText('parallel h 9.01');
@@ -83,7 +82,7 @@ test('what differs from the base study is listed, leads to its field, and is tak
   await expect(margin(page)).toBeHidden();
 });
 
-test('cases are put in another order by keys and by hand, and undo puts them back', async ({ page }) => {
+test('cases are put in another order by keys, and undo puts them back', async ({ page }) => {
   await openSampleSite(page, 'cold-store');
   const names = async () => (await savedStudy(page)).cases?.map(({ id }) => id);
   await page.keyboard.press('x');
@@ -92,15 +91,6 @@ test('cases are put in another order by keys and by hand, and undo puts them bac
   expect(await undoWords(page)).toBe('move case Day, all steps down');
   await page.keyboard.press('Control+z');
   expect(await names()).toEqual(['day', 'two', 'one']);
-  const option = (name: RegExp) => margin(page).getByRole('option', { name });
-  const [from, to] = [await middle(option(/Night/)), await option(/Day/).boundingBox()];
-  if (!to) throw new Error('no first case');
-  await page.mouse.move(from.x, from.y);
-  await page.mouse.down();
-  await page.mouse.move(from.x, from.y - 20, { steps: 4 });
-  await page.mouse.move(to.x + 60, to.y + 2, { steps: 8 });
-  await page.mouse.up();
-  await expect.poll(names).toEqual(['one', 'day', 'two']);
 });
 
 test('a common state is made from a case, previewed, and is an ordinary case afterwards', async ({
@@ -119,7 +109,7 @@ test('a common state is made from a case, previewed, and is an ordinary case aft
   const made = (await savedStudy(page)).cases?.at(-1);
   expect(made).toMatchObject({ role: 'light', name: 'Light load, 20\u2009%' });
   expect(made?.changes.find(({ element }) => element === 'comp')?.set).toEqual({ loadPercent: 16 });
-  expect(await undoWords(page)).toBe('add case Light load, 20 %');
+  expect(await undoWords(page)).toBe('add case Light load, 20\u2009%');
   await page.keyboard.press('Control+z');
   await settled(page);
   expect((await savedStudy(page)).cases).toHaveLength(3);
@@ -219,6 +209,7 @@ test('the counts switch the notes between this case and every case', async ({ pa
 
 for (const colorScheme of ['light', 'dark'] as const) {
   test(`no accessibility violations in margin, forms and comparison, ${colorScheme}`, async ({ browser }) => {
+    test.setTimeout(240_000);
     const context = await browser.newContext({ colorScheme, reducedMotion: 'reduce' });
     const page = await context.newPage();
     await openSampleSite(page, 'cold-store');
@@ -242,7 +233,7 @@ for (const colorScheme of ['light', 'dark'] as const) {
     await look('new case');
     await page.keyboard.press('Escape');
     await page.keyboard.press('v');
-    await expect(page.getByRole('row', { name: /active power/ })).toBeVisible();
+    await expect(page.getByRole('row', { name: /Intake · active power/ })).toBeVisible();
     await look('numbers beside each other');
     await page.getByRole('button', { name: 'drawings' }).click();
     await look('drawings beside each other');

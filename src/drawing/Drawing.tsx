@@ -18,6 +18,7 @@ import { ReadingModeChoice, ZoomTools } from './editor/PaneTools.tsx';
 import { SlipHolder } from './editor/SlipHolder.tsx';
 import type { TrayKind } from './gestures/TrayKind.ts';
 import type { Band } from './gestures/useGestures.ts';
+import type { FlagSeverity } from './glyphs/FindingFlag.tsx';
 import { Hatch } from './glyphs/Hatch.tsx';
 import { useClipboard } from './keyboard/useClipboard.ts';
 import { useHandling } from './keyboard/useHandling.ts';
@@ -52,6 +53,8 @@ export interface DrawingProps {
   openSlip: Subject | null;
   /** Letters of the notes by the subject they speak of. */
   letters: ReadonlyMap<Subject, string>;
+  /** The gravest finding about the data of a part, by subject. */
+  flags?: ReadonlyMap<Subject, FlagSeverity>;
   /** The subject of a hovered note. */
   lit?: Subject | null;
   armedKind: TrayKind | null;
@@ -77,6 +80,8 @@ export interface DrawingProps {
   /** Stands on the paper of an empty study, under the three steps. */
   children?: ReactNode;
 }
+
+const NO_FLAGS: ReadonlyMap<Subject, FlagSeverity> = new Map();
 
 /** The single-line diagram as the editor: selection, drag and drop, zoom and pan, and the keyboard for all. */
 export function Drawing(props: DrawingProps) {
@@ -149,6 +154,7 @@ export function Drawing(props: DrawingProps) {
               layout={layout}
               figures={figures}
               letters={props.letters}
+              flags={props.flags ?? NO_FLAGS}
               selection={shownSelection}
               current={current}
               lit={props.lit ?? null}

@@ -1,5 +1,6 @@
 export { Drawing, type DrawingProps } from './Drawing.tsx';
 export { type TrayKind, trayNames } from './gestures/TrayKind.ts';
+export { FLAG, type FlagSeverity, FlagShape } from './glyphs/FindingFlag.tsx';
 export { type Palette, printPalette, screenPalette } from './glyphs/Palette.ts';
 export { SymbolGlyph, type SymbolGlyphProps } from './glyphs/SymbolGlyph.tsx';
 export { drawingKeys, trayKeys } from './keyboard/keyWords.ts';

@@ -47,6 +47,7 @@ export function CaseList({ study, caseId }: Props) {
       <ListBox
         aria-label="Cases; arrows show a case, Alt and an arrow moves it, Enter names it"
         className="case-list"
+        autoFocus
         selectionMode="single"
         selectionBehavior="replace"
         disallowEmptySelection

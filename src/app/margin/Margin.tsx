@@ -22,7 +22,8 @@ export function Margin({ study, onDetails }: { study: Study; onDetails(field: st
   const listed = useWorkbench((state) => state.view.margin);
   const margin = useRef<HTMLElement>(null);
   useEffect(() => {
-    if (!listed) return;
+    // The list of cases takes the keyboard to the case on screen by itself.
+    if (!listed || listed === 'cases') return;
     const list = margin.current?.querySelector<HTMLElement>('.margin-list [tabindex="0"]');
     (list ?? margin.current)?.focus({ preventScroll: true });
   }, [listed]);

@@ -7,6 +7,7 @@ import { drawingPicture } from '../copy/drawingPicture.tsx';
 import { handOn } from '../copy/handOn.ts';
 import { Recent } from '../files/Recent.tsx';
 import { Samples } from '../files/Samples.tsx';
+import { useFlags } from '../findings/useFlags.ts';
 import { Margin } from '../margin/Margin.tsx';
 import { usePaper } from '../panels/panelStore.ts';
 import { QuickStart } from '../quickstart/QuickStart.tsx';
@@ -51,6 +52,7 @@ export function Paper(props: Props) {
   const said = useWorkbench((state) => state.said);
   const { edit, say, setFocusBus, setReadingMode } = workbench.getState();
   const paper = usePaper();
+  const flags = useFlags(study, view.caseId);
   const armedMark = useMarkTool();
   const verdicts = answer?.verdicts ?? noVerdicts;
   const ofCase = answer?.caseId === view.caseId;
@@ -90,6 +92,7 @@ export function Paper(props: Props) {
           selection={view.selection}
           openSlip={view.openSlip}
           letters={letters}
+          flags={flags}
           lit={lit}
           armedKind={armedKind}
           fitKey={String(openedRevision)}

@@ -1,4 +1,5 @@
 import { memo } from 'react';
+import type { FlagSeverity } from '../glyphs/FindingFlag.tsx';
 import type { Layout } from '../layout/index.ts';
 import type { Figures } from '../readings/figures.ts';
 import { busSubject, partSubject, type Subject } from '../subject.ts';
@@ -10,6 +11,8 @@ export interface DrawingContentsProps {
   layout: Layout;
   figures: Figures;
   letters: ReadonlyMap<Subject, string>;
+  /** The gravest finding about a part's data. */
+  flags: ReadonlyMap<Subject, FlagSeverity>;
   selection: readonly Subject[];
   /** The subject holding the tab stop. */
   current: Subject | undefined;
@@ -37,6 +40,7 @@ export const DrawingContents = memo(function DrawingContents(props: DrawingConte
             place={place}
             figure={figure}
             letters={letters.get(subject) ?? ''}
+            flag={props.flags.get(subject)}
             selected={selected.has(subject)}
             current={current === subject}
             lit={lit === subject}

@@ -1,5 +1,6 @@
 import { memo } from 'react';
 import { trayNames } from '../gestures/TrayKind.ts';
+import { FLAG, type FlagSeverity, FlagShape } from '../glyphs/FindingFlag.tsx';
 import { screenPalette } from '../glyphs/Palette.ts';
 import { PartGlyph } from '../glyphs/PartGlyph.tsx';
 import { differenceMark, measures, type PartPlace } from '../layout/index.ts';
@@ -13,6 +14,7 @@ export interface PartViewProps {
   place: PartPlace;
   figure: PartFigure;
   letters: string;
+  flag: FlagSeverity | undefined;
   selected: boolean;
   /** Holds the drawing's one tab stop. */
   current: boolean;
@@ -45,6 +47,7 @@ function sameProps(a: PartViewProps, b: PartViewProps): boolean {
   return (
     a.place === b.place &&
     a.letters === b.letters &&
+    a.flag === b.flag &&
     a.selected === b.selected &&
     a.current === b.current &&
     a.lit === b.lit &&
@@ -62,13 +65,23 @@ export function partBoxes(place: PartPlace, figure: PartFigure) {
   return { symbol, text };
 }
 
-function spoken(figure: PartFigure, letters: string): string {
+function spoken(figure: PartFigure, letters: string, flag: FlagSeverity | undefined): string {
   const { element, name, cells, words, mark, off } = figure;
   const plate = figure.plate.replaceAll(differenceMark, 'in this case ');
   const readings = cells.map(({ value, unit, spoken }) => spoken ?? `${value} ${unit}`);
   const verdict = mark ? verdictWords[mark] : '';
   const notes = letters ? `notes ${letters}` : '';
-  return [trayNames[element.kind], name, plate, off ? 'out of service' : words, ...readings, verdict, notes]
+  const data = flag ? flagWords[flag] : '';
+  return [
+    trayNames[element.kind],
+    name,
+    plate,
+    off ? 'out of service' : words,
+    ...readings,
+    verdict,
+    data,
+    notes,
+  ]
     .filter(Boolean)
     .join(', ');
 }
@@ -83,7 +96,7 @@ export const PartView = memo(function PartView(props: PartViewProps) {
       className={classes}
       data-subject={partSubject(place.id)}
       {...asButton(selected)}
-      aria-label={spoken(figure, letters)}
+      aria-label={spoken(figure, letters, props.flag)}
       tabIndex={current ? 0 : -1}
       style={{ transform: `translate(${place.x}px, ${place.y}px)` }}
     >
@@ -99,9 +112,36 @@ export const PartView = memo(function PartView(props: PartViewProps) {
       <rect className="frame" {...symbol} rx={3} />
       <ReadingHatch place={place} figure={figure} hatchId={hatchId} />
       <PartGlyph place={place} figure={figure} palette={screenPalette} letters={letters} />
+      {props.flag && <Flag place={place} symbol={symbol} severity={props.flag} />}
     </g>
   );
 }, sameProps);
+
+const flagWords: Record<FlagSeverity, string> = {
+  error: 'an error in its data',
+  warning: 'a warning about its data',
+  note: 'a remark on its data',
+};
+
+interface FlagProps {
+  place: PartPlace;
+  symbol: { x: number; y: number };
+  severity: FlagSeverity;
+}
+
+/** The flag of a finding, left of the symbol: below a source's verdict, above a tie. */
+function Flag({ place, symbol, severity }: FlagProps) {
+  const tie = place.hang === 'across';
+  const x = tie ? -FLAG.width / 2 : symbol.x - FLAG.width + 2;
+  const y = tie ? symbol.y - FLAG.height : place.hang === 'above' ? 2 : -FLAG.height / 2;
+  const ink = { error: screenPalette.fail, warning: screenPalette.watch, note: screenPalette.ink2 }[severity];
+  return (
+    <g className="finding-flag" transform={`translate(${x} ${y})`}>
+      <FlagShape severity={severity} ink={ink} />
+      <title>{`There is ${flagWords[severity]}: see the findings (!)`}</title>
+    </g>
+  );
+}
 
 /** Shown while the readings are older than the drawing. */
 function ReadingHatch({ place, figure, hatchId }: Pick<PartViewProps, 'place' | 'figure' | 'hatchId'>) {
