@@ -151,7 +151,7 @@ test('two cases stand side by side with the engine’s own numbers, and are copi
 test('findings are walked by keys, lead to their field, and mend themselves undoably', async ({ page }) => {
   await openSampleSite(page, 'cold-store');
   await detune(page);
-  await expect(page.getByRole('button', { name: /1 warning/ })).toBeVisible();
+  await expect(page.getByRole('banner').getByRole('button', { name: /1 warning/ })).toBeVisible();
   await page.keyboard.press('!');
   const rows = margin(page).locator('.finding-jump');
   await expect(rows.first()).toBeFocused();
@@ -165,13 +165,13 @@ test('findings are walked by keys, lead to their field, and mend themselves undo
   await rows.first().focus();
   await page.keyboard.press('Tab');
   await page.keyboard.press('Enter');
-  await expect(page.getByRole('button', { name: /warning/ })).toBeHidden();
+  await expect(page.getByRole('banner').getByRole('button', { name: /warning/ })).toBeHidden();
   await expect(rows.first()).toBeFocused();
   await settled(page);
   expect((await savedStudy(page)).elements.find(({ id }) => id === 'c1')).toMatchObject({ ratedV: 440 });
   expect(await undoWords(page)).toBe('set the rated voltage of Bank C1 to 440\u2009V');
   await page.keyboard.press('Control+z');
-  await expect(page.getByRole('button', { name: /1 warning/ })).toBeVisible();
+  await expect(page.getByRole('banner').getByRole('button', { name: /1 warning/ })).toBeVisible();
   await page.keyboard.press('!');
   await expect(margin(page)).toBeHidden();
 });

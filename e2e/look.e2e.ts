@@ -350,7 +350,7 @@ test.describe('what is handed on', () => {
       await note(page, 'Intake · current from Supply')
         .getByRole('button', { name: 'What can be done with this note' })
         .click();
-      await page.getByRole('menuitem', { name: picture }).click();
+      await page.getByRole('menuitem', { name: picture, exact: true }).click();
       await page.getByRole('menuitem', { name: way }).click();
       await expect(page.locator('.plan')).toContainText(`${picture.toLowerCase()}`);
     };

@@ -8,7 +8,7 @@ export default defineConfig({
   testMatch: '**/*.e2e.ts',
   outputDir: '../test-results',
   timeout: 60_000,
-  workers: 1,
+  workers: 2,
   retries: 0,
   use: {
     baseURL: `http://localhost:${port}`,

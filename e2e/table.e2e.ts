@@ -118,7 +118,10 @@ test('heads sort, words and origins filter, and a row being written in stays whe
   page,
 }) => {
   await openTable(page, 'converter');
-  const names = () => table(page).getByRole('rowheader').allTextContents();
+  const names = async () =>
+    (await table(page).getByRole('rowheader').allTextContents()).map(
+      (text) => /^[A-Z][a-z]+/.exec(text)?.[0],
+    );
   expect(await names()).toEqual(['Fans', 'Pumps', 'Hoist']);
   await table(page)
     .getByRole('columnheader', { name: /^active power/ })
@@ -133,12 +136,12 @@ test('heads sort, words and origins filter, and a row being written in stays whe
     .click();
   expect(await names()).toEqual(['Hoist', 'Fans', 'Pumps']);
   await page.getByLabel('Find in the table').fill('5 % input');
-  await expect(table(page).getByRole('rowheader')).toHaveText(['Pumps']);
+  await expect(table(page).getByRole('rowheader')).toHaveText([/^Pumps/]);
   await page.getByLabel('Find in the table').fill('');
   await (await cell(page, 'Fans', 'active power')).click();
   await page.keyboard.press('Alt+a');
   await page.getByLabel('Rows with values of').selectOption('open');
-  await expect(table(page).getByRole('rowheader')).toHaveText([/Fans/]);
+  await expect(table(page).getByRole('rowheader')).toHaveText([/^Fans/, /^Pumps/]);
   expect((await savedStudy(page)).origins?.['elements.fans.kW']).toEqual({ origin: 'assumed' });
 });
 
@@ -241,7 +244,7 @@ test('columns without heads follow the cell they are pasted at, and can be told 
   expect(elements.find(({ id }) => id === 'fans')).toMatchObject({ kW: 88, powerFactor: 0.9 });
   await (await cell(page, 'Hoist', 'active power')).click();
   await pasteText(page, '30 kW\n');
-  await expect(await cell(page, 'Hoist', 'active power')).toHaveText('30');
+  await expect(await cell(page, 'Hoist', 'active power')).toHaveText(/^30(?!\d)/);
   await pasteText(page, '80\t0.9\n60\t0.91\n');
   await page.keyboard.press('Escape');
   await expect(await cell(page, 'Hoist', 'active power')).toBeFocused();
