@@ -262,34 +262,21 @@ async function addByMouse(page: Page, bus: RegExp, fraction: number, wanted: Par
   await fillByMouse(page, wanted);
 }
 
-/** The drawing glides to its new places. */
+/** The drawing glides to its new places: waits until the chosen part has stood still for a while. */
 async function settledPlace(page: Page): Promise<void> {
-  await page.waitForTimeout(250);
-}
-
-async function fillByMouse(page: Page, { name, entries }: Pick<Part, 'name' | 'entries'>): Promise<void> {
-  const slip = page.locator('.slip');
-  await expect(slip).toBeVisible();
-  const all: Entry[] = [...(name === undefined ? [] : [['Name', name] as const]), ...entries];
-  for (const [label, text] of all) {
-    await slip
-      .getByLabel(new RegExp(`^${label}`))
-      .first()
-      .click();
-    await page.keyboard.press('Control+a');
-    await page.keyboard.type(text);
-  }
-  await slip.getByRole('button', { name: 'Close the data slip' }).click();
-  await expect(slip).toHaveCount(0);
-}
-
-async function nameBusbar(page: Page, bus: RegExp, name: string): Promise<void> {
-  const label = part(page, bus).locator('.bus-name, text').first();
-  for (let clicks = 0; clicks < 2; clicks += 1) {
-    const at = await middle(label);
-    await page.mouse.click(at.x, at.y);
-  }
-  await fillByMouse(page, { name, entries: [] });
+  const chosen = page.locator('.part.selected .hit').first();
+  let before = '';
+  await expect
+    .poll(
+      async () => {
+        const now = JSON.stringify(await chosen.boundingBox());
+        const still = now === before;
+        before = now;
+        return still;
+      },
+      { intervals: [250] },
+    )
+    .toBe(true);
 }
 
 test('the same site by mouse: parts dropped on busbars, a foot dragged over, data typed into their slips', async ({
