@@ -279,6 +279,31 @@ async function settledPlace(page: Page): Promise<void> {
     .toBe(true);
 }
 
+async function fillByMouse(page: Page, { name, entries }: Pick<Part, 'name' | 'entries'>): Promise<void> {
+  const slip = page.locator('.slip');
+  await expect(slip).toBeVisible();
+  const all: Entry[] = [...(name === undefined ? [] : [['Name', name] as const]), ...entries];
+  for (const [label, text] of all) {
+    await slip
+      .getByLabel(new RegExp(`^${label}`))
+      .first()
+      .click();
+    await page.keyboard.press('Control+a');
+    await page.keyboard.type(text);
+  }
+  await slip.getByRole('button', { name: 'Close the data slip' }).click();
+  await expect(slip).toHaveCount(0);
+}
+
+async function nameBusbar(page: Page, bus: RegExp, name: string): Promise<void> {
+  const label = part(page, bus).locator('.bus-name, text').first();
+  for (let clicks = 0; clicks < 2; clicks += 1) {
+    const at = await middle(label);
+    await page.mouse.click(at.x, at.y);
+  }
+  await fillByMouse(page, { name, entries: [] });
+}
+
 test('the same site by mouse: parts dropped on busbars, a foot dragged over, data typed into their slips', async ({
   page,
 }) => {
